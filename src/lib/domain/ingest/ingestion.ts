@@ -1,0 +1,162 @@
+import type { Quantity, Trace } from '../trace/trace';
+import type { TemperatureUnit } from '../units';
+
+/** What the dock knows beside the file. All of it is argument: the reader has no clock of its own. */
+export interface ReadContext {
+	/** The moment of upload, UTC ms: no reading can be later. */
+	readonly uploadedMs: number;
+	/** IANA zone of the receiving site. Assumed, visibly, for local times without one. */
+	readonly siteZone: string;
+	/** Planned or actual journey, where known: settles a date order the file alone cannot. */
+	readonly journeyFromMs: number | null;
+	readonly journeyToMs: number | null;
+	readonly answers: Answers;
+}
+
+/** The dock's answers to earlier questions about this file. */
+export interface Answers {
+	readonly dateOrder?: 'dmy' | 'mdy' | 'ymd';
+	readonly unit?: TemperatureUnit;
+	/** IANA zone or fixed offset (`+02:00`) of the file's local times. */
+	readonly zone?: string;
+	/** Column (0-based) or JSON key of the temperature to use. */
+	readonly temperatureColumn?: string;
+	readonly intervalMinutes?: number;
+	readonly startMs?: number;
+}
+
+export type QuestionCode = 'date-order' | 'unit' | 'zone' | 'temperature-column' | 'interval' | 'start';
+
+/** One of two or three possible readings of the file, shown on the file's own first and last rows. */
+export interface Choice {
+	readonly answer: Answers;
+	readonly firstMs: number | null;
+	readonly lastMs: number | null;
+	readonly firstCelsius: number | null;
+	/** Codes of what speaks for or against: `fits-journey`, `before-journey`, `after-upload`, `plausible`, `implausible`. */
+	readonly evidence: readonly string[];
+	/** Days or hours the evidence speaks of (30 days before loading). */
+	readonly evidenceHours: number | null;
+	/** What is being named: a column's header, a zone. */
+	readonly label: string;
+}
+
+/** A line of the file as it stands, for showing an example; `marks` are the ambiguous parts. */
+export interface ExampleRow {
+	readonly line: number;
+	readonly text: string;
+	readonly marks: readonly { readonly from: number; readonly to: number }[];
+}
+
+export interface Question {
+	readonly code: QuestionCode;
+	/** The ambiguous text itself, e.g. `03/04`. */
+	readonly subject: string;
+	readonly choices: readonly Choice[];
+	readonly rows: readonly ExampleRow[];
+	/** Rows between the first and last shown. */
+	readonly rowsBetween: number;
+	/** Why the file cannot tell: `all-one-day`, `all-days-up-to-12`, `no-unit`, `no-zone`, `several-temperatures`, `no-times`. */
+	readonly why: string;
+}
+
+/** Something a careful person would mention. `lines` holds the first few line numbers, `count` all of them. */
+export interface Oddity {
+	readonly code:
+		| 'duplicate-dropped'
+		| 'duplicate-conflict'
+		| 'missing-value'
+		| 'impossible-value'
+		| 'resorted'
+		| 'gap'
+		| 'interval-changed'
+		| 'future-reading'
+		| 'zone-assumed'
+		| 'clock-change'
+		| 'footer-ignored'
+		| 'short-row'
+		| 'cut-short'
+		| 'other-unit-column'
+		| 'bad-time'
+		| 'date-order-by-journey'
+		| 'date-order-by-upload';
+	readonly count: number;
+	readonly lines: readonly number[];
+	readonly detail: string | null;
+}
+
+/** How the file was understood: enough to read it again to the same digits. */
+export interface Layout {
+	readonly kind: 'delimited' | 'json' | 'senml' | 'epcis';
+	readonly encoding: string;
+	readonly delimiter: string | null;
+	readonly decimalComma: boolean;
+	readonly headerLine: number | null;
+	readonly dateOrder: 'dmy' | 'mdy' | 'ymd' | null;
+	/** What settled the order: `iso`, `day-over-12`, `continuity`, `declared`, `journey`, `upload`, `answer`, `month-name`. */
+	readonly dateOrderBy: string | null;
+	readonly zone: string;
+	/** `file` offset or preamble, `answer`, or `site` when assumed. */
+	readonly zoneBy: 'file' | 'answer' | 'site';
+	/** Same for files of the same make: kind, delimiter, header words. */
+	readonly fingerprint: string;
+}
+
+export interface Channel {
+	readonly name: string;
+	readonly quantity: Quantity;
+	readonly trace: Trace | null;
+	/** Line in the file of each reading of `trace`. */
+	readonly lines: Int32Array | null;
+	readonly minCelsius: number | null;
+	readonly maxCelsius: number | null;
+	readonly meanCelsius: number | null;
+}
+
+/** What a preamble or metadata said. */
+export interface Declared {
+	readonly serial: string | null;
+	readonly tripName: string | null;
+	readonly startMs: number | null;
+	readonly intervalMinutes: number | null;
+	readonly zone: string | null;
+}
+
+export interface Understanding {
+	readonly layout: Layout;
+	readonly declared: Declared;
+	readonly channels: readonly Channel[];
+	/** Index in `channels` of the temperature to assess. */
+	readonly temperature: number;
+	readonly readings: number;
+	readonly firstMs: number;
+	readonly lastMs: number;
+	readonly usualIntervalMs: number;
+	readonly oddities: readonly Oddity[];
+	/** First and last rows of the file, as they stand. */
+	readonly rows: readonly ExampleRow[];
+}
+
+export type RefusalCode =
+	| 'empty'
+	| 'too-large'
+	| 'spreadsheet'
+	| 'pdf'
+	| 'zip'
+	| 'image'
+	| 'html'
+	| 'binary'
+	| 'header-only'
+	| 'no-temperature'
+	| 'no-time'
+	| 'one-reading'
+	| 'broken-json'
+	| 'too-deep'
+	| 'line-too-long'
+	| 'too-many-readings';
+
+/** What a read can be: nothing else. */
+export type Ingestion =
+	| { readonly kind: 'ok'; readonly understanding: Understanding }
+	| { readonly kind: 'question'; readonly question: Question; readonly declared: Declared }
+	| { readonly kind: 'refused'; readonly code: RefusalCode; readonly line: number | null; readonly found: string | null };
