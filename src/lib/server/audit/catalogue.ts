@@ -1,0 +1,72 @@
+import type { Outcome } from '../../domain/receiving/recommendation';
+
+/** Everything that can happen to a record, with what is written down about it. A new shape is a new type. */
+export interface EventData {
+	'account.invited': { userId: string; email: string; roles: string[] };
+	'account.changed': { userId: string; before: Record<string, unknown>; after: Record<string, unknown> };
+	'account.switched-off': { userId: string };
+	'account.switched-on': { userId: string };
+	'account.password-set': { userId: string };
+	'account.locked': { userId: string; failedPasswords: number };
+	'account.unlocked': { userId: string };
+	'session.opened': { by: 'password' | 'link'; userId: string };
+	'session.refused': { email: string; why: string };
+	'link.sent': { kind: string; contactId: string | null; userId: string | null };
+	'link.used': { kind: string; contactId: string | null; userId: string | null };
+	'site.saved': { siteId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
+	'partner.saved': { partnerId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
+	'contact.saved': { contactId: string; partnerId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
+	'product.saved': { productId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
+	'spec.drafted': { specVersionId: string; productId: string; number: number; figuresSha256: string };
+	'spec.signed': { specVersionId: string; productId: string; number: number; figuresSha256: string; reason: string };
+	'logger.saved': { loggerId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
+	'shipment.created': { number: string; by: 'hand' | 'import' | 'seed' };
+	'shipment.changed': { before: Record<string, unknown>; after: Record<string, unknown>; reason: string | null };
+	'shipment.cancelled': { reason: string };
+	'arrival.logged': { arrivedAt: string; sealFound: string | null; isSealIntact: boolean | null; setPointCelsius: number | null; returnAirCelsius: number | null; driverName: string | null };
+	'pulp.recorded': { lineId: string | null; position: string; degrees: number; unit: string };
+	'photo.added': { photoId: string; fileSha256: string; kind: string };
+	'note.written': { noteId: string; text: string };
+	'read.received': { readId: string; fileName: string; fileSha256: string; fileBytes: number; state: string };
+	'read.answered': { readId: string; answers: Record<string, unknown> };
+	'read.kept': { readId: string; traceIds: string[]; readings: number };
+	'read.asked-qa': { readId: string };
+	'read.withdrawn': { readId: string; reason: string };
+	'logger.assigned': { traceId: string; serial: string; lineId: string | null };
+	'trim.made': { traceId: string; fromAt: string; toAt: string; reason: string };
+	'trim.undone': { trimId: string };
+	'assessment.made': { engineVersion: string; assessments: { lineId: string; traceId: string; inputsSha256: string; remainingHours: number; remainingLowHours: number }[]; recommended: Record<string, string> };
+	'hold.put': { reason: string };
+	'hold.lifted': { holdId: string };
+	'disposition.signed': { dispositionId: string; version: number; verdict: string; meaning: string; frozenSha256: string; outcomes: { lineId: string; outcome: Outcome; cases: number }[]; amendmentReason: string | null };
+	'disposition.refused': { why: string };
+	'report.sealed': { reportId: string; fileSha256: string; bytes: number };
+	'report.opened': { reportId: string };
+	'notice.queued': { noticeId: string; number: string; partnerId: string };
+	'notice.sent': { noticeId: string; messageId: string; to: string };
+	'notice.failed': { noticeId: string; error: string };
+	'notice.opened': { noticeId: string };
+	'answer.given': { noticeId: string; kind: string; by: string };
+	'claim.opened': { claimId: string; number: string; amountMinor: number | null; currency: string };
+	'claim.changed': { claimId: string; before: Record<string, unknown>; after: Record<string, unknown> };
+	'evidence.taken': { claimId: string | null; shipmentId: string; files: number };
+	'certificate.made': { certificateId: string; sha256: string };
+	'settings.changed': { name: string };
+}
+
+export type EventType = keyof EventData;
+
+/** One fact on its way into a chain: a docket's, else a site's, an account's or the organisation's. */
+export type AuditEvent = {
+	[Type in EventType]: { type: Type; data: EventData[Type]; chain: ChainName };
+}[EventType];
+
+export interface ChainName {
+	scope: 'shipment' | 'site' | 'account' | 'organisation';
+	id: string;
+}
+
+/** Builds an event; the type picks the shape of its data. */
+export function event<Type extends EventType>(type: Type, chain: ChainName, data: EventData[Type]): AuditEvent {
+	return { type, chain, data } as AuditEvent;
+}

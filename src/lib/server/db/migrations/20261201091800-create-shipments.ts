@@ -1,0 +1,45 @@
+import { table } from '../table-migration';
+
+/** One load under one set of papers; its page is the docket. Its stage follows from these facts. */
+export const { up, down } = table({
+	name: 'shipments',
+	columns: `
+		id UUID NOT NULL PRIMARY KEY,
+		site_id UUID NOT NULL,
+		number VARCHAR(24) NOT NULL,
+		title VARCHAR(200) NOT NULL,
+		supplier_id UUID NOT NULL,
+		carrier_id UUID NULL,
+		lane_id UUID NULL,
+		visit_id UUID NULL,
+		compartment_id UUID NULL,
+		purchase_order VARCHAR(60) NULL,
+		bill_of_lading VARCHAR(60) NULL,
+		mode ENUM ('road', 'sea', 'air', 'rail') NOT NULL,
+		vehicle VARCHAR(60) NULL,
+		seal VARCHAR(60) NULL,
+		dock VARCHAR(40) NULL,
+		terms_of_sale VARCHAR(120) NULL,
+		reject_within_hours DOUBLE NULL,
+		reject_basis VARCHAR(120) NULL,
+		due_at DATETIME(3) NULL,
+		arrived_at DATETIME(3) NULL,
+		decided_at DATETIME(3) NULL,
+		verdict ENUM ('accepted', 'conditions', 'part', 'rejected') NULL,
+		created_by UUID NULL,
+		created_at DATETIME(3) NOT NULL,
+		cancelled_at DATETIME(3) NULL,
+		version INT NOT NULL DEFAULT 0,
+		UNIQUE KEY shipments_number (number),
+		KEY shipments_board (site_id, due_at),
+		KEY shipments_supplier (supplier_id, due_at),
+		FOREIGN KEY (site_id) REFERENCES sites (id),
+		FOREIGN KEY (supplier_id) REFERENCES partners (id),
+		FOREIGN KEY (carrier_id) REFERENCES partners (id),
+		FOREIGN KEY (lane_id) REFERENCES lanes (id),
+		FOREIGN KEY (visit_id) REFERENCES visits (id),
+		FOREIGN KEY (compartment_id) REFERENCES compartments (id),
+		FOREIGN KEY (created_by) REFERENCES users (id)
+	`,
+	grants: ['UPDATE', 'DELETE']
+});

@@ -1,0 +1,43 @@
+import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+
+/** Somebody who signs in. */
+export class User extends Model<InferAttributes<User>, InferCreationAttributes<User>> {
+	declare id: string;
+	declare email: string;
+	declare name: string;
+	declare title: string;
+	declare passwordHash: string | null;
+	declare roles: unknown;
+	declare partnerId: string | null;
+	declare tokenVersion: CreationOptional<number>;
+	declare failedPasswords: CreationOptional<number>;
+	declare lockedAt: Date | null;
+	declare temperatureUnit: 'celsius' | 'fahrenheit' | null;
+	declare createdAt: Date;
+	declare invitedAt: Date | null;
+	declare lastSignInAt: Date | null;
+	declare switchedOffAt: Date | null;
+}
+
+export function defineUser(sequelize: Sequelize): void {
+	User.init(
+		{
+			id: { type: DataTypes.UUID, primaryKey: true, allowNull: false },
+			email: { type: DataTypes.STRING(254), allowNull: false },
+			name: { type: DataTypes.STRING(120), allowNull: false },
+			title: { type: DataTypes.STRING(120), allowNull: false },
+			passwordHash: { type: DataTypes.STRING(255), allowNull: true },
+			roles: { type: DataTypes.JSON, allowNull: false },
+			partnerId: { type: DataTypes.UUID, allowNull: true },
+			tokenVersion: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
+			failedPasswords: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
+			lockedAt: { type: DataTypes.DATE(3), allowNull: true },
+			temperatureUnit: { type: DataTypes.ENUM('celsius', 'fahrenheit'), allowNull: true },
+			createdAt: { type: DataTypes.DATE(3), allowNull: false },
+			invitedAt: { type: DataTypes.DATE(3), allowNull: true },
+			lastSignInAt: { type: DataTypes.DATE(3), allowNull: true },
+			switchedOffAt: { type: DataTypes.DATE(3), allowNull: true }
+		},
+		{ sequelize, modelName: 'User', tableName: 'users' }
+	);
+}
