@@ -29,9 +29,10 @@ export function entryText(entry: {
 	return [chainId, seq, type, actorId ?? '', actorKind, occurredAt.toISOString(), requestId, address, payloadSha256, previousSha256].join('\n');
 }
 
+// Not INSERT IGNORE: that leaves a shared lock, and two writers who both want more than that deadlock.
 async function lockChain(chain: ChainName, transaction: Transaction): Promise<{ length: number; headSha256: string }> {
 	await database().query(
-		'INSERT IGNORE INTO audit_chains (id, scope, length, head_sha256) VALUES (?, ?, 0, ?)',
+		'INSERT INTO audit_chains (id, scope, length, head_sha256) VALUES (?, ?, 0, ?) ON DUPLICATE KEY UPDATE id = id',
 		{ replacements: [chain.id, chain.scope, emptyHeadSha256], transaction }
 	);
 	const [row] = await database().query<{ length: number; headSha256: string }>(

@@ -38,7 +38,10 @@ const storage = {
 
 /** The account behind the app's URL as the server names it, quoted for GRANT. */
 async function accountOf(appUrl: string): Promise<string> {
-	const app = connect(appUrl, 1);
+	// Before the first grant the account may open no schema but this one.
+	const url = new URL(appUrl);
+	url.pathname = '/information_schema';
+	const app = connect(url.href, 1);
 	try {
 		const [row] = await app.query<{ account: string }>('SELECT CURRENT_USER() AS account', { type: QueryTypes.SELECT });
 		const [user, host] = (row?.account ?? '').split('@');

@@ -1,0 +1,66 @@
+import type { Content, ContentTable, CustomTableLayout, TableCell } from 'pdfmake/interfaces';
+import { palette, sizePoints } from './palette';
+import { label, sentence, words } from './type-styles';
+
+interface Column {
+	readonly head: string;
+	readonly width: number | 'auto' | '*';
+	readonly align?: 'left' | 'right';
+}
+
+interface Ledger {
+	readonly title: string;
+	readonly finding: string | null;
+	readonly columns: readonly Column[];
+	readonly rows: readonly (readonly Content[])[];
+	/** The last row is a total: bold by its cells, closed by the ink rule as ever. */
+	readonly width: number;
+}
+
+const titleRows = 1;
+const headRows = 2;
+
+/** Ink opens the table under its title, a hairline parts the rows, ink closes it. */
+const ruled: CustomTableLayout = {
+	hLineWidth: (i, node) => (i === 0 ? 0 : i === titleRows ? 1.1 : i === node.table.body.length ? 0.8 : 0.6),
+	hLineColor: (i, node) => (i === titleRows || i === node.table.body.length ? palette.ink : palette.rule),
+	vLineWidth: () => 0,
+	paddingLeft: (i) => (i === 0 ? 0 : 5),
+	paddingRight: (i, node) => (i === (node.table.widths?.length ?? 0) - 1 ? 0 : 5),
+	paddingTop: (i) => (i === 0 ? 0 : 4),
+	paddingBottom: () => 3.6
+};
+
+/** A section's title: name, and its finding in one line, so that the heads alone tell the story. */
+export function sectionTitle(title: string, finding: string | null): Content {
+	const name = words(title, { size: sizePoints.section, bold: true });
+	if (finding === null) return name;
+	return { columns: [{ ...name, width: 'auto' }, { ...sentence(finding, { size: 8.4 }), width: '*', margin: [0, 2, 0, 0] }], columnGap: 9 };
+}
+
+/**
+ * A ruled ledger. The title is a header row of the table: it never stands alone at the foot of a page, and
+ * returns with the heads where a long table goes on.
+ */
+export function ledger(table: Ledger): ContentTable {
+	const blanks = Array.from({ length: table.columns.length - 1 }, (): TableCell => ({ text: '' }));
+	const title: TableCell[] = [{ stack: [sectionTitle(table.title, table.finding)], colSpan: table.columns.length }, ...blanks];
+	const heads = table.columns.map((column): TableCell => ({ ...label(column.head, { alignment: column.align ?? 'left' }), verticalAlignment: 'bottom' }));
+	const rows = table.rows.map((row) => row.map((cell, i): TableCell => ({ stack: [cell], alignment: table.columns[i]?.align ?? 'left' })));
+	return {
+		table: {
+			headerRows: headRows,
+			keepWithHeaderRows: 1,
+			dontBreakRows: true,
+			widths: table.columns.map((column) => column.width),
+			body: [title, heads, ...rows]
+		},
+		layout: ruled,
+		margin: [0, 16, 0, 0]
+	};
+}
+
+/** A line under a table. */
+export function noteBelow(text: string): Content {
+	return sentence(text, { margin: [0, 4, 0, 0], size: 8.4 });
+}
