@@ -2,8 +2,28 @@ import type { Config } from 'tailwindcss';
 import forms from '@tailwindcss/forms';
 
 const tokens = [
-	'paper', 'blotter', 'sheet', 'stub', 'ink', 'ink2', 'rule', 'edge', 'cutedge', 'tar',
-	'buoy', 'buoy-hover', 'on-buoy', 'kelp', 'kelp-wash', 'rope', 'rope-wash', 'rope-band', 'hull', 'hull-wash', 'deep', 'deep-wash'
+	'paper',
+	'blotter',
+	'sheet',
+	'stub',
+	'ink',
+	'ink2',
+	'rule',
+	'edge',
+	'cutedge',
+	'tar',
+	'buoy',
+	'buoy-hover',
+	'on-buoy',
+	'kelp',
+	'kelp-wash',
+	'rope',
+	'rope-wash',
+	'rope-band',
+	'hull',
+	'hull-wash',
+	'deep',
+	'deep-wash'
 ];
 
 export default {

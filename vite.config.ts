@@ -10,7 +10,9 @@ const lib = join(import.meta.dirname, 'src/lib');
 function nodePrograms(): Record<string, string> {
 	const found: Record<string, string> = {};
 	for (const folder of ['src/cli', 'src/lib/server/workers']) {
-		for (const file of readdirSync(folder).filter((name) => name.endsWith('.ts') && !name.endsWith('.test.ts'))) {
+		for (const file of readdirSync(folder).filter(
+			(name) => name.endsWith('.ts') && !name.endsWith('.test.ts')
+		)) {
 			found[basename(file, '.ts')] = join(folder, file);
 		}
 	}
@@ -40,7 +42,13 @@ const tests: UserConfig['test'] = {
 			extends: true,
 			test: {
 				name: 'unit',
-				include: ['src/lib/domain/**/*.test.ts', 'src/lib/*.test.ts', 'src/lib/{schemas,messages}/**/*.test.ts', 'tests/accuracy/**/*.test.ts', 'tests/*.test.ts']
+				include: [
+					'src/lib/domain/**/*.test.ts',
+					'src/lib/*.test.ts',
+					'src/lib/{schemas,messages}/**/*.test.ts',
+					'tests/accuracy/**/*.test.ts',
+					'tests/*.test.ts'
+				]
 			}
 		},
 		{
@@ -68,7 +76,11 @@ const tests: UserConfig['test'] = {
 		{
 			extends: true,
 			resolve: { conditions: ['browser'] },
-			test: { name: 'components', include: ['src/lib/components/**/*.test.ts', 'src/routes/**/*.test.ts'], environment: 'happy-dom' }
+			test: {
+				name: 'components',
+				include: ['src/lib/components/**/*.test.ts', 'src/routes/**/*.test.ts'],
+				environment: 'happy-dom'
+			}
 		}
 	]
 };

@@ -17,10 +17,12 @@ delete process.env.ORIGIN;
 
 const { startBackground } = await import(join(root, 'build/node/background.js'));
 /** @type {{ stop: () => Promise<void> }} */
-const background = await startBackground({ ...process.env, ORIGIN: origin }).catch((/** @type {unknown} */ error) => {
-	process.stderr.write(`${error instanceof Error ? error.message : error}\n`);
-	process.exit(1);
-});
+const background = await startBackground({ ...process.env, ORIGIN: origin }).catch(
+	(/** @type {unknown} */ error) => {
+		process.stderr.write(`${error instanceof Error ? error.message : error}\n`);
+		process.exit(1);
+	}
+);
 process.env.PUBLIC_ORIGIN = origin ?? '';
 const { handler } = await import(join(root, 'build/handler.js'));
 

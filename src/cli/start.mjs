@@ -29,18 +29,27 @@ function readDotEnv() {
 	if (!existsSync(path)) return;
 	for (const line of readFileSync(path, 'utf8').split('\n')) {
 		const match = /^\s*([A-Z0-9_]+)\s*=\s*(.*?)\s*$/.exec(line);
-		if (match?.[1] && process.env[match[1]] === undefined) process.env[match[1]] = match[2]?.replace(/^"(.*)"$/, '$1');
+		if (match?.[1] && process.env[match[1]] === undefined)
+			process.env[match[1]] = match[2]?.replace(/^"(.*)"$/, '$1');
 	}
 }
 
 /** @param {NodeJS.ProcessEnv} env @param {number} port */
 async function serve(env, port) {
-	const server = spawn(process.execPath, [join(projectFolder, 'src/cli/serve.mjs')], { cwd: projectFolder, env, stdio: 'inherit', detached: true });
-	stops.push(() => new Promise((ended) => {
-		if (server.exitCode !== null) return ended();
-		server.once('exit', () => ended());
-		server.kill('SIGTERM');
-	}));
+	const server = spawn(process.execPath, [join(projectFolder, 'src/cli/serve.mjs')], {
+		cwd: projectFolder,
+		env,
+		stdio: 'inherit',
+		detached: true
+	});
+	stops.push(
+		() =>
+			new Promise((ended) => {
+				if (server.exitCode !== null) return ended();
+				server.once('exit', () => ended());
+				server.kill('SIGTERM');
+			})
+	);
 	server.once('exit', (code) => void stop(isStopping ? 0 : (code ?? 1)));
 	const address = `http://127.0.0.1:${port}/api/v1/health`;
 	while (!isStopping) {
@@ -55,14 +64,25 @@ async function main() {
 	const isPrivate = !process.env.DATABASE_URL;
 	const data = resolve(projectFolder, process.env.WHARFINGER_DATA || '.data');
 	const port = Number(process.env.PORT || 3000);
-	const inUse = await fetch(`http://127.0.0.1:${port}/`).then(() => true, () => false);
-	if (inUse) throw new SetupFault(`Port ${port} is taken by another program. Stop it, or choose another: PORT=3100 npm start`);
+	const inUse = await fetch(`http://127.0.0.1:${port}/`).then(
+		() => true,
+		() => false
+	);
+	if (inUse)
+		throw new SetupFault(
+			`Port ${port} is taken by another program. Stop it, or choose another: PORT=3100 npm start`
+		);
 
 	if (isPrivate) await ensurePrograms(databasePrograms);
 	await prepareProject();
 
 	/** @type {NodeJS.ProcessEnv} */
-	const env = { ...process.env, WHARFINGER_DATA: data, PORT: String(port), IS_DEMO: isPrivate ? 'true' : 'false' };
+	const env = {
+		...process.env,
+		WHARFINGER_DATA: data,
+		PORT: String(port),
+		IS_DEMO: isPrivate ? 'true' : 'false'
+	};
 	if (isPrivate) {
 		const database = await step('Starting the private database', () => startDatabase(join(data, 'database')));
 		stops.push(() => database.stop());
@@ -70,13 +90,21 @@ async function main() {
 		env.DATABASE_OWNER_URL = database.ownerUrl;
 	}
 	const program = (/** @type {string} */ name) => join(projectFolder, `build/node/${name}.js`);
-	await step('Bringing the schema up to date', () => run(process.execPath, [program('migrate')], { cwd: projectFolder, env }));
-	if (isPrivate) await step('Loading the demo (once)', () => run(process.execPath, [program('seed')], { cwd: projectFolder, env }));
+	await step('Bringing the schema up to date', () =>
+		run(process.execPath, [program('migrate')], { cwd: projectFolder, env })
+	);
+	if (isPrivate)
+		await step('Loading the demo (once)', () =>
+			run(process.execPath, [program('seed')], { cwd: projectFolder, env })
+		);
 	await step('Starting the server', () => serve(env, port));
 	if (isStopping) return;
 
-	say(`\nWharfinger is at http://localhost:${port}  (${((performance.now() - startedMs) / 1000).toFixed(1)} s)`);
-	if (isPrivate) say('Demo sign-ins: dock@, qa@, claims@, admin@wharfinger.example, password wharfinger-demo');
+	say(
+		`\nWharfinger is at http://localhost:${port}  (${((performance.now() - startedMs) / 1000).toFixed(1)} s)`
+	);
+	if (isPrivate)
+		say('Demo sign-ins: dock@, qa@, claims@, admin@wharfinger.example, password wharfinger-demo');
 	say('Ctrl-C stops it.');
 }
 

@@ -12,7 +12,12 @@ declare module 'vitest' {
 }
 
 /** A test's database dies with it: no need to wait for the disk. */
-export const fastAndForgetful = ['--innodb-flush-log-at-trx-commit=0', '--skip-innodb-doublewrite', '--innodb-buffer-pool-size=256M', '--max-connections=200'];
+export const fastAndForgetful = [
+	'--innodb-flush-log-at-trx-commit=0',
+	'--skip-innodb-doublewrite',
+	'--innodb-buffer-pool-size=256M',
+	'--max-connections=200'
+];
 
 /** One private server for all projects of a run: that of `npm test`, else one of its own. */
 export default async function setup(project: TestProject) {

@@ -31,9 +31,13 @@ export async function ensurePrograms(needs) {
 	const packages = [...new Set(missing.flatMap((program) => needs[program] ?? []))];
 	const command = `apt-get install -y --no-install-recommends ${packages.join(' ')}`;
 	if (process.getuid?.() !== 0)
-		throw new SetupFault(`${missing.join(', ')} is missing and this account may not install it. Run:\n  sudo ${command}\nthen start again.`);
+		throw new SetupFault(
+			`${missing.join(', ')} is missing and this account may not install it. Run:\n  sudo ${command}\nthen start again.`
+		);
 	if (!findProgram('apt-get'))
-		throw new SetupFault(`${missing.join(', ')} is missing and there is no apt-get here. Install ${packages.join(', ')} with your system's own tools.`);
+		throw new SetupFault(
+			`${missing.join(', ')} is missing and there is no apt-get here. Install ${packages.join(', ')} with your system's own tools.`
+		);
 	await step(`Installing ${packages.join(', ')} from Debian`, async () => {
 		const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
 		await run('apt-get', ['update', '-q'], { env });

@@ -20,7 +20,8 @@ function filesBelow(path) {
 function digestOf(names) {
 	const hash = createHash('sha256');
 	for (const name of names) {
-		for (const path of filesBelow(join(projectFolder, name))) hash.update(path.slice(projectFolder.length)).update(readFileSync(path));
+		for (const path of filesBelow(join(projectFolder, name)))
+			hash.update(path.slice(projectFolder.length)).update(readFileSync(path));
 	}
 	return hash.digest('hex');
 }
@@ -52,7 +53,15 @@ async function installDependencies() {
 
 async function build() {
 	const stamp = join(projectFolder, 'build/.sources-sha256');
-	const digest = digestOf(['src', 'static', 'package-lock.json', 'svelte.config.js', 'vite.config.ts', 'tailwind.config.ts', 'tsconfig.json']);
+	const digest = digestOf([
+		'src',
+		'static',
+		'package-lock.json',
+		'svelte.config.js',
+		'vite.config.ts',
+		'tailwind.config.ts',
+		'tsconfig.json'
+	]);
 	if (isStamped(stamp, digest)) return;
 	await step('Building', async () => {
 		const vite = join(projectFolder, 'node_modules/vite/bin/vite.js');

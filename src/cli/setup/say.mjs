@@ -31,7 +31,8 @@ export class SetupFault extends Error {}
  * @returns {never}
  */
 export function endWith(error) {
-	const text = error instanceof SetupFault ? error.message : error instanceof Error ? error.stack : String(error);
+	const text =
+		error instanceof SetupFault ? error.message : error instanceof Error ? error.stack : String(error);
 	process.stderr.write(`\n✗ ${text}\n`);
 	process.exit(1);
 }

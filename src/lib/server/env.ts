@@ -4,11 +4,9 @@ import { join, resolve } from 'node:path';
 import { z } from 'zod';
 
 const url = (protocols: string[]) =>
-	z
-		.string()
-		.refine((text) => URL.canParse(text) && protocols.includes(new URL(text).protocol), {
-			message: `must be a URL starting with ${protocols.map((p) => `${p}//`).join(' or ')}`
-		});
+	z.string().refine((text) => URL.canParse(text) && protocols.includes(new URL(text).protocol), {
+		message: `must be a URL starting with ${protocols.map((p) => `${p}//`).join(' or ')}`
+	});
 
 const settings = z.object({
 	PORT: z.coerce.number().int().min(1).max(65_535).default(3000),
@@ -46,7 +44,9 @@ export interface Env {
 	origin: string;
 	authSecret: string;
 	isProxyTrusted: boolean;
-	storage: { kind: 'folder'; folder: string } | { kind: 's3'; bucket: string; endpoint: string | null; region: string };
+	storage:
+		| { kind: 'folder'; folder: string }
+		| { kind: 's3'; bucket: string; endpoint: string | null; region: string };
 	keysFolder: string;
 	mailFolder: string;
 	certificatePassphrase: string;
@@ -58,13 +58,16 @@ export interface Env {
 function keptSecret(folder: string, name: string): string {
 	const path = join(folder, name);
 	mkdirSync(folder, { recursive: true, mode: 0o700 });
-	if (!existsSync(path)) writeFileSync(path, randomBytes(32).toString('base64url'), { mode: 0o600, flag: 'wx' });
+	if (!existsSync(path))
+		writeFileSync(path, randomBytes(32).toString('base64url'), { mode: 0o600, flag: 'wx' });
 	return readFileSync(path, 'utf8').trim();
 }
 
 /** Reads the settings. @throws Error naming every fault at once. */
 export function readEnv(source: Record<string, string | undefined>): Env {
-	const given = Object.fromEntries(Object.entries(source).filter(([, value]) => value !== undefined && value !== ''));
+	const given = Object.fromEntries(
+		Object.entries(source).filter(([, value]) => value !== undefined && value !== '')
+	);
 	const parsed = settings.safeParse(given);
 	if (!parsed.success) {
 		const faults = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`);
@@ -72,7 +75,9 @@ export function readEnv(source: Record<string, string | undefined>): Env {
 	}
 	const env = parsed.data;
 	if (env.STORAGE === 's3' && !env.S3_BUCKET)
-		throw new Error('The settings have 1 fault(s):\n  S3_BUCKET: is needed when STORAGE is s3\nSee .env.example.');
+		throw new Error(
+			'The settings have 1 fault(s):\n  S3_BUCKET: is needed when STORAGE is s3\nSee .env.example.'
+		);
 
 	const dataFolder = resolve(env.WHARFINGER_DATA);
 	const keysFolder = join(dataFolder, 'keys');
@@ -90,7 +95,12 @@ export function readEnv(source: Record<string, string | undefined>): Env {
 		isProxyTrusted: env.TRUST_PROXY === 'true',
 		storage:
 			env.STORAGE === 's3'
-				? { kind: 's3', bucket: env.S3_BUCKET ?? '', endpoint: env.S3_ENDPOINT ?? null, region: env.S3_REGION }
+				? {
+						kind: 's3',
+						bucket: env.S3_BUCKET ?? '',
+						endpoint: env.S3_ENDPOINT ?? null,
+						region: env.S3_REGION
+					}
 				: { kind: 'folder', folder: join(dataFolder, 'files') },
 		keysFolder,
 		mailFolder: join(dataFolder, 'mail'),

@@ -3,23 +3,38 @@ const refusals = {
 	'no-session': { status: 401, message: 'Sign in first.' },
 	'not-allowed': { status: 403, message: 'Your role may not do this.' },
 	'not-found': { status: 404, message: 'There is no such record, or it is not yours to see.' },
-	'invalid': { status: 422, message: 'Some of what was sent cannot be used.' },
+	invalid: { status: 422, message: 'Some of what was sent cannot be used.' },
 	'already-signed': { status: 409, message: 'This docket has been signed. Amend it, with a reason.' },
 	'not-signed': { status: 409, message: 'This docket has not been signed yet.' },
 	'not-arrived': { status: 409, message: 'Log the arrival first; nothing was at the door yet.' },
 	'already-arrived': { status: 409, message: 'The arrival of this load has already been logged.' },
-	'changed-meanwhile': { status: 409, message: 'Somebody changed this docket while you were looking at it. Look again, then sign.' },
+	'changed-meanwhile': {
+		status: 409,
+		message: 'Somebody changed this docket while you were looking at it. Look again, then sign.'
+	},
 	'wrong-password': { status: 422, message: 'That is not your password. Nothing was signed.' },
-	'locked': { status: 423, message: 'This account is locked after several wrong passwords. An admin can unlock it.' },
-	'too-many-attempts': { status: 429, message: 'Too many attempts. Wait a quarter of an hour, then try again.' },
+	locked: {
+		status: 423,
+		message: 'This account is locked after several wrong passwords. An admin can unlock it.'
+	},
+	'too-many-attempts': {
+		status: 429,
+		message: 'Too many attempts. Wait a quarter of an hour, then try again.'
+	},
 	'link-used': { status: 410, message: 'This link has been used or has run out. Ask for a fresh one.' },
-	'too-large': { status: 413, message: 'The file is larger than 50 MB. Export a shorter period and upload that.' },
+	'too-large': {
+		status: 413,
+		message: 'The file is larger than 50 MB. Export a shorter period and upload that.'
+	},
 	'not-multipart': { status: 422, message: 'No file came with the upload. Choose a file and send it again.' },
 	'upload-broken': { status: 422, message: 'The upload broke off before the file was whole. Send it again.' },
 	'wrong-type': { status: 422, message: 'This kind of file cannot be used here.' },
-	'duplicate': { status: 409, message: 'There is one with that name or number already.' },
+	duplicate: { status: 409, message: 'There is one with that name or number already.' },
 	'in-use': { status: 409, message: 'It is in use, so it cannot be changed. Make a new version.' },
-	'database-away': { status: 503, message: 'The database does not answer. Nothing was changed. Try again in a minute.' }
+	'database-away': {
+		status: 503,
+		message: 'The database does not answer. Nothing was changed. Try again in a minute.'
+	}
 } as const;
 
 export type RefusalCode = keyof typeof refusals;

@@ -53,16 +53,25 @@ describe('an audit chain', () => {
 	});
 
 	it('cannot be updated, deleted or truncated by the application account', async () => {
-		for (const sql of ['UPDATE audit_entries SET type = "x"', 'DELETE FROM audit_entries', 'TRUNCATE audit_entries', 'DROP TABLE audit_entries'])
+		for (const sql of [
+			'UPDATE audit_entries SET type = "x"',
+			'DELETE FROM audit_entries',
+			'TRUNCATE audit_entries',
+			'DROP TABLE audit_entries'
+		])
 			await expect(database().query(sql)).rejects.toThrow(/denied/);
 	});
 
 	it('names the first entry that somebody with more rights changed', async () => {
 		const id = uuid();
 		for (let i = 0; i < 3; i++)
-			await inTransaction(ctx, async ({ record }) => record('hold.put', { scope: 'shipment', id }, { reason: `r${i}` }));
+			await inTransaction(ctx, async ({ record }) =>
+				record('hold.put', { scope: 'shipment', id }, { reason: `r${i}` })
+			);
 		const owner = connect(ownerUrl(), 1);
-		await owner.query("UPDATE audit_entries SET type = 'hold.lifted' WHERE chain_id = ? AND seq = 2", { replacements: [id] });
+		await owner.query("UPDATE audit_entries SET type = 'hold.lifted' WHERE chain_id = ? AND seq = 2", {
+			replacements: [id]
+		});
 		await owner.close();
 		expect(await verifyChain(id)).toEqual({ chainId: id, seq: 2, fault: 'entry-changed' });
 	});

@@ -25,12 +25,37 @@ export function entryText(entry: {
 	payloadSha256: string;
 	previousSha256: string;
 }): string {
-	const { chainId, seq, type, actorId, actorKind, occurredAt, requestId, address, payloadSha256, previousSha256 } = entry;
-	return [chainId, seq, type, actorId ?? '', actorKind, occurredAt.toISOString(), requestId, address, payloadSha256, previousSha256].join('\n');
+	const {
+		chainId,
+		seq,
+		type,
+		actorId,
+		actorKind,
+		occurredAt,
+		requestId,
+		address,
+		payloadSha256,
+		previousSha256
+	} = entry;
+	return [
+		chainId,
+		seq,
+		type,
+		actorId ?? '',
+		actorKind,
+		occurredAt.toISOString(),
+		requestId,
+		address,
+		payloadSha256,
+		previousSha256
+	].join('\n');
 }
 
 // Not INSERT IGNORE: that leaves a shared lock, and two writers who both want more than that deadlock.
-async function lockChain(chain: ChainName, transaction: Transaction): Promise<{ length: number; headSha256: string }> {
+async function lockChain(
+	chain: ChainName,
+	transaction: Transaction
+): Promise<{ length: number; headSha256: string }> {
 	await database().query(
 		'INSERT INTO audit_chains (id, scope, length, head_sha256) VALUES (?, ?, 0, ?) ON DUPLICATE KEY UPDATE id = id',
 		{ replacements: [chain.id, chain.scope, emptyHeadSha256], transaction }
@@ -49,7 +74,11 @@ function actorOf({ actor }: Context): { actorId: string | null; actorKind: 'user
 }
 
 /** Appends the events of one transaction to their chains, chains in one order so that two writers never deadlock. */
-export async function appendEvents(ctx: Context, events: readonly AuditEvent[], transaction: Transaction): Promise<void> {
+export async function appendEvents(
+	ctx: Context,
+	events: readonly AuditEvent[],
+	transaction: Transaction
+): Promise<void> {
 	const byChain = groupByChain(events);
 	for (const chainId of [...byChain.keys()].sort()) {
 		const group = byChain.get(chainId) ?? [];

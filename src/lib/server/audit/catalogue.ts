@@ -14,16 +14,50 @@ export interface EventData {
 	'link.sent': { kind: string; contactId: string | null; userId: string | null };
 	'link.used': { kind: string; contactId: string | null; userId: string | null };
 	'site.saved': { siteId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
-	'partner.saved': { partnerId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
-	'contact.saved': { contactId: string; partnerId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
-	'product.saved': { productId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
+	'partner.saved': {
+		partnerId: string;
+		before: Record<string, unknown> | null;
+		after: Record<string, unknown>;
+	};
+	'contact.saved': {
+		contactId: string;
+		partnerId: string;
+		before: Record<string, unknown> | null;
+		after: Record<string, unknown>;
+	};
+	'product.saved': {
+		productId: string;
+		before: Record<string, unknown> | null;
+		after: Record<string, unknown>;
+	};
 	'spec.drafted': { specVersionId: string; productId: string; number: number; figuresSha256: string };
-	'spec.signed': { specVersionId: string; productId: string; number: number; figuresSha256: string; reason: string };
-	'logger.saved': { loggerId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
+	'spec.signed': {
+		specVersionId: string;
+		productId: string;
+		number: number;
+		figuresSha256: string;
+		reason: string;
+	};
+	'logger.saved': {
+		loggerId: string;
+		before: Record<string, unknown> | null;
+		after: Record<string, unknown>;
+	};
 	'shipment.created': { number: string; by: 'hand' | 'import' | 'seed' };
-	'shipment.changed': { before: Record<string, unknown>; after: Record<string, unknown>; reason: string | null };
+	'shipment.changed': {
+		before: Record<string, unknown>;
+		after: Record<string, unknown>;
+		reason: string | null;
+	};
 	'shipment.cancelled': { reason: string };
-	'arrival.logged': { arrivedAt: string; sealFound: string | null; isSealIntact: boolean | null; setPointCelsius: number | null; returnAirCelsius: number | null; driverName: string | null };
+	'arrival.logged': {
+		arrivedAt: string;
+		sealFound: string | null;
+		isSealIntact: boolean | null;
+		setPointCelsius: number | null;
+		returnAirCelsius: number | null;
+		driverName: string | null;
+	};
 	'pulp.recorded': { lineId: string | null; position: string; degrees: number; unit: string };
 	'photo.added': { photoId: string; fileSha256: string; kind: string };
 	'note.written': { noteId: string; text: string };
@@ -35,10 +69,28 @@ export interface EventData {
 	'logger.assigned': { traceId: string; serial: string; lineId: string | null };
 	'trim.made': { traceId: string; fromAt: string; toAt: string; reason: string };
 	'trim.undone': { trimId: string };
-	'assessment.made': { engineVersion: string; assessments: { lineId: string; traceId: string; inputsSha256: string; remainingHours: number; remainingLowHours: number }[]; recommended: Record<string, string> };
+	'assessment.made': {
+		engineVersion: string;
+		assessments: {
+			lineId: string;
+			traceId: string;
+			inputsSha256: string;
+			remainingHours: number;
+			remainingLowHours: number;
+		}[];
+		recommended: Record<string, string>;
+	};
 	'hold.put': { reason: string };
 	'hold.lifted': { holdId: string };
-	'disposition.signed': { dispositionId: string; version: number; verdict: string; meaning: string; frozenSha256: string; outcomes: { lineId: string; outcome: Outcome; cases: number }[]; amendmentReason: string | null };
+	'disposition.signed': {
+		dispositionId: string;
+		version: number;
+		verdict: string;
+		meaning: string;
+		frozenSha256: string;
+		outcomes: { lineId: string; outcome: Outcome; cases: number }[];
+		amendmentReason: string | null;
+	};
 	'disposition.refused': { why: string };
 	'report.sealed': { reportId: string; fileSha256: string; bytes: number };
 	'report.opened': { reportId: string };
@@ -67,6 +119,10 @@ export interface ChainName {
 }
 
 /** Builds an event; the type picks the shape of its data. */
-export function event<Type extends EventType>(type: Type, chain: ChainName, data: EventData[Type]): AuditEvent {
+export function event<Type extends EventType>(
+	type: Type,
+	chain: ChainName,
+	data: EventData[Type]
+): AuditEvent {
 	return { type, chain, data } as AuditEvent;
 }

@@ -33,12 +33,14 @@ export async function verifyChain(chainId: string): Promise<ChainFault | null> {
 			if (!isSame) return { chainId, seq, fault: 'entry-changed' };
 			const text = texts.get(entry.id);
 			if (text === undefined) return { chainId, seq, fault: 'payload-changed' };
-			if (text !== null && sha256Hex(text) !== entry.payloadSha256) return { chainId, seq, fault: 'payload-changed' };
+			if (text !== null && sha256Hex(text) !== entry.payloadSha256)
+				return { chainId, seq, fault: 'payload-changed' };
 			previousSha256 = entry.sha256;
 		}
 	}
 	const head = await AuditChain.findByPk(chainId);
-	if (head && (head.headSha256 !== previousSha256 || head.length !== seq)) return { chainId, seq, fault: 'head-differs' };
+	if (head && (head.headSha256 !== previousSha256 || head.length !== seq))
+		return { chainId, seq, fault: 'head-differs' };
 	return null;
 }
 

@@ -43,7 +43,9 @@ async function accountOf(appUrl: string): Promise<string> {
 	url.pathname = '/information_schema';
 	const app = connect(url.href, 1);
 	try {
-		const [row] = await app.query<{ account: string }>('SELECT CURRENT_USER() AS account', { type: QueryTypes.SELECT });
+		const [row] = await app.query<{ account: string }>('SELECT CURRENT_USER() AS account', {
+			type: QueryTypes.SELECT
+		});
 		const [user, host] = (row?.account ?? '').split('@');
 		return `'${user}'@'${host}'`;
 	} finally {

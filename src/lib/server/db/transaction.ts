@@ -49,7 +49,10 @@ async function run<Result>(ctx: Context, write: (w: Writing) => Promise<Result>)
  * Runs `write` in one transaction with its audit entries and jobs: all of it happens or none.
  * A deadlock reruns the closure, so it holds no effects, makes no ids and asks no clock.
  */
-export async function inTransaction<Result>(ctx: Context, write: (w: Writing) => Promise<Result>): Promise<Result> {
+export async function inTransaction<Result>(
+	ctx: Context,
+	write: (w: Writing) => Promise<Result>
+): Promise<Result> {
 	for (let attempt = 1; ; attempt++) {
 		try {
 			return await run(ctx, write);

@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** What one trace says about one line. Recomputed freely until signed. */
-export class AssessmentRow extends Model<InferAttributes<AssessmentRow>, InferCreationAttributes<AssessmentRow>> {
+export class AssessmentRow extends Model<
+	InferAttributes<AssessmentRow>,
+	InferCreationAttributes<AssessmentRow>
+> {
 	declare id: string;
 	declare shipmentId: string;
 	declare lineId: string;

@@ -1,4 +1,11 @@
-import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type CreationOptional,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** The head of one hash chain: a docket's, else a site's or an account's. */
 export class AuditChain extends Model<InferAttributes<AuditChain>, InferCreationAttributes<AuditChain>> {

@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** The heads of all chains at one moment, chained. */
-export class AuditCheckpoint extends Model<InferAttributes<AuditCheckpoint>, InferCreationAttributes<AuditCheckpoint>> {
+export class AuditCheckpoint extends Model<
+	InferAttributes<AuditCheckpoint>,
+	InferCreationAttributes<AuditCheckpoint>
+> {
 	declare id: string;
 	declare seq: number;
 	declare heads: string;

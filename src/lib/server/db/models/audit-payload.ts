@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** The stored text an entry hashes; blanked by retention, and the chain still verifies. */
-export class AuditPayload extends Model<InferAttributes<AuditPayload>, InferCreationAttributes<AuditPayload>> {
+export class AuditPayload extends Model<
+	InferAttributes<AuditPayload>,
+	InferCreationAttributes<AuditPayload>
+> {
 	declare entryId: string;
 	declare text: string | null;
 }

@@ -1,4 +1,11 @@
-import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type CreationOptional,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** The organisation's sealing certificates; the keys lie in the key folder. */
 export class Certificate extends Model<InferAttributes<Certificate>, InferCreationAttributes<Certificate>> {

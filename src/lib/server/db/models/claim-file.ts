@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** Evidence attached to a claim. */
 export class ClaimFile extends Model<InferAttributes<ClaimFile>, InferCreationAttributes<ClaimFile>> {

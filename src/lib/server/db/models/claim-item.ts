@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A row of a claim's valuation. */
 export class ClaimItem extends Model<InferAttributes<ClaimItem>, InferCreationAttributes<ClaimItem>> {

@@ -1,4 +1,11 @@
-import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type CreationOptional,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** Money asked back from whoever had custody. */
 export class Claim extends Model<InferAttributes<Claim>, InferCreationAttributes<Claim>> {
@@ -25,7 +32,10 @@ export function defineClaim(sequelize: Sequelize): void {
 			shipmentId: { type: DataTypes.UUID, allowNull: false },
 			dispositionId: { type: DataTypes.UUID, allowNull: true },
 			againstId: { type: DataTypes.UUID, allowNull: true },
-			status: { type: DataTypes.ENUM('open', 'noticed', 'filed', 'settled', 'declined', 'closed'), allowNull: false },
+			status: {
+				type: DataTypes.ENUM('open', 'noticed', 'filed', 'settled', 'declined', 'closed'),
+				allowNull: false
+			},
 			amountMinor: { type: DataTypes.BIGINT, allowNull: true },
 			currency: { type: DataTypes.CHAR(3), allowNull: false },
 			basis: { type: DataTypes.TEXT, allowNull: false, defaultValue: '' },

@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A deadline that runs on a docket, notice or claim. */
 export class Clock extends Model<InferAttributes<Clock>, InferCreationAttributes<Clock>> {

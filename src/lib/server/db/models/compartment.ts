@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A chamber of a trailer with its own set-point. */
 export class Compartment extends Model<InferAttributes<Compartment>, InferCreationAttributes<Compartment>> {

@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** The outcome of one line in a signed decision. */
-export class DispositionLine extends Model<InferAttributes<DispositionLine>, InferCreationAttributes<DispositionLine>> {
+export class DispositionLine extends Model<
+	InferAttributes<DispositionLine>,
+	InferCreationAttributes<DispositionLine>
+> {
 	declare id: string;
 	declare dispositionId: string;
 	declare lineId: string;

@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A stretch outside a limit found by an assessment. */
-export class ExcursionRow extends Model<InferAttributes<ExcursionRow>, InferCreationAttributes<ExcursionRow>> {
+export class ExcursionRow extends Model<
+	InferAttributes<ExcursionRow>,
+	InferCreationAttributes<ExcursionRow>
+> {
 	declare id: string;
 	declare assessmentId: string;
 	declare ordinal: number;

@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** An ordered instant at which custody passes to a holder. */
 export class Handover extends Model<InferAttributes<Handover>, InferCreationAttributes<Handover>> {

@@ -1,4 +1,11 @@
-import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type CreationOptional,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** Work written in the transaction that causes it; leased by a worker, retried, never lost. */
 export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job>> {

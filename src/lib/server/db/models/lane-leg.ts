@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A planned leg of a lane with its allowance. */
 export class LaneLeg extends Model<InferAttributes<LaneLeg>, InferCreationAttributes<LaneLeg>> {

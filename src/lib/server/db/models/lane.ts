@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A route with its findings grades and whether a logger must ride. */
 export class Lane extends Model<InferAttributes<Lane>, InferCreationAttributes<Lane>> {

@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** Life used against life allowed on one leg. */
 export class LegUseRow extends Model<InferAttributes<LegUseRow>, InferCreationAttributes<LegUseRow>> {

@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** Pallets or cases of a line with one outcome and one whereabouts. */
 export class LineGroup extends Model<InferAttributes<LineGroup>, InferCreationAttributes<LineGroup>> {
@@ -21,7 +27,10 @@ export function defineLineGroup(sequelize: Sequelize): void {
 			name: { type: DataTypes.STRING(80), allowNull: false },
 			cases: { type: DataTypes.INTEGER, allowNull: false },
 			pallets: { type: DataTypes.INTEGER, allowNull: false },
-			whereabouts: { type: DataTypes.ENUM('dock', 'store', 'quarantine', 'returned', 'dumped'), allowNull: false },
+			whereabouts: {
+				type: DataTypes.ENUM('dock', 'store', 'quarantine', 'returned', 'dumped'),
+				allowNull: false
+			},
 			place: { type: DataTypes.STRING(80), allowNull: false }
 		},
 		{ sequelize, modelName: 'LineGroup', tableName: 'line_groups' }

@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** The recommendation for one line, with its reasons. */
-export class LineRecommendation extends Model<InferAttributes<LineRecommendation>, InferCreationAttributes<LineRecommendation>> {
+export class LineRecommendation extends Model<
+	InferAttributes<LineRecommendation>,
+	InferCreationAttributes<LineRecommendation>
+> {
 	declare id: string;
 	declare shipmentId: string;
 	declare lineId: string;

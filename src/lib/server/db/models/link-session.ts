@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A revocable session opened by a mailed link, for one docket and one contact. */
 export class LinkSession extends Model<InferAttributes<LinkSession>, InferCreationAttributes<LinkSession>> {

@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** One uploaded export on one docket. */
 export class LoggerRead extends Model<InferAttributes<LoggerRead>, InferCreationAttributes<LoggerRead>> {

@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A logger expected or found on a load, and what became of it. */
 export class LoggerTrip extends Model<InferAttributes<LoggerTrip>, InferCreationAttributes<LoggerTrip>> {
@@ -26,7 +32,10 @@ export function defineLoggerTrip(sequelize: Sequelize): void {
 			palletId: { type: DataTypes.UUID, allowNull: true },
 			position: { type: DataTypes.STRING(120), allowNull: true },
 			placement: { type: DataTypes.ENUM('air', 'between-cases', 'in-product'), allowNull: false },
-			status: { type: DataTypes.ENUM('expected', 'found', 'not-found', 'dead', 'not-started', 'other-load'), allowNull: false }
+			status: {
+				type: DataTypes.ENUM('expected', 'found', 'not-found', 'dead', 'not-started', 'other-load'),
+				allowNull: false
+			}
 		},
 		{ sequelize, modelName: 'LoggerTrip', tableName: 'logger_trips' }
 	);

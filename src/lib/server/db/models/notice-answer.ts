@@ -1,7 +1,17 @@
-import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type CreationOptional,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** What a partner answered. */
-export class NoticeAnswer extends Model<InferAttributes<NoticeAnswer>, InferCreationAttributes<NoticeAnswer>> {
+export class NoticeAnswer extends Model<
+	InferAttributes<NoticeAnswer>,
+	InferCreationAttributes<NoticeAnswer>
+> {
 	declare id: string;
 	declare noticeId: string;
 	declare kind: 'acknowledge' | 'dispute';

@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** The last number given per site, year and kind; numbers are never reused. */
-export class NumberSeries extends Model<InferAttributes<NumberSeries>, InferCreationAttributes<NumberSeries>> {
+export class NumberSeries extends Model<
+	InferAttributes<NumberSeries>,
+	InferCreationAttributes<NumberSeries>
+> {
 	declare siteId: string;
 	declare year: number;
 	declare kind: 'docket' | 'notice' | 'claim';

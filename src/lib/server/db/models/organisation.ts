@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** The receiver that runs this installation. One per database. */
-export class Organisation extends Model<InferAttributes<Organisation>, InferCreationAttributes<Organisation>> {
+export class Organisation extends Model<
+	InferAttributes<Organisation>,
+	InferCreationAttributes<Organisation>
+> {
 	declare id: string;
 	declare name: string;
 	declare countryCode: string;

@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A picture taken at the door. */
 export class Photo extends Model<InferAttributes<Photo>, InferCreationAttributes<Photo>> {
@@ -17,7 +23,10 @@ export function definePhoto(sequelize: Sequelize): void {
 			id: { type: DataTypes.UUID, primaryKey: true, allowNull: false },
 			shipmentId: { type: DataTypes.UUID, allowNull: false },
 			fileId: { type: DataTypes.UUID, allowNull: false },
-			kind: { type: DataTypes.ENUM('load', 'seal', 'set-point', 'papers', 'damage', 'pulp', 'other'), allowNull: false },
+			kind: {
+				type: DataTypes.ENUM('load', 'seal', 'set-point', 'papers', 'damage', 'pulp', 'other'),
+				allowNull: false
+			},
 			caption: { type: DataTypes.STRING(200), allowNull: false },
 			takenBy: { type: DataTypes.UUID, allowNull: false },
 			takenAt: { type: DataTypes.DATE(3), allowNull: false }

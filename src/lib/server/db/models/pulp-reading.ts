@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A probe reading at the door, kept as written. */
 export class PulpReading extends Model<InferAttributes<PulpReading>, InferCreationAttributes<PulpReading>> {

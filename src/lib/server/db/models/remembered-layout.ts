@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** Answers remembered for files of one make. */
-export class RememberedLayout extends Model<InferAttributes<RememberedLayout>, InferCreationAttributes<RememberedLayout>> {
+export class RememberedLayout extends Model<
+	InferAttributes<RememberedLayout>,
+	InferCreationAttributes<RememberedLayout>
+> {
 	declare id: string;
 	declare fingerprint: string;
 	declare version: number;

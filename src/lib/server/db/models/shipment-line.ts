@@ -1,7 +1,16 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A product and lot under the papers. */
-export class ShipmentLine extends Model<InferAttributes<ShipmentLine>, InferCreationAttributes<ShipmentLine>> {
+export class ShipmentLine extends Model<
+	InferAttributes<ShipmentLine>,
+	InferCreationAttributes<ShipmentLine>
+> {
 	declare id: string;
 	declare shipmentId: string;
 	declare ordinal: number;

@@ -1,4 +1,11 @@
-import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type CreationOptional,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** One load under one set of papers; its page is the docket. Its stage follows from these facts. */
 export class Shipment extends Model<InferAttributes<Shipment>, InferCreationAttributes<Shipment>> {

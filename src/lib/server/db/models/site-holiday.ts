@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** Days on which a site does not work. */
 export class SiteHoliday extends Model<InferAttributes<SiteHoliday>, InferCreationAttributes<SiteHoliday>> {

@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A stretch that was not the journey, left out by a person. */
 export class TrimRow extends Model<InferAttributes<TrimRow>, InferCreationAttributes<TrimRow>> {

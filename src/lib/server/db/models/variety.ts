@@ -1,4 +1,10 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+	DataTypes,
+	Model,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
 
 /** A variety or pack of a product with a spec of its own. */
 export class Variety extends Model<InferAttributes<Variety>, InferCreationAttributes<Variety>> {

@@ -1,0 +1,34 @@
+import { QueryTypes } from 'sequelize';
+import { database } from '../db/sequelize';
+
+export interface Limit {
+	attempts: number;
+	windowMs: number;
+}
+
+/** Counts an attempt; false once there were too many in the window. Kept in a table: the app holds no state. */
+export async function isWithinLimit(
+	name: string,
+	{ attempts, windowMs }: Limit,
+	now: Date
+): Promise<boolean> {
+	const expired = new Date(now.getTime() - windowMs);
+	await database().query(
+		`INSERT INTO rate_limits (name, window_started_at, attempts) VALUES (:name, :now, 1)
+		 ON DUPLICATE KEY UPDATE attempts = IF(window_started_at < :expired, 1, attempts + 1),
+			window_started_at = IF(window_started_at < :expired, :now, window_started_at)`,
+		{ replacements: { name, now, expired } }
+	);
+	const [row] = await database().query<{ attempts: number }>(
+		'SELECT attempts FROM rate_limits WHERE name = :name',
+		{
+			replacements: { name },
+			type: QueryTypes.SELECT
+		}
+	);
+	return (row?.attempts ?? 0) <= attempts;
+}
+
+export async function clearLimit(name: string): Promise<void> {
+	await database().query('DELETE FROM rate_limits WHERE name = :name', { replacements: { name } });
+}

@@ -1,0 +1,76 @@
+import { User } from '../db/models/user';
+import { inTransaction } from '../db/transaction';
+import { systemContext, type Context } from '../context';
+import { Refusal } from '../refusals';
+import type { RequestScope } from '../request-scope';
+import { isPassword } from './password';
+import { clearLimit, isWithinLimit } from './rate-limit';
+
+const quarterHourMs = 15 * 60_000;
+const perAddress = { attempts: 60, windowMs: quarterHourMs };
+const perAccount = { attempts: 10, windowMs: quarterHourMs };
+
+/** What a session remembers of who opened it; the rest is looked up anew at every request. */
+export interface Claims {
+	kind: 'user' | 'link';
+	subjectId: string;
+	tokenVersion: number;
+}
+
+function contextOfScope(scope: RequestScope): Context {
+	return { ...systemContext(scope.now, scope.requestId), address: scope.address };
+}
+
+async function recordRefused(
+	scope: RequestScope,
+	user: User | null,
+	email: string,
+	why: string
+): Promise<void> {
+	const chain = user
+		? ({ scope: 'account', id: user.id } as const)
+		: ({ scope: 'organisation', id: systemContext(scope.now).actor.id } as const);
+	await inTransaction(contextOfScope(scope), async ({ record }) =>
+		record('session.refused', chain, { email, why })
+	);
+}
+
+/**
+ * Checks an e-mail and password. Known and unknown addresses are answered alike and in like time.
+ * @returns null for a wrong pair. @throws Refusal `too-many-attempts`.
+ */
+export async function signInByPassword(
+	email: string,
+	password: string,
+	scope: RequestScope
+): Promise<Claims | null> {
+	const address = email.trim().toLowerCase();
+	const accountLimit = `sign-in ${address.slice(0, 120)}`;
+	const isAllowed =
+		(await isWithinLimit(`sign-in from ${scope.address}`, perAddress, scope.now)) &&
+		(await isWithinLimit(accountLimit, perAccount, scope.now));
+	if (!isAllowed) throw new Refusal('too-many-attempts');
+
+	const user = await User.findOne({ where: { email: address } });
+	const matches = await isPassword(password, user?.passwordHash ?? null);
+	if (!user || !matches || user.switchedOffAt) {
+		await recordRefused(
+			scope,
+			user,
+			address,
+			!user ? 'unknown' : matches ? 'switched-off' : 'wrong-password'
+		);
+		return null;
+	}
+	await clearLimit(accountLimit);
+	return openSession(user, scope, 'password');
+}
+
+/** Records that a session began. */
+export async function openSession(user: User, scope: RequestScope, by: 'password' | 'link'): Promise<Claims> {
+	await inTransaction(contextOfScope(scope), async ({ record, transaction }) => {
+		await User.update({ lastSignInAt: scope.now }, { where: { id: user.id }, transaction });
+		record('session.opened', { scope: 'account', id: user.id }, { by, userId: user.id });
+	});
+	return { kind: 'user', subjectId: user.id, tokenVersion: user.tokenVersion };
+}
