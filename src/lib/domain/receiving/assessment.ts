@@ -10,7 +10,12 @@ export interface Range {
 
 /** Life used before the first reading, hours at the reference temperature. */
 export type OpeningBalance =
-	| { readonly kind: 'declared'; readonly hours: number; readonly plusMinusHours: number; readonly basis: string }
+	| {
+			readonly kind: 'declared';
+			readonly hours: number;
+			readonly plusMinusHours: number;
+			readonly basis: string;
+	  }
 	| {
 			readonly kind: 'computed';
 			readonly sinceMs: number;
@@ -56,7 +61,7 @@ export interface AssessInput {
 export interface LifeSeries {
 	readonly times: Float64Array;
 	readonly celsius: Float64Array;
-	/** Life used since the first reading, hours at the reference temperature; the opening balance comes on top. */
+	/** Life used since the first of these readings, hours at the reference temperature; the opening balance comes on top. */
 	readonly usedHours: Float64Array;
 	readonly usedLowHours: Float64Array;
 	readonly usedHighHours: Float64Array;
@@ -88,6 +93,10 @@ export interface Excursion {
 	readonly costHours: number;
 	/** Ordinals of the legs it touched; empty before the first handover is known. */
 	readonly legs: readonly number[];
+	/** Its cost apportioned to those legs by time, in the same order. */
+	readonly legCostHours?: readonly number[];
+	/** It begins within the ± of this handover: until a person decides, neither neighbouring leg is named. */
+	readonly unsettledHandoverId?: string;
 	/** The instrument's accuracy straddles the limit throughout. */
 	readonly isInDoubt: boolean;
 	/** Still running when the readings end. */

@@ -12,24 +12,114 @@ export type Grade = (typeof grades)[number];
 
 /** A rule that fired, with its figures; the sentence comes from the message catalogue under the same code. */
 export type Reason =
-	| { readonly code: 'life-suffices'; readonly grade: Grade; readonly lowHours: number; readonly valueHours: number; readonly neededHours: number }
-	| { readonly code: 'life-low-short'; readonly grade: Grade; readonly lowHours: number; readonly valueHours: number; readonly neededHours: number }
-	| { readonly code: 'life-short'; readonly grade: Grade; readonly lowHours: number; readonly highHours: number; readonly valueHours: number; readonly neededHours: number }
+	| {
+			readonly code: 'life-suffices';
+			readonly grade: Grade;
+			readonly lowHours: number;
+			readonly valueHours: number;
+			readonly neededHours: number;
+	  }
+	| {
+			readonly code: 'life-low-short';
+			readonly grade: Grade;
+			readonly lowHours: number;
+			readonly valueHours: number;
+			readonly neededHours: number;
+	  }
+	| {
+			readonly code: 'life-short';
+			readonly grade: Grade;
+			readonly lowHours: number;
+			readonly highHours: number;
+			readonly valueHours: number;
+			readonly neededHours: number;
+	  }
 	| { readonly code: 'life-not-known'; readonly grade: Grade }
-	| { readonly code: 'stop-reached'; readonly grade: Grade; readonly stop: StopKind; readonly stopCelsius: number; readonly extremeCelsius: number; readonly atMs: number; readonly minutes: number }
-	| { readonly code: 'stop-in-doubt'; readonly grade: Grade; readonly stop: StopKind; readonly stopCelsius: number; readonly extremeCelsius: number; readonly accuracyCelsius: number }
-	| { readonly code: 'excursion'; readonly grade: Grade; readonly kind: 'too-warm' | 'too-cold'; readonly severity: 'minor' | 'major' | 'critical'; readonly ordinal: number; readonly extremeCelsius: number; readonly limitCelsius: number; readonly minutes: number; readonly costHours: number; readonly holders: readonly string[] }
-	| { readonly code: 'unobserved'; readonly grade: Grade; readonly hours: number; readonly usedHours: number; readonly gaps: number }
+	| {
+			readonly code: 'stop-reached';
+			readonly grade: Grade;
+			readonly stop: StopKind;
+			readonly stopCelsius: number;
+			readonly extremeCelsius: number;
+			readonly atMs: number;
+			readonly minutes: number;
+	  }
+	| {
+			readonly code: 'stop-in-doubt';
+			readonly grade: Grade;
+			readonly stop: StopKind;
+			readonly stopCelsius: number;
+			readonly extremeCelsius: number;
+			readonly accuracyCelsius: number;
+	  }
+	| {
+			readonly code: 'excursion';
+			readonly grade: Grade;
+			readonly kind: 'too-warm' | 'too-cold';
+			readonly severity: 'minor' | 'major' | 'critical';
+			readonly ordinal: number;
+			readonly extremeCelsius: number;
+			readonly limitCelsius: number;
+			readonly minutes: number;
+			readonly costHours: number;
+			readonly holders: readonly string[];
+	  }
+	| {
+			readonly code: 'unobserved';
+			readonly grade: Grade;
+			readonly hours: number;
+			readonly usedHours: number;
+			readonly gaps: number;
+	  }
 	| { readonly code: 'logger-stopped-early'; readonly grade: Grade; readonly missingHours: number }
 	| { readonly code: 'opening-undeclared'; readonly grade: Grade; readonly assumedHours: number }
-	| { readonly code: 'loggers-disagree'; readonly grade: Grade; readonly differenceCelsius: number; readonly allowedCelsius: number; readonly serials: readonly string[] }
-	| { readonly code: 'calibration-overdue'; readonly grade: Grade; readonly serial: string; readonly dueOn: string }
+	| {
+			readonly code: 'loggers-disagree';
+			readonly grade: Grade;
+			readonly differenceCelsius: number;
+			readonly allowedCelsius: number;
+			readonly serials: readonly string[];
+	  }
+	| {
+			readonly code: 'calibration-overdue';
+			readonly grade: Grade;
+			readonly serial: string;
+			readonly dueOn: string;
+	  }
 	| { readonly code: 'seal-broken'; readonly grade: Grade; readonly seal: string }
-	| { readonly code: 'pulp-above-limit'; readonly grade: Grade; readonly pulpCelsius: number; readonly limitCelsius: number; readonly position: string }
-	| { readonly code: 'pulp-against-air'; readonly grade: Grade; readonly pulpCelsius: number; readonly traceCelsius: number }
-	| { readonly code: 'cases-differ'; readonly grade: Grade; readonly advised: number; readonly received: number }
-	| { readonly code: 'mkt-over-limit'; readonly grade: Grade; readonly mktCelsius: number; readonly limitCelsius: number; readonly windowHours: number | null }
-	| { readonly code: 'outside-model'; readonly grade: Grade; readonly hours: number; readonly fromCelsius: number; readonly toCelsius: number };
+	| {
+			readonly code: 'pulp-above-limit';
+			readonly grade: Grade;
+			readonly pulpCelsius: number;
+			readonly limitCelsius: number;
+			readonly position: string;
+	  }
+	| {
+			readonly code: 'pulp-against-air';
+			readonly grade: Grade;
+			readonly pulpCelsius: number;
+			readonly traceCelsius: number;
+	  }
+	| {
+			readonly code: 'cases-differ';
+			readonly grade: Grade;
+			readonly advised: number;
+			readonly received: number;
+	  }
+	| {
+			readonly code: 'mkt-over-limit';
+			readonly grade: Grade;
+			readonly mktCelsius: number;
+			readonly limitCelsius: number;
+			readonly windowHours: number | null;
+	  }
+	| {
+			readonly code: 'outside-model';
+			readonly grade: Grade;
+			readonly hours: number;
+			readonly fromCelsius: number;
+			readonly toCelsius: number;
+	  };
 
 export type ReasonCode = Reason['code'];
 

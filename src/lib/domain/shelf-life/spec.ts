@@ -30,6 +30,9 @@ export interface Limit {
 	/** An event this long is major, or critical; shorter is minor. */
 	readonly majorMinutes: number;
 	readonly criticalMinutes: number;
+	/** Grace of traces that rode in the air; left out, the same as for the others. */
+	readonly airGraceMinutes?: number;
+	readonly airGraceMinutesInAll?: number;
 }
 
 export interface MktRule {
