@@ -7,6 +7,10 @@ declare global {
 			code?: string;
 			errorId?: string;
 		}
+		interface PageData {
+			/** Where a phone's way back leads, and what the page is. */
+			back?: { href: string; word: string; title?: string };
+		}
 		interface Locals {
 			/** Who is asking; null without a session. */
 			context: Context | null;
