@@ -1,5 +1,6 @@
 import type { Content } from 'pdfmake/interfaces';
 import { attributes, textElement } from './chart/svg';
+import { widthOf } from './chart/words-room';
 import { counterfoilTop, hairline, pair } from './counterfoil';
 import type { Draft } from './draft';
 import { overUseOf } from './leg-figures';
@@ -34,7 +35,13 @@ export function firstCounterfoilFoot(draft: Draft): Content[] {
 	];
 	return [
 		{ stack: [fixed(signed)], ...position(sheet.sealTop) },
-		{ qr: input.verifyAddress, fit: sheet.qrSize, foreground: palette.ink, eccLevel: 'M', ...position(sheet.qrTop) },
+		{
+			qr: input.verifyAddress,
+			fit: sheet.qrSize,
+			foreground: palette.ink,
+			eccLevel: 'M',
+			...position(sheet.qrTop)
+		},
 		{ stack: [fixed(check)], ...position(sheet.qrTop + sheet.qrSize + 4) }
 	];
 }
@@ -48,7 +55,8 @@ function breakable(address: string): string {
 export function laterCounterfoil(draft: Draft): Content[] {
 	const { sheet, input } = draft;
 	const { signature } = input;
-	const amended = signature.amendmentReason === null ? [] : [sentence(signature.amendmentReason, { color: palette.ink })];
+	const amended =
+		signature.amendmentReason === null ? [] : [sentence(signature.amendmentReason, { color: palette.ink })];
 	return [
 		...counterfoilTop(draft),
 		...overUse(draft),
@@ -56,7 +64,10 @@ export function laterCounterfoil(draft: Draft): Content[] {
 		figure(hashLines(signature.frozenSha256, 2), { size: sizePoints.smallest, margin: [0, 3, 0, 0] }),
 		hairline(sheet.stubWidth, 9),
 		label('Versions'),
-		sentence(`${signature.version}  ${draft.calendar.date(signature.signedAt)}, current at printing`, { color: palette.ink, margin: [0, 3, 0, 0] }),
+		sentence(`${signature.version}  ${draft.calendar.date(signature.signedAt)}, current at printing`, {
+			color: palette.ink,
+			margin: [0, 3, 0, 0]
+		}),
 		...amended
 	];
 }
@@ -69,7 +80,10 @@ function overUse(draft: Draft): Content[] {
 	const width = draft.sheet.stubWidth * 0.8;
 	return [
 		label(`Over-use, all legs, ${lead.assessment.logger}`),
-		{ text: [figure(over.over, { size: sizePoints.life }), label(' h', { size: 12, color: palette.ink })], characterSpacing: -1.1 },
+		{
+			text: [figure(over.over, { size: sizePoints.life }), label(' h', { size: 12, color: palette.ink })],
+			characterSpacing: -1.1
+		},
 		pair('Too warm', hours(over.tooWarm), width),
 		pair('Too late', hours(over.tooLate), width),
 		hairline(draft.sheet.stubWidth, 6)
@@ -78,9 +92,15 @@ function overUse(draft: Draft): Content[] {
 
 /** The number down the edge of later pages, so that a loose sheet finds its record. */
 export function verticalNumber(draft: Draft): Content {
-	const length = 150;
+	const size = 19;
+	const length = Math.ceil(widthOf(draft.docket.number, 'Mono', size)) + 4;
 	const view = attributes({ viewBox: `0 0 22 ${length}`, width: 22, height: length });
-	const text = textElement(4, 2, draft.docket.number, { family: 'Mono', size: 19, color: palette.ink, turn: 90 });
+	const text = textElement(4, 2, draft.docket.number, {
+		family: 'Mono',
+		size,
+		color: palette.ink,
+		turn: 90
+	});
 	return {
 		svg: `<svg ${view}>${text}</svg>`,
 		width: 22,

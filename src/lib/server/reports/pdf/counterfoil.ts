@@ -22,14 +22,20 @@ export function firstCounterfoil(draft: Draft): Content[] {
 		hairline(sheet.stubWidth, 9),
 		...outcomes(docket.lines),
 		hairline(sheet.stubWidth, 6),
-		...(draft.leadLine === null ? [label('Life left'), words('Not known', { size: 12, bold: true })] : lifeLeft(draft.leadLine, sheet.stubWidth)),
+		...(draft.leadLine === null
+			? [label('Life left'), words('Not known', { size: 12, bold: true })]
+			: lifeLeft(draft.leadLine, sheet.stubWidth)),
 		...lifeEnds(draft)
 	];
 }
 
 /** Number and rule, at the head of every counterfoil. */
 export function counterfoilTop(draft: Draft): Content[] {
-	return [label('Counterfoil'), figure(draft.docket.number, { size: sizePoints.number, margin: [0, 1, 0, 0] }), hairline(draft.sheet.stubWidth, 9)];
+	return [
+		label('Counterfoil'),
+		figure(draft.docket.number, { size: sizePoints.number, margin: [0, 1, 0, 0] }),
+		hairline(draft.sheet.stubWidth, 9)
+	];
 }
 
 export function hairline(widthPoints: number, above: number): Content {
@@ -41,7 +47,13 @@ export function hairline(widthPoints: number, above: number): Content {
 
 /** A word on the left, a figure on the right. */
 export function pair(name: string, value: Content, widthPoints: number): Content {
-	return { columns: [{ ...sentence(name), width: '*' }, { stack: [value], alignment: 'right', width: widthPoints * 0.52 }], margin: [0, 1.5, 0, 1.5] };
+	return {
+		columns: [
+			{ ...sentence(name), width: '*' },
+			{ stack: [value], alignment: 'right', width: widthPoints * 0.52 }
+		],
+		margin: [0, 1.5, 0, 1.5]
+	};
 }
 
 function outcomes(lines: readonly DocketLineView[]): Content[] {
@@ -66,11 +78,16 @@ function lifeLeft(line: DocketLineView, widthPoints: number): Content[] {
 	if (life === null) return [];
 	const shortHours = line.neededHours - life.low;
 	const rule = lifeRule(line, widthPoints);
-	const inDays = (hours: number): Content => ({ text: [figure(days(hours)), label(' d', { color: palette.ink })] });
+	const inDays = (hours: number): Content => ({
+		text: [figure(days(hours)), label(' d', { color: palette.ink })]
+	});
 	return [
 		label(`Life left, line ${line.ordinal}`),
 		{
-			text: [figure(days(life.value), { size: sizePoints.life }), label(' d', { size: 12, color: palette.ink })],
+			text: [
+				figure(days(life.value), { size: sizePoints.life }),
+				label(' d', { size: 12, color: palette.ink })
+			],
 			characterSpacing: -1.1,
 			margin: [0, -2, 0, -2]
 		},
@@ -78,7 +95,9 @@ function lifeLeft(line: DocketLineView, widthPoints: number): Content[] {
 		...(rule === null ? [] : [rule]),
 		{ text: '', margin: [0, 2, 0, 0] },
 		pair('Needed', inDays(line.neededHours), widthPoints * 0.8),
-		shortHours > 0 ? pair('Short, on the low', inDays(shortHours), widthPoints * 0.6) : pair('To spare, on the low', inDays(-shortHours), widthPoints * 0.6)
+		shortHours > 0
+			? pair('Short, on the low', inDays(shortHours), widthPoints * 0.6)
+			: pair('To spare, on the low', inDays(-shortHours), widthPoints * 0.6)
 	];
 }
 
@@ -99,6 +118,14 @@ function lifeEnds(draft: Draft): Content[] {
 	});
 	if (rows.length === 0) return [];
 	const temperatures = [...new Set(taken.map((line) => thermometer.reading(line.referenceCelsius)))];
-	const kept = temperatures.length === 1 ? `, kept at ${temperatures[0]} ${thermometer.sign}` : ', kept at its spec’s temperature';
-	return [hairline(sheet.stubWidth, 6), label(`Life ends about${kept}`, { margin: [0, 0, 0, 2] }), ...rows.slice(0, linesShown)];
+	const kept =
+		temperatures.length === 1
+			? `kept at ${temperatures[0]} ${thermometer.sign}`
+			: 'kept at its spec’s temperature';
+	return [
+		hairline(sheet.stubWidth, 6),
+		label('Life ends about'),
+		label(kept, { margin: [0, 0, 0, 2] }),
+		...rows.slice(0, linesShown)
+	];
 }

@@ -13,10 +13,16 @@ const faces: Record<Exclude<Family, 'Noto'>, readonly [string, string]> = {
 		'barlow-semi-condensed/500Medium/BarlowSemiCondensed_500Medium.ttf',
 		'barlow-semi-condensed/600SemiBold/BarlowSemiCondensed_600SemiBold.ttf'
 	],
-	Mono: ['roboto-mono/400Regular/RobotoMono_400Regular.ttf', 'roboto-mono/600SemiBold/RobotoMono_600SemiBold.ttf']
+	Mono: [
+		'roboto-mono/400Regular/RobotoMono_400Regular.ttf',
+		'roboto-mono/600SemiBold/RobotoMono_600SemiBold.ttf'
+	]
 };
 /** Only where it is installed: the last resort before the replacement mark. */
-const noto = ['noto-sans/400Regular/NotoSans_400Regular.ttf', 'noto-sans/600SemiBold/NotoSans_600SemiBold.ttf'] as const;
+const noto = [
+	'noto-sans/400Regular/NotoSans_400Regular.ttf',
+	'noto-sans/600SemiBold/NotoSans_600SemiBold.ttf'
+] as const;
 
 export interface FontFiles {
 	readonly normal: string;

@@ -25,17 +25,23 @@ const ruled: CustomTableLayout = {
 	hLineWidth: (i, node) => (i === 0 ? 0 : i === titleRows ? 1.1 : i === node.table.body.length ? 0.8 : 0.6),
 	hLineColor: (i, node) => (i === titleRows || i === node.table.body.length ? palette.ink : palette.rule),
 	vLineWidth: () => 0,
-	paddingLeft: (i) => (i === 0 ? 0 : 5),
-	paddingRight: (i, node) => (i === (node.table.widths?.length ?? 0) - 1 ? 0 : 5),
-	paddingTop: (i) => (i === 0 ? 0 : 4),
-	paddingBottom: () => 3.6
+	paddingLeft: (i) => (i === 0 ? 0 : 3),
+	paddingRight: (i, node) => (i === (node.table.widths?.length ?? 0) - 1 ? 0 : 3),
+	paddingTop: (i) => (i === 0 ? 0 : 3.2),
+	paddingBottom: () => 3
 };
 
 /** A section's title: name, and its finding in one line, so that the heads alone tell the story. */
 export function sectionTitle(title: string, finding: string | null): Content {
 	const name = words(title, { size: sizePoints.section, bold: true });
 	if (finding === null) return name;
-	return { columns: [{ ...name, width: 'auto' }, { ...sentence(finding, { size: 8.4 }), width: '*', margin: [0, 2, 0, 0] }], columnGap: 9 };
+	return {
+		columns: [
+			{ ...name, width: 'auto' },
+			{ ...sentence(finding, { size: 8.4 }), width: '*', margin: [0, 2, 0, 0] }
+		],
+		columnGap: 9
+	};
 }
 
 /**
@@ -44,9 +50,17 @@ export function sectionTitle(title: string, finding: string | null): Content {
  */
 export function ledger(table: Ledger): ContentTable {
 	const blanks = Array.from({ length: table.columns.length - 1 }, (): TableCell => ({ text: '' }));
-	const title: TableCell[] = [{ stack: [sectionTitle(table.title, table.finding)], colSpan: table.columns.length }, ...blanks];
-	const heads = table.columns.map((column): TableCell => ({ ...label(column.head, { alignment: column.align ?? 'left' }), verticalAlignment: 'bottom' }));
-	const rows = table.rows.map((row) => row.map((cell, i): TableCell => ({ stack: [cell], alignment: table.columns[i]?.align ?? 'left' })));
+	const title: TableCell[] = [
+		{ stack: [sectionTitle(table.title, table.finding)], colSpan: table.columns.length },
+		...blanks
+	];
+	const heads = table.columns.map((column): TableCell => ({
+		...label(column.head, { alignment: column.align ?? 'left' }),
+		verticalAlignment: 'bottom'
+	}));
+	const rows = table.rows.map((row) =>
+		row.map((cell, i): TableCell => ({ stack: [cell], alignment: table.columns[i]?.align ?? 'left' }))
+	);
 	return {
 		table: {
 			headerRows: headRows,
@@ -56,7 +70,7 @@ export function ledger(table: Ledger): ContentTable {
 			body: [title, heads, ...rows]
 		},
 		layout: ruled,
-		margin: [0, 16, 0, 0]
+		margin: [0, 14, 0, 0]
 	};
 }
 

@@ -19,9 +19,17 @@ export function legFigures(legs: readonly LegUse[]): LegFigures[] {
 	const warm = tenths(legs.map((leg) => leg.tooWarmHours));
 	const late = tenths(legs.map((leg) => leg.tooLateHours));
 	return legs.map((leg, i) => {
-		const [allowedTenths, tooWarmTenths, tooLateTenths] = [allowed[i] ?? null, warm[i] ?? null, late[i] ?? null];
-		const overTenths = tooWarmTenths === null || tooLateTenths === null ? null : tooWarmTenths + tooLateTenths;
-		const usedTenths = allowedTenths === null || overTenths === null ? Math.round(leg.usedHours * 10) : allowedTenths + overTenths;
+		const [allowedTenths, tooWarmTenths, tooLateTenths] = [
+			allowed[i] ?? null,
+			warm[i] ?? null,
+			late[i] ?? null
+		];
+		const overTenths =
+			tooWarmTenths === null || tooLateTenths === null ? null : tooWarmTenths + tooLateTenths;
+		const usedTenths =
+			allowedTenths === null || overTenths === null
+				? Math.round(leg.usedHours * 10)
+				: allowedTenths + overTenths;
 		return { allowedTenths, usedTenths, tooWarmTenths, tooLateTenths, overTenths };
 	});
 }
@@ -45,7 +53,10 @@ function tenths(hours: readonly (number | null)[]): (number | null)[] {
 
 /** A column's printed total; null where a leg has no figure. */
 export function totalTenths(figures: readonly (number | null)[]): number | null {
-	return figures.reduce<number | null>((sum, value) => (sum === null || value === null ? null : sum + value), 0);
+	return figures.reduce<number | null>(
+		(sum, value) => (sum === null || value === null ? null : sum + value),
+		0
+	);
 }
 
 /** Tenths as text, an en dash where there is none. */
@@ -54,7 +65,9 @@ export function tenthsText(value: number | null): string {
 }
 
 /** Over-use over all legs, split; null where some leg has no allowance. */
-export function overUseOf(legs: readonly LegUse[]): { over: string; tooWarm: string; tooLate: string } | null {
+export function overUseOf(
+	legs: readonly LegUse[]
+): { over: string; tooWarm: string; tooLate: string } | null {
 	const figures = legFigures(legs);
 	const over = totalTenths(figures.map((leg) => leg.overTenths));
 	if (legs.length === 0 || over === null) return null;

@@ -30,7 +30,11 @@ const verdicts: Record<Verdict, { readonly mark: Outcome; readonly word: string 
 
 /** The mark of an outcome, always printed with its word beside it. */
 export function outcomeMark(outcome: Outcome, sizePoints: number): ContentSvg {
-	return { svg: `<svg viewBox="0 0 20 20">${drawings[outcome]}</svg>`, width: sizePoints, height: sizePoints };
+	return {
+		svg: `<svg viewBox="0 0 20 20">${drawings[outcome]}</svg>`,
+		width: sizePoints,
+		height: sizePoints
+	};
 }
 
 export function outcomeWord(outcome: Outcome): string {
@@ -45,5 +49,9 @@ export function verdictOf(verdict: Verdict | null): { readonly mark: Outcome; re
 /** Bollard parted by an indented cut. */
 export function houseMark(sizePoints: number): ContentSvg {
 	const path = 'M0 1H24V5.8L18 14L12 5.8L6 14L0 5.8Z M3 14.3L6 18.4L12 10.2L18 18.4L21 14.3V23H3Z';
-	return { svg: `<svg viewBox="0 0 24 24"><path d="${path}" fill="${palette.tar}"/></svg>`, width: sizePoints, height: sizePoints };
+	return {
+		svg: `<svg viewBox="0 0 24 24"><path d="${path}" fill="${palette.tar}"/></svg>`,
+		width: sizePoints,
+		height: sizePoints
+	};
 }

@@ -15,12 +15,22 @@ export function runningHead(draft: Draft, page: number, pages: number): Content 
 			{
 				columns: [
 					{ ...houseMark(13), width: 19 },
-					{ ...words('Wharfinger', { size: 11.2, bold: true, color: palette.tar }), width: 90, characterSpacing: -0.13 },
-					{ text: [middle, sentence(number, { size: 9, color: palette.ink })], width: mainWidth - 179, alignment: 'center' },
+					{
+						...words('Wharfinger', { size: 11.2, bold: true, color: palette.tar }),
+						width: 90,
+						characterSpacing: -0.13
+					},
+					{
+						text: [middle, sentence(number, { size: 9, color: palette.ink })],
+						width: mainWidth - 179,
+						alignment: 'center'
+					},
 					{ ...sentence(`page ${page} of ${pages}`, { size: 9 }), width: 70, alignment: 'right' }
 				]
 			},
-			{ canvas: [{ type: 'line', x1: 0, y1: 5, x2: mainWidth, y2: 5, lineWidth: 1.1, lineColor: palette.ink }] }
+			{
+				canvas: [{ type: 'line', x1: 0, y1: 5, x2: mainWidth, y2: 5, lineWidth: 1.1, lineColor: palette.ink }]
+			}
 		]
 	};
 }
@@ -32,7 +42,8 @@ export function runningFoot(draft: Draft): Content {
 	const name = calendar.zoneName(at);
 	const zone = name === docket.site.zone ? name : `${docket.site.zone} (${name})`;
 	const attached = input.attachments.length;
-	const exports = attached === 0 ? '' : `; ${attached === 1 ? 'one file is' : `${attached} files are`} attached inside`;
+	const exports =
+		attached === 0 ? '' : `; ${attached === 1 ? 'one file is' : `${attached} files are`} attached inside`;
 	const place = [docket.site.name, docket.dock].filter(Boolean).join(', ');
 	const text =
 		`${place}${docket.site.gln === null ? '' : `, GLN ${docket.site.gln}`}. All times ${zone}, ${calendar.offset(at)} at signing. ` +
@@ -40,7 +51,11 @@ export function runningFoot(draft: Draft): Content {
 	return {
 		absolutePosition: { x: sheet.left, y: sheet.height - sheet.bottom + 8 },
 		stack: [
-			{ canvas: [{ type: 'line', x1: 0, y1: 0, x2: sheet.mainWidth, y2: 0, lineWidth: 0.6, lineColor: palette.rule }] },
+			{
+				canvas: [
+					{ type: 'line', x1: 0, y1: 0, x2: sheet.mainWidth, y2: 0, lineWidth: 0.6, lineColor: palette.rule }
+				]
+			},
 			{ columns: [{ ...sentence(text, { size: 7.6, margin: [0, 5, 0, 0] }), width: sheet.mainWidth }] }
 		]
 	};
@@ -52,6 +67,18 @@ export function cutLine(draft: Draft): Content {
 	const dots = { length: 0.01, space: 2.6 };
 	return {
 		absolutePosition: { x: 0, y: 0 },
-		canvas: [{ type: 'line', x1: cut, y1: 1, x2: cut, y2: height, lineWidth: 1.3, lineColor: palette.edge, lineCap: 'round', dash: dots }]
+		canvas: [
+			{
+				type: 'line',
+				x1: cut,
+				y1: 1,
+				x2: cut,
+				y2: height,
+				lineWidth: 1.3,
+				lineColor: palette.edge,
+				lineCap: 'round',
+				dash: dots
+			}
+		]
 	};
 }

@@ -8,7 +8,7 @@ export interface Run {
 const fallbacks: readonly Family[] = ['Barlow', 'Mono', 'Noto'];
 const replacement = '\u{fffd}';
 /** Controls, and the invisible marks that could make a name read otherwise than it is written. */
-const unprintable = /[\u0000-\u0009\u000b-\u001f\u007f-\u009f\u200b-\u200f\u202a-\u202e\u2060-\u2069\ufeff]/gu;
+const unprintable = /(?!\n)[\p{Cc}\p{Cf}]/gu;
 const numeral = /([−-]?\d[\d.,:]*\d|[−-]?\d)/u;
 
 /** Text in the family's own letters, in a fallback's where it lacks them, else the replacement mark; never empty boxes. */

@@ -55,7 +55,9 @@ export function thermometer(unit: TemperatureUnit) {
 /** Instants in one zone; 24-hour times, English day and month names whatever the machine's locale. */
 export function calendar(zone: string) {
 	const at = (instant: string | number) =>
-		(typeof instant === 'number' ? DateTime.fromMillis(instant) : DateTime.fromISO(instant)).setZone(zone).setLocale('en-GB');
+		(typeof instant === 'number' ? DateTime.fromMillis(instant) : DateTime.fromISO(instant))
+			.setZone(zone)
+			.setLocale('en-GB');
 	return {
 		at,
 		time: (instant: string | number) => at(instant).toFormat('HH:mm'),

@@ -17,16 +17,18 @@ const monoInSentence = 0.92;
 
 function styled(runs: readonly Run[], family: Family, fallbackSize: number, look: Look): ContentText {
 	const size = look.size ?? fallbackSize;
+	// Each run carries its whole style: inside a longer text it would not inherit from here.
+	const style = { color: look.color ?? palette.ink, bold: look.bold ?? false };
 	return {
 		text: runs.map((run) => ({
 			text: run.text,
 			font: run.font,
-			fontSize: run.font === 'Mono' && family !== 'Mono' ? size * monoInSentence : size
+			fontSize: run.font === 'Mono' && family !== 'Mono' ? size * monoInSentence : size,
+			...style
 		})),
 		font: family,
 		fontSize: size,
-		color: look.color ?? palette.ink,
-		bold: look.bold ?? false,
+		...style,
 		...(look.alignment && { alignment: look.alignment }),
 		...(look.margin && { margin: look.margin }),
 		...(look.lineHeight && { lineHeight: look.lineHeight })

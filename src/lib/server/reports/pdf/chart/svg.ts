@@ -1,5 +1,6 @@
 import type { Family } from '../fonts';
-import { runsOf } from '../runs';
+import { runsOf, type Run } from '../runs';
+import { widthOf } from './words-room';
 
 declare const escaped: unique symbol;
 /** Markup made by this file alone: everything in it has been escaped. */
@@ -17,7 +18,12 @@ export interface TextLook {
 type Value = string | number;
 
 function escapeText(text: string): string {
-	return text.replace(/&/gu, '&amp;').replace(/</gu, '&lt;').replace(/>/gu, '&gt;').replace(/"/gu, '&quot;').replace(/'/gu, '&#39;');
+	return text
+		.replace(/&/gu, '&amp;')
+		.replace(/</gu, '&lt;')
+		.replace(/>/gu, '&gt;')
+		.replace(/"/gu, '&quot;')
+		.replace(/'/gu, '&#39;');
 }
 
 function node(markup: string): Node {
@@ -35,19 +41,36 @@ export function coordinate(points: number): string {
 	return String(Math.round(points * 100) / 100);
 }
 
-export function element(name: string, values: Readonly<Record<string, Value>>, children: readonly Node[] = []): Node {
+export function element(
+	name: string,
+	values: Readonly<Record<string, Value>>,
+	children: readonly Node[] = []
+): Node {
 	return node(`<${name} ${attributes(values)}>${children.join('')}</${name}>`);
 }
 
 /** One line of text, each run in a face that has its letters. */
 export function textElement(x: number, y: number, text: string, look: TextLook): Node {
-	const spans = runsOf(text.replace(/\n/gu, ' '), look.family).map((run) =>
-		node(`<tspan ${attributes({ 'font-family': run.font })}>${escapeText(run.text)}</tspan>`)
-	);
+	const runs = runsOf(text.replace(/\n/gu, ' '), look.family);
+	const [only] = runs;
+	if (runs.length === 1 && only !== undefined) return runElement(x, y, only, look);
+	// The renderer anchors a span by its first letter only, so that mixed faces are set one after the other.
+	const widths = runs.map((run) => widthOf(run.text, run.font, look.size));
+	const whole = widths.reduce((sum, width) => sum + width, 0);
+	let at = x - (look.anchor === 'end' ? whole : look.anchor === 'middle' ? whole / 2 : 0);
+	const parts = runs.map((run, i) => {
+		const part = runElement(at, y, run, { ...look, anchor: 'start' });
+		at += widths[i] ?? 0;
+		return part;
+	});
+	return element('g', {}, parts);
+}
+
+function runElement(x: number, y: number, run: Run, look: TextLook): Node {
 	const values = {
 		x,
 		y,
-		'font-family': look.family,
+		'font-family': run.font,
 		'font-size': look.size,
 		'font-weight': look.bold ? 'bold' : 'normal',
 		'text-anchor': look.anchor ?? 'start',
@@ -55,7 +78,7 @@ export function textElement(x: number, y: number, text: string, look: TextLook):
 		'xml:space': 'preserve',
 		...(look.turn !== undefined && { transform: `rotate(${look.turn} ${coordinate(x)} ${coordinate(y)})` })
 	};
-	return element('text', values, spans);
+	return element('text', values, [node(escapeText(run.text))]);
 }
 
 /** A path through points; a null lifts the pen. */

@@ -1,0 +1,94 @@
+import pdfmake from 'pdfmake';
+import type { Content, TDocumentDefinitions } from 'pdfmake/interfaces';
+import { chapterContent } from './chapters';
+import { photosAndNotes, signatureStrip } from './closing';
+import { firstCounterfoil } from './counterfoil';
+import { firstCounterfoilFoot, laterCounterfoil, verticalNumber } from './counterfoil-foot';
+import { draftOf, type Draft } from './draft';
+import { fontFiles } from './fonts';
+import { dispositions, docketHead } from './front';
+import { loggers, reasons, restsOn } from './grounds';
+import { sizePoints } from './palette';
+import type { ReportAttachment, ReportInput } from './report-input';
+import { cutLine, runningFoot, runningHead } from './running';
+
+const ownFonts = new Set(Object.values(fontFiles).flatMap((files) => [files.normal, files.bold]));
+
+/** Nothing is fetched, and no file is opened but the fonts. */
+pdfmake.setUrlAccessPolicy(() => false);
+pdfmake.setLocalAccessPolicy((path) => ownFonts.has(path));
+pdfmake.setFonts({ ...fontFiles });
+
+/** The receiving report as PDF bytes; the same input gives the same bytes. */
+export async function reportPdf(input: ReportInput): Promise<Uint8Array> {
+	return pdfmake.createPdf(documentOf(draftOf(input))).getBuffer();
+}
+
+function documentOf(draft: Draft): TDocumentDefinitions {
+	const { sheet, input, docket } = draft;
+	return {
+		pageSize: sheet.name,
+		pageMargins: [sheet.left, sheet.top, sheet.width - sheet.left - sheet.mainWidth, sheet.bottom],
+		version: '1.7',
+		subset: 'PDF/A-3b',
+		tagged: true,
+		displayTitle: true,
+		language: 'en',
+		info: {
+			title: `Receiving report ${docket.number}, version ${input.signature.version}`,
+			author: input.organisation,
+			subject: `${docket.supplier.name} to ${docket.site.name}`,
+			creator: 'Wharfinger',
+			producer: 'Wharfinger',
+			creationDate: new Date(input.creationAt),
+			modDate: new Date(input.creationAt)
+		},
+		files: Object.fromEntries(
+			input.attachments.map((attachment, i) => [`file${i}`, embedded(attachment, input)])
+		),
+		defaultStyle: { font: 'Barlow', fontSize: sizePoints.table, lineHeight: 1.05 },
+		background: (page) => ({ stack: pageFrame(draft, page) }),
+		header: (page, pages) => runningHead(draft, page, pages),
+		content: body(draft)
+	};
+}
+
+function embedded(attachment: ReportAttachment, input: ReportInput) {
+	const at = new Date(input.creationAt);
+	return {
+		src: `data:${attachment.mediaType};base64,${Buffer.from(attachment.bytes).toString('base64')}`,
+		name: attachment.name,
+		type: attachment.mediaType,
+		description: attachment.description,
+		creationDate: at,
+		modifiedDate: at,
+		relationship: 'Source'
+	};
+}
+
+function body(draft: Draft): Content[] {
+	return [
+		...docketHead(draft),
+		...dispositions(draft),
+		...draft.chapters.flatMap((chapter) => chapterContent(draft, chapter)),
+		...reasons(draft),
+		...restsOn(draft),
+		...loggers(draft),
+		...photosAndNotes(draft),
+		signatureStrip(draft)
+	];
+}
+
+/** What stands on every page outside the main column; only a background has the whole page's height to stand in. */
+function pageFrame(draft: Draft, page: number): Content[] {
+	const { sheet } = draft;
+	const stub = (content: Content[]): Content => ({
+		absolutePosition: { x: sheet.stubLeft, y: 26 },
+		columns: [{ stack: content, width: sheet.stubWidth }]
+	});
+	const counterfoil =
+		page === 1
+			? [stub(firstCounterfoil(draft)), ...firstCounterfoilFoot(draft)]
+			: [stub(laterCounterfoil(draft)), verticalNumber(draft)];
+	return [cutLine(draft), runningFoot(draft), ...counterfoil];
+}

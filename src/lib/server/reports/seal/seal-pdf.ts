@@ -1,0 +1,35 @@
+import { SignPdf } from '@signpdf/signpdf';
+import { Signer } from '@signpdf/utils';
+import { PDFDocument } from 'pdf-lib';
+import type { Certificate } from './certificate';
+import { detachedCms } from './cms';
+import { addSignatureField, type SealBox, type SealWords } from './signature-field';
+
+class CmsSigner extends Signer {
+	constructor(private readonly certificate: Certificate) {
+		super();
+	}
+
+	override async sign(content: Buffer): Promise<Buffer> {
+		return Buffer.from(detachedCms(content, this.certificate));
+	}
+}
+
+/** The same report with a PAdES signature by the organisation's certificate over every byte of it. */
+export async function sealPdf(
+	pdf: Uint8Array,
+	certificate: Certificate,
+	words: SealWords,
+	box: SealBox | null = null
+): Promise<Uint8Array> {
+	// Metadata stays as the layout wrote it: PDF/A wants it to agree with the XMP packet.
+	const document = await PDFDocument.load(pdf, { updateMetadata: false });
+	addSignatureField(document, words, box);
+	const prepared = await document.save({
+		useObjectStreams: false,
+		addDefaultPage: false,
+		updateFieldAppearances: false
+	});
+	const sealed = await new SignPdf().sign(Buffer.from(prepared), new CmsSigner(certificate));
+	return new Uint8Array(sealed);
+}
