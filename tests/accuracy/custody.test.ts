@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { percentages } from '../../src/lib/domain/custody/shares';
+import { addUp } from '../../src/lib/format';
 import { assess } from '../../src/lib/domain/receiving/assess';
 import { buildHandover, buildInput, buildSpec, dayHours, heldTrace, hourMs, startMs } from './build';
 
@@ -47,7 +47,10 @@ describe('cod through four hands', () => {
 	});
 
 	it('prints shares that add up to 100', () => {
-		const printed = percentages(uses.map((use) => use.shareOfUsed));
+		const printed = addUp(
+			uses.map((use) => use.shareOfUsed * 100),
+			1
+		);
 		expect(printed.reduce((sum, percent) => sum + percent, 0)).toBeCloseTo(100, 9);
 		// 15.060, 59.036, 15.060, 10.843: each to the nearest tenth add up to 100.0 already.
 		expect(printed).toEqual(legs.map((leg) => leg.percent));
