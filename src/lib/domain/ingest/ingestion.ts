@@ -79,7 +79,15 @@ export interface Oddity {
 		| 'other-unit-column'
 		| 'bad-time'
 		| 'date-order-by-journey'
-		| 'date-order-by-upload';
+		| 'date-order-by-upload'
+		/** The column heads stood again among the readings. */
+		| 'header-repeated'
+		/** Fewer than most, yet some, rows carried a unit other than their column's. */
+		| 'mixed-unit'
+		/** The column in the other unit disagrees with the chosen one by more than rounding. */
+		| 'twin-disagrees'
+		/** A reading before the start that the file itself states. */
+		| 'before-start';
 	readonly count: number;
 	readonly lines: readonly number[];
 	readonly detail: string | null;
@@ -151,6 +159,18 @@ export type RefusalCode =
 	| 'no-time'
 	| 'one-reading'
 	| 'broken-json'
+	| 'broken-gzip'
+	| 'xml'
+	/** Text, but with no rows of readings in it. */
+	| 'no-readings'
+	/** A quoted cell that never closes. */
+	| 'unclosed-quote'
+	/** Ends in the middle: what is missing cannot be known. */
+	| 'truncated'
+	/** All rows carry the same moment. */
+	| 'no-time-progress'
+	/** Several lists of readings side by side. */
+	| 'two-recordings'
 	| 'too-deep'
 	| 'line-too-long'
 	| 'too-many-readings';
@@ -159,4 +179,9 @@ export type RefusalCode =
 export type Ingestion =
 	| { readonly kind: 'ok'; readonly understanding: Understanding }
 	| { readonly kind: 'question'; readonly question: Question; readonly declared: Declared }
-	| { readonly kind: 'refused'; readonly code: RefusalCode; readonly line: number | null; readonly found: string | null };
+	| {
+			readonly kind: 'refused';
+			readonly code: RefusalCode;
+			readonly line: number | null;
+			readonly found: string | null;
+	  };

@@ -1,0 +1,8 @@
+/** What one upload may cost. Beyond these a file is refused with the bound named, never read in part. */
+export const maxFileBytes = 50 * 1024 * 1024;
+export const maxReadings = 5_000_000;
+/** Of delimited text only: minified JSON is one line. */
+export const maxLineChars = 64 * 1024;
+export const maxJsonDepth = 64;
+/** Values with more decimals are rounded to these: no logger resolves 0.0001 °C. */
+export const maxDecimals = 4;

@@ -1,0 +1,130 @@
+import { maxDecimals } from '../bounds';
+import type { TemperatureUnit } from '../../units';
+import { isUnitCell, wholeUnitOf } from './unit-words';
+import { isMissingWord } from './missing-words';
+
+export type NumberState = 'number' | 'missing' | 'text';
+
+/** Filled by {@link scanNumber}: reused over a whole column, so that no row allocates. */
+export interface NumberText {
+	/** The digits as an integer; the value is mantissa × 10^-decimals. */
+	mantissa: number;
+	decimals: number;
+	unit: TemperatureUnit | null;
+	hasComma: boolean;
+}
+
+export function emptyNumber(): NumberText {
+	return { mantissa: 0, decimals: 0, unit: null, hasComma: false };
+}
+
+const isSpace = (code: number): boolean =>
+	code === 32 || code === 9 || code === 0xa0 || code === 0x202f || code === 0x2009 || code === 0xfeff;
+
+/** Hyphen, minus, the dashes people and word processors put for it, and their full-width form. */
+const isMinus = (code: number): boolean =>
+	code === 0x2d ||
+	code === 0x2212 ||
+	(code >= 0x2010 && code <= 0x2014) ||
+	code === 0xff0d ||
+	code === 0xfe63;
+
+interface Digits {
+	value: number;
+	count: number;
+	decimals: number;
+	separators: number;
+	end: number;
+	hasComma: boolean;
+	isBroken: boolean;
+}
+const digits: Digits = {
+	value: 0,
+	count: 0,
+	decimals: 0,
+	separators: 0,
+	end: 0,
+	hasComma: false,
+	isBroken: false
+};
+
+/**
+ * A lone point or comma is the decimal sign, whichever it is; of two kinds the last is; the same one twice groups
+ * thousands. Temperatures have no thousands, so `1,234` is never read as one thousand.
+ */
+function scanDigits(text: string, from: number): void {
+	digits.value = digits.count = digits.decimals = digits.separators = 0;
+	digits.hasComma = digits.isBroken = false;
+	let lastSeparator = 0;
+	let fraction = 0;
+	let i = from;
+	for (; i < text.length; i++) {
+		const code = text.charCodeAt(i);
+		if (code >= 48 && code <= 57) {
+			if (lastSeparator !== 0 && fraction >= maxDecimals + 2) continue;
+			digits.value = digits.value * 10 + (code - 48);
+			digits.count++;
+			if (lastSeparator !== 0) fraction++;
+		} else if (code === 46 || code === 44) {
+			if (lastSeparator !== 0 && fraction !== 3) digits.isBroken = true;
+			if (lastSeparator === code && digits.separators > 1) digits.isBroken ||= fraction !== 3;
+			if (code === 44) digits.hasComma = true;
+			digits.separators++;
+			fraction = 0;
+			lastSeparator = lastSeparator === code ? -code : code;
+		} else break;
+	}
+	digits.end = i;
+	digits.decimals = lastSeparator < 0 ? 0 : fraction;
+	if (lastSeparator !== 0 && fraction === 0) digits.isBroken = true;
+}
+
+function roundToBound(into: NumberText): void {
+	while (into.decimals > maxDecimals) {
+		into.mantissa = Math.round(into.mantissa / 10);
+		into.decimals--;
+	}
+}
+
+/** Reads a cell as a number with an optional unit; `missing` for blanks and words that stand for no value. */
+export function scanNumber(text: string, into: NumberText): NumberState {
+	let i = 0;
+	while (i < text.length && isSpace(text.charCodeAt(i))) i++;
+	if (i === text.length) return 'missing';
+	let isNegative = false;
+	let code = text.charCodeAt(i);
+	if (isMinus(code) || code === 43) {
+		isNegative = code !== 43;
+		i++;
+		while (i < text.length && isSpace(text.charCodeAt(i))) i++;
+	}
+	code = text.charCodeAt(i);
+	if (!((code >= 48 && code <= 57) || code === 46 || code === 44))
+		return isMissingWord(text) ? 'missing' : 'text';
+	scanDigits(text, i);
+	if (digits.isBroken || digits.count === 0 || digits.count > 15) return 'text';
+	into.mantissa = isNegative && digits.value !== 0 ? -digits.value : digits.value;
+	into.decimals = digits.decimals;
+	into.hasComma = digits.hasComma;
+	into.unit = null;
+	if (digits.end < text.length && !readSuffix(text.slice(digits.end), into))
+		return isMissingWord(text) ? 'missing' : 'text';
+	roundToBound(into);
+	return 'number';
+}
+
+function readSuffix(rest: string, into: NumberText): boolean {
+	const suffix = rest.trim();
+	if (suffix === '') return true;
+	const power = /^e([+-]?\d{1,2})$/i.exec(suffix);
+	if (power !== null) {
+		into.decimals -= Number(power[1]);
+		while (into.decimals < 0 && Math.abs(into.mantissa) < 1e12) {
+			into.mantissa *= 10;
+			into.decimals++;
+		}
+		return into.decimals >= 0 && into.decimals < 20;
+	}
+	into.unit = wholeUnitOf(suffix);
+	return into.unit !== null || isUnitCell(suffix);
+}

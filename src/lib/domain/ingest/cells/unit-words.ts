@@ -1,0 +1,64 @@
+import type { TemperatureUnit } from '../../units';
+
+const byLetter: Readonly<Record<string, TemperatureUnit>> = { c: 'celsius', f: 'fahrenheit', k: 'kelvin' };
+
+/** Unit codes that are a whole cell or suffix. Sources: UN/ECE Rec 20 (CEL, FAH, KEL), UCUM (Cel, [degF], K). */
+const wholeWords: Readonly<Record<string, TemperatureUnit>> = {
+	c: 'celsius',
+	f: 'fahrenheit',
+	k: 'kelvin',
+	cel: 'celsius',
+	fah: 'fahrenheit',
+	kel: 'kelvin',
+	celsius: 'celsius',
+	fahrenheit: 'fahrenheit',
+	kelvin: 'kelvin',
+	degc: 'celsius',
+	degf: 'fahrenheit',
+	degk: 'kelvin',
+	gradc: 'celsius',
+	gradcelsius: 'celsius',
+	gradosc: 'celsius',
+	degresc: 'celsius',
+	degreesc: 'celsius',
+	gradf: 'fahrenheit',
+	gradosf: 'fahrenheit',
+	degreesf: 'fahrenheit',
+	degreescelsius: 'celsius',
+	degreesfahrenheit: 'fahrenheit',
+	celcius: 'celsius',
+	celsjusza: 'celsius',
+	'℃': 'celsius',
+	'℉': 'fahrenheit'
+};
+
+/** Unit of a cell that holds nothing but a unit (`°C`, `[degF]`, `Cel`); null otherwise. */
+export function wholeUnitOf(text: string): TemperatureUnit | null {
+	const bare = text.toLowerCase().replace(/[\s°º˚\ufffd.()[\]"']/g, '');
+	return Object.hasOwn(wholeWords, bare) ? (wholeWords[bare] ?? null) : null;
+}
+
+const degreeSign = /(?:°|º|˚|\ufffd|\bdeg(?:rees?|\.)?|\bgrad)\s*([CFK])(?![a-z])/i;
+const spelled = /celsius|celcius|celsjusz|fahrenheit|kelvin|℃|℉/i;
+const bracketed = /[([{/]\s*\??([CFK])\s*[)\]}]/;
+const trailing = /(?:^|[\s_,/.:-])\??([CFK])$|[a-z]([CFK])$|_([cfk])$/;
+
+/** Temperature unit named inside a longer text such as a column head (`Temp. [°C]`, `temp_f`); null when none. */
+export function unitWithin(text: string): TemperatureUnit | null {
+	const word = spelled.exec(text)?.[0].toLowerCase();
+	if (word !== undefined) {
+		if (word.startsWith('f') || word === '℉') return 'fahrenheit';
+		return word === 'kelvin' ? 'kelvin' : 'celsius';
+	}
+	const hit = degreeSign.exec(text) ?? bracketed.exec(text) ?? trailing.exec(text.trim());
+	const letter = hit?.[1] ?? hit?.[2] ?? hit?.[3];
+	return letter === undefined ? null : (byLetter[letter.toLowerCase()] ?? null);
+}
+
+const otherUnits =
+	/^[[(]?\s*(%|%\s?r\.?\s?[hf]\.?|rh|p1|lux|lx|g|v|mv|hpa|kpa|mbar|bar|ppm|s|sec|min|h|m\/s|a93)\s*[\])]?$/i;
+
+/** True for a cell that holds a unit of anything: what a row of units is made of. */
+export function isUnitCell(text: string): boolean {
+	return wholeUnitOf(text) !== null || otherUnits.test(text.trim());
+}

@@ -1,0 +1,74 @@
+import { getBOMEncoding, TextDecoder } from '@exodus/bytes/encoding.js';
+
+export interface DecodedText {
+	readonly text: string;
+	readonly encoding: string;
+}
+
+/** Header words that only come out when the bytes are read in the right East Asian or Central European encoding. */
+const tellingWords: readonly { encoding: string; words: RegExp }[] = [
+	{ encoding: 'shift_jis', words: /温度|湿度|日時|日付|時刻|測定|記録|℃/ },
+	{ encoding: 'gb18030', words: /温度|湿度|时间|日期|序号|记录|℃/ },
+	{ encoding: 'big5', words: /溫度|濕度|時間|日期|序號|記錄|℃/ },
+	{ encoding: 'euc-kr', words: /온도|습도|시간|날짜|일시|℃/ },
+	{ encoding: 'windows-1251', words: /температура|влажность|дата|время/i },
+	{
+		encoding: 'windows-1250',
+		words: /wilgotność|początek|średnia|teplota|vlhkost|čas|hőmérséklet|urządzeni|numer seryjny.*[ąęłśż]/i
+	},
+	{ encoding: 'windows-1254', words: /sıcaklık|başlangıç/i }
+];
+
+function decodeAs(bytes: Uint8Array, encoding: string, isFatal: boolean): string | null {
+	try {
+		return new TextDecoder(encoding, { fatal: isFatal }).decode(bytes);
+	} catch {
+		// A fatal decoder throws on bytes that are not text in this encoding: that is the answer.
+		return null;
+	}
+}
+
+/** UTF-16 without a mark shows as a NUL in every second byte of plain text. */
+function silentUtf16(bytes: Uint8Array): 'utf-16le' | 'utf-16be' | null {
+	const end = Math.min(bytes.length, 4096) & ~1;
+	if (end < 8) return null;
+	let evenNuls = 0;
+	let oddNuls = 0;
+	for (let i = 0; i < end; i += 2) {
+		if (bytes[i] === 0) evenNuls++;
+		if (bytes[i + 1] === 0) oddNuls++;
+	}
+	const half = end / 2;
+	if (oddNuls > half * 0.6 && evenNuls < half * 0.1) return 'utf-16le';
+	if (evenNuls > half * 0.6 && oddNuls < half * 0.1) return 'utf-16be';
+	return null;
+}
+
+/** A file cut in the middle of a character is still UTF-8: up to three trailing bytes may be missing their rest. */
+function decodeUtf8(bytes: Uint8Array): string | null {
+	const whole = decodeAs(bytes, 'utf-8', true);
+	if (whole !== null) return whole;
+	for (let dropped = 1; dropped <= 3 && dropped < bytes.length; dropped++) {
+		const last = bytes[bytes.length - dropped] ?? 0;
+		if (last >= 0xc2) return decodeAs(bytes.subarray(0, bytes.length - dropped), 'utf-8', true);
+		if (last < 0x80) return null;
+	}
+	return null;
+}
+
+/** Bytes to text by what they show: mark, NUL pattern, valid UTF-8, telling words, else windows-1252. */
+export function decodeText(bytes: Uint8Array): DecodedText {
+	const marked = getBOMEncoding(bytes);
+	const wide = marked === null ? silentUtf16(bytes) : null;
+	const sure = marked ?? wide;
+	if (sure !== null) return { text: decodeAs(bytes, sure, false) ?? '', encoding: sure };
+	const utf8 = decodeUtf8(bytes);
+	if (utf8 !== null) return { text: utf8, encoding: 'utf-8' };
+	const head = bytes.subarray(0, 65_536);
+	for (const { encoding, words } of tellingWords) {
+		const text = decodeAs(head, encoding, false);
+		if (text === null || !words.test(text)) continue;
+		return { text: decodeAs(bytes, encoding, false) ?? '', encoding };
+	}
+	return { text: decodeAs(bytes, 'windows-1252', false) ?? '', encoding: 'windows-1252' };
+}

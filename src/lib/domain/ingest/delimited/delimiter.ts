@@ -1,0 +1,77 @@
+import { cellKindOf, epochUnitOf, type CellKind } from '../cells/cell-kind';
+import { delimiters, splitRow, type Delimiter } from './split-row';
+
+export interface RowShape {
+	readonly width: number;
+	readonly hasMoment: boolean;
+	readonly values: number;
+	readonly texts: number;
+}
+
+/** What kinds of cells a row is made of. */
+export function shapeOf(cells: readonly string[]): RowShape {
+	let width = cells.length;
+	while (width > 1 && (cells[width - 1] ?? '').trim() === '') width--;
+	let values = 0;
+	let texts = 0;
+	let hasMoment = false;
+	for (const cell of cells) {
+		const kind: CellKind = cellKindOf(cell);
+		const isEpoch = kind === 'number' && epochUnitOf(Number(cell)) !== null;
+		if (kind === 'moment' || kind === 'date' || kind === 'time' || isEpoch) hasMoment = true;
+		else if (kind === 'number') values++;
+		else if (kind === 'text') texts++;
+	}
+	return { width, hasMoment, values, texts };
+}
+
+/** Lines spread over the whole text: the first and last few, and some between. */
+export function sampleIndexes(count: number, wanted: number): number[] {
+	if (count <= wanted) return Array.from({ length: count }, (_, i) => i);
+	const edge = Math.floor(wanted / 4);
+	const picked = new Set<number>();
+	for (let i = 0; i < edge; i++) picked.add(i).add(count - 1 - i);
+	const step = (count - 2 * edge) / (wanted - 2 * edge);
+	for (let at = edge; at < count - edge; at += step) picked.add(Math.floor(at));
+	return [...picked].sort((a, b) => a - b);
+}
+
+interface Fit {
+	readonly delimiter: Delimiter | null;
+	readonly score: number;
+	readonly texts: number;
+}
+
+function fitOf(lines: readonly string[], delimiter: Delimiter): Fit {
+	const groups = new Map<number, { timed: number; plain: number; texts: number }>();
+	for (const line of lines) {
+		const cells = splitRow(line, delimiter);
+		if (cells.length < 2) continue;
+		const shape = shapeOf(cells);
+		const group = groups.get(cells.length) ?? { timed: 0, plain: 0, texts: 0 };
+		if (shape.hasMoment && shape.values > 0) group.timed++;
+		else if (shape.values > 0 && shape.texts === 0 && !shape.hasMoment) group.plain++;
+		else continue;
+		group.texts += shape.texts;
+		groups.set(cells.length, group);
+	}
+	let best: Fit = { delimiter, score: 0, texts: 0 };
+	for (const group of groups.values()) {
+		const score = group.timed + group.plain * 0.4;
+		if (score > best.score) best = { delimiter, score, texts: group.texts / (group.timed + group.plain) };
+	}
+	return best;
+}
+
+/**
+ * The delimiter under which most lines fall into a moment and values. Null where lines hold one cell each.
+ * A delimiter that leaves words unexplained loses against one that explains them at equal score.
+ */
+export function findDelimiter(lines: readonly string[]): Delimiter | null {
+	const fits = delimiters.map((delimiter) => fitOf(lines, delimiter));
+	const best = fits.reduce((a, b) =>
+		b.score > a.score * 1.02 || (b.score >= a.score * 0.98 && b.texts < a.texts - 0.5) ? b : a
+	);
+	if (best.score === 0) return null;
+	return best.delimiter;
+}

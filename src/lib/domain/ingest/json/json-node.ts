@@ -1,0 +1,202 @@
+import { maxJsonDepth } from '../bounds';
+
+export interface JsonObject {
+	readonly type: 'object';
+	readonly at: number;
+	/** Plain parallel lists: a key named `__proto__` is a key like any other. */
+	readonly keys: string[];
+	readonly values: JsonNode[];
+}
+export interface JsonArray {
+	readonly type: 'array';
+	readonly at: number;
+	readonly items: JsonNode[];
+}
+/** Numbers keep their text: 4.10 has two decimals, and nothing is lost to binary fractions. */
+export interface JsonNumber {
+	readonly type: 'number';
+	readonly text: string;
+}
+export type JsonNode = JsonObject | JsonArray | JsonNumber | string | boolean | null;
+
+export type JsonFault = { readonly code: 'broken-json' | 'too-deep' | 'truncated'; readonly at: number };
+export type JsonParsed = { readonly node: JsonNode; readonly end: number } | JsonFault;
+
+class FaultAt extends Error {
+	constructor(readonly fault: JsonFault) {
+		super(fault.code);
+	}
+}
+
+const numberPattern = /-?(?:0|[1-9]\d*)(?:\.\d+)?(?:[eE][+-]?\d+)?/y;
+const escapes: Readonly<Record<string, string>> = {
+	'"': '"',
+	'\\': '\\',
+	'/': '/',
+	b: '\b',
+	f: '\f',
+	n: '\n',
+	r: '\r',
+	t: '\t'
+};
+
+/** One pass over the text by the grammar of RFC 8259, with a bound on depth. NaN and Infinity are taken as null. */
+class Reader {
+	i: number;
+	constructor(
+		readonly text: string,
+		from: number
+	) {
+		this.i = from;
+	}
+
+	fail(code: JsonFault['code'] = 'broken-json'): never {
+		throw new FaultAt({
+			code: this.i >= this.text.length ? 'truncated' : code,
+			at: Math.min(this.i, this.text.length)
+		});
+	}
+
+	space(): number {
+		for (;;) {
+			const code = this.text.charCodeAt(this.i);
+			if (code !== 32 && code !== 10 && code !== 13 && code !== 9 && code !== 0xfeff) return code;
+			this.i++;
+		}
+	}
+
+	value(depth: number): JsonNode {
+		if (depth > maxJsonDepth) throw new FaultAt({ code: 'too-deep', at: this.i });
+		const code = this.space();
+		if (code === 123) return this.object(depth);
+		if (code === 91) return this.array(depth);
+		if (code === 34) return this.string();
+		if (code === 45 || (code >= 48 && code <= 57)) return this.number();
+		return this.word();
+	}
+
+	object(depth: number): JsonObject {
+		const node: JsonObject = { type: 'object', at: this.i++, keys: [], values: [] };
+		if (this.space() === 125) {
+			this.i++;
+			return node;
+		}
+		for (;;) {
+			if (this.space() !== 34) this.fail();
+			node.keys.push(this.string());
+			if (this.space() !== 58) this.fail();
+			this.i++;
+			node.values.push(this.value(depth + 1));
+			const next = this.space();
+			if (next !== 44 && next !== 125) this.fail();
+			this.i++;
+			if (next === 125) return node;
+		}
+	}
+
+	array(depth: number): JsonArray {
+		const node: JsonArray = { type: 'array', at: this.i++, items: [] };
+		if (this.space() === 93) {
+			this.i++;
+			return node;
+		}
+		for (;;) {
+			node.items.push(this.value(depth + 1));
+			const next = this.space();
+			if (next !== 44 && next !== 93) this.fail();
+			this.i++;
+			if (next === 93) return node;
+		}
+	}
+
+	string(): string {
+		const start = ++this.i;
+		for (; this.i < this.text.length; this.i++) {
+			const code = this.text.charCodeAt(this.i);
+			if (code === 34) return this.text.slice(start, this.i++);
+			if (code === 92) return this.escaped(start);
+			if (code < 32 && code !== 9) this.fail();
+		}
+		return this.fail();
+	}
+
+	escaped(start: number): string {
+		let out = this.text.slice(start, this.i);
+		for (; this.i < this.text.length; this.i++) {
+			const letter = this.text[this.i] ?? '';
+			if (letter === '"') {
+				this.i++;
+				return out;
+			}
+			if (letter !== '\\') {
+				out += letter;
+				continue;
+			}
+			const next = this.text[++this.i] ?? '';
+			if (next === 'u') {
+				const hex = this.text.slice(this.i + 1, this.i + 5);
+				if (!/^[0-9a-fA-F]{4}$/.test(hex)) this.fail();
+				out += String.fromCharCode(parseInt(hex, 16));
+				this.i += 4;
+			} else if (Object.hasOwn(escapes, next)) out += escapes[next];
+			else this.fail();
+		}
+		return this.fail();
+	}
+
+	number(): JsonNode {
+		numberPattern.lastIndex = this.i;
+		const text = numberPattern.exec(this.text)?.[0];
+		if (text === undefined)
+			return this.text.startsWith('-Infinity', this.i) ? this.nothing('-Infinity') : this.fail();
+		this.i += text.length;
+		return { type: 'number', text };
+	}
+
+	nothing(word: string): null {
+		this.i += word.length;
+		return null;
+	}
+
+	word(): boolean | null {
+		for (const word of ['true', 'false', 'null', 'NaN', 'Infinity']) {
+			if (!this.text.startsWith(word, this.i)) continue;
+			this.i += word.length;
+			return word === 'true' ? true : word === 'false' ? false : null;
+		}
+		if (['true', 'false', 'null'].some((word) => word.startsWith(this.text.slice(this.i))))
+			this.i = this.text.length;
+		return this.fail();
+	}
+}
+
+/** Parses one JSON value that starts at or after `from`. */
+export function parseJson(text: string, from: number): JsonParsed {
+	const reader = new Reader(text, from);
+	try {
+		const node = reader.value(0);
+		return { node, end: reader.i };
+	} catch (error) {
+		if (error instanceof FaultAt) return error.fault;
+		throw error;
+	}
+}
+
+/** The last value under a key, or undefined. */
+export function memberOf(object: JsonObject, key: string): JsonNode | undefined {
+	const at = object.keys.lastIndexOf(key);
+	return at < 0 ? undefined : object.values[at];
+}
+
+export const isObject = (node: JsonNode | undefined): node is JsonObject =>
+	typeof node === 'object' && node !== null && node.type === 'object';
+export const isArray = (node: JsonNode | undefined): node is JsonArray =>
+	typeof node === 'object' && node !== null && node.type === 'array';
+
+/** Text of a scalar as the file wrote it; null for objects, arrays and nothing. */
+export function textOfScalar(node: JsonNode | undefined): string | null {
+	if (typeof node === 'string') return node;
+	if (typeof node === 'boolean') return String(node);
+	if (node === null || node === undefined) return null;
+	return node.type === 'number' ? node.text : null;
+}

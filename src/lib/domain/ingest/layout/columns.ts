@@ -1,0 +1,115 @@
+import type { Quantity } from '../../trace/trace';
+import type { TemperatureUnit } from '../../units';
+import { cellKindOf, epochUnitOf, type CellKind } from '../cells/cell-kind';
+import { unitWithin, wholeUnitOf } from '../cells/unit-words';
+import { sampleIndexes } from '../delimited/delimiter';
+import type { Table } from './table';
+import { meaningOf, type HeaderMeaning } from './words';
+
+/** What is known of one column from its head and a sample of its cells. */
+export interface Column {
+	readonly index: number;
+	readonly name: string;
+	readonly meaning: HeaderMeaning;
+	readonly unit: TemperatureUnit | null;
+	/** Share of the sampled rows whose cell is of the kind. */
+	readonly share: Readonly<Record<CellKind, number>>;
+	/** Smallest and largest number of the sample, NaN without any. */
+	readonly low: number;
+	readonly high: number;
+	/** True where each number is greater than the one above it by the same amount. */
+	readonly isCounter: boolean;
+	readonly epochUnit: 's' | 'ms' | 'us' | null;
+	/** First filled cell, as an example. */
+	readonly example: string;
+}
+
+const sampledRows = 400;
+
+interface Tally {
+	counts: Record<CellKind, number>;
+	numbers: number[];
+	example: string;
+}
+
+function emptyTally(): Tally {
+	return {
+		counts: { blank: 0, missing: 0, number: 0, moment: 0, date: 0, time: 0, text: 0 },
+		numbers: [],
+		example: ''
+	};
+}
+
+function isCounting(numbers: readonly number[]): boolean {
+	if (numbers.length < 2) return false;
+	const step = (numbers[1] ?? 0) - (numbers[0] ?? 0);
+	return (
+		step !== 0 &&
+		Number.isInteger(step) &&
+		numbers.every((n, i) => i === 0 || n - (numbers[i - 1] ?? 0) === step)
+	);
+}
+
+function columnOf(table: Table, index: number, tally: Tally, rows: number): Column {
+	const name = table.header[index] ?? '';
+	const share = { ...tally.counts };
+	for (const kind of ['blank', 'missing', 'number', 'moment', 'date', 'time', 'text'] as const)
+		share[kind] /= Math.max(1, rows);
+	const ownUnit = wholeUnitOf(table.units[index] ?? '');
+	const { numbers } = tally;
+	const first = numbers[0] ?? NaN;
+	const epochUnit = epochUnitOf(first);
+	return {
+		index,
+		name,
+		meaning: meaningOf(name),
+		unit: unitWithin(name) ?? ownUnit,
+		share,
+		low: numbers.length === 0 ? NaN : Math.min(...numbers),
+		high: numbers.length === 0 ? NaN : Math.max(...numbers),
+		isCounter: isCounting(numbers),
+		epochUnit: epochUnit !== null && numbers.every((n) => epochUnitOf(n) === epochUnit) ? epochUnit : null,
+		example: tally.example
+	};
+}
+
+/** Profiles every column over the first rows and a sample of the rest. */
+export function profileColumns(table: Table): Column[] {
+	const tallies: Tally[] = [];
+	// Neighbouring rows at the start tell a counter; rows spread over the file tell the rest.
+	const head = Array.from({ length: Math.min(20, table.rowCount) }, (_, i) => i);
+	const spread = sampleIndexes(table.rowCount, sampledRows);
+	const counted: number[][] = [];
+	for (const row of head) {
+		table.cells(row).forEach((cell, i) => {
+			const n = Number(cell);
+			if (cell.trim() !== '' && Number.isFinite(n)) (counted[i] ??= []).push(n);
+		});
+	}
+	const filledIn = (cells: readonly string[]): number => cells.filter((cell) => cell.trim() !== '').length;
+	const width = table.rowCount === 0 ? 0 : filledIn(table.cells(0));
+	let profiled = 0;
+	for (const row of spread) {
+		const cells = table.cells(row);
+		// Footers and blank lines fill fewer cells; they would water down the shares of a short file.
+		if (filledIn(cells) * 2 <= width) continue;
+		profiled++;
+		cells.forEach((cell, i) => {
+			const tally = (tallies[i] ??= emptyTally());
+			const kind = cellKindOf(cell);
+			tally.counts[kind]++;
+			if (tally.example === '' && kind !== 'blank') tally.example = cell.trim();
+			const n = Number(cell.trim().replace(',', '.'));
+			if ((kind === 'number' || /^\d{9,16}$/.test(cell.trim())) && Number.isFinite(n)) tally.numbers.push(n);
+		});
+	}
+	return Array.from({ length: Math.max(table.header.length, tallies.length) }, (_, i) => {
+		const column = columnOf(table, i, tallies[i] ?? emptyTally(), profiled);
+		return { ...column, isCounter: isCounting(counted[i] ?? []) };
+	});
+}
+
+/** Quantity of a value column: what its head says, else temperature where its unit is one, else not known. */
+export function quantityOf(column: Column): Quantity | null {
+	return column.meaning.quantity ?? (column.unit === null ? null : 'temperature');
+}

@@ -1,0 +1,167 @@
+import type { TemperatureUnit } from '../../units';
+import { unitWithin, wholeUnitOf } from '../cells/unit-words';
+import { foldWord } from '../times/month-names';
+import { orderNamedIn, type DateOrder } from '../times/date-order';
+import { emptyStamp, scanStamp } from '../times/stamp';
+import { zoneNamedBy } from '../times/zone';
+import type { Entry } from './table';
+
+/** Facts stated outside the readings, as text where they still depend on the order of dates. */
+export interface Stated {
+	readonly serial: string | null;
+	readonly tripName: string | null;
+	readonly startText: string | null;
+	readonly stopText: string | null;
+	readonly intervalMinutes: number | null;
+	readonly zone: string | null;
+	/** A zone the file names by letters that mean several. */
+	readonly zoneWord: string | null;
+	readonly unit: TemperatureUnit | null;
+	readonly order: DateOrder | null;
+	/** Every date outside the readings: one with a day over 12 shows the order the program writes. */
+	readonly momentTexts: readonly string[];
+}
+
+const keys = {
+	serial:
+		/\b(serial|s\/?n|seriennummer|serien ?nr|serie|serienummer|matricola|seryjny|seri no|device id|logger id|sensor id|imei|mac|device ?sn|unit id|numero de serie|n de serie)\b|序列号|序列號|製造番号|シリアル|机号|设备编号/,
+	device:
+		/\b(device|logger|geraet|gerat|recorder|appareil|dispositivo|rejestrator|urzadzenie|bn|instrument|tag)\b|设备|設備/,
+	trip: /\b(trip|shipment|consignment|reise|sendung|fahrt|bezeichnung|trajet|voyage|expedition|viaje|viagem|viaggio|spedizione|envio|rit|reis|zending|przesylka|podroz|description|title|lot name|order)\b|行程|运单/,
+	start:
+		/\b(start(ed|zeit|datum|tid)?|begin+(n|time|ning|zeit)?|debut|inicio|inizio|aanvang|poczatek|rozpoczecie|baslangic|first (reading|record|log|sample)|erste messung|premiere? (mesure|lecture)|from|von)\b|开始|開始|首次/,
+	stop: /\b(stop(ped|zeit)?|end(ed|e|zeit|time)?|fin|ende|fine|final|einde|koniec|zakonczenie|bitis|last (reading|record|log|sample)|letzte messung|to|bis)\b|结束|終了|停止/,
+	interval:
+		/\b(interval\w*|intervall\w*|intervalo|intervallo|interwal\w*|cadence|messtakt|takt|sampling|sample (rate|period|every)|log(ging)? (rate|period|cycle|every)|rate|period(o|e|icidad)?|aufzeichnungsrate|messrate|czestotliwosc|aralik|every)\b|间隔|間隔/,
+	zone: /\b(time ?zone|tz|zeitzone|fuseau( horaire)?|zona horaria|fuso( horario| orario)?|tijdzone|strefa czasowa|saat dilimi|utc offset|gmt offset|time offset|all times)\b|时区|時區|タイムゾーン/,
+	unit: /\b(unit|units|einheit|unite|unidad|unidade|unita|eenheid|jednostka|birim|scale|temperatureinheit|temperatureenheid|uom)\b|单位|單位|単位/,
+	format: /\b(date ?format|datumsformat|format)\b/
+} as const;
+
+const minuteFactors: readonly [RegExp, number][] = [
+	[/\b(ms|milli\w*)\b/, 1 / 60_000],
+	[/(\d|\b)(s|sec\w*|sek\w*|seg\w*|秒)(\b|$)/, 1 / 60],
+	[/(\d|\b)(m|mi|min\w*|mn|分\w*)(\b|$)/, 1],
+	[/(\d|\b)(h|hr|hrs|hour\w*|std|stunde\w*|heure\w*|hora\w*|ore|ora|uur|godz\w*)(\b|$)/, 60]
+];
+
+/** Minutes of an interval text: `10 min`, `00:10:00`, `600 s`, or a bare number whose unit the key names. */
+export function intervalOf(value: string, key: string): number | null {
+	const clock = /^\s*(\d{1,3}):(\d{2})(?::(\d{2}))?\s*(?:h|min|hh:mm(:ss)?)?\s*$/.exec(value);
+	if (clock !== null) {
+		const [h, m, s] = [Number(clock[1]), Number(clock[2]), Number(clock[3] ?? 0)];
+		const minutes = clock[3] === undefined && /mm:ss/i.test(key) ? h + m / 60 : h * 60 + m + s / 60;
+		return minutes > 0 ? minutes : null;
+	}
+	const amount = /(\d+(?:[.,]\d+)?)/.exec(value);
+	if (amount === null) return null;
+	const count = Number((amount[1] ?? '').replace(',', '.'));
+	const iso = /^PT(\d+)([HMS])$/i.exec(value.trim());
+	const text = iso !== null ? `1 ${iso[2]}`.toLowerCase() : foldWord(value);
+	const factor = (minuteFactors.find(([unit]) => unit.test(text)) ??
+		minuteFactors.find(([unit]) => unit.test(foldWord(key).replace(/[()[\]_.]/g, ' '))))?.[1];
+	return factor === undefined || count <= 0 ? null : count * factor;
+}
+
+const stamp = emptyStamp();
+
+function hasStamp(text: string): boolean {
+	return scanStamp(text, stamp) && stamp.shape !== 'none';
+}
+
+/** A moment, or a date and a time given in two lines that are put together. */
+function momentOf(entries: readonly Entry[], pattern: RegExp): string | null {
+	let date: string | null = null;
+	for (const { key, value } of entries) {
+		if (!pattern.test(key)) continue;
+		const isStamp = scanStamp(value, stamp);
+		if (isStamp && stamp.shape !== 'none' && stamp.msOfDay >= 0) return value;
+		if (isStamp && stamp.shape !== 'none') date ??= value;
+		else if (isStamp && date !== null) return `${date} ${value}`;
+	}
+	return date;
+}
+
+function serialOf(entries: readonly Entry[]): string | null {
+	const isSerial = (value: string): boolean => /[\d]/.test(value) && value.length <= 40 && !hasStamp(value);
+	const exact = entries.find(({ key, value }) => keys.serial.test(key) && isSerial(value));
+	const device =
+		exact ??
+		entries.find(
+			({ key, value }) =>
+				keys.device.test(key) && isSerial(value) && !/interval|model|type|version|unit/.test(key)
+		);
+	return device === undefined ? null : device.value.trim();
+}
+
+function zoneOf(entries: readonly Entry[], freeText: string): { zone: string | null; word: string | null } {
+	for (const { key, value } of entries) {
+		if (!keys.zone.test(key)) continue;
+		const zone = zoneNamedBy(value) ?? zoneOfNumber(value, key);
+		if (zone !== null) return { zone, word: null };
+		if (/^[A-Z]{2,5}$/.test(value.trim())) return { zone: null, word: value.trim() };
+	}
+	const stated =
+		/\b(?:times?|zeiten|heures|horas|orari?)\b[^\n]{0,40}?\b((?:UTC|GMT)(?:\s?[+\-−]\s?\d{1,2}(?::?\d{2})?)?)\b/i.exec(
+			freeText
+		)?.[1] ?? /\((?:UTC|GMT)\s?[+\-−]\s?\d{1,2}(?::?\d{2})?\)/.exec(freeText)?.[0];
+	return { zone: stated === undefined ? null : zoneNamedBy(stated), word: null };
+}
+
+/** `UTC offset: 2` or `-300` (minutes) has no sign word of its own. */
+function zoneOfNumber(value: string, key: string): string | null {
+	const match = /^\s*([+\-−]?)(\d{1,2}(?:\.5)?)\s*h?\s*$/.exec(value);
+	if (match === null || !/offset|zone|utc|gmt/.test(key)) return null;
+	const hours = Number(match[2]);
+	return hours > 14
+		? null
+		: zoneNamedBy(`${match[1] === '' ? '+' : match[1]}${Math.floor(hours)}:${hours % 1 === 0 ? '00' : '30'}`);
+}
+
+function unitOf(entries: readonly Entry[], freeText: string): TemperatureUnit | null {
+	for (const { key, value } of entries) {
+		if (!keys.unit.test(key)) continue;
+		const unit = wholeUnitOf(value) ?? unitWithin(value);
+		if (unit !== null) return unit;
+	}
+	const seen = new Set(
+		[...freeText.matchAll(/(?:°|º|℃|℉|\ufffd)\s?([CF])?\b/gi)]
+			.map((hit) => unitWithin(hit[0]))
+			.filter((unit) => unit !== null)
+	);
+	const [only] = [...seen];
+	return seen.size === 1 && only !== undefined ? only : null;
+}
+
+/** Reads what the lines around the readings say. Limits and alarms name a unit, never a reading. */
+export function statedIn(entries: readonly Entry[], freeText: string, header: readonly string[]): Stated {
+	const folded = entries.map((entry) => ({ ...entry, key: foldWord(entry.key).replace(/[_.°]/g, ' ') }));
+	const interval = folded
+		.map(({ key, value }) => (keys.interval.test(key) ? intervalOf(value, key) : null))
+		.find((minutes) => minutes !== null);
+	const zone = zoneOf(folded, freeText);
+	const trip = folded.find(
+		({ key, value }) => keys.trip.test(key) && value !== '' && !hasStamp(value) && !keys.start.test(key)
+	);
+	const format = [
+		...folded.filter(({ key }) => keys.format.test(key)).map(({ value }) => value),
+		...header
+	].map(orderNamedIn);
+	const named = header.map((cell) =>
+		/utc|gmt|zone/i.test(cell)
+			? zoneNamedBy(/(?:utc|gmt)\s*(?:[+\-−]\s*\d{1,2}(?::?\d{2})?)?/i.exec(cell)?.[0] ?? cell)
+			: null
+	);
+	return {
+		serial: serialOf(folded),
+		tripName: trip?.value.trim() ?? null,
+		startText: momentOf(folded, keys.start),
+		stopText: momentOf(folded, keys.stop),
+		intervalMinutes: interval ?? null,
+		zone: zone.zone ?? named.find((text) => text !== null) ?? null,
+		zoneWord: zone.word,
+		unit: unitOf(folded, freeText),
+		order: format.find((order) => order !== null) ?? null,
+		momentTexts: folded.map(({ value }) => value).filter(hasStamp)
+	};
+}

@@ -1,0 +1,28 @@
+/** A key and value that stood outside the readings: preamble line, footer line, JSON metadata. */
+export interface Entry {
+	readonly key: string;
+	readonly value: string;
+	readonly line: number;
+}
+
+/** Readings as rows of cells, whatever the file was written in. Rows are split when asked for, not kept. */
+export interface Table {
+	readonly kind: 'delimited' | 'json';
+	readonly delimiter: string | null;
+	/** Column heads; JSON keys; empty when the file has none. */
+	readonly header: readonly string[];
+	readonly headerLine: number | null;
+	/** Units by column, from a row of their own. */
+	readonly units: readonly string[];
+	readonly entries: readonly Entry[];
+	/** Text outside the readings, for facts that are no key and value. */
+	readonly freeText: string;
+	readonly rowCount: number;
+	cells(row: number): readonly string[];
+	/** 1-based line in the file. */
+	lineOf(row: number): number;
+	/** The row as it stands in the file, for showing. */
+	textOf(row: number): string;
+	/** True when the last row lacks the line end that all others have. */
+	readonly isUnterminated: boolean;
+}

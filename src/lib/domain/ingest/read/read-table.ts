@@ -1,0 +1,109 @@
+import type { TemperatureUnit } from '../../units';
+import type { Ingestion, ReadContext } from '../ingestion';
+import { profileColumns, type Column } from '../layout/columns';
+import { statedIn, type Stated } from '../layout/preamble';
+import type { Table } from '../layout/table';
+import { columnsOf, findTiming, type Timing } from '../layout/timing';
+import { withoutCutRow } from './cut-short';
+import { gather } from './gather';
+import type { Gathered } from './gathered';
+import { declaredBy, understand, type Readable } from './understand';
+import { pickTemperature, type Picked } from './pick-temperature';
+import { columnQuestion, firstCelsiusOf, timeQuestion, unitQuestion } from './questions';
+import { refused } from './refusals';
+import { timeAxisOf } from './time-axis';
+
+interface Plan {
+	readonly timing: Timing;
+	readonly picked: Picked;
+	readonly stated: Stated;
+}
+
+function planOf(table: Table, columns: readonly Column[], stated: Stated, context: ReadContext): Plan {
+	const timing = findTiming(columns);
+	const picked = pickTemperature(columns, timing, context.answers, stated.unit);
+	return { timing, picked, stated };
+}
+
+function refusalOf(table: Table, { timing, picked, stated }: Plan, context: ReadContext): Ingestion | null {
+	if (picked.candidates.length === 0) {
+		const found = table.header.filter((name) => name !== '').join(', ');
+		return refused('no-temperature', table.headerLine, found === '' ? null : found.slice(0, 120));
+	}
+	const isUntimed =
+		timing.kind === 'none' &&
+		stated.intervalMinutes === null &&
+		context.answers.intervalMinutes === undefined;
+	const isStartless = stated.startText === null && context.answers.startMs === undefined;
+	return isUntimed && isStartless ? refused('no-time', table.lineOf(0), table.textOf(0).slice(0, 80)) : null;
+}
+
+/** The unit of a column: the dock's answer, its own head, the values, then what the preamble says. */
+export function unitFor(
+	column: Column,
+	gathered: Gathered,
+	stated: Stated,
+	context: ReadContext
+): TemperatureUnit | null {
+	const values = gathered.values.find((v) => v.column === column.index);
+	return context.answers.unit ?? column.unit ?? values?.unit ?? stated.unit;
+}
+
+/** Reads a table to an understanding, to one question, or to a refusal. */
+export function readTable(table: Table, encoding: string, context: ReadContext): Ingestion {
+	const stated = statedIn(table.entries, table.freeText, table.header);
+	const plan = planOf(table, profileColumns(table), stated, context);
+	const { timing, picked } = plan;
+	const refusal = refusalOf(table, plan, context);
+	if (refusal !== null) return refusal;
+	const wanted = [...picked.candidates, ...picked.twins].map(({ index }) => index);
+	const gathered = withoutCutRow(table, gather(table, timing, wanted));
+	if (gathered.count === 0)
+		return refused(
+			columnsOf(timing).length === 0 ? 'no-readings' : 'no-time',
+			table.lineOf(0),
+			table.textOf(0).slice(0, 80)
+		);
+	const unitOf = (column: Column): TemperatureUnit | null => unitFor(column, gathered, stated, context);
+	const axis = timeAxisOf(gathered, timing, stated, context);
+	const declared = declaredBy(stated, 'zone' in axis ? axis : null, context);
+	const [first] = picked.candidates;
+	if (first === undefined) return refused('no-temperature');
+	const valuesOf = (column: Column): Gathered['values'][number] | undefined =>
+		gathered.values.find((v) => v.column === column.index);
+	if ('options' in axis) {
+		const celsius = firstCelsiusOf(valuesOf(first), gathered.count, unitOf(first));
+		return {
+			kind: 'question',
+			question: timeQuestion(axis, table, timing, gathered, context, celsius),
+			declared
+		};
+	}
+	const ms = axis.ms.subarray(0, gathered.count);
+	if (picked.candidates.length > 1) {
+		return {
+			kind: 'question',
+			question: columnQuestion(table, picked.candidates, gathered, ms, unitOf),
+			declared
+		};
+	}
+	const unit = unitOf(first);
+	const values = valuesOf(first);
+	if (values === undefined) return refused('no-temperature');
+	if (unit === null)
+		return { kind: 'question', question: unitQuestion(table, first, values, gathered, ms), declared };
+	const readable: Readable = {
+		table,
+		encoding,
+		timing,
+		picked,
+		gathered,
+		axis,
+		declared,
+		column: first,
+		values,
+		unit,
+		unitOf
+	};
+	return understand(readable, context);
+}

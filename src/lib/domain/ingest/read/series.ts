@@ -1,0 +1,156 @@
+import { celsiusFromScaled, type TemperatureUnit } from '../../units';
+import type { GatheredValues } from './gathered';
+
+/** Readings of one channel, sorted and without repeats, with the line each came from. */
+export interface Series {
+	readonly unit: TemperatureUnit;
+	readonly decimals: number;
+	readonly times: Float64Array;
+	readonly scaled: Int32Array;
+	readonly lines: Int32Array;
+	readonly missing: readonly number[];
+	readonly impossible: readonly number[];
+	readonly dropped: readonly number[];
+	readonly conflicting: readonly number[];
+	/** Rows that stood before an earlier one; all of them when the file runs backwards. */
+	readonly resorted: readonly number[];
+	readonly isDescending: boolean;
+}
+
+/** Below the boiling point of nitrogen (−195.8 °C) no logger measures; above 150 °C no perishable travels. */
+const coldestCelsius = -200;
+const warmestCelsius = 150;
+/** Values that instruments write for "no sensor". Inside the possible range they only count as such after a leap. */
+const sentinels = new Set([
+	-127, -100, -99.9, -99, -99.99, -88.8, 85, 99, 99.9, 99.99, 100, 125, 127, 127.9, 128
+]);
+const leapCelsius = 30;
+
+function largestDecimals(values: GatheredValues, count: number): number {
+	let most = 0;
+	for (let i = 0; i < count; i++)
+		if (values.isMissing[i] === 0 && (values.decimals[i] ?? 0) > most) most = values.decimals[i] ?? 0;
+	return most;
+}
+
+const powers = [1, 10, 100, 1000, 10_000] as const;
+
+/** A value that cannot be a temperature: outside physics, or a known "no sensor" figure away from its neighbours. */
+function isImpossible(celsius: number, raw: number, lastCelsius: number): boolean {
+	if (celsius < coldestCelsius || celsius > warmestCelsius) return true;
+	return sentinels.has(raw) && !Number.isNaN(lastCelsius) && Math.abs(celsius - lastCelsius) > leapCelsius;
+}
+
+interface Kept {
+	count: number;
+	readonly times: Float64Array;
+	readonly scaled: Int32Array;
+	readonly lines: Int32Array;
+}
+
+function firstPlausible(values: GatheredValues, ms: Float64Array, unit: TemperatureUnit): number {
+	for (let i = 0; i < ms.length; i++) {
+		if (values.isMissing[i] === 1) continue;
+		const raw = (values.mantissa[i] ?? 0) / (powers[values.decimals[i] ?? 0] ?? 1);
+		const celsius = celsiusFromScaled(values.mantissa[i] ?? 0, values.decimals[i] ?? 0, unit);
+		if (!isImpossible(celsius, raw, NaN) && !sentinels.has(raw)) return celsius;
+	}
+	return NaN;
+}
+
+/** Drops what is no value, tells what cannot be one, and brings the rest into the order of time. */
+export function seriesOf(
+	values: GatheredValues,
+	ms: Float64Array,
+	lines: Int32Array,
+	unit: TemperatureUnit
+): Series {
+	const count = ms.length;
+	const decimals = largestDecimals(values, count);
+	const kept: Kept = {
+		count: 0,
+		times: new Float64Array(count),
+		scaled: new Int32Array(count),
+		lines: new Int32Array(count)
+	};
+	const missing: number[] = [];
+	const impossible: number[] = [];
+	let last = firstPlausible(values, ms, unit);
+	for (let i = 0; i < count; i++) {
+		const at = ms[i] ?? NaN;
+		const line = lines[i] ?? 0;
+		if (Number.isNaN(at)) continue;
+		if (values.isMissing[i] === 1) {
+			missing.push(line);
+			continue;
+		}
+		const own = values.decimals[i] ?? 0;
+		const mantissa = values.mantissa[i] ?? 0;
+		const celsius = celsiusFromScaled(mantissa, own, unit);
+		if (isImpossible(celsius, mantissa / (powers[own] ?? 1), last)) {
+			impossible.push(line);
+			continue;
+		}
+		last = celsius;
+		kept.times[kept.count] = at;
+		kept.scaled[kept.count] = mantissa * (powers[decimals - own] ?? 1);
+		kept.lines[kept.count++] = line;
+	}
+	return { unit, decimals, missing, impossible, ...inOrder(kept) };
+}
+
+type Ordered = Omit<Series, 'unit' | 'decimals' | 'missing' | 'impossible'>;
+
+function stepsBack({ count, times, lines }: Kept): { back: number[]; down: number } {
+	const back: number[] = [];
+	let down = 0;
+	let latest = -Infinity;
+	for (let i = 0; i < count; i++) {
+		const at = times[i] ?? 0;
+		if (at < latest) back.push(lines[i] ?? 0);
+		if (i > 0 && at < (times[i - 1] ?? 0)) down++;
+		latest = Math.max(latest, at);
+	}
+	return { back, down };
+}
+
+function permutation(kept: Kept, isDescending: boolean, isSorted: boolean): (k: number) => number {
+	if (isSorted) return (k) => k;
+	const { count, times } = kept;
+	const reversed = (k: number): number => count - 1 - k;
+	const base = isDescending ? reversed : (k: number): number => k;
+	const order = Array.from({ length: count }, (_, k) => base(k));
+	order.sort((p, q) => (times[p] ?? 0) - (times[q] ?? 0));
+	return (k) => order[k] ?? 0;
+}
+
+function inOrder(kept: Kept): Ordered {
+	const { back, down } = stepsBack(kept);
+	const isDescending = kept.count > 2 && down > (kept.count - 1) / 2;
+	const at = permutation(kept, isDescending, back.length === 0);
+	const times = new Float64Array(kept.count);
+	const scaled = new Int32Array(kept.count);
+	const lines = new Int32Array(kept.count);
+	const dropped: number[] = [];
+	const conflicting: number[] = [];
+	let n = 0;
+	for (let k = 0; k < kept.count; k++) {
+		const i = at(k);
+		if (n > 0 && times[n - 1] === kept.times[i]) {
+			(scaled[n - 1] === kept.scaled[i] ? dropped : conflicting).push(kept.lines[i] ?? 0);
+			continue;
+		}
+		times[n] = kept.times[i] ?? 0;
+		scaled[n] = kept.scaled[i] ?? 0;
+		lines[n++] = kept.lines[i] ?? 0;
+	}
+	return {
+		times: times.slice(0, n),
+		scaled: scaled.slice(0, n),
+		lines: lines.slice(0, n),
+		dropped,
+		conflicting,
+		resorted: back,
+		isDescending
+	};
+}
