@@ -1,33 +1,6 @@
-import type { LifePoint, Limit, Q10Band, RateModel, Spec } from './spec';
-
-/** What is wrong with a spec's figures; `field` is the path of the figure to correct. */
-export interface SpecFault {
-	readonly code: SpecFaultCode;
-	readonly field: string;
-}
-
-export const specFaultCodes = [
-	'not-a-number',
-	'not-positive',
-	'negative',
-	'below-absolute-zero',
-	'range-upside-down',
-	'q10-below-one',
-	'life-longer-when-warmer',
-	'points-unsorted',
-	'points-too-few',
-	'bands-not-adjoining',
-	'reference-outside-model',
-	'reference-below-chilling',
-	'reference-not-above-minimum',
-	'limits-upside-down',
-	'stops-upside-down',
-	'severity-upside-down',
-	'more-than-full-life'
-] as const;
-export type SpecFaultCode = (typeof specFaultCodes)[number];
-
-const absoluteZeroCelsius = -273.15;
+import type { Limit, Spec } from './spec';
+import { fault, notNegative, positive, temperature, type SpecFault } from './spec-fault';
+import { coverOf, modelFaults } from './validate-model';
 
 type Check = (faults: SpecFault[], spec: Spec) => void;
 
@@ -64,61 +37,6 @@ const checks: readonly Check[] = [
 	}
 ];
 
-function modelFaults(faults: SpecFault[], model: RateModel): void {
-	switch (model.kind) {
-		case 'constant-q10':
-			return q10(faults, model.q10, 'model.q10');
-		case 'two-lives':
-			return pointFaults(faults, [model.lower, model.upper], ['model.lower', 'model.upper']);
-		case 'life-table':
-			return pointFaults(
-				faults,
-				model.points,
-				model.points.map((_, i) => `model.points.${i}`)
-			);
-		case 'banded-q10':
-			return bandFaults(faults, model.bands);
-		case 'arrhenius':
-			return positive(
-				faults,
-				model.activationEnergyKilojoulesPerMole,
-				'model.activationEnergyKilojoulesPerMole'
-			);
-		case 'square-root':
-			return temperature(faults, model.minCelsius, 'model.minCelsius');
-	}
-}
-
-function pointFaults(faults: SpecFault[], points: readonly LifePoint[], fields: readonly string[]): void {
-	if (points.length < 2) fault(faults, 'points-too-few', 'model.points');
-	points.forEach((point, i) => {
-		const before = points[i - 1];
-		temperature(faults, point.celsius, `${fields[i]}.celsius`);
-		positive(faults, point.lifeHours, `${fields[i]}.lifeHours`);
-		if (before === undefined) return;
-		if (point.celsius <= before.celsius) fault(faults, 'points-unsorted', `${fields[i]}.celsius`);
-		else if (point.lifeHours > before.lifeHours)
-			fault(faults, 'life-longer-when-warmer', `${fields[i]}.lifeHours`);
-	});
-}
-
-function bandFaults(faults: SpecFault[], bands: readonly Q10Band[]): void {
-	if (bands.length === 0) fault(faults, 'points-too-few', 'model.bands');
-	bands.forEach((band, i) => {
-		const before = bands[i - 1];
-		const field = `model.bands.${i}`;
-		temperature(faults, band.fromCelsius, `${field}.fromCelsius`);
-		temperature(faults, band.toCelsius, `${field}.toCelsius`);
-		q10(faults, band.q10, `${field}.q10`);
-		if (band.fromCelsius >= band.toCelsius) fault(faults, 'range-upside-down', `${field}.toCelsius`);
-		if (before && band.fromCelsius < before.fromCelsius)
-			fault(faults, 'points-unsorted', `${field}.fromCelsius`);
-		else if (before && band.fromCelsius !== before.toCelsius) {
-			fault(faults, 'bands-not-adjoining', `${field}.fromCelsius`);
-		}
-	});
-}
-
 function referenceFaults(faults: SpecFault[], spec: Spec): void {
 	const { model, referenceCelsius: reference } = spec;
 	const [from, to] = coverOf(model);
@@ -131,23 +49,6 @@ function referenceFaults(faults: SpecFault[], spec: Spec): void {
 	if (spec.chillingCelsius === null) return;
 	temperature(faults, spec.chillingCelsius, 'chillingCelsius');
 	if (spec.chillingCelsius > reference) fault(faults, 'reference-below-chilling', 'chillingCelsius');
-}
-
-/** Temperatures the model itself knows. */
-function coverOf(model: RateModel): readonly [number, number] {
-	if (model.kind === 'life-table') {
-		return [
-			model.points[0]?.celsius ?? -Infinity,
-			model.points[model.points.length - 1]?.celsius ?? Infinity
-		];
-	}
-	if (model.kind === 'banded-q10') {
-		return [
-			model.bands[0]?.fromCelsius ?? -Infinity,
-			model.bands[model.bands.length - 1]?.toCelsius ?? Infinity
-		];
-	}
-	return [-Infinity, Infinity];
 }
 
 function limitFaults(faults: SpecFault[], spec: Spec): void {
@@ -169,28 +70,4 @@ function oneLimit(faults: SpecFault[], limit: Limit, field: string): void {
 	}
 	if (limit.criticalMinutes < limit.majorMinutes)
 		fault(faults, 'severity-upside-down', `${field}.criticalMinutes`);
-}
-
-function fault(faults: SpecFault[], code: SpecFaultCode, field: string): void {
-	faults.push({ code, field });
-}
-
-function positive(faults: SpecFault[], figure: number, field: string): void {
-	if (!Number.isFinite(figure)) fault(faults, 'not-a-number', field);
-	else if (figure <= 0) fault(faults, 'not-positive', field);
-}
-
-function notNegative(faults: SpecFault[], figure: number, field: string): void {
-	if (!Number.isFinite(figure)) fault(faults, 'not-a-number', field);
-	else if (figure < 0) fault(faults, 'negative', field);
-}
-
-function q10(faults: SpecFault[], figure: number, field: string): void {
-	if (!Number.isFinite(figure)) fault(faults, 'not-a-number', field);
-	else if (figure < 1) fault(faults, 'q10-below-one', field);
-}
-
-function temperature(faults: SpecFault[], celsius: number, field: string): void {
-	if (!Number.isFinite(celsius)) fault(faults, 'not-a-number', field);
-	else if (celsius < absoluteZeroCelsius) fault(faults, 'below-absolute-zero', field);
 }
