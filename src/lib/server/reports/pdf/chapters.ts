@@ -54,7 +54,6 @@ function excursionsSection(draft: Draft, chapter: Chapter): Content[] {
 		ledger({
 			title,
 			finding: `${lineNames(chapter.lines)}${limitsText(draft, chapter)}`,
-			width: draft.sheet.mainWidth,
 			columns: [
 				{ head: '', width: 15 },
 				{ head: 'What', width: 53 },
@@ -102,7 +101,7 @@ function excursionRow({ calendar, thermometer }: Draft, excursion: Excursion, or
 		figure(hoursMinutes(excursion.minutes)),
 		figure(thermometer.reading(excursion.extremeCelsius)),
 		figure(thermometer.reading(excursion.meanCelsius)),
-		figure(thermometer.difference(excursion.degreeMinutes, 0)),
+		figure(thermometer.degreeMinutes(excursion.degreeMinutes)),
 		figure(decimal(excursion.costHours, 1), { bold: true }),
 		words(legsTouched(excursion.legs)),
 		words(`${excursion.severity}${doubt}${excursion.isOpen ? ', still open' : ''}`)

@@ -37,7 +37,6 @@ export function photosAndNotes(draft: Draft): Content[] {
 		ledger({
 			title: 'Seen at the door',
 			finding: photos.length === 0 ? null : 'photos are kept with the record and in the evidence bundle',
-			width: draft.sheet.mainWidth,
 			columns: [
 				{ head: '', width: 44 },
 				{ head: 'What', width: '*' },
@@ -68,7 +67,7 @@ export function signatureStrip(draft: Draft): Content {
 			`${zone}, ${calendar.offset(signature.signedAt)}`
 		]
 	] as const;
-	const widths = [0.36, 0.28, 0.36].map((share) => share * (sheet.mainWidth - 36));
+	const widths = [0.36, 0.28, 0.36].map((share) => share * (sheet.mainWidth - 30.5));
 	return {
 		unbreakable: true,
 		stack: [

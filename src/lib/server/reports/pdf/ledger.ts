@@ -13,23 +13,25 @@ interface Ledger {
 	readonly finding: string | null;
 	readonly columns: readonly Column[];
 	readonly rows: readonly (readonly Content[])[];
-	/** The last row is a total: bold by its cells, closed by the ink rule as ever. */
-	readonly width: number;
 }
 
 const titleRows = 1;
 const headRows = 2;
 
 /** Ink opens the table under its title, a hairline parts the rows, ink closes it. */
-const ruled: CustomTableLayout = {
-	hLineWidth: (i, node) => (i === 0 ? 0 : i === titleRows ? 1.1 : i === node.table.body.length ? 0.8 : 0.6),
-	hLineColor: (i, node) => (i === titleRows || i === node.table.body.length ? palette.ink : palette.rule),
-	vLineWidth: () => 0,
-	paddingLeft: (i) => (i === 0 ? 0 : 3),
-	paddingRight: (i, node) => (i === (node.table.widths?.length ?? 0) - 1 ? 0 : 3),
-	paddingTop: (i) => (i === 0 ? 0 : 3.2),
-	paddingBottom: () => 3
-};
+function ruled(columns: readonly Column[]): CustomTableLayout {
+	const isRight = (i: number) => columns[i]?.align === 'right';
+	return {
+		hLineWidth: (i, node) => (i === 0 ? 0 : i === titleRows ? 1.1 : i === node.table.body.length ? 0.8 : 0.6),
+		hLineColor: (i, node) => (i === titleRows || i === node.table.body.length ? palette.ink : palette.rule),
+		vLineWidth: () => 0,
+		// Words after a column of figures need air: the figures end where the words begin.
+		paddingLeft: (i) => (i === 0 ? 0 : isRight(i - 1) && !isRight(i) ? 9 : 3),
+		paddingRight: (i) => (i === columns.length - 1 ? 0 : 3),
+		paddingTop: (i) => (i === 0 ? 0 : 3.2),
+		paddingBottom: () => 3
+	};
+}
 
 /** A section's title: name, and its finding in one line, so that the heads alone tell the story. */
 export function sectionTitle(title: string, finding: string | null): Content {
@@ -69,7 +71,7 @@ export function ledger(table: Ledger): ContentTable {
 			widths: table.columns.map((column) => column.width),
 			body: [title, heads, ...rows]
 		},
-		layout: ruled,
+		layout: ruled(table.columns),
 		margin: [0, 14, 0, 0]
 	};
 }

@@ -1,4 +1,5 @@
 import type { LegUse } from '../../../domain/receiving/assessment';
+import { addUp } from '../../../format';
 import { decimal } from './text';
 
 /** One leg's printed figures, in tenths of an hour, so that rows and columns add up on paper. */
@@ -35,20 +36,12 @@ export function legFigures(legs: readonly LegUse[]): LegFigures[] {
 }
 
 function tenths(hours: readonly (number | null)[]): (number | null)[] {
-	const known = hours.map((value) => (value === null ? null : value * 10));
-	const floors = known.map((value) => (value === null ? null : Math.floor(value)));
-	const total = Math.round(known.reduce<number>((sum, value) => sum + (value ?? 0), 0));
-	let missing = total - floors.reduce<number>((sum, value) => sum + (value ?? 0), 0);
-	const byRemainder = known
-		.flatMap((value, i) => (value === null ? [] : [{ i, remainder: value - Math.floor(value) }]))
-		.sort((a, b) => b.remainder - a.remainder || a.i - b.i);
-	const raised = new Set<number>();
-	for (const { i } of byRemainder) {
-		if (missing <= 0) break;
-		raised.add(i);
-		missing -= 1;
-	}
-	return floors.map((value, i) => (value === null ? null : value + (raised.has(i) ? 1 : 0)));
+	const known = addUp(
+		hours.filter((value) => value !== null),
+		1
+	);
+	let next = 0;
+	return hours.map((value) => (value === null ? null : Math.round((known[next++] ?? 0) * 10)));
 }
 
 /** A column's printed total; null where a leg has no figure. */

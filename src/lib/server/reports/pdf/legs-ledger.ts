@@ -27,7 +27,6 @@ export function legsLedger(draft: Draft, chapter: Chapter): Content[] {
 		ledger({
 			title: 'Legs',
 			finding: `life used against life allowed, h${at}; ${chapter.assessment.logger}, ${lineNames(chapter.lines)}`,
-			width: draft.sheet.mainWidth,
 			columns: [
 				{ head: '', width: 10 },
 				{ head: 'In whose hands', width: '*' },

@@ -4,12 +4,16 @@ import { chapterContent } from './chapters';
 import { photosAndNotes, signatureStrip } from './closing';
 import { firstCounterfoil } from './counterfoil';
 import { firstCounterfoilFoot, laterCounterfoil, verticalNumber } from './counterfoil-foot';
+import { dispositions } from './dispositions';
+import { docketHead } from './docket-head';
 import { draftOf, type Draft } from './draft';
 import { fontFiles } from './fonts';
-import { dispositions, docketHead } from './front';
-import { loggers, reasons, restsOn } from './grounds';
+import { loggers } from './loggers-ledger';
 import { sizePoints } from './palette';
-import type { ReportAttachment, ReportInput } from './report-input';
+import { reasons } from './reasons';
+import { embeddedFiles } from './embedded-files';
+import type { ReportInput } from './report-input';
+import { restsOn } from './rests-on';
 import { cutLine, runningFoot, runningHead } from './running';
 
 const ownFonts = new Set(Object.values(fontFiles).flatMap((files) => [files.normal, files.bold]));
@@ -43,26 +47,11 @@ function documentOf(draft: Draft): TDocumentDefinitions {
 			creationDate: new Date(input.creationAt),
 			modDate: new Date(input.creationAt)
 		},
-		files: Object.fromEntries(
-			input.attachments.map((attachment, i) => [`file${i}`, embedded(attachment, input)])
-		),
+		files: embeddedFiles(input),
 		defaultStyle: { font: 'Barlow', fontSize: sizePoints.table, lineHeight: 1.05 },
 		background: (page) => ({ stack: pageFrame(draft, page) }),
 		header: (page, pages) => runningHead(draft, page, pages),
 		content: body(draft)
-	};
-}
-
-function embedded(attachment: ReportAttachment, input: ReportInput) {
-	const at = new Date(input.creationAt);
-	return {
-		src: `data:${attachment.mediaType};base64,${Buffer.from(attachment.bytes).toString('base64')}`,
-		name: attachment.name,
-		type: attachment.mediaType,
-		description: attachment.description,
-		creationDate: at,
-		modifiedDate: at,
-		relationship: 'Source'
 	};
 }
 

@@ -34,7 +34,7 @@ export function sheetOf(pageSize: ReportInput['pageSize']): Sheet {
 	const stubLeft = cut + 17;
 	const qrSize = 74;
 	const qrTop = height - 62 - qrSize;
-	const sealHeight = 84;
+	const sealHeight = 72;
 	return {
 		name,
 		width,

@@ -1,34 +1,20 @@
 import { DateTime } from 'luxon';
-import { hoursPerDay, type TemperatureUnit } from '../../../domain/units';
+import type { TemperatureUnit } from '../../../domain/units';
+import * as format from '../../../format';
 
-const signs = { celsius: '°C', fahrenheit: '°F', kelvin: 'K' } as const;
-const degreesPerCelsius = { celsius: 1, fahrenheit: 1.8, kelvin: 1 } as const;
-const atZeroCelsius = { celsius: 0, fahrenheit: 32, kelvin: 273.15 } as const;
+/** The report speaks English until its other languages come. */
+const locale = 'en-GB';
 
-/** A number with fixed decimals, thousands set off, a true minus and never a negative nought. */
-export function decimal(value: number, decimals: number): string {
-	const text = Math.abs(value).toFixed(decimals);
-	const [whole = '0', fraction] = text.split('.');
-	const grouped = whole.replace(/\B(?=(\d{3})+$)/gu, ',');
-	const sign = value < 0 && Number(text) !== 0 ? '−' : '';
-	return `${sign}${grouped}${fraction === undefined ? '' : `.${fraction}`}`;
+export { hoursMinutes, range as span } from '../../../format';
+
+/** A figure with fixed decimals, thousands set off, a true minus. */
+export function decimal(value: number, digits: number): string {
+	return format.decimal(value, digits, locale);
 }
 
 /** Life as days, one decimal. */
 export function days(hours: number): string {
-	return decimal(hours / hoursPerDay, 1);
-}
-
-/** An en dash between bounds, but "to" where a minus stands beside it. */
-export function span(low: string, high: string): string {
-	return low.startsWith('−') || high.startsWith('−') ? `${low} to ${high}` : `${low}–${high}`;
-}
-
-/** Minutes as h:min, as tables print durations. */
-export function hoursMinutes(minutes: number): string {
-	const whole = Math.round(Math.abs(minutes));
-	const sign = minutes < 0 && whole !== 0 ? '−' : '';
-	return `${sign}${Math.floor(whole / 60)}:${String(whole % 60).padStart(2, '0')}`;
+	return format.lifeDays(hours, locale);
 }
 
 /** A digest in groups of eight, broken into lines of `perLine` groups: whole on paper. */
@@ -41,14 +27,15 @@ export function hashLines(sha256: string, perLine: number): string {
 
 /** Temperatures in the site's unit. */
 export function thermometer(unit: TemperatureUnit) {
-	const degrees = degreesPerCelsius[unit];
-	const value = (celsius: number) => celsius * degrees + atZeroCelsius[unit];
+	const zero = format.inUnit(0, unit);
+	const degree = format.inUnit(1, unit) - zero;
 	return {
-		sign: signs[unit],
-		value,
-		celsius: (shown: number) => (shown - atZeroCelsius[unit]) / degrees,
-		reading: (celsius: number) => decimal(value(celsius), 1),
-		difference: (celsius: number, decimals = 1) => decimal(celsius * degrees, decimals)
+		sign: format.temperatureSign(unit),
+		value: (celsius: number) => format.inUnit(celsius, unit),
+		celsius: (shown: number) => (shown - zero) / degree,
+		reading: (celsius: number) => format.temperature(celsius, unit, locale),
+		difference: (celsius: number) => format.temperatureSpan(celsius, unit, locale),
+		degreeMinutes: (celsiusMinutes: number) => decimal(celsiusMinutes * degree, 0)
 	};
 }
 

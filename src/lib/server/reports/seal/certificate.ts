@@ -1,4 +1,4 @@
-import { generateKeyPair, randomBytes } from 'node:crypto';
+import { generateKeyPair, randomBytes, X509Certificate } from 'node:crypto';
 import { promisify } from 'node:util';
 import forge from 'node-forge';
 
@@ -111,9 +111,14 @@ export function loadCertificate(p12: Uint8Array, passphrase: string): Certificat
 			forge.asn1.toDer(forge.pki.wrapRsaPrivateKey(forge.pki.privateKeyToAsn1(key))).getBytes()
 		),
 		certificatePem: forge.pki.certificateToPem(own),
-		holder: String(own.subject.getField('CN')?.value ?? ''),
+		holder: commonName(derOf(own)),
 		notAfterAt: own.validity.notAfter
 	};
+}
+
+/** Read by OpenSSL, which knows each string type's letters. */
+function commonName(der: Uint8Array): string {
+	return /^CN=(.*)$/mu.exec(new X509Certificate(der).subject)?.[1] ?? '';
 }
 
 function derOf(certificate: forge.pki.Certificate): Uint8Array {

@@ -1,0 +1,75 @@
+import type { Content } from 'pdfmake/interfaces';
+import type { DocketLineView } from '../../../schemas/docket';
+import type { Draft } from './draft';
+import { ledger, noteBelow } from './ledger';
+import { outcomeMark, outcomeWord } from './marks';
+import { days, decimal, span } from './text';
+import { figure, sentence, words } from './type-styles';
+
+/** Every line with its life against the need and what was decided. */
+export function dispositions(draft: Draft): Content[] {
+	const { docket } = draft;
+	return [
+		ledger({
+			title: 'Dispositions',
+			finding: null,
+			columns: [
+				{ head: '', width: 10 },
+				{ head: 'Product and lot', width: '*' },
+				{ head: 'First pallet, SSCC; GTIN', width: 101 },
+				{ head: 'Cases', width: 28, align: 'right' },
+				{ head: 'Life left, d\nlow to high', width: 50, align: 'right' },
+				{ head: 'Needed,\nd', width: 32, align: 'right' },
+				{ head: 'Disposition', width: 76 }
+			],
+			rows: docket.lines.map(dispositionRow)
+		}),
+		...docket.lines.flatMap(decisionNotes)
+	];
+}
+
+function dispositionRow(line: DocketLineView): Content[] {
+	const life = line.remainingHours;
+	const range = life === null ? '' : span(days(life.low), days(life.high));
+	const pallets = `${line.pallets} ${line.pallets === 1 ? 'pallet' : 'pallets'}`;
+	const name = line.variety === null ? line.product : `${line.product}, ${line.variety}`;
+	const outcome = line.outcome?.outcome ?? 'hold';
+	const cases = line.outcome?.cases ?? line.casesReceived ?? line.casesAdvised;
+	return [
+		figure(String(line.ordinal)),
+		{ stack: [words(name), sentence(`lot ${line.lot}`)] },
+		{
+			stack: [
+				figure(line.firstSscc === null ? '–' : sscc(line.firstSscc), { size: 7.5 }),
+				sentence([line.gtin, pallets].filter(Boolean).join(', '))
+			]
+		},
+		figure(decimal(cases, 0)),
+		life === null
+			? sentence('not known')
+			: { stack: [figure(days(life.value), { bold: true }), figure(range, { size: 8 })] },
+		figure(days(line.neededHours)),
+		{
+			columns: [
+				{ ...outcomeMark(outcome, 8.5), width: 14, margin: [0, 1.4, 0, 0] },
+				{ ...words(outcomeWord(outcome), { bold: true }), width: '*' }
+			]
+		}
+	];
+}
+
+/** Extension digit, company prefix and serial, check digit: as printed under the bars of a pallet label. */
+function sscc(digits: string): string {
+	return /^\d{18}$/u.test(digits)
+		? `${digits.slice(0, 1)} ${digits.slice(1, 8)} ${digits.slice(8, 17)} ${digits.slice(17)}`
+		: digits;
+}
+
+function decisionNotes(line: DocketLineView): Content[] {
+	if (line.outcome === null) return [];
+	const { condition, reason } = line.outcome;
+	return [
+		...(condition === null ? [] : [noteBelow(`Condition, line ${line.ordinal}: ${condition}`)]),
+		...(reason === null ? [] : [noteBelow(`Reason, line ${line.ordinal}: ${reason}`)])
+	];
+}

@@ -1,0 +1,106 @@
+import type { Content } from 'pdfmake/interfaces';
+import type { AssessmentView, DocketLineView } from '../../../schemas/docket';
+import { lineNames, type Draft } from './draft';
+import { ledger, noteBelow } from './ledger';
+import { palette, sizePoints } from './palette';
+import { decimal, hoursMinutes, span } from './text';
+import { figure, sentence, words } from './type-styles';
+
+interface Ground {
+	readonly name: string;
+	readonly figure: string;
+	readonly how: string;
+}
+
+/** Opening balance, gaps, the model's edges, trims and pulp: every assumption with its figure and its source. */
+export function restsOn(draft: Draft): Content[] {
+	const rows = [...shared(draft), ...pulpRows(draft)];
+	if (rows.length === 0) return [];
+	const specs = new Set(
+		draft.chapters.map(({ assessment }) => `${assessment.specName}, version ${assessment.specVersion}`)
+	);
+	const engine = `Engine ${draft.input.frozen.engineVersion}.`;
+	return [
+		ledger({
+			title: 'What it rests on',
+			finding:
+				'the range of life includes the instrument’s, the spec’s and the opening balance’s uncertainty',
+			columns: [
+				{ head: 'Assumption', width: 144 },
+				{ head: 'Figure', width: 62, align: 'right' },
+				{ head: 'How known', width: '*' }
+			],
+			rows: rows.map((ground) => [
+				words(ground.name),
+				figure(ground.figure),
+				sentence(ground.how, { size: sizePoints.table, color: palette.ink })
+			])
+		}),
+		noteBelow(specs.size === 0 ? engine : `Spec ${[...specs].join('; ')}. ${engine}`)
+	];
+}
+
+/** What holds for several lines is said once. */
+function shared(draft: Draft): Ground[] {
+	const groups = new Map<string, { ground: Ground; lines: DocketLineView[] }>();
+	for (const { assessment, lines } of draft.chapters) {
+		for (const ground of assumptions(draft, assessment)) {
+			const key = JSON.stringify(ground);
+			const known = groups.get(key) ?? { ground, lines: [] };
+			groups.set(key, { ground, lines: [...known.lines, ...lines] });
+		}
+	}
+	return [...groups.values()].map(({ ground, lines }) => {
+		const ordered = lines.toSorted((a, b) => a.ordinal - b.ordinal);
+		return { ...ground, name: `${ground.name}, ${lineNames(ordered)}` };
+	});
+}
+
+const openingWords = {
+	declared: 'declared by the supplier',
+	computed: 'computed from time and temperature',
+	undeclared: 'not declared: the spec’s pessimistic figure'
+} as const;
+
+function assumptions({ thermometer }: Draft, assessment: AssessmentView): Ground[] {
+	const { openingHours: opening, openingBasis, gaps } = assessment;
+	const hours = (value: number) => decimal(value, 1);
+	const basis = openingBasis === '' ? '' : `, ${openingBasis}`;
+	const bounds = span(hours(opening.low), hours(opening.high));
+	const accuracy = `±${thermometer.difference(assessment.accuracyCelsius)} ${thermometer.sign}`;
+	const unobserved = `${gaps.length === 1 ? '1 gap' : `${gaps.length} gaps`}, bridged linearly; ${hours(assessment.unobservedUsedHours)} h of life`;
+	const stretches = [
+		['Below the model', assessment.belowModelHours, 'rate held at the end of the range'],
+		['Above the model', assessment.aboveModelHours, 'rate held at the end of the range'],
+		['Below the chilling threshold', assessment.chilledHours, 'cold earned no credit'],
+		['Trimmed', assessment.trimmedHours, 'readings that were not the journey; they stay visible']
+	] as const;
+	return [
+		{
+			name: 'Opening balance',
+			figure: `${hours(opening.value)} h`,
+			how: `${openingWords[assessment.openingKind]}${basis}; ${bounds} h`
+		},
+		{ name: 'Instrument’s accuracy', figure: accuracy, how: 'from the register of loggers' },
+		...(assessment.unobservedHours > 0
+			? [{ name: 'Unobserved', figure: `${hours(assessment.unobservedHours)} h`, how: unobserved }]
+			: []),
+		...stretches.flatMap(([name, value, how]) =>
+			value > 0 ? [{ name, figure: `${hoursMinutes(value * 60)} h`, how }] : []
+		)
+	];
+}
+
+function pulpRows({ docket, thermometer, calendar }: Draft): Ground[] {
+	return docket.pulp.map((pulp) => {
+		const line = docket.lines.find((candidate) => candidate.id === pulp.lineId);
+		const lot = pulp.lot === null ? '' : `, lot ${pulp.lot}`;
+		const where = [pulp.position, pulp.caseLabel, pulp.instrument].filter(Boolean).join(', ');
+		const when = `${calendar.day(pulp.takenAt)} ${calendar.time(pulp.takenAt)}`;
+		return {
+			name: `Pulp at the door${line === undefined ? lot : `, line ${line.ordinal}`}`,
+			figure: `${thermometer.reading(pulp.celsius)} ${thermometer.sign}`,
+			how: `${where}, ${when}, written “${pulp.text}”`
+		};
+	});
+}
