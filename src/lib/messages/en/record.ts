@@ -1,0 +1,53 @@
+import { z } from 'zod';
+
+const anyData = z.record(z.string(), z.unknown());
+
+const outcomeWords: Record<string, string> = {
+	accepted: 'accepted',
+	conditions: 'accepted with conditions',
+	part: 'accepted in part',
+	rejected: 'rejected'
+};
+
+/** What each event says on a docket's record; the figures come from the entry's payload. */
+const sentences: Record<string, (data: Record<string, unknown>) => string> = {
+	'shipment.created': () => 'Docket opened',
+	'shipment.changed': () => 'Papers changed',
+	'shipment.cancelled': () => 'Load cancelled',
+	'arrival.logged': () => 'Arrival logged',
+	'pulp.recorded': ({ position }) => `Pulp reading, ${position}`,
+	'photo.added': ({ kind }) => `Photo added, ${kind}`,
+	'note.written': () => 'Note written',
+	'read.received': ({ fileName }) => `Export received, ${fileName}`,
+	'read.answered': () => 'Question about a file answered',
+	'read.kept': ({ readings }) => `Read kept, ${readings} readings`,
+	'read.asked-qa': () => 'Question passed to QA',
+	'read.withdrawn': () => 'Read withdrawn',
+	'logger.assigned': ({ serial }) => `Logger ${serial} assigned`,
+	'trim.made': () => 'Trim made',
+	'trim.undone': () => 'Trim undone',
+	'assessment.made': () => 'Life recomputed',
+	'hold.put': () => 'Put on hold',
+	'hold.lifted': () => 'Hold lifted',
+	'disposition.signed': ({ version, verdict }) =>
+		`Version ${version} signed, ${outcomeWords[String(verdict)] ?? verdict}`,
+	'disposition.refused': () => 'Signature refused',
+	'report.sealed': () => 'Receiving report sealed',
+	'report.opened': () => 'Receiving report opened',
+	'notice.queued': ({ number }) => `Notice ${number} written`,
+	'notice.sent': () => 'Notice sent',
+	'notice.failed': () => 'Notice could not be sent',
+	'notice.opened': () => 'Notice opened by the supplier',
+	'link.sent': () => 'Link sent',
+	'link.used': () => 'Link used',
+	'answer.given': ({ kind }) => (kind === 'dispute' ? 'Supplier disputes' : 'Supplier acknowledges'),
+	'claim.opened': ({ number }) => `Claim ${number} opened`,
+	'claim.changed': () => 'Claim changed',
+	'evidence.taken': () => 'Evidence bundle taken'
+};
+
+/** One line for a record: what happened. A payload blanked by retention leaves the kind of event. */
+export function recordText(type: string, payload: string | null): string {
+	const data = payload === null ? {} : anyData.parse(JSON.parse(payload));
+	return sentences[type]?.(data) ?? type.replace('.', ' ');
+}

@@ -1,0 +1,66 @@
+import type { DocketView, FrozenDocket, FrozenSignature, SeriesView } from '../../schemas/docket';
+import { engineVersion } from '../../domain/receiving/engine-version';
+import { sha256Hex } from '../storage/sha256';
+import type { DispositionInput } from '../../schemas/disposition';
+
+type Facts = FrozenDocket['docket'];
+
+function factsOf(docket: DocketView): Facts {
+	const { signatures: _s, notices: _n, clocks: _c, claimId: _i, record: _r, stage: _g, ...facts } = docket;
+	return facts;
+}
+
+/**
+ * The facts a decision rests on, as text: what the signer sees hashed, and what must still be so when the signature
+ * falls. Earlier outcomes and verdicts are left out: they are what is being decided.
+ */
+export function evidenceText(docket: DocketView): string {
+	const facts = factsOf(docket);
+	const lines = facts.lines.map(({ outcome: _o, ...line }) => line);
+	return JSON.stringify({ ...facts, lines, verdict: null, hold: null, engineVersion });
+}
+
+export function evidenceSha256(docket: DocketView): string {
+	return sha256Hex(evidenceText(docket));
+}
+
+interface Decision {
+	docket: DocketView;
+	series: SeriesView[];
+	input: DispositionInput;
+	verdict: DocketView['verdict'];
+	signature: FrozenSignature;
+}
+
+/** The record as it will be kept: facts, outcomes and signature in one text, whose hash the report prints. */
+export function freeze({ docket, series, input, verdict, signature }: Decision): {
+	text: string;
+	sha256: string;
+} {
+	const facts = factsOf(docket);
+	const lines = facts.lines.map((line) => {
+		const chosen = input.lines.find((row) => row.lineId === line.id);
+		if (!chosen) return line;
+		const { outcome, condition, reason } = chosen;
+		return {
+			...line,
+			outcome: {
+				outcome,
+				condition,
+				reason,
+				cases: line.casesReceived ?? line.casesAdvised,
+				pallets: line.pallets
+			}
+		};
+	});
+	const frozen: FrozenDocket = {
+		docket: { ...facts, lines, verdict },
+		series,
+		engineVersion,
+		frozenAt: signature.signedAt,
+		evidenceSha256: evidenceSha256(docket),
+		signature
+	};
+	const text = JSON.stringify(frozen);
+	return { text, sha256: sha256Hex(text) };
+}

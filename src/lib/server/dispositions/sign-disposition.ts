@@ -1,0 +1,158 @@
+import { v7 as uuid } from 'uuid';
+import type { DocketView, FrozenSignature } from '../../schemas/docket';
+import type { DispositionInput } from '../../schemas/disposition';
+import { checkSigningPassword } from '../accounts/check-signing-password';
+import type { Context } from '../context';
+import { Clock } from '../db/models/clock';
+import { Disposition } from '../db/models/disposition';
+import { DispositionLine } from '../db/models/disposition-line';
+import { Hold } from '../db/models/hold';
+import { Shipment } from '../db/models/shipment';
+import { inTransaction, type Writing } from '../db/transaction';
+import { docketView } from '../dockets/get-docket';
+import { verdictOf } from '../dockets/stage';
+import { queueNotice } from '../notices/queue-notice';
+import { authorizeShipment } from '../policies';
+import { frozenSeries } from './frozen-series';
+import { checkDecision } from './check-decision';
+import { freeze } from './freeze';
+
+/** Locks the docket first, then reads it: what is read after the lock is what the signature falls on. */
+async function lockDocket(
+	ctx: Context,
+	number: string,
+	{ transaction }: Writing
+): Promise<{ shipment: Shipment; docket: DocketView }> {
+	const shipment = await Shipment.findOne({ where: { number }, transaction, lock: transaction.LOCK.UPDATE });
+	authorizeShipment(ctx, 'disposition.sign', shipment);
+	const row = shipment as Shipment;
+	return { shipment: row, docket: await docketView(row, ctx.now, transaction) };
+}
+
+async function keepDecision(
+	w: Writing,
+	docket: DocketView,
+	input: DispositionInput,
+	signature: FrozenSignature
+) {
+	const { transaction } = w;
+	const verdict = verdictOf(input.lines.map((line) => line.outcome));
+	const frozen = freeze({
+		docket,
+		series: await frozenSeries(docket, transaction),
+		input,
+		verdict,
+		signature
+	});
+	await Disposition.create(
+		{
+			id: signature.dispositionId,
+			shipmentId: docket.id,
+			version: signature.version,
+			verdict,
+			reasons: input.reasons,
+			amendmentReason: input.amendmentReason,
+			meaning: input.meaning,
+			signedBy: signature.signedById,
+			signedName: signature.signedBy,
+			signedTitle: signature.signedByTitle,
+			signedAt: new Date(signature.signedAt),
+			zone: signature.zone,
+			frozen: frozen.text,
+			frozenSha256: frozen.sha256
+		},
+		{ transaction }
+	);
+	for (const line of docket.lines) {
+		const chosen = input.lines.find((row) => row.lineId === line.id);
+		if (!chosen) continue;
+		await DispositionLine.create(
+			{
+				id: uuid(),
+				dispositionId: signature.dispositionId,
+				lineId: line.id,
+				outcome: chosen.outcome,
+				cases: line.casesReceived ?? line.casesAdvised,
+				pallets: line.pallets,
+				conditionText: chosen.condition,
+				reason: chosen.reason,
+				assessmentId: docket.assessments.find((a) => a.lineId === line.id && a.isGoverning)?.id ?? null
+			},
+			{ transaction }
+		);
+	}
+	return { verdict, frozenSha256: frozen.sha256 };
+}
+
+/** What a signature changes on the docket itself: it is decided, no longer held, and no rejection clock runs for goods taken. */
+async function closeDocket(
+	{ transaction }: Writing,
+	ctx: Context,
+	shipment: Shipment,
+	verdict: Shipment['verdict']
+): Promise<void> {
+	await shipment.update({ decidedAt: ctx.now, verdict, version: shipment.version + 1 }, { transaction });
+	await Hold.update(
+		{ liftedAt: ctx.now, liftedBy: ctx.actor.id },
+		{ where: { shipmentId: shipment.id, liftedAt: null }, transaction }
+	);
+	if (verdict === 'accepted' || verdict === 'conditions')
+		await Clock.update(
+			{ metAt: ctx.now, metBy: 'nothing was refused' },
+			{ where: { shipmentId: shipment.id, claimId: null, metAt: null }, transaction }
+		);
+}
+
+/**
+ * Signs what becomes of a load: freezes the docket with its figures, and writes report and notice as jobs, all in one
+ * transaction. A later signature is a new version with a reason; the old one stays.
+ * @throws Refusal `not-found`, `not-allowed`, `wrong-password`, `locked`, `not-arrived`, `already-signed`,
+ * `changed-meanwhile`, `invalid`
+ */
+export async function signDisposition(
+	ctx: Context,
+	number: string,
+	input: DispositionInput
+): Promise<{ version: number }> {
+	authorizeShipment(ctx, 'disposition.sign', await Shipment.findOne({ where: { number } }));
+	const signer = await checkSigningPassword(ctx, input.password);
+	const dispositionId = uuid();
+	return inTransaction(ctx, async (w) => {
+		const { shipment, docket } = await lockDocket(ctx, number, w);
+		checkDecision(docket, input);
+		const signature: FrozenSignature = {
+			dispositionId,
+			version: docket.signatures.length + 1,
+			signedById: signer.id,
+			signedBy: signer.name,
+			signedByTitle: signer.title,
+			meaning: input.meaning,
+			signedAt: ctx.now.toISOString(),
+			zone: docket.site.zone,
+			reasons: input.reasons,
+			amendmentReason: input.amendmentReason
+		};
+		const { verdict, frozenSha256 } = await keepDecision(w, docket, input, signature);
+		await closeDocket(w, ctx, shipment, verdict);
+		w.record(
+			'disposition.signed',
+			{ scope: 'shipment', id: shipment.id },
+			{
+				dispositionId,
+				version: signature.version,
+				verdict,
+				meaning: input.meaning,
+				frozenSha256,
+				outcomes: docket.lines.map((line) => ({
+					lineId: line.id,
+					outcome: input.lines.find((row) => row.lineId === line.id)?.outcome ?? 'hold',
+					cases: line.casesReceived ?? line.casesAdvised
+				})),
+				amendmentReason: input.amendmentReason
+			}
+		);
+		w.enqueue('report', { dispositionId }, `report ${dispositionId}`);
+		if (input.notify) await queueNotice(w, ctx, shipment, dispositionId);
+		return { version: signature.version };
+	});
+}

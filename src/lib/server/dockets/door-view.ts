@@ -1,0 +1,89 @@
+import { celsiusFromFahrenheit } from '../../domain/units';
+import type { ArrivalView, DocketView, HandoverView, PartyView, PulpView } from '../../schemas/docket';
+import type { PulpReading } from '../db/models/pulp-reading';
+import type { DocketRows } from './load-rows';
+
+const nameOf = (rows: DocketRows, userId: string) =>
+	rows.users.find((user) => user.id === userId)?.name ?? 'somebody';
+
+export function partyView(rows: DocketRows, partnerId: string | null): PartyView | null {
+	const partner = rows.partners.find((candidate) => candidate.id === partnerId);
+	return partner
+		? { id: partner.id, name: partner.name, gln: partner.gln, note: partner.address || null }
+		: null;
+}
+
+export function arrivalView(rows: DocketRows): ArrivalView | null {
+	const { arrival, shipment } = rows;
+	if (!arrival) return null;
+	return {
+		arrivedAt: arrival.arrivedAt.toISOString(),
+		dock: shipment.dock,
+		sealFound: arrival.sealFound,
+		isSealIntact: arrival.isSealIntact,
+		setPointCelsius: arrival.setPointCelsius,
+		returnAirCelsius: arrival.returnAirCelsius,
+		conditionNote: arrival.conditionNote || null,
+		driverName: arrival.driverName,
+		hasDriverSignature: arrival.driverSignatureId !== null,
+		loggedBy: nameOf(rows, arrival.loggedBy)
+	};
+}
+
+export function pulpCelsius({ degrees, unit }: Pick<PulpReading, 'degrees' | 'unit'>): number {
+	return unit === 'celsius' ? degrees : celsiusFromFahrenheit(degrees);
+}
+
+export function pulpViews(rows: DocketRows): PulpView[] {
+	return rows.pulp.map((row) => ({
+		id: row.id,
+		lineId: row.lineId,
+		lot: rows.lines.find((line) => line.id === row.lineId)?.lot ?? null,
+		position: row.position,
+		caseLabel: row.caseLabel,
+		celsius: pulpCelsius(row),
+		text: `${row.degrees.toFixed(1)} ${row.unit === 'celsius' ? '°C' : '°F'}`,
+		instrument: row.instrument,
+		takenAt: row.takenAt.toISOString()
+	}));
+}
+
+export function handoverViews(rows: DocketRows): HandoverView[] {
+	return rows.handovers.map((row) => ({
+		id: row.id,
+		ordinal: row.ordinal,
+		holder: row.holder,
+		place: row.place,
+		plannedAt: row.plannedAt?.toISOString() ?? null,
+		actualAt: row.actualAt?.toISOString() ?? null,
+		setPointCelsius: row.setPointCelsius,
+		source: row.source
+	}));
+}
+
+export function photoViews(rows: DocketRows): DocketView['photos'] {
+	return rows.photos.map((row) => ({
+		id: row.id,
+		caption: row.caption,
+		kind: row.kind,
+		by: nameOf(rows, row.takenBy),
+		at: row.takenAt.toISOString(),
+		bytes: rows.files.find((file) => file.id === row.fileId)?.bytes ?? 0
+	}));
+}
+
+export function noteViews(rows: DocketRows): DocketView['notes'] {
+	return rows.notes.map((row) => ({
+		id: row.id,
+		text: row.text,
+		by: nameOf(rows, row.writtenBy),
+		at: row.writtenAt.toISOString()
+	}));
+}
+
+export function holdView(rows: DocketRows): DocketView['hold'] {
+	const hold = rows.holds.find((row) => row.liftedAt === null);
+	return hold
+		? { sinceAt: hold.putAt.toISOString(), by: nameOf(rows, hold.putBy), reason: hold.reason }
+		: null;
+}
