@@ -1,0 +1,70 @@
+import { v7 as uuid } from 'uuid';
+import type { ShipmentInput } from '../../schemas/shipment-form';
+import { isSystem, type Context } from '../context';
+import { Handover } from '../db/models/handover';
+import { LoggerTrip } from '../db/models/logger-trip';
+import { Pallet } from '../db/models/pallet';
+import { Shipment } from '../db/models/shipment';
+import { ShipmentLine } from '../db/models/shipment-line';
+import { inTransaction } from '../db/transaction';
+import { authorize } from '../policies';
+import { Refusal } from '../refusals';
+import { docketRows, type DocketRows } from './docket-rows';
+import { nextDocketNumber } from './next-number';
+import { getOwnSite } from './own-site';
+import { preparePapers } from './prepare-papers';
+import type { Transaction } from 'sequelize';
+
+/** How a docket is named in an answer. */
+export interface DocketName {
+	id: string;
+	number: string;
+}
+
+async function insertRows(rows: DocketRows, transaction: Transaction): Promise<void> {
+	await ShipmentLine.bulkCreate(rows.lines, { transaction });
+	await Pallet.bulkCreate(rows.pallets, { transaction });
+	await Handover.bulkCreate(rows.handovers, { transaction });
+	await LoggerTrip.bulkCreate(rows.trips, { transaction });
+}
+
+/** Opens a docket from its papers, under the next number of the site. The same id again answers the docket it made. */
+export async function createShipment(
+	ctx: Context,
+	siteId: string,
+	input: ShipmentInput,
+	by: 'hand' | 'import' | 'seed' = 'hand'
+): Promise<DocketName> {
+	authorize(ctx, 'shipment.create');
+	const site = await getOwnSite(ctx, siteId);
+	// Rows of another docket are nobody's to take over.
+	const prepared = withoutIds(await preparePapers(site, input));
+	const id = input.id ?? uuid();
+	const rows = docketRows(prepared, id);
+
+	return inTransaction(ctx, async ({ transaction, record }) => {
+		const number = await nextDocketNumber(site, ctx.now, transaction);
+		// The series' lock has made requests that were sent twice wait for each other.
+		const known = await Shipment.findByPk(id, { transaction });
+		if (known && known.siteId !== site.id) throw new Refusal('duplicate');
+		if (known) return { id, number: known.number };
+		const createdBy = isSystem(ctx.actor) ? null : ctx.actor.id;
+		await Shipment.create(
+			{ ...prepared.papers, id, siteId: site.id, number, createdBy, createdAt: ctx.now },
+			{ transaction }
+		);
+		await insertRows(rows, transaction);
+		record('shipment.created', { scope: 'shipment', id }, { number, by });
+		return { id, number };
+	});
+}
+
+function withoutIds(prepared: Awaited<ReturnType<typeof preparePapers>>): typeof prepared {
+	const blank = <Row extends { id: string | null }>(rows: Row[]) => rows.map((row) => ({ ...row, id: null }));
+	return {
+		...prepared,
+		lines: blank(prepared.lines),
+		handovers: blank(prepared.handovers),
+		loggers: blank(prepared.loggers)
+	};
+}
