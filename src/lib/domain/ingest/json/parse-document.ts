@@ -6,6 +6,8 @@ export type JsonDocument =
 	| { readonly root: JsonNode; readonly cutAtLine: number | null }
 	| { readonly code: RefusalCode; readonly line: number | null; readonly found: string | null };
 
+// Record separators begin each value of a JSON text sequence (RFC 7464).
+// eslint-disable-next-line no-control-regex
 const space = /[\s,\ufeff\u001e]*/y;
 
 /** A JSON text, or JSON Lines: values one after the other, taken as one list. A last line cut short is dropped, told. */

@@ -99,7 +99,7 @@ function readTime(into: Stamp): boolean {
 		take(next++);
 		if (next < tokens.count && (before(next) === point || before(next) === comma || before(next) === colon)) {
 			ms += Math.floor((value(next) * 1000) / 10 ** digitsOf(next));
-			take(next++);
+			take(next);
 		}
 	}
 	for (const word of tokens.words) {

@@ -1,0 +1,78 @@
+import type { Choice, Question, QuestionCode } from '../../domain/ingest/ingestion';
+
+const months = [
+	'January',
+	'February',
+	'March',
+	'April',
+	'May',
+	'June',
+	'July',
+	'August',
+	'September',
+	'October',
+	'November',
+	'December'
+];
+
+/** `1st`, `2nd`, `3rd`, `4th`; eleven to thirteen are `th`. */
+export function ordinal(day: number): string {
+	const tens = day % 100;
+	if (tens >= 11 && tens <= 13) return `${day}th`;
+	return `${day}${{ 1: 'st', 2: 'nd', 3: 'rd' }[day % 10] ?? 'th'}`;
+}
+
+/** The day that two numbers of a date are in one order: `the 3rd of April`. */
+export function dayInWords(subject: string, order: string): string {
+	const [first = 0, second = 0] = (subject.match(/\d+/g) ?? []).map(Number);
+	if (order === 'ymd') return `${months[second - 1] ?? second} ${first < 100 ? 2000 + first : first}`;
+	const [day, month] = order === 'mdy' ? [second, first] : [first, second];
+	return `the ${ordinal(day)} of ${months[month - 1] ?? month}`;
+}
+
+function listed(parts: readonly string[]): string {
+	return parts.length < 2 ? (parts[0] ?? '') : `${parts.slice(0, -1).join(', ')} or ${parts.at(-1)}`;
+}
+
+const titles: Readonly<Record<QuestionCode, (question: Question) => string>> = {
+	'date-order': ({ subject, choices }) =>
+		`Is ${subject} ${listed(choices.map(({ label }) => dayInWords(subject, label)))}?`,
+	unit: ({ subject, choices }) =>
+		`Is ${subject} in ${listed(choices.map(({ label }) => unitWords[label] ?? label))}?`,
+	zone: () => 'Which time zone are the times in?',
+	'temperature-column': () => 'Which column is the temperature of the goods?',
+	interval: () => 'How far apart are the readings?',
+	start: () => 'When did the logger start?'
+};
+
+const unitWords: Readonly<Record<string, string>> = { celsius: '°C', fahrenheit: '°F', kelvin: 'K' };
+
+const whys: Readonly<Record<string, string>> = {
+	'all-one-day': 'Every row is on one day, so the file cannot tell.',
+	'all-days-up-to-12': 'No day is over 12 and both readings run on, so the file cannot tell.',
+	'no-unit': 'The file names no unit, so the figures alone would have to tell.',
+	'no-zone': 'The file gives local times without saying where.',
+	'several-temperatures': 'The file has several temperatures and does not say which rode with the goods.',
+	'no-times': 'The rows carry no time of their own.'
+};
+
+/** The question itself, used as the title of its page. */
+export function questionTitle(question: Question): string {
+	return titles[question.code](question);
+}
+
+/** Why the file cannot tell. */
+export function questionWhy({ why }: Question): string {
+	return whys[why] ?? '';
+}
+
+/** What one choice is called: the day in words, the unit, the column, the interval. */
+export function choiceLabel({ code, subject }: Question, { label }: Choice): string {
+	if (code === 'date-order') {
+		const words = dayInWords(subject, label);
+		return words.charAt(0).toUpperCase() + words.slice(1);
+	}
+	if (code === 'unit') return unitWords[label] ?? label;
+	if (code === 'interval') return `Every ${label} min`;
+	return code === 'start' && label === 'journey' ? 'When the load was loaded' : label;
+}
