@@ -2,6 +2,9 @@ import { decodeBytes } from './decode/decode-bytes';
 import { tableFromText } from './delimited/table-from-text';
 import type { Ingestion, ReadContext } from './ingestion';
 import { parseDocument } from './json/parse-document';
+import { tableFromEpcis } from './json/epcis';
+import type { JsonNode } from './json/json-node';
+import { isSenml, tableFromSenml } from './json/senml';
 import { tableFromJson } from './json/table-from-json';
 import { readTable } from './read/read-table';
 import { refused } from './read/refusals';
@@ -27,7 +30,7 @@ function readDelimited(text: string, encoding: string, context: ReadContext): In
 function readJson(text: string, encoding: string, context: ReadContext): Ingestion {
 	const document = parseDocument(text);
 	if ('code' in document) return refused(document.code, document.line, document.found);
-	const table = tableFromJson(document.root, text);
+	const table = standardTable(document.root, text) ?? tableFromJson(document.root, text);
 	if ('code' in table) return refused(table.code, table.line, table.found);
 	const ingestion = readTable(table, encoding, context);
 	if (ingestion.kind !== 'ok' || document.cutAtLine === null) return ingestion;
@@ -36,4 +39,13 @@ function readJson(text: string, encoding: string, context: ReadContext): Ingesti
 		...ingestion,
 		understanding: { ...ingestion.understanding, oddities: [...ingestion.understanding.oddities, cut] }
 	};
+}
+
+/** Open standards are read as they say, before anything is inferred. */
+function standardTable(root: JsonNode, text: string): ReturnType<typeof tableFromSenml> | null {
+	return isSenml(root)
+		? tableFromSenml(root, text)
+		: text.includes('sensorElementList')
+			? tableFromEpcis(root, text)
+			: null;
 }

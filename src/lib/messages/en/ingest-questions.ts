@@ -53,7 +53,8 @@ const whys: Readonly<Record<string, string>> = {
 	'no-unit': 'The file names no unit, so the figures alone would have to tell.',
 	'no-zone': 'The file gives local times without saying where.',
 	'several-temperatures': 'The file has several temperatures and does not say which rode with the goods.',
-	'no-times': 'The rows carry no time of their own.'
+	'no-times': 'The rows carry no time of their own.',
+	'relative-times': 'The file counts its times back from a moment it does not name.'
 };
 
 /** The question itself, used as the title of its page. */
@@ -74,5 +75,6 @@ export function choiceLabel({ code, subject }: Question, { label }: Choice): str
 	}
 	if (code === 'unit') return unitWords[label] ?? label;
 	if (code === 'interval') return `Every ${label} min`;
-	return code === 'start' && label === 'journey' ? 'When the load was loaded' : label;
+	if (code !== 'start') return label;
+	return label === 'upload' ? 'Back from the upload' : 'When the load was loaded';
 }

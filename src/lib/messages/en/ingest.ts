@@ -107,7 +107,7 @@ const oddities: Readonly<Record<Oddity['code'], Say>> = {
 	'date-order-by-journey': (_count, detail) =>
 		`Dates are read ${order(detail)}: only so do they fall into this journey`,
 	'date-order-by-upload': (_count, detail) =>
-		`Dates are read ${order(detail)}: otherwise they would lie in the future`,
+		`Dates are read ${order(detail)}: otherwise they would lie in the future or years back`,
 	'header-repeated': plural(
 		'repeated line of column heads, not read',
 		'repeated lines of column heads, not read'
@@ -166,7 +166,7 @@ export const orderByTexts: Readonly<Record<string, string>> = {
 	continuity: 'Only so do the readings run on without leaps',
 	declared: 'The file states its own date format, start or end',
 	journey: 'Only so do the readings fall into this journey',
-	upload: 'Otherwise the readings would lie in the future',
+	upload: 'Otherwise the readings would lie in the future or years back',
 	answer: 'Answered at the dock',
 	'month-name': 'Months are written as words'
 };

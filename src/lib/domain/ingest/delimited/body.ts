@@ -70,6 +70,8 @@ export function findBody(rows: RawRows): Body | null {
 		header = rowAbove(rows, header);
 	}
 	if (header !== null && !looksLikeHeader(rows.cells(header), width)) header = null;
+	// "Time;°C" is a row of units only below a row of heads; alone it is the heads.
+	if (header === null && units !== null) [header, units] = [units, null];
 	return { first, header, units, isTimed: timed >= 0 };
 }
 

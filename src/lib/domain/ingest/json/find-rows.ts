@@ -37,6 +37,14 @@ function spread<T>(items: readonly T[], wanted: number): T[] {
 	return items.filter((_, i) => i % step === 0).slice(0, wanted + 1);
 }
 
+/** Readings of a list inside: the object around them is then no row itself. */
+function isListOfReadings(node: JsonNode): boolean {
+	if (isObject(node)) return node.values.some(isListOfReadings);
+	if (!isArray(node) || node.items.length < 2) return false;
+	const timed = node.items.slice(0, 3).filter((item) => kindsIn(item, 0).moments > 0);
+	return timed.length >= 2;
+}
+
 function listKind(array: JsonArray): RowSource['kind'] | null {
 	const sample = spread(array.items, 20).filter((item) => item !== null);
 	if (sample.length === 0) return null;

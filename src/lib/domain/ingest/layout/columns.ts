@@ -12,6 +12,8 @@ export interface Column {
 	readonly name: string;
 	readonly meaning: HeaderMeaning;
 	readonly unit: TemperatureUnit | null;
+	/** Unit as written in a row of units; empty without one. */
+	readonly unitText: string;
 	/** Share of the sampled rows whose cell is of the kind. */
 	readonly share: Readonly<Record<CellKind, number>>;
 	/** Smallest and largest number of the sample, NaN without any. */
@@ -64,6 +66,7 @@ function columnOf(table: Table, index: number, tally: Tally, rows: number): Colu
 		name,
 		meaning: meaningOf(name),
 		unit: unitWithin(name) ?? ownUnit,
+		unitText: (table.units[index] ?? '').trim(),
 		share,
 		low: numbers.length === 0 ? NaN : Math.min(...numbers),
 		high: numbers.length === 0 ? NaN : Math.max(...numbers),
@@ -111,5 +114,8 @@ export function profileColumns(table: Table): Column[] {
 
 /** Quantity of a value column: what its head says, else temperature where its unit is one, else not known. */
 export function quantityOf(column: Column): Quantity | null {
-	return column.meaning.quantity ?? (column.unit === null ? null : 'temperature');
+	if (column.meaning.quantity !== null) return column.meaning.quantity;
+	if (column.unit !== null) return 'temperature';
+	// A unit of something else (%RH, lx, V) explains the column as well as its head would.
+	return column.unitText === '' ? null : (meaningOf(column.unitText).quantity ?? 'other');
 }

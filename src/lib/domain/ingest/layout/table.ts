@@ -7,7 +7,7 @@ export interface Entry {
 
 /** Readings as rows of cells, whatever the file was written in. Rows are split when asked for, not kept. */
 export interface Table {
-	readonly kind: 'delimited' | 'json';
+	readonly kind: 'delimited' | 'json' | 'senml' | 'epcis';
 	readonly delimiter: string | null;
 	/** Column heads; JSON keys; empty when the file has none. */
 	readonly header: readonly string[];

@@ -43,7 +43,7 @@ function keepTime(times: GatheredTimes, at: number, time: RowTime): void {
 	times.a[at] = stamp.a;
 	times.b[at] = stamp.b;
 	times.c[at] = stamp.c;
-	times.isSettled[at] = stamp.shape === 'open' ? 0 : 1;
+	times.isSettled[at] = stamp.shape === 'open' ? 0 : stamp.shape === 'named' ? 2 : 1;
 	times.hasDate[at] = stamp.shape === 'none' ? 0 : 1;
 	times.msOfDay[at] = stamp.msOfDay;
 	times.offsetMinutes[at] = stamp.offsetMinutes;

@@ -2,7 +2,7 @@ import type { TemperatureUnit } from '../../units';
 
 /** Times of all rows as numbers, before the order of day and month and the zone are known. Parallel to the rows kept. */
 export interface GatheredTimes {
-	/** Date numbers as they stand; `settled` rows are year, month, day. */
+	/** Date numbers as they stand. `isSettled`: 0 order open, 1 year first, 2 month by name; a, b, c are then year, month, day. */
 	readonly a: Int16Array;
 	readonly b: Uint8Array;
 	readonly c: Int16Array;

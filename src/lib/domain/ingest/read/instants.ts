@@ -55,7 +55,7 @@ function localTimes(gathered: Gathered, order: DateOrder | null): Float64Array {
 			times.a[i] ?? 0,
 			times.b[i] ?? 0,
 			times.c[i] ?? 0,
-			times.isSettled[i] === 1
+			times.isSettled[i] !== 0
 		];
 		const rowKey = ((isSettled ? 1 : 0) * 100_000 + a) * 1e8 + b * 1e5 + c;
 		if (rowKey !== key) {

@@ -21,7 +21,7 @@ export function openDaysOf({ count, times }: Gathered): OpenDay[] {
 	const days: OpenDay[] = [];
 	let rows = 0;
 	for (let i = 0; i < count; i++) {
-		if (times.isSettled[i] === 1) continue;
+		if (times.isSettled[i] !== 0) continue;
 		rows++;
 		const [a, b, c] = [times.a[i] ?? 0, times.b[i] ?? 0, times.c[i] ?? 0];
 		const last = days.at(-1);
@@ -99,9 +99,17 @@ function byJourney(spans: readonly Span[], context: ReadContext): readonly Span[
 	return fits.length > 0 ? fits : spans;
 }
 
+const msPerYear = 365 * msPerDay;
+/** A load read years after it travelled is out of the question where the other order says this year. */
+const recentYears = 1;
+const staleYears = 3;
+
 function byUpload(spans: readonly Span[], context: ReadContext): readonly Span[] {
 	const past = spans.filter(({ toMs }) => toMs - msPerDay <= context.uploadedMs + msPerDay);
-	return past.length > 0 ? past : spans;
+	const left = past.length > 0 ? past : spans;
+	const ageYears = ({ toMs }: Span): number => (context.uploadedMs - toMs) / msPerYear;
+	const isRecent = left.some((span) => Math.abs(ageYears(span)) < recentYears);
+	return isRecent ? left.filter((span) => ageYears(span) < staleYears) : left;
 }
 
 /** Settles day and month by the evidence in the agreed order; what stays open is for a question. */

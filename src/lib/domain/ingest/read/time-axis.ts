@@ -57,7 +57,7 @@ function calendarAxis(gathered: Gathered, stated: Stated, context: ReadContext):
 		...instantsOf(gathered, decided.order, zone.zone),
 		zone,
 		order: isIso ? 'ymd' : decided.order,
-		orderBy: isIso ? 'iso' : decided.by,
+		orderBy: isIso ? (gathered.times.isSettled[0] === 2 ? 'month-name' : 'iso') : decided.by,
 		isLocal: zone.by !== 'file' || zone.zone !== 'UTC'
 	};
 }
@@ -86,6 +86,15 @@ function running(
 }
 
 function openStart(timing: Timing, gathered: Gathered, context: ReadContext, intervalMs: number): OpenTimes {
+	// Counted back from "now": nobody but the dock knows when that was.
+	if (timing.kind === 'elapsed' && (gathered.times.ms[gathered.count - 1] ?? 1) <= 0) {
+		const ms = running(gathered, timing, context.uploadedMs, 0, 0);
+		return {
+			code: 'start',
+			why: 'relative-times',
+			options: [{ answer: { startMs: context.uploadedMs }, label: 'upload', ms }]
+		};
+	}
 	const { journeyFromMs: from } = context;
 	const options =
 		from === null
