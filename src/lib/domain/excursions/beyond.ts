@@ -89,8 +89,10 @@ class BeyondWalk {
 	}
 
 	#settle(): void {
-		const last = this.#found.pop();
-		if (last !== undefined) this.#found.push({ ...last, isSettled: true });
+		const last = this.#found[this.#found.length - 1];
+		// Asked at every reading within the limit: almost always there is nothing to do.
+		if (last === undefined || last.isSettled) return;
+		this.#found[this.#found.length - 1] = { ...last, isSettled: true };
 	}
 
 	#isBeyond(excess: number): boolean {

@@ -32,11 +32,12 @@ export function journeyFigures(course: Course, rule: MktRule) {
  */
 function mktWeightsMs(course: Course): Float64Array {
 	const { times, steps, usualIntervalMs } = course;
-	return Float64Array.from(times, (time, i) => {
-		if (i >= steps.length) return usualIntervalMs;
-		const stepMs = (times[i + 1] as number) - time;
-		return steps[i] === trimmed ? Math.min(stepMs, usualIntervalMs) : stepMs;
-	});
+	const weights = new Float64Array(times.length).fill(usualIntervalMs);
+	for (let i = 0; i < steps.length; i++) {
+		const stepMs = (times[i + 1] as number) - (times[i] as number);
+		weights[i] = steps[i] === trimmed ? Math.min(stepMs, usualIntervalMs) : stepMs;
+	}
+	return weights;
 }
 
 /** Every gap with what it used: bridged linearly, and bracketed by its neighbours. */

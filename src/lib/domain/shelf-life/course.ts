@@ -32,13 +32,13 @@ export interface Course {
  */
 export function courseOf(trace: Trace, window: Stretch | null, trims: readonly Stretch[]): Course {
 	const usualMs = usualIntervalMs(trace.times);
-	const celsius = celsiusOf(trace);
 	const counts = countedIndexes(trace.times, window, trims);
-	const times = Float64Array.from(counts, (index) => trace.times[index] as number);
+	const times = picked(trace.times, counts);
+	const celsius = picked(celsiusOf(trace), counts);
 	const { levels, levelOf } = levelsOf(trace, celsius, counts);
 	return {
 		times,
-		celsius: Float64Array.from(counts, (index) => celsius[index] as number),
+		celsius,
 		steps: stepsOf(times, trims, usualMs),
 		levels,
 		levelOf,
@@ -76,14 +76,20 @@ function levelsOf(trace: Trace, celsius: Float64Array, counts: Uint32Array) {
 	const known = new Map<number, number>();
 	const levels: number[] = [];
 	const levelOf = new Uint32Array(counts.length);
-	counts.forEach((index, i) => {
-		const scaled = trace.scaled[index] as number;
+	for (let i = 0; i < counts.length; i++) {
+		const scaled = trace.scaled[counts[i] as number] as number;
 		let level = known.get(scaled);
 		if (level === undefined) {
-			level = levels.push(celsius[index] as number) - 1;
+			level = levels.push(celsius[i] as number) - 1;
 			known.set(scaled, level);
 		}
 		levelOf[i] = level;
-	});
+	}
 	return { levels: Float64Array.from(levels), levelOf };
+}
+
+function picked(values: Float64Array, indexes: Uint32Array): Float64Array {
+	const kept = new Float64Array(indexes.length);
+	for (let i = 0; i < kept.length; i++) kept[i] = values[indexes[i] as number] as number;
+	return kept;
 }

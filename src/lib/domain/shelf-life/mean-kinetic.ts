@@ -45,10 +45,17 @@ class BoltzmannShares {
 		let warmest = -Infinity;
 		for (let i = 0; i < celsius.length; i++) warmest = Math.max(warmest, celsius[i] as number);
 		this.#warmestKelvin = kelvinFromCelsius(warmest);
-		this.#shares = Float64Array.from(celsius, (reading) => {
-			const kelvin = kelvinFromCelsius(reading);
-			return exp((energy * (kelvin - this.#warmestKelvin)) / (kelvin * this.#warmestKelvin));
-		});
+		this.#shares = new Float64Array(celsius.length);
+		for (let i = 0; i < celsius.length; i++) {
+			// Loggers repeat themselves: the exponential is taken where the temperature changes.
+			const isRepeated = i > 0 && celsius[i] === celsius[i - 1];
+			this.#shares[i] = isRepeated ? (this.#shares[i - 1] as number) : this.#shareAt(celsius[i] as number);
+		}
+	}
+
+	#shareAt(celsius: number): number {
+		const kelvin = kelvinFromCelsius(celsius);
+		return exp((this.#energy * (kelvin - this.#warmestKelvin)) / (kelvin * this.#warmestKelvin));
 	}
 
 	at(index: number): number {
