@@ -7,7 +7,14 @@ import { Refusal } from '../refusals';
 export const siteCookie = 'site';
 
 export function siteView(site: Site): SiteView {
-	return { id: site.id, name: site.name, gln: site.gln, zone: site.zone, temperatureUnit: site.temperatureUnit, address: site.address };
+	return {
+		id: site.id,
+		name: site.name,
+		gln: site.gln,
+		zone: site.zone,
+		temperatureUnit: site.temperatureUnit,
+		address: site.address
+	};
 }
 
 /** The actor's sites, by name. */
