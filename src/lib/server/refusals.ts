@@ -8,6 +8,9 @@ const refusals = {
 	'not-signed': { status: 409, message: 'This docket has not been signed yet.' },
 	'not-arrived': { status: 409, message: 'Log the arrival first; nothing was at the door yet.' },
 	'already-arrived': { status: 409, message: 'The arrival of this load has already been logged.' },
+	cancelled: { status: 409, message: 'This docket was cancelled. Nothing can be added to it.' },
+	'already-on-hold': { status: 409, message: 'This docket is on hold already.' },
+	'not-on-hold': { status: 409, message: 'This docket is not on hold.' },
 	'changed-meanwhile': {
 		status: 409,
 		message: 'Somebody changed this docket while you were looking at it. Look again, then sign.'
@@ -28,9 +31,22 @@ const refusals = {
 	},
 	'not-multipart': { status: 422, message: 'No file came with the upload. Choose a file and send it again.' },
 	'upload-broken': { status: 422, message: 'The upload broke off before the file was whole. Send it again.' },
+	'file-too-heavy': {
+		status: 422,
+		message: 'The file took too long or too much memory to read. Export a shorter period and upload that.'
+	},
+	'already-kept': { status: 409, message: 'This read has been kept already. QA can withdraw it.' },
+	'not-understood': {
+		status: 409,
+		message: 'This file has not been understood yet. Answer its question first.'
+	},
 	'wrong-type': { status: 422, message: 'This kind of file cannot be used here.' },
 	duplicate: { status: 409, message: 'There is one with that name or number already.' },
 	'in-use': { status: 409, message: 'It is in use, so it cannot be changed. Make a new version.' },
+	'spec-signed': {
+		status: 409,
+		message: 'This version has been signed and never changes. Save a new draft from it.'
+	},
 	'database-away': {
 		status: 503,
 		message: 'The database does not answer. Nothing was changed. Try again in a minute.'
