@@ -31,6 +31,7 @@ export interface EventData {
 		after: Record<string, unknown>;
 	};
 	'spec.drafted': { specVersionId: string; productId: string; number: number; figuresSha256: string };
+	'spec.discarded': { specVersionId: string; productId: string; number: number; figuresSha256: string };
 	'spec.signed': {
 		specVersionId: string;
 		productId: string;

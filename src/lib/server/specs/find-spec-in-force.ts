@@ -1,8 +1,8 @@
 import { Op } from 'sequelize';
 import type { Spec } from '../../domain/shelf-life/spec';
-import { specSchema } from '../../schemas/spec';
 import { Product } from '../db/models/product';
 import { SpecVersion } from '../db/models/spec-version';
+import { figuresFrom } from './figures';
 
 /** A signed version as an assessment uses it. */
 export interface SpecInForce {
@@ -30,7 +30,7 @@ export async function findSpecInForce(
 		id: version.id,
 		number: version.number,
 		productName: product?.name ?? '',
-		figures: specSchema.parse(JSON.parse(version.figures))
+		figures: figuresFrom(version.figures)
 	};
 }
 

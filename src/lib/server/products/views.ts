@@ -1,0 +1,35 @@
+import type { Product } from '../db/models/product';
+import type { Variety } from '../db/models/variety';
+import { revisionOf } from '../catalogue/revision';
+
+/** What the form changes, and what the audit trail keeps of a change. */
+export function productFields({ name, family, countUnit }: Product) {
+	return { name, family, countUnit };
+}
+
+export interface VarietyView {
+	id: string;
+	name: string;
+}
+
+export interface ProductView extends ReturnType<typeof productFields> {
+	id: string;
+	varieties: VarietyView[];
+	createdAt: string;
+	switchedOffAt: string | null;
+	revision: string;
+}
+
+export function productView(product: Product, varieties: readonly Variety[]): ProductView {
+	const fields = productFields(product);
+	return {
+		id: product.id,
+		...fields,
+		varieties: varieties
+			.filter((variety) => variety.productId === product.id)
+			.map(({ id, name }) => ({ id, name })),
+		createdAt: product.createdAt.toISOString(),
+		switchedOffAt: product.switchedOffAt?.toISOString() ?? null,
+		revision: revisionOf(fields)
+	};
+}
