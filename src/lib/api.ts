@@ -1,0 +1,37 @@
+import type { SeriesView } from './schemas/docket';
+
+/** An answer of our own API that is not the data asked for: its sentence is fit to be shown. */
+export class ApiRefusal extends Error {
+	constructor(
+		readonly code: string,
+		message: string,
+		readonly status: number
+	) {
+		super(message);
+	}
+}
+
+async function answerOf<Data>(response: Response): Promise<Data> {
+	if (response.ok) return response.json();
+	const body: unknown = await response.json().catch(() => null);
+	const isKnown = typeof body === 'object' && body !== null && 'message' in body && 'code' in body;
+	throw new ApiRefusal(
+		isKnown ? String(body.code) : 'unreachable',
+		isKnown ? String(body.message) : 'The server did not answer as expected. Try again.',
+		response.status
+	);
+}
+
+/** The series of a trace between two instants, thinned to what the width resolves. */
+export async function fetchSeries(
+	traceId: string,
+	view: { fromMs: number; toMs: number } | null,
+	points: number
+): Promise<SeriesView> {
+	const query = new URLSearchParams({ points: String(points) });
+	if (view) {
+		query.set('from', new Date(view.fromMs).toISOString());
+		query.set('to', new Date(view.toMs).toISOString());
+	}
+	return answerOf(await fetch(`/api/v1/traces/${traceId}/series?${query}`));
+}

@@ -1,0 +1,47 @@
+import { fail, redirect } from '@sveltejs/kit';
+import { dispositionSchema } from '$lib/schemas/disposition';
+import { evidenceSha256 } from '$lib/server/dispositions/freeze';
+import { signDisposition } from '$lib/server/dispositions/sign-disposition';
+import { getDocket } from '$lib/server/dockets/get-docket';
+import { authorize } from '$lib/server/policies';
+import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
+import type { Actions, PageServerLoad } from './$types';
+
+export const load: PageServerLoad = async ({ locals, params, url }) => {
+	const ctx = contextOf(locals);
+	const docket = await orError(getDocket(ctx, params.docket));
+	await orError(Promise.resolve().then(() => authorize(ctx, 'disposition.sign')));
+	if (!docket.arrival) redirect(303, `/shipments/${docket.number}`);
+	const isAmendment = docket.signatures.length > 0;
+	if (isAmendment && !url.searchParams.has('amend')) redirect(303, `/shipments/${docket.number}`);
+
+	return {
+		docket,
+		isAmendment,
+		evidenceSha256: evidenceSha256(docket),
+		signer: { name: ctx.actor.name, title: ctx.actor.title, email: ctx.actor.email },
+		frozenAt: ctx.now.toISOString(),
+		back: {
+			href: `/shipments/${docket.number}`,
+			word: docket.number.split('-').at(-1) ?? '',
+			title: 'Signature'
+		}
+	};
+};
+
+export const actions = {
+	default: async ({ locals, params, request }) => {
+		const ctx = contextOf(locals);
+
+		const form = await parseForm(request, dispositionSchema);
+		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'invalid' });
+
+		try {
+			await signDisposition(ctx, params.docket, form.data);
+		} catch (e) {
+			return orFail(e, form.data);
+		}
+
+		redirect(303, `/shipments/${params.docket}#signature`);
+	}
+} satisfies Actions;
