@@ -15,11 +15,9 @@ export interface UsedZone {
 export function zoneFor(gathered: Gathered, stated: Stated, context: ReadContext): UsedZone {
 	const { times, count } = gathered;
 	let withOffset = 0;
-	for (let i = 0; i < count; i++)
-		if (times.offsetMinutes[i] !== noOffset || !Number.isNaN(times.ms[i])) withOffset++;
+	for (let i = 0; i < count; i++) if (times.offsetMinutes[i] !== noOffset) withOffset++;
 	const first = times.offsetMinutes[0] ?? noOffset;
-	if (count > 0 && withOffset === count)
-		return { zone: first === noOffset ? 'UTC' : offsetText(first), by: 'file' };
+	if (count > 0 && withOffset === count) return { zone: offsetText(first), by: 'file' };
 	if (context.answers.zone !== undefined) return { zone: context.answers.zone, by: 'answer' };
 	const word = gathered.zoneWord ?? stated.zoneWord;
 	const wordOffset = word === null ? null : fixedOffsetOf(word);
@@ -28,6 +26,15 @@ export function zoneFor(gathered: Gathered, stated: Stated, context: ReadContext
 }
 
 const stamp = emptyStamp();
+
+/** The zone of times that run on from a stated start: the start's own offset where it has one. */
+export function zoneOfStart(gathered: Gathered, stated: Stated, context: ReadContext): UsedZone {
+	const { startText } = stated;
+	if (startText !== null && scanStamp(startText, stamp) && stamp.offsetMinutes !== noOffset) {
+		return { zone: offsetText(stamp.offsetMinutes), by: 'file' };
+	}
+	return zoneFor(gathered, stated, context);
+}
 
 /** One moment of the preamble in UTC, once order and zone are known; null when it is none. */
 export function momentMs(text: string | null, order: DateOrder | null, zone: string): number | null {

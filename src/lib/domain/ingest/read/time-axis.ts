@@ -5,7 +5,7 @@ import { msPerDay } from '../times/calendar';
 import type { DateOrder } from '../times/date-order';
 import { offsetAtOf, utcOfLocal } from '../times/zone';
 import type { Gathered } from './gathered';
-import { instantsOf, momentMs, zoneFor, type Instants, type UsedZone } from './instants';
+import { instantsOf, momentMs, zoneFor, zoneOfStart, type Instants, type UsedZone } from './instants';
 import { decideOrder, openDaysIn, openDaysOf, type DecidedOrder, type OrderBy } from './order';
 
 /** Every row in UTC, with what was taken to get there. */
@@ -58,7 +58,7 @@ function calendarAxis(gathered: Gathered, stated: Stated, context: ReadContext):
 		zone,
 		order: isIso ? 'ymd' : decided.order,
 		orderBy: isIso ? (gathered.times.isSettled[0] === 2 ? 'month-name' : 'iso') : decided.by,
-		isLocal: zone.by !== 'file' || zone.zone !== 'UTC'
+		isLocal: true
 	};
 }
 
@@ -116,7 +116,7 @@ function runningAxis(
 	const decided: DecidedOrder = decideOrder(stamped, stated, context);
 	const zone =
 		answers.startMs === undefined
-			? zoneFor(gathered, stated, context)
+			? zoneOfStart(gathered, stated, context)
 			: ({ zone: 'UTC', by: 'answer' } satisfies UsedZone);
 	const start = (order: DateOrder | null): number | null =>
 		answers.startMs ?? momentMs(stated.startText, order, zone.zone);
