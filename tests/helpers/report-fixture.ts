@@ -172,6 +172,18 @@ function rawExport(ordinal: number): string {
 	return `time;celsius\n2026-03-30T08:10:00+02:00;${ordinal},1\n2026-03-30T08:20:00+02:00;${ordinal},2\n`;
 }
 
+const signature = {
+	signedBy: 'Ruth Calloway',
+	signedByTitle: 'Quality assurance',
+	meaning: 'approval' as const,
+	signedAt: '2026-04-03T07:44:18.000Z',
+	zone: 'Europe/Berlin',
+	version: 1,
+	reasons:
+		'Line 3 cannot make the Easter week. Line 2 can if it goes out first. Ten berries a pallet cut on line 3: no freezing seen.',
+	amendmentReason: null
+};
+
 /** A signed report's input; `lines` many lines, each with its logger, the third rejected. */
 export function reportInput(overrides: Partial<ReportInput> = {}, lines = 3): ReportInput {
 	const ordinals = Array.from({ length: lines }, (_, i) => i + 1);
@@ -201,18 +213,7 @@ export function reportInput(overrides: Partial<ReportInput> = {}, lines = 3): Re
 	});
 	return {
 		frozen: frozenDocket(views),
-		signature: {
-			signedBy: 'Ruth Calloway',
-			signedByTitle: 'Quality assurance',
-			meaning: 'approval',
-			signedAt: '2026-04-03T07:44:18.000Z',
-			zone: 'Europe/Berlin',
-			version: 1,
-			reasons:
-				'Line 3 cannot make the Easter week. Line 2 can if it goes out first. Ten berries a pallet cut on line 3: no freezing seen.',
-			frozenSha256: sha('the frozen docket'),
-			amendmentReason: null
-		},
+		signature: { ...signature, frozenSha256: sha('the frozen docket') },
 		reasonTexts: {
 			'line-1': ['Line life suffices: 12.0 d on the low against 11.0 d needed.'],
 			'line-3': [
@@ -240,6 +241,8 @@ function frozenDocket(lines: DocketLineView[]): FrozenDocket {
 	return {
 		engineVersion: '0.1.0',
 		frozenAt: '2026-04-03T07:44:18.000Z',
+		evidenceSha256: sha('what the signer saw'),
+		signature: { ...signature, dispositionId: 'disposition-1', signedById: 'user-1' },
 		series: lines.map((line) =>
 			seriesOf(`L${line.ordinal}`, line.ordinal === 3 ? 1 : line.ordinal === 2 ? 0.55 : 0.3, true)
 		),

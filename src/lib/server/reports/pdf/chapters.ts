@@ -52,6 +52,7 @@ function excursionsSection(draft: Draft, chapter: Chapter): Content[] {
 	const sign = draft.thermometer.sign;
 	return [
 		ledger({
+			width: draft.sheet.mainWidth,
 			title,
 			finding: `${lineNames(chapter.lines)}${limitsText(draft, chapter)}`,
 			columns: [

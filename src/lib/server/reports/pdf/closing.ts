@@ -35,6 +35,7 @@ export function photosAndNotes(draft: Draft): Content[] {
 	if (rows.length === 0) return [];
 	return [
 		ledger({
+			width: draft.sheet.mainWidth,
 			title: 'Seen at the door',
 			finding: photos.length === 0 ? null : 'photos are kept with the record and in the evidence bundle',
 			columns: [

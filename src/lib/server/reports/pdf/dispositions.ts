@@ -11,6 +11,7 @@ export function dispositions(draft: Draft): Content[] {
 	const { docket } = draft;
 	return [
 		ledger({
+			width: draft.sheet.mainWidth,
 			title: 'Dispositions',
 			finding: null,
 			columns: [

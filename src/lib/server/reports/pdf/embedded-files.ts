@@ -1,4 +1,5 @@
-import type { ReportInput } from './report-input';
+import { sha256Hex } from '../../storage/sha256';
+import type { ReportAttachment, ReportInput } from './report-input';
 
 /** What a media type may be made of; anything else is told as bytes. Source: RFC 6838, 4.2. */
 const mediaType = /^[a-z0-9][\w!#$&^.+-]*\/[a-z0-9][\w!#$&^.+-]*$/iu;
@@ -6,15 +7,14 @@ const mediaType = /^[a-z0-9][\w!#$&^.+-]*\/[a-z0-9][\w!#$&^.+-]*$/iu;
 const unfitForNames = /[\p{Cc}\p{Cf}/\\:*?"<>|]/gu;
 
 /** The raw exports as files inside the PDF, byte for byte, each under a name of its own. */
-export function embeddedFiles(input: ReportInput) {
-	const at = new Date(input.creationAt);
-	const taken = new Set<string>();
+export function embeddedFiles({ attachments, creationAt }: ReportInput) {
+	const at = new Date(creationAt);
+	const names = namesOf(attachments);
 	return Object.fromEntries(
-		input.attachments.map((attachment, i) => {
-			const name = freeName(attachment.name.replace(unfitForNames, '_') || 'export', taken);
-			const type = mediaType.test(attachment.mediaType) ? attachment.mediaType : 'application/octet-stream';
-			const src = `data:${type};base64,${Buffer.from(attachment.bytes).toString('base64')}`;
-			const { description } = attachment;
+		attachments.map(({ bytes, mediaType: told, description }, i) => {
+			const type = mediaType.test(told) ? told : 'application/octet-stream';
+			const src = `data:${type};base64,${Buffer.from(bytes).toString('base64')}`;
+			const name = names[i] ?? `export-${i}`;
 			const file = {
 				src,
 				name,
@@ -29,12 +29,22 @@ export function embeddedFiles(input: ReportInput) {
 	);
 }
 
+/** Under which name the file of a hash lies inside; the bytes decide, not what they were called. */
+export function namesByHash(attachments: readonly ReportAttachment[]): ReadonlyMap<string, string> {
+	const names = namesOf(attachments);
+	return new Map(attachments.map(({ bytes }, i) => [sha256Hex(bytes), names[i] ?? '']));
+}
+
 /** The second of a name gets a number before its ending. */
-function freeName(name: string, taken: Set<string>): string {
-	const dot = name.lastIndexOf('.');
-	const [stem, ending] = dot > 0 ? [name.slice(0, dot), name.slice(dot)] : [name, ''];
-	let free = name;
-	for (let i = 2; taken.has(free); i++) free = `${stem} (${i})${ending}`;
-	taken.add(free);
-	return free;
+function namesOf(attachments: readonly ReportAttachment[]): string[] {
+	const taken = new Set<string>();
+	return attachments.map((attachment) => {
+		const name = attachment.name.replace(unfitForNames, '_') || 'export';
+		const dot = name.lastIndexOf('.');
+		const [stem, ending] = dot > 0 ? [name.slice(0, dot), name.slice(dot)] : [name, ''];
+		let free = name;
+		for (let i = 2; taken.has(free); i++) free = `${stem} (${i})${ending}`;
+		taken.add(free);
+		return free;
+	});
 }

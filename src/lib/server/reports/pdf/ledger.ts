@@ -4,7 +4,7 @@ import { label, sentence, words } from './type-styles';
 
 interface Column {
 	readonly head: string;
-	readonly width: number | 'auto' | '*';
+	readonly width: number | '*';
 	readonly align?: 'left' | 'right';
 }
 
@@ -13,6 +13,7 @@ interface Ledger {
 	readonly finding: string | null;
 	readonly columns: readonly Column[];
 	readonly rows: readonly (readonly Content[])[];
+	readonly width: number;
 }
 
 const titleRows = 1;
@@ -20,17 +21,34 @@ const headRows = 2;
 
 /** Ink opens the table under its title, a hairline parts the rows, ink closes it. */
 function ruled(columns: readonly Column[]): CustomTableLayout {
-	const isRight = (i: number) => columns[i]?.align === 'right';
 	return {
 		hLineWidth: (i, node) => (i === 0 ? 0 : i === titleRows ? 1.1 : i === node.table.body.length ? 0.8 : 0.6),
 		hLineColor: (i, node) => (i === titleRows || i === node.table.body.length ? palette.ink : palette.rule),
 		vLineWidth: () => 0,
-		// Words after a column of figures need air: the figures end where the words begin.
-		paddingLeft: (i) => (i === 0 ? 0 : isRight(i - 1) && !isRight(i) ? 9 : 3),
-		paddingRight: (i) => (i === columns.length - 1 ? 0 : 3),
+		paddingLeft: (i) => padLeft(columns, i),
+		paddingRight: (i) => padRight(columns, i),
 		paddingTop: (i) => (i === 0 ? 0 : 3.2),
 		paddingBottom: () => 3
 	};
+}
+
+/** Words after a column of figures need air: the figures end where the words begin. */
+function padLeft(columns: readonly Column[], i: number): number {
+	if (i === 0) return 0;
+	return columns[i - 1]?.align === 'right' && columns[i]?.align !== 'right' ? 9 : 3;
+}
+
+function padRight(columns: readonly Column[], i: number): number {
+	return i === columns.length - 1 ? 0 : 3;
+}
+
+/** The open column gets what is left, as a number: left open, one long word would push the table off the page. */
+function widthsOf({ columns, width }: Ledger): number[] {
+	const taken = columns.reduce((sum, column, i) => {
+		const own = column.width === '*' ? 0 : column.width;
+		return sum + own + padLeft(columns, i) + padRight(columns, i);
+	}, 0);
+	return columns.map((column) => (column.width === '*' ? width - taken : column.width));
 }
 
 /** A section's title: name, and its finding in one line, so that the heads alone tell the story. */
@@ -68,7 +86,7 @@ export function ledger(table: Ledger): ContentTable {
 			headerRows: headRows,
 			keepWithHeaderRows: 1,
 			dontBreakRows: true,
-			widths: table.columns.map((column) => column.width),
+			widths: widthsOf(table),
 			body: [title, heads, ...rows]
 		},
 		layout: ruled(table.columns),

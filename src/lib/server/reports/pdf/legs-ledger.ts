@@ -25,6 +25,7 @@ export function legsLedger(draft: Draft, chapter: Chapter): Content[] {
 	const head = (text: string, width: number) => ({ head: text, width, align: 'right' as const });
 	return [
 		ledger({
+			width: draft.sheet.mainWidth,
 			title: 'Legs',
 			finding: `life used against life allowed, h${at}; ${chapter.assessment.logger}, ${lineNames(chapter.lines)}`,
 			columns: [

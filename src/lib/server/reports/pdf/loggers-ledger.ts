@@ -1,6 +1,7 @@
 import type { Content } from 'pdfmake/interfaces';
 import type { DocketLoggerView } from '../../../schemas/docket';
 import type { Draft } from './draft';
+import { namesByHash } from './embedded-files';
 import { ledger } from './ledger';
 import { sizePoints } from './palette';
 import { decimal, hashLines } from './text';
@@ -20,8 +21,10 @@ export function loggers(draft: Draft): Content[] {
 	const { docket } = draft;
 	if (docket.loggers.length === 0) return [];
 	const sign = draft.thermometer.sign;
+	const inside = namesByHash(draft.input.attachments);
 	return [
 		ledger({
+			width: draft.sheet.mainWidth,
 			title: 'Loggers and raw exports',
 			finding: null,
 			columns: [
@@ -33,32 +36,36 @@ export function loggers(draft: Draft): Content[] {
 				{ head: `MKT,\n${sign}`, width: 22, align: 'right' },
 				{ head: 'Export and its SHA-256', width: 161 }
 			],
-			rows: docket.loggers.map((logger) => loggerRow(draft, logger))
+			rows: docket.loggers.map((logger) => loggerRow(draft, logger, inside))
 		})
 	];
 }
 
-function loggerRow({ thermometer, input }: Draft, logger: DocketLoggerView): Content[] {
-	const file = logger.fileSha256;
-	const isInside = input.attachments.some((attachment) => attachment.name === logger.fileName);
+function loggerRow(
+	{ thermometer }: Draft,
+	logger: DocketLoggerView,
+	inside: ReadonlyMap<string, string>
+): Content[] {
+	const number = (value: number | null, text: (value: number) => string) =>
+		figure(value === null ? '–' : text(value));
 	return [
 		words(logger.label, { bold: true }),
 		figure(logger.serial, { size: 8 }),
 		words([logger.position ?? '', placements[logger.placement]].filter(Boolean).join(', ')),
-		figure(logger.readings === null ? '–' : decimal(logger.readings, 0)),
-		figure(logger.accuracyCelsius === null ? '–' : thermometer.difference(logger.accuracyCelsius)),
-		figure(logger.mktCelsius === null ? '–' : thermometer.reading(logger.mktCelsius)),
-		file === null
-			? sentence(statusWords[logger.status])
-			: {
-					stack: [
-						sentence(
-							`${logger.fileName ?? 'export'}, ${isInside ? 'attached inside' : 'kept, not attached'}`
-						),
-						figure(hashLines(file, 4), { size: sizePoints.smallest })
-					]
-				}
+		number(logger.readings, (readings) => decimal(readings, 0)),
+		number(logger.accuracyCelsius, thermometer.difference),
+		number(logger.mktCelsius, thermometer.reading),
+		exportCell(logger, inside)
 	];
+}
+
+function exportCell(logger: DocketLoggerView, inside: ReadonlyMap<string, string>): Content {
+	const sha256 = logger.fileSha256;
+	if (sha256 === null) return sentence(statusWords[logger.status]);
+	const name = inside.get(sha256);
+	const where =
+		name === undefined ? `${logger.fileName ?? 'export'}, kept, not attached` : `${name}, attached inside`;
+	return { stack: [sentence(where), figure(hashLines(sha256, 4), { size: sizePoints.smallest })] };
 }
 
 const placements = { air: 'air', 'between-cases': 'between cases', 'in-product': 'in product' } as const;

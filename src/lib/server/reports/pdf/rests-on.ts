@@ -22,6 +22,7 @@ export function restsOn(draft: Draft): Content[] {
 	const engine = `Engine ${draft.input.frozen.engineVersion}.`;
 	return [
 		ledger({
+			width: draft.sheet.mainWidth,
 			title: 'What it rests on',
 			finding:
 				'the range of life includes the instrument’s, the spec’s and the opening balance’s uncertainty',

@@ -5,7 +5,7 @@ import forge from 'node-forge';
 const keyBits = 3072;
 const validYears = 10;
 /** Rounds of the store’s key derivation; its check value is derived in plain JavaScript at every opening. */
-const keyRounds = 10_000;
+const keyRounds = 2048;
 /** id-kp-documentSigning. Source: RFC 9336. */
 const documentSigning = '1.3.6.1.5.5.7.3.36';
 
