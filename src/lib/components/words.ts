@@ -25,5 +25,28 @@ export const words = {
 	previous: 'Previous',
 	next: 'Next',
 	of: 'of',
-	to: 'to'
+	to: 'to',
+	trace: 'Trace',
+	atTheLine: 'At the line',
+	leg: 'Leg',
+	legs: 'legs',
+	lifeLeftThen: 'Life left then',
+	custodyWindow: 'Custody window',
+	noReading: 'no reading',
+	outsideLegs: 'none',
+	gap: 'gap',
+	openingBalance: 'opening balance',
+	needed: 'needed',
+	left: 'left',
+	limits: { upper: 'upper', lower: 'lower', freezing: 'freezing', ceiling: 'ceiling' },
+	wholeTrip: 'Show the whole trip',
+	chartKeys:
+		'Arrow keys step a reading, with Shift a leg; plus and minus zoom, Escape shows the whole trip. The tables below carry the same facts.',
+	key: {
+		'too-warm': 'too warm, solid',
+		'too-cold': 'too cold, hatched',
+		'not-observed': 'bridged gap',
+		life: 'life left, low to high',
+		trimmed: 'trimmed, not the journey'
+	}
 } as const;

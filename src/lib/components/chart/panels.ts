@@ -1,0 +1,116 @@
+import uPlot from 'uplot';
+import { drawAreas, drawBands, drawCaps, drawCosts } from './draw-excursions';
+import { drawLifeBand, drawNeed, drawOpening } from './draw-life';
+import { drawLimits } from './draw-limits';
+import { drawCustody, drawGaps, drawTraceNames } from './draw-marks';
+import { drawScale } from './draw-scale';
+import { drawTimeAxis } from './draw-time-axis';
+import { withPen, type Drawing, type Pen } from './drawing';
+import { lifeTicks, scaleTicks } from './scale';
+
+export interface Panels {
+	/** Draws again at the view that the drawing now has. */
+	show: () => void;
+	destroy: () => void;
+}
+
+interface PanelParts {
+	heightPx: number;
+	padding: uPlot.Padding;
+	range: [number, number];
+	/** Under the lines, in this order. */
+	under: (pen: Pen) => void;
+	over: (pen: Pen) => void;
+	series: uPlot.Series[];
+}
+
+/** The library keeps scales and draws lines of a million readings; everything else on the panels is ours. */
+function optionsOf(drawing: Drawing, parts: PanelParts): uPlot.Options {
+	return {
+		width: drawing.layout.widthPx,
+		height: parts.heightPx,
+		padding: parts.padding,
+		legend: { show: false },
+		cursor: { show: false },
+		scales: {
+			x: { time: false, range: (_chart, min, max) => [min, max] },
+			y: { range: parts.range }
+		},
+		axes: [{ show: false }, { show: false }],
+		series: [{}, ...parts.series],
+		hooks: {
+			drawClear: [(chart) => withPen(chart, parts.under)],
+			draw: [(chart) => withPen(chart, parts.over)]
+		}
+	};
+}
+
+function temperaturePanel(drawing: Drawing): uPlot.Options {
+	const { model, palette, layout } = drawing;
+	const scale = scaleTicks(model.temperatures.least, model.temperatures.most, layout.isNarrow ? 5 : 7);
+	const quiet = { stroke: palette.edge, width: 1, points: { show: false } };
+	return optionsOf(drawing, {
+		heightPx: layout.temperaturePx,
+		padding: [layout.topPx, layout.rightPx, layout.axisPx, layout.leftPx],
+		range: [scale.from, scale.to],
+		under: (pen) => {
+			drawBands(pen, drawing, true);
+			drawScale(pen, drawing, scale.ticks);
+			drawAreas(pen, drawing);
+			drawCustody(pen, drawing);
+			drawLimits(pen, drawing);
+		},
+		over: (pen) => {
+			drawGaps(pen, drawing);
+			drawTraceNames(pen, drawing);
+			drawCaps(pen, drawing);
+			drawTimeAxis(pen, drawing);
+		},
+		series: model.labels.map((_, at) => (at === 0 ? { ...quiet, stroke: palette.ink, width: 1.7 } : quiet))
+	});
+}
+
+/** The least figure of a column, or nothing. */
+function leastOf(column: ArrayLike<number | null | undefined>): number[] {
+	let least: number | null = null;
+	for (let at = 0; at < column.length; at++) {
+		const value = column[at];
+		if (typeof value === 'number' && (least === null || value < least)) least = value;
+	}
+	return least === null ? [] : [least];
+}
+
+function lifePanel(drawing: Drawing): uPlot.Options {
+	const { model, palette, layout } = drawing;
+	const least = Math.min(0, ...leastOf(model.life?.[2] ?? []));
+	const scale = lifeTicks(least, model.fullDays, layout.isNarrow ? 3 : 4);
+	const hidden = { show: false };
+	return optionsOf(drawing, {
+		heightPx: layout.lifePx,
+		padding: [7, layout.rightPx, 7, layout.leftPx],
+		range: [scale.from, scale.to],
+		under: (pen) => {
+			drawBands(pen, drawing, false);
+			drawScale(pen, drawing, scale.ticks);
+			drawCustody(pen, drawing);
+			drawLifeBand(pen, drawing);
+			drawOpening(pen, drawing);
+		},
+		over: (pen) => {
+			drawNeed(pen, drawing);
+			drawCosts(pen, drawing);
+		},
+		series: [{ stroke: palette.ink, width: 1.7, points: hidden }, hidden, hidden]
+	});
+}
+
+/** Both panels on one time axis; the drawing's view may change afterwards, all else needs new panels. */
+export function createPanels(drawing: Drawing, temperatureHost: HTMLElement, lifeHost: HTMLElement): Panels {
+	const charts = [new uPlot(temperaturePanel(drawing), drawing.model.traces, temperatureHost)];
+	if (drawing.model.life) charts.push(new uPlot(lifePanel(drawing), drawing.model.life, lifeHost));
+	function show() {
+		for (const chart of charts) chart.setScale('x', { min: drawing.view.fromMs, max: drawing.view.toMs });
+	}
+	show();
+	return { show, destroy: () => charts.forEach((chart) => chart.destroy()) };
+}

@@ -1,0 +1,19 @@
+import type { AssessmentView, SeriesView } from '../../schemas/docket';
+import { nearestIndex, type Window } from './cursor';
+
+/** Everything that was read, trimmed parts included. */
+export function wholeOf(series: readonly SeriesView[], assessment: AssessmentView | null): Window {
+	const ends = series.flatMap((one) => [one.times[0], one.times.at(-1)]).filter((ms) => ms !== undefined);
+	if (assessment) ends.push(Date.parse(assessment.windowFromAt), Date.parse(assessment.windowToAt));
+	return { fromMs: Math.min(...ends), toMs: Math.max(...ends) };
+}
+
+export function indexAt(series: SeriesView, ms: number): number {
+	return nearestIndex(series.times, ms);
+}
+
+/** Where the crosshair stands at first: the worst of the costliest excursion, otherwise the last reading. */
+export function worstIndex(series: SeriesView, assessment: AssessmentView | null): number {
+	const costliest = [...(assessment?.excursions ?? [])].sort((a, b) => b.costHours - a.costHours)[0];
+	return costliest ? nearestIndex(series.times, costliest.extremeAtMs) : Math.max(0, series.times.length - 1);
+}
