@@ -16,6 +16,14 @@ const refusals = {
 		message: 'Somebody changed this docket while you were looking at it. Look again, then sign.'
 	},
 	'wrong-password': { status: 422, message: 'That is not your password. Nothing was signed.' },
+	'last-admin': {
+		status: 409,
+		message: 'This is the last admin who can sign in. Make somebody else an admin first.'
+	},
+	'switched-off': {
+		status: 403,
+		message: 'This account has been switched off. An admin can switch it on again.'
+	},
 	locked: {
 		status: 423,
 		message: 'This account is locked after several wrong passwords. An admin can unlock it.'

@@ -1,22 +1,16 @@
-import type { Channel, Ingestion, Understanding } from '../../domain/ingest/ingestion';
+import type { Ingestion, ReadContext } from '../../domain/ingest/ingestion';
+import type { StoredIngestion } from '../../schemas/read';
 
-/** A channel without its readings: those stand in the trace. */
-export type ChannelSummary = Omit<Channel, 'trace' | 'lines'> & { readings: number; unit: string | null };
-
-/** What was understood of a file, as it is kept beside the read; a question or a refusal likewise. */
-export type StoredIngestion =
-	| Exclude<Ingestion, { kind: 'ok' }>
-	| { kind: 'ok'; understanding: Omit<Understanding, 'channels'> & { channels: ChannelSummary[] } };
-
-/** What was understood, without the readings. */
-export function summaryOf(ingestion: Ingestion): StoredIngestion {
-	if (ingestion.kind !== 'ok') return ingestion;
-	const channels = ingestion.understanding.channels.map(({ trace, lines: _, ...channel }) => ({
+/** What was understood, without the readings, beside the knowledge it was understood with. */
+export function summaryOf(ingestion: Ingestion, context: ReadContext): StoredIngestion {
+	if (ingestion.kind !== 'ok') return { ...ingestion, context };
+	const { understanding } = ingestion;
+	const channels = understanding.channels.map(({ trace, lines: _, ...channel }) => ({
 		...channel,
 		readings: trace?.times.length ?? 0,
 		unit: trace?.unit ?? null
 	}));
-	return { kind: 'ok', understanding: { ...ingestion.understanding, channels } };
+	return { kind: 'ok', context, ...understanding, channels };
 }
 
 /** What a read's row says was understood; null where nothing was written down. */
@@ -27,5 +21,5 @@ export function parseUnderstanding(text: string | null): StoredIngestion | null 
 /** Names the layout a read was understood by. */
 export function layoutFingerprintOf(text: string | null): string | null {
 	const stored = parseUnderstanding(text);
-	return stored?.kind === 'ok' ? stored.understanding.layout.fingerprint : null;
+	return stored?.kind === 'ok' ? stored.layout.fingerprint : null;
 }

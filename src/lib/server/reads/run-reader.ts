@@ -1,0 +1,57 @@
+import { join } from 'node:path';
+import { Worker } from 'node:worker_threads';
+import { Refusal } from '../refusals';
+import { readBytes, type ReadOrder, type ReadResult } from './read-bytes';
+
+/** Where `vite build --mode node` leaves the worker, from the folder the server is started in. */
+const builtWorker = join('build', 'node', 'read-worker.js');
+/** No export a dock brings takes longer; one that does is built to. */
+const longestReadMs = 60_000;
+const mostMemoryMegabytes = 1024;
+/** More at once would only wait for each other. */
+const mostAtOnce = 2;
+
+let running = 0;
+const waiting: (() => void)[] = [];
+
+/**
+ * Reads an export in a thread of its own, so that a long file holds up nobody and a hostile one ends alone.
+ * Unbuilt, in development and tests, it is read in place.
+ */
+export async function runReader(
+	order: ReadOrder,
+	program = import.meta.env.PROD ? join(process.cwd(), builtWorker) : null
+): Promise<ReadResult> {
+	if (program === null) return readBytes(order);
+	if (running >= mostAtOnce) await new Promise<void>((resolve) => waiting.push(resolve));
+	running++;
+	try {
+		return await readInThread(order, program);
+	} finally {
+		running--;
+		waiting.shift()?.();
+	}
+}
+
+function readInThread(order: ReadOrder, program: string): Promise<ReadResult> {
+	const worker = new Worker(program, {
+		workerData: order,
+		resourceLimits: { maxOldGenerationSizeMb: mostMemoryMegabytes }
+	});
+	return new Promise<ReadResult>((resolve, reject) => {
+		const timer = setTimeout(() => reject(new Refusal('file-too-heavy')), longestReadMs);
+		const end = (act: () => void) => {
+			clearTimeout(timer);
+			act();
+		};
+		worker.once('message', (result: ReadResult) => end(() => resolve(result)));
+		worker.once('error', (error) =>
+			end(() => reject(isOutOfMemory(error) ? new Refusal('file-too-heavy') : error))
+		);
+		worker.once('exit', (code) => end(() => reject(new Error(`The read worker ended with code ${code}.`))));
+	}).finally(() => void worker.terminate());
+}
+
+function isOutOfMemory(error: Error): boolean {
+	return 'code' in error && error.code === 'ERR_WORKER_OUT_OF_MEMORY';
+}
