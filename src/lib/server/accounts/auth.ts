@@ -95,7 +95,7 @@ function isRedirect(error: unknown): boolean {
 	return typeof error === 'object' && error !== null && 'status' in error && 'location' in error;
 }
 
-/** Sets the session cookie for a right pair. @returns false for a wrong one. @throws Refusal `too-many-attempts` */
+/** Sets the session cookie for a right pair. @returns false for a wrong one. @throws Refusal `too-many-attempts`, `switched-off`, `locked` */
 export function signInWithPassword(event: RequestEvent, email: string, password: string): Promise<boolean> {
 	return signIn(event, 'password', { email, password });
 }
@@ -103,4 +103,16 @@ export function signInWithPassword(event: RequestEvent, email: string, password:
 /** Uses a mailed link up and sets the session cookie. @returns false when the link no longer works. */
 export function signInWithLink(event: RequestEvent, secret: string): Promise<boolean> {
 	return signIn(event, 'link', { secret });
+}
+
+/** Ends this browser's session: its cookie is taken away. */
+export async function signOut(event: RequestEvent): Promise<void> {
+	const body = new URLSearchParams({ redirectTo: '/sign-in' });
+	const request = new Request(event.url, { method: 'POST', headers: event.request.headers, body });
+	request.headers.set('content-type', 'application/x-www-form-urlencoded');
+	try {
+		await auth.signOut({ ...event, request });
+	} catch (error) {
+		if (!isRedirect(error)) throw error;
+	}
 }

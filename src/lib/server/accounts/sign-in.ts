@@ -37,7 +37,7 @@ async function recordRefused(
 
 /**
  * Checks an e-mail and password. Known and unknown addresses are answered alike and in like time.
- * @returns null for a wrong pair. @throws Refusal `too-many-attempts`.
+ * @returns null for a wrong pair. @throws Refusal `too-many-attempts`; with the right pair `switched-off`, `locked`.
  */
 export async function signInByPassword(
 	email: string,
@@ -53,14 +53,15 @@ export async function signInByPassword(
 
 	const user = await User.findOne({ where: { email: address } });
 	const matches = await isPassword(password, user?.passwordHash ?? null);
-	if (!user || !matches || user.switchedOffAt) {
-		await recordRefused(
-			scope,
-			user,
-			address,
-			!user ? 'unknown' : matches ? 'switched-off' : 'wrong-password'
-		);
+	if (!user || !matches) {
+		await recordRefused(scope, user, address, user ? 'wrong-password' : 'unknown');
 		return null;
+	}
+	// Only who knows the password is told what is wrong with the account.
+	if (user.switchedOffAt || user.lockedAt) {
+		const why = user.switchedOffAt ? 'switched-off' : 'locked';
+		await recordRefused(scope, user, address, why);
+		throw new Refusal(why);
 	}
 	await clearLimit(accountLimit);
 	return openSession(user, scope, 'password');

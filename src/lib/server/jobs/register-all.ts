@@ -1,4 +1,12 @@
+import { sendNotice } from '../notices/send-notice';
+import { ensureReport } from '../reports/make-report';
+import { registerJobKind } from './job-kinds';
+
 /** Every kind of job and who does it. */
 export function registerAllJobs(): void {
-	// Kinds are registered here as their nouns come to stand.
+	registerJobKind(
+		'report',
+		async (ctx, { dispositionId }) => void (await ensureReport(ctx, dispositionId ?? ''))
+	);
+	registerJobKind('notice', (ctx, { noticeId }) => sendNotice(ctx, noticeId ?? ''));
 }
