@@ -33,7 +33,7 @@ function booked(hours: number): number {
  * used nothing that is known: it lowers too warm, and `coveredFraction` says by how much of the leg.
  */
 export function legUses(evidence: LegEvidence, legs: readonly Leg[]): LegUse[] {
-	const total = evidence.used.usedHours[evidence.used.usedHours.length - 1] ?? 0;
+	const total = booked(evidence.used.usedHours[evidence.used.usedHours.length - 1] ?? 0);
 	return legs.map((leg) => legUse(evidence, leg, total));
 }
 

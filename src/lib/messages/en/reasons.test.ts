@@ -173,7 +173,7 @@ const cases: readonly (readonly [Reason, string])[] = [
 ];
 
 describe('a reason in English', () => {
-	it.each(cases)('$code is one exact sentence', (reason, sentence) => {
+	it.each(cases)('is one exact sentence: %o, %s', (reason, sentence) => {
 		expect(reasonText(reason, inCelsius)).toBe(sentence);
 	});
 
