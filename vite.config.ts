@@ -2,7 +2,7 @@ import { readdirSync } from 'node:fs';
 import { basename, join } from 'node:path';
 import { sveltekit } from '@sveltejs/kit/vite';
 import tailwindcss from '@tailwindcss/vite';
-import { defineConfig, type UserConfig } from 'vitest/config';
+import { defineConfig, type ViteUserConfig as UserConfig } from 'vitest/config';
 
 const lib = join(import.meta.dirname, 'src/lib');
 

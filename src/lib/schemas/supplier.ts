@@ -2,7 +2,7 @@ import { z } from 'zod';
 import type { Range } from '../domain/receiving/assessment';
 import type { Outcome } from '../domain/receiving/recommendation';
 import type { TemperatureUnit } from '../domain/units';
-import type { SeriesView, Verdict } from './docket';
+import type { AssessmentView, SeriesView, Verdict } from './docket';
 
 /** What a supplier is told of one of its lines. */
 export interface SupplierLineView {
@@ -65,8 +65,8 @@ export interface SupplierDocketView {
 	lines: SupplierLineView[];
 	logger: { label: string; placement: 'air' | 'between-cases' | 'in-product' } | null;
 	excursions: SupplierExcursionView[];
-	upperCelsius: number | null;
-	lowerCelsius: number | null;
+	/** For the chart: the deciding assessment, its legs without anybody's name but the supplier's. */
+	assessment: AssessmentView | null;
 	series: SeriesView[];
 	/** When the goods left the supplier's hands. */
 	handedOverAt: string | null;

@@ -1,5 +1,5 @@
 import { v7 as uuid } from 'uuid';
-import type { DocketView, FrozenSignature } from '../../schemas/docket';
+import type { DocketView, FrozenSignature, SeriesView } from '../../schemas/docket';
 import type { DispositionInput } from '../../schemas/disposition';
 import { checkSigningPassword } from '../accounts/check-signing-password';
 import type { Context } from '../context';
@@ -29,21 +29,17 @@ async function lockDocket(
 	return { shipment: row, docket: await docketView(row, ctx.now, transaction) };
 }
 
-async function keepDecision(
-	w: Writing,
-	docket: DocketView,
-	input: DispositionInput,
-	signature: FrozenSignature
-) {
+interface Decided {
+	docket: DocketView;
+	series: SeriesView[];
+	input: DispositionInput;
+	signature: FrozenSignature;
+}
+
+async function keepDecision(w: Writing, { docket, series, input, signature }: Decided) {
 	const { transaction } = w;
 	const verdict = verdictOf(input.lines.map((line) => line.outcome));
-	const frozen = freeze({
-		docket,
-		series: await frozenSeries(docket, transaction),
-		input,
-		verdict,
-		signature
-	});
+	const frozen = freeze({ docket, series, input, verdict, signature });
 	await Disposition.create(
 		{
 			id: signature.dispositionId,
@@ -114,9 +110,11 @@ export async function signDisposition(
 	number: string,
 	input: DispositionInput
 ): Promise<{ version: number }> {
-	authorizeShipment(ctx, 'disposition.sign', await Shipment.findOne({ where: { number } }));
+	const seen = await Shipment.findOne({ where: { number } });
+	authorizeShipment(ctx, 'disposition.sign', seen);
 	const signer = await checkSigningPassword(ctx, input.password);
 	const dispositionId = uuid();
+	const series = await frozenSeries(seen.id);
 	return inTransaction(ctx, async (w) => {
 		const { shipment, docket } = await lockDocket(ctx, number, w);
 		checkDecision(docket, input);
@@ -132,7 +130,7 @@ export async function signDisposition(
 			reasons: input.reasons,
 			amendmentReason: input.amendmentReason
 		};
-		const { verdict, frozenSha256 } = await keepDecision(w, docket, input, signature);
+		const { verdict, frozenSha256 } = await keepDecision(w, { docket, series, input, signature });
 		await closeDocket(w, ctx, shipment, verdict);
 		w.record(
 			'disposition.signed',

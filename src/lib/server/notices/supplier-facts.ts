@@ -35,6 +35,17 @@ function excursionViews(docket: Docket, assessment: AssessmentView | null): Supp
 	}));
 }
 
+/** Whose hands the goods passed through later is not the supplier's to know. */
+function withoutNames(assessment: AssessmentView): AssessmentView {
+	const legs = assessment.legs.map((leg) => ({
+		...leg,
+		holder: leg.ordinal === 1 ? 'yours' : '',
+		place: '',
+		handoverId: ''
+	}));
+	return { ...assessment, legs };
+}
+
 /** What a supplier may know of a signed docket, from the frozen record alone. */
 export function supplierFacts(frozen: FrozenDocket): Omit<SupplierDocketView, 'report' | 'notice'> {
 	const { docket, signature } = frozen;
@@ -67,8 +78,7 @@ export function supplierFacts(frozen: FrozenDocket): Omit<SupplierDocketView, 'r
 		})),
 		logger: logger ? { label: logger.label, placement: logger.placement } : null,
 		excursions: excursionViews(docket, assessment),
-		upperCelsius: assessment?.upperCelsius ?? null,
-		lowerCelsius: assessment?.lowerCelsius ?? null,
+		assessment: assessment && withoutNames(assessment),
 		series: frozen.series.filter((series) => series.label === assessment?.logger),
 		handedOverAt: handedOverAt(docket),
 		openingHours: assessment?.openingHours.value ?? null,

@@ -1,7 +1,12 @@
+import { fail } from '@sveltejs/kit';
+import { holdInput, noteInput } from '$lib/schemas/note';
 import { getDocket } from '$lib/server/dockets/get-docket';
+import { liftHold } from '$lib/server/holds/lift-hold';
+import { putHold } from '$lib/server/holds/put-hold';
+import { addNote } from '$lib/server/notes/add-note';
 import { may } from '$lib/server/policies';
-import { contextOf, orError } from '$lib/server/request';
-import type { PageServerLoad } from './$types';
+import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
+import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, params, depends }) => {
 	depends('app:docket');
@@ -22,3 +27,41 @@ export const load: PageServerLoad = async ({ locals, params, depends }) => {
 		back: { href: '/arrivals', word: docket.number.split('-').at(-1) ?? '', title: docket.title }
 	};
 };
+
+export const actions = {
+	note: async ({ locals, params, request }) => {
+		const ctx = contextOf(locals);
+
+		const form = await parseForm(request, noteInput);
+		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'invalid' });
+
+		try {
+			await addNote(ctx, params.docket, form.data);
+		} catch (e) {
+			return orFail(e, form.data);
+		}
+	},
+
+	hold: async ({ locals, params, request }) => {
+		const ctx = contextOf(locals);
+
+		const form = await parseForm(request, holdInput);
+		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'invalid' });
+
+		try {
+			await putHold(ctx, params.docket, form.data);
+		} catch (e) {
+			return orFail(e, form.data);
+		}
+	},
+
+	lift: async ({ locals, params }) => {
+		const ctx = contextOf(locals);
+
+		try {
+			await liftHold(ctx, params.docket);
+		} catch (e) {
+			return orFail(e);
+		}
+	}
+} satisfies Actions;

@@ -1,0 +1,125 @@
+import { count, duration, lifeDays, temperature, temperatureSign } from '../../format';
+import { dayTime, dayOfYear, time, zoneName } from '../../format-time';
+import type { SupplierDocketView, SupplierExcursionView } from '../../schemas/supplier';
+import { renderMail, type MailContent, type MailMark } from '../mail/layout';
+
+/** Facts of a notice: what was signed, the notice's own number and clock, and the way in. */
+export interface NoticeFacts {
+	docket: Omit<SupplierDocketView, 'report' | 'notice'>;
+	noticeNumber: string;
+	answerByAt: string | null;
+	contactName: string;
+	link: string;
+	hasReport: boolean;
+}
+
+const locale = 'en';
+const minuteMs = 60_000;
+
+const outcomeWords: Record<string, { mark: MailMark; words: string }> = {
+	accept: { mark: 'accept', words: 'accepted' },
+	conditions: { mark: 'conditions', words: 'accepted with conditions' },
+	hold: { mark: 'hold', words: 'held' },
+	reject: { mark: 'reject', words: 'refused' }
+};
+
+function quantities({ lines }: NoticeFacts['docket']): string {
+	const total = lines.reduce((sum, line) => sum + line.cases, 0);
+	const refused = lines
+		.filter((line) => line.outcome === 'reject')
+		.reduce((sum, line) => sum + line.cases, 0);
+	if (refused === 0) return `${count(total, locale)} cases taken in, readings outside the limits`;
+	return refused === total
+		? `all ${count(total, locale)} cases refused`
+		: `${count(refused, locale)} of ${count(total, locale)} cases refused`;
+}
+
+function byInstant(at: string, zone: string): string {
+	return `${dayTime(at, zone, locale)} ${zoneName(at, zone)}`;
+}
+
+/** The outcome in quantities, and by when an answer is asked for. */
+export function noticeSubject({ docket, answerByAt }: Pick<NoticeFacts, 'docket' | 'answerByAt'>): string {
+	const answer = answerByAt ? `; answer by ${dayTime(answerByAt, docket.zone, locale)}` : '';
+	return `Your load ${docket.number}: ${quantities(docket)}${answer}`;
+}
+
+function extremeFact(
+	{ excursions, temperatureUnit }: NoticeFacts['docket'],
+	kind: SupplierExcursionView['kind']
+): string {
+	const sign = temperatureSign(temperatureUnit);
+	const own = excursions.filter((excursion) => excursion.kind === kind);
+	if (own.length === 0) return 'within the limit';
+	const worst = own.reduce((a, b) => ((kind === 'too-warm') === b.extremeCelsius > a.extremeCelsius ? b : a));
+	const minutes = own.reduce((sum, excursion) => sum + excursion.minutes, 0);
+	const degrees = (celsius: number) => `${temperature(celsius, temperatureUnit, locale)} ${sign}`;
+	return `${degrees(worst.extremeCelsius)}, limit ${degrees(worst.limitCelsius)}, outside for ${duration(minutes * minuteMs)}`;
+}
+
+function lifeFact({ lines }: NoticeFacts['docket']): string {
+	const known = lines.flatMap((line) =>
+		line.remainingHours ? [lifeDays(line.remainingHours.value, locale)] : []
+	);
+	if (known.length === 0) return 'not known: no readings';
+	return `${known.join(', ')} d; needed ${[...new Set(lines.map((line) => lifeDays(line.neededHours, locale)))].join(', ')} d`;
+}
+
+function contentOf(facts: NoticeFacts): MailContent {
+	const { docket, noticeNumber, answerByAt, contactName, link, hasReport } = facts;
+	const times = docket.excursions.length === 1 ? 'once' : `${docket.excursions.length} times`;
+	const outside =
+		docket.excursions.length === 0
+			? 'The readings stayed within the limits.'
+			: `The logger that decided was outside the limits ${times}.`;
+	const refused = docket.lines.some((line) => line.outcome === 'reject');
+	return {
+		kicker: `${docket.siteName} · notice ${noticeNumber}`,
+		title: refused ? 'Goods of your load were refused' : 'Excursions on your load',
+		greeting: `Dear ${contactName},`,
+		paragraphs: [
+			...(refused
+				? ['Please tell us today what becomes of the refused goods: collection, release to us, or disposal.']
+				: []),
+			`we received ${docket.title} on ${byInstant(docket.arrivedAt, docket.zone)}. ${outside} These are readings; they do not say whose fault it was.`
+		],
+		facts: [
+			{
+				label: 'Docket, order',
+				value: [docket.number, docket.purchaseOrder].filter(Boolean).join(', '),
+				isFigure: true
+			},
+			{
+				label: 'Received',
+				value: `${dayOfYear(docket.arrivedAt, docket.zone, locale)}, ${time(docket.arrivedAt, docket.zone)} ${zoneName(docket.arrivedAt, docket.zone)}`
+			},
+			{ label: 'Outcome', value: quantities(docket) },
+			{ label: 'Highest', value: extremeFact(docket, 'too-warm'), isFigure: true },
+			{ label: 'Lowest', value: extremeFact(docket, 'too-cold'), isFigure: true },
+			{ label: 'Life left', value: lifeFact(docket), isFigure: true }
+		],
+		outcomes: docket.lines.map((line) => {
+			const { mark, words } = outcomeWords[line.outcome ?? 'hold'] ?? {
+				mark: 'hold' as const,
+				words: 'held'
+			};
+			const detail = line.condition ?? line.reason;
+			return {
+				mark,
+				name: `Line ${line.ordinal}, lot ${line.lot}`,
+				words: `${words}, ${count(line.cases, locale)} cases${detail ? `: ${detail}` : ''}`
+			};
+		}),
+		button: { word: 'See the evidence and answer', href: link },
+		after: [
+			...(answerByAt ? [`Please answer by ${byInstant(answerByAt, docket.zone)}.`] : []),
+			'The link is yours and opens this docket alone. A forwarded or used link offers to send you a fresh one.'
+		],
+		foot: `Sent by ${docket.siteName} because you shipped this load. ${hasReport ? 'The signed receiving report is attached. ' : ''}Life left is an estimate of quality from temperature alone. It does not assess safety.`
+	};
+}
+
+/** The notice as a mail: subject, HTML and plain text with the same figures, naming no other party. */
+export function noticeMail(facts: NoticeFacts): { subject: string; html: string; text: string } {
+	return { subject: noticeSubject(facts), ...renderMail(contentOf(facts)) };
+}
