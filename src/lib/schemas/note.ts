@@ -1,0 +1,8 @@
+import { z } from 'zod';
+import { optionalId, text } from './shipment-parts';
+
+export const noteInput = z.object({ id: optionalId, text: text(2_000, 'Write the note.') });
+export type NoteInput = z.output<typeof noteInput>;
+
+export const holdInput = z.object({ id: optionalId, reason: text(500, 'Why is it held?') });
+export type HoldInput = z.output<typeof holdInput>;
