@@ -3,6 +3,7 @@ import type { Excursion } from '../../../domain/receiving/assessment';
 import { traceChart } from './chart/trace-chart';
 import { attributes, element } from './chart/svg';
 import { hatch } from './chart/excursion-bands';
+import { namedOthers } from './chart/traces';
 import { legLetter, lineNames, type Chapter, type Draft } from './draft';
 import { ledger, sectionTitle } from './ledger';
 import { legsLedger } from './legs-ledger';
@@ -29,7 +30,9 @@ function chartSection(draft: Draft, chapter: Chapter): Content {
 	const { assessment, others } = chapter;
 	const placement = draft.docket.loggers.find((logger) => logger.label === assessment.logger)?.placement;
 	const where = placement === undefined ? '' : ` ${placementWords[placement]}`;
-	const behind = others.length === 0 ? '' : `, ${others.map((other) => other.label).join(', ')} behind it`;
+	const named =
+		others.length > namedOthers ? `${others.length} others` : others.map((other) => other.label).join(', ');
+	const behind = others.length === 0 ? '' : `, ${named} behind it`;
 	const finding = `${draft.thermometer.sign}${where}, ${assessment.logger} in ink${behind}; ${lineNames(chapter.lines)}`;
 	return {
 		unbreakable: true,
@@ -56,7 +59,7 @@ function excursionsSection(draft: Draft, chapter: Chapter): Content[] {
 			title,
 			finding: `${lineNames(chapter.lines)}${limitsText(draft, chapter)}`,
 			columns: [
-				{ head: '', width: 15 },
+				{ head: '', width: 18 },
 				{ head: 'What', width: 53 },
 				{ head: 'From', width: 74 },
 				{ head: 'To', width: 30 },

@@ -1,7 +1,7 @@
 import type { Content } from 'pdfmake/interfaces';
 import { attributes, textElement } from './chart/svg';
 import { widthOf } from './chart/words-room';
-import { counterfoilTop, hairline, pair } from './counterfoil';
+import { counterfoilTop, hairline, pair } from './counterfoil-parts';
 import type { Draft } from './draft';
 import { overUseOf } from './leg-figures';
 import { palette, sizePoints } from './palette';

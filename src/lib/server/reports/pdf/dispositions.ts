@@ -15,7 +15,7 @@ export function dispositions(draft: Draft): Content[] {
 			title: 'Dispositions',
 			finding: null,
 			columns: [
-				{ head: '', width: 10 },
+				{ head: '', width: 15 },
 				{ head: 'Product and lot', width: '*' },
 				{ head: 'First pallet, SSCC; GTIN', width: 101 },
 				{ head: 'Cases', width: 28, align: 'right' },

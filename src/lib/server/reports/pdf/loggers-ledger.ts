@@ -28,7 +28,7 @@ export function loggers(draft: Draft): Content[] {
 			title: 'Loggers and raw exports',
 			finding: null,
 			columns: [
-				{ head: '', width: 16 },
+				{ head: '', width: 19 },
 				{ head: 'Logger', width: 52 },
 				{ head: 'Where', width: '*' },
 				{ head: 'Readings', width: 34, align: 'right' },

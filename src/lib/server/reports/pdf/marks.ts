@@ -23,8 +23,8 @@ const outcomeWords: Record<Outcome, string> = {
 };
 const verdicts: Record<Verdict, { readonly mark: Outcome; readonly word: string }> = {
 	accepted: { mark: 'accept', word: 'Accepted' },
-	conditions: { mark: 'conditions', word: 'Accepted with conditions' },
-	part: { mark: 'conditions', word: 'Accepted in part' },
+	conditions: { mark: 'conditions', word: 'Accepted with\u00a0conditions' },
+	part: { mark: 'conditions', word: 'Accepted in\u00a0part' },
 	rejected: { mark: 'reject', word: 'Rejected' }
 };
 

@@ -6,6 +6,9 @@ import type { Frame } from './frame';
 import { element, pathThrough, textElement, type Node } from './svg';
 import { stacked, widthOf } from './words-room';
 
+/** More quiet traces than this are a bundle: their names would cover it. */
+export const namedOthers = 4;
+
 /** Others quietly behind, the governing trace in ink, gaps dotted and bracketed. */
 export function traces(chapter: Chapter, frame: Frame): Node[] {
 	const quiet = chapter.others.map((series) => trace(series, frame, palette.edge, 0.7));
@@ -34,7 +37,7 @@ function trace(series: SeriesView, frame: Frame, stroke: string, width: number):
 
 /** Quiet traces are named where they stand furthest from the governing one. */
 function traceNames({ series, others }: Chapter, frame: Frame): Node[] {
-	if (series === null) return [];
+	if (series === null || others.length > namedOthers) return [];
 	const names = others.flatMap((other) => {
 		let at: { item: { label: string; x: number }; at: number } | null = null;
 		let furthest = 3;
