@@ -86,10 +86,18 @@ export interface UploadAnswer {
 	refused: { fileName: string; code: string; message: string }[];
 }
 
+/** A field of a form that an API call may send as JSON has it: a number, true, null. */
+function fromJson<Field extends z.ZodType>(field: Field) {
+	return z.preprocess((value) => {
+		if (value === null || value === false) return '';
+		return typeof value === 'number' || value === true ? String(value) : value;
+	}, field);
+}
+
 /** Which of the choices shown is right. */
 export const answerForm = z.object({
 	choice: z.coerce.number({ error: 'Choose one of the answers.' }).int().min(0).max(9),
-	remember: ticked
+	remember: fromJson(ticked)
 });
 
 const notAnAccuracy = 'Enter the accuracy from the logger’s data sheet, from 0.01 to 5 °C.';
@@ -97,13 +105,15 @@ const notAnAccuracy = 'Enter the accuracy from the logger’s data sheet, from 0
 /** Where the logger rode, and what it is. The accuracy is asked where the serial is not on the register. */
 export const keepForm = z.object({
 	serial: neededText(60, 'Enter the logger’s serial, as printed on it.'),
-	lineId: z
-		.union([z.literal(''), z.uuid('Choose a line from the list.')])
-		.default('')
-		.transform((id) => id || null),
-	position: optionalText(120).transform((text) => text || null),
+	lineId: fromJson(
+		z
+			.union([z.literal(''), z.uuid('Choose a line from the list.')])
+			.default('')
+			.transform((id) => id || null)
+	),
+	position: fromJson(optionalText(120)).transform((text) => text || null),
 	placement: z.enum(placements, 'Choose where the sensor rode.'),
-	accuracyCelsius: decimalField(notAnAccuracy, { min: 0.01, max: 5 })
+	accuracyCelsius: fromJson(decimalField(notAnAccuracy, { min: 0.01, max: 5 }))
 });
 export type KeepForm = z.output<typeof keepForm>;
 

@@ -25,7 +25,7 @@ async function scene() {
 	const site = await buildSite();
 	const dock = await contextFor(await buildUser(['dock'], { sites: [site] }));
 	const qa = await contextFor(await buildUser(['qa'], { sites: [site] }));
-	return { site, dock, qa, ...(await buildShipment({ site })) };
+	return { dock, qa, ...(await buildShipment({ site })) };
 }
 
 async function upload(ctx: Context, number: string, content: string): Promise<string> {

@@ -20,7 +20,7 @@ useTestDatabase();
 async function scene() {
 	const site = await buildSite();
 	const dock = await contextFor(await buildUser(['dock'], { sites: [site] }));
-	return { site, dock, ...(await buildShipment({ site })) };
+	return { dock, ...(await buildShipment({ site })) };
 }
 
 async function send(

@@ -1,0 +1,10 @@
+import { Refusal } from '../refusals';
+
+/** The JSON of a request. @throws Refusal `invalid` where it is none */
+export async function jsonBody(request: Request): Promise<unknown> {
+	try {
+		return await request.json();
+	} catch {
+		throw new Refusal('invalid', 'The body is not JSON.');
+	}
+}
