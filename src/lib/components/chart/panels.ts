@@ -6,7 +6,7 @@ import { drawCustody, drawGaps, drawTraceNames } from './draw-marks';
 import { drawScale } from './draw-scale';
 import { drawTimeAxis } from './draw-time-axis';
 import { withPen, type Drawing, type Pen } from './drawing';
-import { lifeTicks, scaleTicks } from './scale';
+import { lifePaddingPx, lifeScale, temperatureScale } from './heights';
 
 export interface Panels {
 	/** Draws again at the view that the drawing now has. */
@@ -30,6 +30,8 @@ function optionsOf(drawing: Drawing, parts: PanelParts): uPlot.Options {
 		width: drawing.layout.widthPx,
 		height: parts.heightPx,
 		padding: parts.padding,
+		// Rounding to whole pixels would make stairs of a line that falls slowly.
+		pxAlign: 0,
 		legend: { show: false },
 		cursor: { show: false },
 		scales: {
@@ -47,7 +49,7 @@ function optionsOf(drawing: Drawing, parts: PanelParts): uPlot.Options {
 
 function temperaturePanel(drawing: Drawing): uPlot.Options {
 	const { model, palette, layout } = drawing;
-	const scale = scaleTicks(model.temperatures.least, model.temperatures.most, layout.isNarrow ? 5 : 7);
+	const scale = temperatureScale(model);
 	const quiet = { stroke: palette.edge, width: 1, points: { show: false } };
 	return optionsOf(drawing, {
 		heightPx: layout.temperaturePx,
@@ -70,24 +72,13 @@ function temperaturePanel(drawing: Drawing): uPlot.Options {
 	});
 }
 
-/** The least figure of a column, or nothing. */
-function leastOf(column: ArrayLike<number | null | undefined>): number[] {
-	let least: number | null = null;
-	for (let at = 0; at < column.length; at++) {
-		const value = column[at];
-		if (typeof value === 'number' && (least === null || value < least)) least = value;
-	}
-	return least === null ? [] : [least];
-}
-
 function lifePanel(drawing: Drawing): uPlot.Options {
 	const { model, palette, layout } = drawing;
-	const least = Math.min(0, ...leastOf(model.life?.[2] ?? []));
-	const scale = lifeTicks(least, model.fullDays, layout.isNarrow ? 3 : 4);
+	const scale = lifeScale(model);
 	const hidden = { show: false };
 	return optionsOf(drawing, {
 		heightPx: layout.lifePx,
-		padding: [7, layout.rightPx, 7, layout.leftPx],
+		padding: [lifePaddingPx, layout.rightPx, lifePaddingPx, layout.leftPx],
 		range: [scale.from, scale.to],
 		under: (pen) => {
 			drawBands(pen, drawing, false);

@@ -8,8 +8,10 @@ export function wholeOf(series: readonly SeriesView[], assessment: AssessmentVie
 	return { fromMs: Math.min(...ends), toMs: Math.max(...ends) };
 }
 
-export function indexAt(series: SeriesView, ms: number): number {
-	return nearestIndex(series.times, ms);
+/** Finer series cover only the part that is zoomed to; the whole never shrinks to it. */
+export function spanOf(known: Window | undefined, next: Window): Window {
+	if (!known) return next;
+	return { fromMs: Math.min(known.fromMs, next.fromMs), toMs: Math.max(known.toMs, next.toMs) };
 }
 
 /** Where the crosshair stands at first: the worst of the costliest excursion, otherwise the last reading. */
