@@ -1,0 +1,96 @@
+import { getContext, setContext } from 'svelte';
+import type { Spec } from '../../domain/shelf-life/spec';
+import type { TemperatureUnit } from '../../domain/units';
+import { specIssues } from '../../messages/en/spec-faults';
+import { readSpecForm } from '../../schemas/spec-form';
+import { filledRows, leastRows, type RowKind, type SpecFormValues } from '../../schemas/spec-form-values';
+
+export interface SpecEditorStart {
+	values: SpecFormValues;
+	/** What the server found, until something is typed. */
+	issues: Record<string, string>;
+	/** The saved figures the curve shows until the fields make sense. */
+	saved: Spec | null;
+	isEditable: boolean;
+	unit: TemperatureUnit;
+}
+
+/** The fields of a spec while somebody looks at or edits it: read again at every key, so that curve and faults follow. */
+export class SpecEditor {
+	values: SpecFormValues;
+	readonly isEditable: boolean;
+	readonly unit: TemperatureUnit;
+	private readonly first: SpecFormValues;
+	private isTouched = $state(false);
+	private lastGood: Spec | null;
+	private readonly read;
+	readonly issues: Record<string, string>;
+	/** What the fields say now, or said last when they made sense. */
+	readonly spec: Spec | null;
+
+	constructor({ values, issues, saved, isEditable, unit }: SpecEditorStart) {
+		const state = $state({ ...values });
+		this.values = state;
+		this.first = { ...values };
+		this.isEditable = isEditable;
+		this.unit = unit;
+		this.lastGood = saved;
+		this.read = $derived(readSpecForm(state));
+		this.issues = $derived(this.isTouched ? specIssues(this.read.faults, state) : issues);
+		this.spec = $derived.by(() => {
+			// What was typed last and made sense stays drawn while a figure is half typed.
+			if (this.read.spec) this.lastGood = this.read.spec;
+			return this.lastGood;
+		});
+	}
+
+	touch = (): void => {
+		this.isTouched = true;
+	};
+
+	/** Whether anything differs from what was loaded. */
+	get isChanged(): boolean {
+		const names = new Set([...Object.keys(this.first), ...Object.keys(this.values)]);
+		return [...names].some((name) => (this.values[name] ?? '') !== (this.first[name] ?? ''));
+	}
+
+	/** Rows to offer: the filled ones and an empty one, unless there is nothing to fill in. */
+	rowCount(kind: RowKind): number {
+		const filled = filledRows(this.values, kind);
+		return this.isEditable ? Math.max(leastRows[kind], filled + 1) : filled;
+	}
+
+	/** Takes the published points over as the points of a storage-life table, but for the reference's own. */
+	useLifeTable = (): void => {
+		const points = this.publishedPoints();
+		for (const name of Object.keys(this.values)) if (/^point\d/.test(name)) this.values[name] = '';
+		points.forEach(([degrees, life], at) => {
+			this.values[`point${at}Degrees`] = degrees;
+			this.values[`point${at}Life`] = life;
+		});
+		this.values.model = 'life-table';
+		this.touch();
+	};
+
+	private publishedPoints(): [string, string][] {
+		const points = new Map<string, string>();
+		for (let at = 0; at < filledRows(this.values, 'source'); at++) {
+			const degrees = this.values[`source${at}Degrees`] ?? '';
+			const life = this.values[`source${at}Life`] ?? '';
+			const isOwn =
+				Number(degrees.replace('−', '-')) === Number((this.values.reference ?? '').replace('−', '-'));
+			if (degrees && life && !isOwn && !points.has(degrees)) points.set(degrees, life);
+		}
+		return [...points];
+	}
+}
+
+const key = Symbol('spec editor');
+
+export function provideSpecEditor(editor: SpecEditor): SpecEditor {
+	return setContext(key, editor);
+}
+
+export function specEditor(): SpecEditor {
+	return getContext<SpecEditor>(key);
+}
