@@ -36,7 +36,7 @@ describe('a public year of hourly temperatures', () => {
 		expect(new Date(understanding.lastMs).toISOString()).toBe('2010-12-31T23:00:00.000Z');
 		expect(understanding.usualIntervalMs).toBe(3_600_000);
 		expect([channel.minCelsius, channel.maxCelsius]).toEqual([3.1, 24.4]);
-		// Published to five decimals.
+		// Stated to five decimals above.
 		expect(channel.meanCelsius).toBeCloseTo(11.12762, 5);
 		expect(channel.name).toBe('temperature');
 	});

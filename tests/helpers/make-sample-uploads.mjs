@@ -6,7 +6,6 @@ import { gzipSync } from 'node:zlib';
 
 const folder = 'sample-uploads';
 const minute = 60_000;
-const hour = 60 * minute;
 
 /** The moment all samples are read at, and the site that reads them. */
 const uploadedMs = Date.parse('2026-04-20T12:00:00Z');

@@ -82,8 +82,6 @@ export interface Oddity {
 		| 'date-order-by-upload'
 		/** The column heads stood again among the readings. */
 		| 'header-repeated'
-		/** Fewer than most, yet some, rows carried a unit other than their column's. */
-		| 'mixed-unit'
 		/** The column in the other unit disagrees with the chosen one by more than rounding. */
 		| 'twin-disagrees'
 		/** A reading before the start that the file itself states. */

@@ -112,7 +112,6 @@ const oddities: Readonly<Record<Oddity['code'], Say>> = {
 		'repeated line of column heads, not read',
 		'repeated lines of column heads, not read'
 	),
-	'mixed-unit': () => 'Some values carry another unit than the rest',
 	'twin-disagrees': (count, detail, isOne) =>
 		`${count} ${isOne ? 'row differs' : 'rows differ'} from “${detail}” by more than rounding`,
 	'before-start': plural(

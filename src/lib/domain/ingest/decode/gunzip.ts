@@ -3,7 +3,8 @@ import { maxFileBytes } from '../bounds';
 
 export type Gunzipped = { readonly bytes: Uint8Array } | { readonly fault: 'too-large' | 'broken-gzip' };
 
-const pieceBytes = 64 * 1024;
+/** A piece of this size unpacks to 1 MB at most: deflate packs no tighter than 1032 to 1. */
+const pieceBytes = 1024;
 
 const crcTable = Int32Array.from({ length: 256 }, (_, byte) => {
 	let c = byte;
@@ -21,20 +22,16 @@ export function crc32(bytes: Uint8Array): number {
 }
 
 function trailerMatches(packed: Uint8Array, plain: Uint8Array): boolean {
-	let end = packed.length;
+	if (packed.length < 18) return false;
 	const view = new DataView(packed.buffer, packed.byteOffset, packed.byteLength);
-	// A length that is a multiple of 256 ends in a zero byte, so padding is tried byte by byte.
-	for (let padding = 0; padding <= 512 && end >= 18; padding++, end--) {
-		const isMatch =
-			view.getUint32(end - 4, true) === plain.length && view.getUint32(end - 8, true) === crc32(plain);
-		if (isMatch) return true;
-		if (packed[end - 1] !== 0) return false;
-	}
-	return false;
+	const [checksum, length] = [
+		view.getUint32(packed.length - 8, true),
+		view.getUint32(packed.length - 4, true)
+	];
+	return length === plain.length && checksum === crc32(plain);
 }
 
-/** Unpacks one gzip member piece by piece, so that a small file cannot grow beyond the bound. */
-export function gunzip(packed: Uint8Array): Gunzipped {
+function unpack(packed: Uint8Array): Gunzipped {
 	const pieces: Uint8Array[] = [];
 	let total = 0;
 	const stream = new Gunzip((piece) => {
@@ -57,4 +54,18 @@ export function gunzip(packed: Uint8Array): Gunzipped {
 		at += piece.length;
 	}
 	return trailerMatches(packed, bytes) ? { bytes } : { fault: 'broken-gzip' };
+}
+
+/** Unpacks one gzip member piece by piece, so that a small file cannot grow beyond the bound. Zeros may pad it. */
+export function gunzip(packed: Uint8Array): Gunzipped {
+	const whole = unpack(packed);
+	if (!('fault' in whole) || whole.fault === 'too-large') return whole;
+	let end = packed.length;
+	while (end > 0 && packed[end - 1] === 0) end--;
+	// The length in the trailer may itself end in up to four zeros: they are not padding.
+	for (let own = 0; own <= 4 && end + own < packed.length; own++) {
+		const bare = unpack(packed.subarray(0, end + own));
+		if (!('fault' in bare)) return bare;
+	}
+	return whole;
 }

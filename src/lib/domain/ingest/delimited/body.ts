@@ -81,8 +81,7 @@ function isUnitRow(cells: readonly string[]): boolean {
 	return (
 		units > 0 &&
 		filled.every(
-			(cell) =>
-				isUnitCell(cell) || /^[[(]?(yyyy|dd|mm|hh|jjjj|tt|utc|gmt|local|iso|-|date|time)/i.test(cell.trim())
+			(cell) => isUnitCell(cell) || /^[[(]?(yyyy|dd|mm|hh|jjjj|tt|utc|gmt|iso|-$)/i.test(cell.trim())
 		)
 	);
 }

@@ -51,13 +51,8 @@ function listKind(array: JsonArray): RowSource['kind'] | null {
 	const share = (test: (node: JsonNode) => boolean): number => sample.filter(test).length / sample.length;
 	if (share((node) => isObject(node)) > 0.8) {
 		const isReading = (node: JsonNode): boolean => {
-			const kinds = kindsIn(node, 0);
-			// A row names its moment itself; a moment only deep inside belongs to a list further down.
-			return (
-				kinds.moments > 0 &&
-				isObject(node) &&
-				node.values.every((value) => !isArray(value) || value.items.length <= 16)
-			);
+			// A row names its moment itself; a list of moments inside makes it the frame of a recording.
+			return kindsIn(node, 0).moments > 0 && isObject(node) && !node.values.some(isListOfReadings);
 		};
 		return share(isReading) > 0.5 ? 'objects' : null;
 	}

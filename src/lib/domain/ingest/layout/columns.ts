@@ -22,6 +22,8 @@ export interface Column {
 	/** True where each number is greater than the one above it by the same amount. */
 	readonly isCounter: boolean;
 	readonly epochUnit: 's' | 'ms' | 'us' | null;
+	/** The one text all its sampled cells hold, such as a unit repeated in every row; null when they differ. */
+	readonly constant: string | null;
 	/** First filled cell, as an example. */
 	readonly example: string;
 }
@@ -31,6 +33,7 @@ const sampledRows = 400;
 interface Tally {
 	counts: Record<CellKind, number>;
 	numbers: number[];
+	texts: Set<string>;
 	example: string;
 }
 
@@ -38,6 +41,7 @@ function emptyTally(): Tally {
 	return {
 		counts: { blank: 0, missing: 0, number: 0, moment: 0, date: 0, time: 0, text: 0 },
 		numbers: [],
+		texts: new Set(),
 		example: ''
 	};
 }
@@ -72,6 +76,7 @@ function columnOf(table: Table, index: number, tally: Tally, rows: number): Colu
 		high: numbers.length === 0 ? NaN : Math.max(...numbers),
 		isCounter: isCounting(numbers),
 		epochUnit: epochUnit !== null && numbers.every((n) => epochUnitOf(n) === epochUnit) ? epochUnit : null,
+		constant: tally.texts.size === 1 && tally.counts.blank === 0 ? tally.example : null,
 		example: tally.example
 	};
 }
@@ -101,6 +106,7 @@ export function profileColumns(table: Table): Column[] {
 			const tally = (tallies[i] ??= emptyTally());
 			const kind = cellKindOf(cell);
 			tally.counts[kind]++;
+			if (tally.texts.size < 2) tally.texts.add(cell.trim());
 			if (tally.example === '' && kind !== 'blank') tally.example = cell.trim();
 			const n = Number(cell.trim().replace(',', '.'));
 			if ((kind === 'number' || /^\d{9,16}$/.test(cell.trim())) && Number.isFinite(n)) tally.numbers.push(n);
@@ -116,6 +122,15 @@ export function profileColumns(table: Table): Column[] {
 export function quantityOf(column: Column): Quantity | null {
 	if (column.meaning.quantity !== null) return column.meaning.quantity;
 	if (column.unit !== null) return 'temperature';
+	if (column.meaning.isTime) return null;
 	// A unit of something else (%RH, lx, V) explains the column as well as its head would.
 	return column.unitText === '' ? null : (meaningOf(column.unitText).quantity ?? 'other');
+}
+
+/** The temperature unit that a column of its own repeats in every row; null without one. */
+export function unitColumnOf(columns: readonly Column[]): TemperatureUnit | null {
+	const units = columns.map(({ constant }) =>
+		constant === null || /^[\d.,-]/.test(constant) ? null : wholeUnitOf(constant)
+	);
+	return units.find((unit) => unit !== null) ?? null;
 }

@@ -1,6 +1,6 @@
 import type { TemperatureUnit } from '../../units';
 import type { Ingestion, ReadContext } from '../ingestion';
-import { profileColumns, type Column } from '../layout/columns';
+import { profileColumns, unitColumnOf, type Column } from '../layout/columns';
 import { statedIn, type Stated } from '../layout/preamble';
 import type { Table } from '../layout/table';
 import { columnsOf, findTiming, type Timing } from '../layout/timing';
@@ -38,7 +38,7 @@ function refusalOf(table: Table, { timing, picked, stated }: Plan, context: Read
 	return isUntimed && isStartless ? refused('no-time', table.lineOf(0), table.textOf(0).slice(0, 80)) : null;
 }
 
-/** The unit of a column: the dock's answer, its own head, the values, then what the preamble says. */
+/** The unit of a column: the dock's answer, what stands beside the values, its head, then the preamble. */
 export function unitFor(
 	column: Column,
 	gathered: Gathered,
@@ -46,13 +46,15 @@ export function unitFor(
 	context: ReadContext
 ): TemperatureUnit | null {
 	const values = gathered.values.find((v) => v.column === column.index);
-	return context.answers.unit ?? column.unit ?? values?.unit ?? stated.unit;
+	return context.answers.unit ?? values?.unit ?? column.unit ?? stated.unit;
 }
 
 /** Reads a table to an understanding, to one question, or to a refusal. */
 export function readTable(table: Table, encoding: string, context: ReadContext): Ingestion {
-	const stated = statedIn(table.entries, table.freeText, table.header);
-	const plan = planOf(table, profileColumns(table), stated, context);
+	const columns = profileColumns(table);
+	const around = statedIn(table.entries, table.freeText, table.header);
+	const stated = { ...around, unit: unitColumnOf(columns) ?? around.unit };
+	const plan = planOf(table, columns, stated, context);
 	const { timing, picked } = plan;
 	const refusal = refusalOf(table, plan, context);
 	if (refusal !== null) return refusal;
@@ -90,6 +92,8 @@ export function readTable(table: Table, encoding: string, context: ReadContext):
 	const unit = unitOf(first);
 	const values = valuesOf(first);
 	if (values === undefined) return refused('no-temperature');
+	// °C and °F in one column are two recordings put together; neither unit would be right for all of it.
+	if (values.hasMixedUnits) return refused('two-recordings', null, first.name);
 	if (unit === null)
 		return { kind: 'question', question: unitQuestion(table, first, values, gathered, ms), declared };
 	const readable: Readable = {

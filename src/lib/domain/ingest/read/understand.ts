@@ -78,7 +78,7 @@ function twinOddities({ picked, gathered, values, unit, unitOf }: Readable): Odd
 	});
 }
 
-function axisOddities({ axis, gathered, values, declared }: Readable, series: Series): Oddity[] {
+function axisOddities({ axis, gathered, declared }: Readable, series: Series): Oddity[] {
 	const line = (row: number): number => gathered.lines[row] ?? 0;
 	const first = [line(0)];
 	const isAssumed = axis.isLocal && axis.zone.by === 'site';
@@ -102,7 +102,6 @@ function axisOddities({ axis, gathered, values, declared }: Readable, series: Se
 		),
 		oddityOf('date-order-by-journey', axis.orderBy === 'journey' ? first : [], axis.order),
 		oddityOf('date-order-by-upload', axis.orderBy === 'upload' ? first : [], axis.order),
-		oddityOf('mixed-unit', values.hasMixedUnits ? first : []),
 		oddityOf('before-start', early)
 	].filter((oddity) => oddity !== null);
 }

@@ -29,6 +29,7 @@ export function foldWord(word: string): string {
 	return lower
 		.normalize('NFD')
 		.replace(/[\u0300-\u036f]/g, '')
+		.normalize('NFC')
 		.replace(/ł/g, 'l')
 		.replace(/ß/g, 'ss')
 		.replace(/ø/g, 'o')

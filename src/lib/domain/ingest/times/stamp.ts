@@ -147,7 +147,8 @@ function readWords(into: Stamp): number {
 		else if (month === 0 && monthOfName(word) > 0) month = monthOfName(word);
 		else if (isWeekday(word)) continue;
 		else if (monthOfName(word) > 0) month = monthOfName(word);
-		else if (into.msOfDay !== noTime && /^[a-z]{2,5}$/.test(word)) into.zoneWord = word;
+		else if (into.msOfDay !== noTime && into.zoneWord === null && /^[a-z]{2,5}$/.test(word))
+			into.zoneWord = word;
 		else return -1;
 	}
 	return month;
