@@ -74,8 +74,8 @@ describe('gzip', () => {
 	});
 
 	it('that unpacks beyond the bound is refused without unpacking it all', () => {
-		const bomb = gzipSync(new Uint8Array(60 * 1024 * 1024), { level: 9 });
-		expect(bomb.length).toBeLessThan(100_000);
+		const bomb = gzipSync(new Uint8Array(52 * 1024 * 1024), { level: 1 });
+		expect(bomb.length).toBeLessThan(1_000_000);
 		expect(decodeBytes(bomb)).toMatchObject({ code: 'too-large' });
-	});
+	}, 30_000);
 });
