@@ -8,10 +8,10 @@ import { requestScope } from '$lib/server/request-scope';
 import type { Actions, PageServerLoad } from './$types';
 
 const demoPeople = [
-	{ email: 'dock@wharfinger.example', does: 'logs arrivals, uploads reads' },
-	{ email: 'qa@wharfinger.example', does: 'weighs the evidence, signs' },
+	{ email: 'dock@wharfinger.example', does: 'logs arrivals' },
+	{ email: 'qa@wharfinger.example', does: 'decides and signs' },
 	{ email: 'claims@wharfinger.example', does: 'follows claims' },
-	{ email: 'admin@wharfinger.example', does: 'keeps products, partners, people' }
+	{ email: 'admin@wharfinger.example', does: 'keeps the rest' }
 ];
 
 export const load: PageServerLoad = ({ locals, url }) => ({
