@@ -2,14 +2,14 @@ import { z } from 'zod';
 import type { Stage, Verdict } from './docket';
 import { optionalDay, optionalFlag, optionalId, optionalText } from './shipment-parts';
 
-/** What the board shows: a day, and which of its loads. */
+/** What the board shows: a day, and which of its loads. A faulty part of an address counts as not given. */
 export const boardQuery = z.object({
-	day: optionalDay,
-	dock: optionalText(40),
-	product: optionalId,
-	carrier: optionalId,
-	mine: optionalFlag,
-	q: optionalText(100)
+	day: optionalDay.catch(null),
+	dock: optionalText(40).catch(null),
+	product: optionalId.catch(null),
+	carrier: optionalId.catch(null),
+	mine: optionalFlag.catch(null),
+	q: optionalText(100).catch(null)
 });
 export type BoardQuery = z.output<typeof boardQuery>;
 
