@@ -1,0 +1,301 @@
+import { goods } from './lane';
+import type { LoadPlan } from './load';
+
+const at = (day: number, clock: string) => ({ day, clock });
+
+/** Loads of the last two months whose journeys are worth a look. */
+export const pastStories: readonly LoadPlan[] = [
+	{
+		key: 'door left open',
+		lane: 'lettuce',
+		due: at(-3, '06:20'),
+		lateHours: [0, 0.3],
+		incidents: [{ leg: 0, afterHours: 4, hours: 2.6, airCelsius: 14 }],
+		decided: {
+			afterMinutes: 62,
+			notify: true,
+			condition: 'Ship first, within four days.',
+			reasons: 'Two and a half hours in the open yard; life left is more than the order needs.'
+		}
+	},
+	{
+		key: 'failed unit',
+		lane: 'salmon',
+		due: at(-6, '04:40'),
+		lateHours: [0, 1.4],
+		incidents: [{ leg: 1, afterHours: 5, hours: 14, airCelsius: 19 }],
+		pulpCelsius: [11.8, 13.2],
+		doorNote: 'Unit showed alarm 32 since 21:40. Ice gone in the upper boxes.',
+		hold: { afterMinutes: 18, reason: 'Pulp above the limit' },
+		decided: {
+			afterMinutes: 74,
+			outcomes: ['reject'],
+			reasons: 'Unit failed; no life for the order is left.',
+			notify: true
+		},
+		aftermath: {
+			answer: {
+				kind: 'acknowledge',
+				afterHours: 20,
+				text: 'We have asked the haulier for the unit’s own log.'
+			},
+			claim: {
+				afterHours: 26,
+				against: 'bexcombe',
+				fraction: 1,
+				basis: 'Unit failed on the road leg; alarm unanswered for nine hours.',
+				then: [
+					{ status: 'noticed', afterHours: 2 },
+					{ status: 'filed', afterHours: 70 }
+				]
+			}
+		}
+	},
+	{
+		key: 'late',
+		lane: 'grapes',
+		due: at(-9, '09:30'),
+		lateHours: [2, 21],
+		decided: {
+			afterMinutes: 80,
+			condition: 'Shorter date; move within a week.',
+			reasons: 'A day late at the border.'
+		}
+	},
+	{
+		key: 'frozen greens',
+		lane: 'broccoli',
+		due: at(-12, '05:50'),
+		lateHours: [0, 0.1],
+		incidents: [{ leg: 1, afterHours: 2, hours: 6, airCelsius: -4 }],
+		pulpCelsius: [-0.4, 0.1],
+		doorNote: 'Set-point on the unit reads −4 °C. Crowns glassy at the nose.',
+		decided: {
+			afterMinutes: 66,
+			outcomes: ['reject'],
+			reasons: 'Frozen at the nose; crowns glassy in the cut.',
+			notify: true
+		},
+		aftermath: {
+			answer: {
+				kind: 'dispute',
+				afterHours: 30,
+				text: 'The load left us at 1 °C, see our dispatch probe. The set-point on the trailer was not ours.'
+			},
+			claim: {
+				afterHours: 48,
+				against: 'wade',
+				fraction: 1,
+				basis: 'Set-point −4 °C against +1 °C ordered.',
+				then: [
+					{ status: 'noticed', afterHours: 3 },
+					{ status: 'filed', afterHours: 60 },
+					{ status: 'settled', afterHours: 190 }
+				]
+			}
+		}
+	},
+	{
+		key: 'gap',
+		lane: 'asparagus',
+		due: at(-15, '07:10'),
+		rides: [{ gap: { leg: 1, afterHours: 3, hours: 2 } }],
+		decided: { afterMinutes: 45 }
+	},
+	{
+		key: 'stopped early',
+		lane: 'cod',
+		due: at(-18, '05:00'),
+		rides: [{ stopsEarlyHours: 7 }],
+		pulpCelsius: [0.6, 0.9],
+		hold: { afterMinutes: 20, reason: 'The logger stopped seven hours before the door' },
+		decided: {
+			afterMinutes: 95,
+			condition: 'Sell at the counter today and tomorrow.',
+			reasons: 'Pulp and ice agree with the trace up to where it stops.'
+		}
+	},
+	{
+		key: 'two disagree',
+		lane: 'tessil',
+		due: at(-21, '07:30'),
+		rides: [
+			{ line: 1, position: 'Pallet 1, nose' },
+			{ line: 1, position: 'Pallet 4, door end', offsetCelsius: 2.4 }
+		],
+		decided: {
+			afterMinutes: 88,
+			condition: 'Grade before shelving.',
+			reasons: 'The two differ by more than their accuracies; the warmer one has been sent for calibration.'
+		}
+	},
+	{
+		key: 'chilled tomatoes',
+		lane: 'tomatoes',
+		due: at(-24, '05:20'),
+		lateHours: [0, 0.5],
+		incidents: [{ leg: 1, afterHours: 2, hours: 11, airCelsius: 3.5 }],
+		decided: {
+			afterMinutes: 58,
+			notify: true,
+			condition: 'Ripe trade only, watch for pitting.',
+			reasons: 'Nine hours under the chilling threshold.'
+		},
+		aftermath: {
+			answer: { kind: 'acknowledge', afterHours: 8, text: 'The driver had mixed goods with salad at 4 °C.' }
+		}
+	},
+	{
+		key: 'vaccine warm',
+		lane: 'vaccine',
+		due: at(-27, '11:40'),
+		lateHours: [0, 0.8],
+		incidents: [{ leg: 1, afterHours: 3, hours: 2.2, airCelsius: 24 }],
+		pulpCelsius: [6.9],
+		hold: { afterMinutes: 12, reason: 'Above 8 °C in transit; stability to be asked' },
+		decided: {
+			afterMinutes: 240,
+			notify: true,
+			outcomes: ['conditions'],
+			condition: 'Quarantine until the holder of the authorisation answers.',
+			reasons: 'One excursion above 8 °C. The holder has been asked for stability data.'
+		},
+		aftermath: {
+			answer: {
+				kind: 'acknowledge',
+				afterHours: 26,
+				text: 'Covered by our stability budget. Letter follows by post.'
+			}
+		}
+	},
+	{
+		key: 'in part',
+		lane: 'olmarisa',
+		due: at(-30, '06:40'),
+		lateHours: [0, 0, 3, 2, 0.2],
+		rides: [
+			{ line: 1, position: 'Pallet 1, nose, in fruit', exposure: 0.15 },
+			{ line: 2, position: 'Pallet 10, door end, in fruit', exposure: 1, offsetCelsius: 0.4 }
+		],
+		incidents: [{ leg: 3, afterHours: 0.5, hours: 9, airCelsius: 19 }],
+		hold: { afterMinutes: 25, reason: 'Door-end pallets warm' },
+		decided: {
+			afterMinutes: 140,
+			outcomes: ['accept', 'reject'],
+			reasons: 'Line 2 stood warm at the cross-dock and shows mould.',
+			notify: true
+		},
+		aftermath: {
+			answer: {
+				kind: 'dispute',
+				afterHours: 50,
+				text: 'The balance at packing was eight hours less than you assume.'
+			},
+			claim: {
+				afterHours: 72,
+				against: 'sarn',
+				fraction: 0.85,
+				basis: 'Life lost at the cross-dock, door log not produced.',
+				then: [
+					{ status: 'noticed', afterHours: 4 },
+					{ status: 'filed', afterHours: 120 }
+				]
+			}
+		}
+	},
+	{
+		key: 'no logger',
+		lane: 'milk',
+		due: at(-33, '06:30'),
+		rides: [],
+		pulpCelsius: [3.4, 3.6],
+		decided: { afterMinutes: 30, reasons: 'No logger on this lane; decided on pulp and transit time.' }
+	},
+	{
+		key: 'short count',
+		lane: 'tulips',
+		due: at(-36, '06:15'),
+		short: 8,
+		decided: { afterMinutes: 36 },
+		aftermath: {
+			claim: {
+				afterHours: 30,
+				against: 'hollin',
+				fraction: 0.08,
+				basis: 'Eight buckets short against the papers, signed by the driver.',
+				then: [{ status: 'declined', afterHours: 160 }]
+			}
+		}
+	},
+	{
+		key: 'undeclared',
+		lane: 'grapes',
+		due: at(-41, '10:10'),
+		goods: [goods(['Table grapes', 'Table grapes, red, 9 kg'], [1200, 120], 15.9, null)],
+		decided: {
+			afterMinutes: 52,
+			condition: 'Sample each morning.',
+			reasons: 'No opening balance came with the papers.'
+		}
+	},
+	{
+		key: 'warm peas',
+		lane: 'peas',
+		due: at(-44, '12:30'),
+		lateHours: [0, 0.5],
+		incidents: [{ leg: 1, afterHours: 2, hours: 3.5, airCelsius: 2 }],
+		decided: {
+			afterMinutes: 47,
+			outcomes: ['reject'],
+			reasons: 'Above −15 °C for three hours; lumps in the bags.',
+			notify: true
+		},
+		aftermath: {
+			claim: {
+				afterHours: 40,
+				against: 'trascoll',
+				fraction: 1,
+				basis: 'Thawed and refrozen on the road.',
+				then: [
+					{ status: 'noticed', afterHours: 2 },
+					{ status: 'settled', afterHours: 300 }
+				]
+			}
+		}
+	},
+	{
+		key: 'mill unit off',
+		lane: 'cv-strawberries',
+		due: at(-8, '06:30'),
+		lateHours: [0, 2.2],
+		incidents: [{ leg: 1, afterHours: 8, hours: 15, airCelsius: 21 }],
+		pulpCelsius: [12.4, 14.9],
+		decided: {
+			afterMinutes: 71,
+			outcomes: ['reject'],
+			reasons: 'Reefer unit off for most of the night.',
+			notify: true
+		},
+		aftermath: {
+			answer: {
+				kind: 'acknowledge',
+				afterHours: 9,
+				text: 'Precooler record attached to our invoice; released to you for salvage.'
+			},
+			claim: {
+				afterHours: 20,
+				against: 'quillane',
+				fraction: 1,
+				basis: 'Unit off, fuel out. Driver statement on the bill of lading.',
+				then: [{ status: 'noticed', afterHours: 1 }]
+			}
+		}
+	},
+	{
+		key: 'mill seal',
+		lane: 'jb-lettuce',
+		due: at(-19, '10:15'),
+		seal: 'other',
+		decided: { afterMinutes: 55 }
+	}
+];

@@ -1,0 +1,164 @@
+import { goods } from './lane';
+import type { LoadPlan } from './load';
+
+const key = (name: string) => `staithe today ${name}`;
+
+/** The docket at QA: three lots, three loggers, a warm cross-dock and a frozen tail. */
+const atQa: LoadPlan = {
+	key: key('blueberries'),
+	lane: 'olmarisa',
+	title: 'Blueberries for the weekend',
+	due: { minutes: -245 },
+	lateHours: [0, 0.1, 0.25, 0, 0.02],
+	goods: [
+		goods(['Blueberries', 'Blueberries, 12 × 125 g'], [960, 192], 14.4, 20),
+		goods(['Blueberries', 'Blueberries, 8 × 250 g'], [1120, 160], 16.2, 20),
+		goods(['Blueberries', 'Blueberries, 12 × 125 g'], [640, 160], 14.4, 49)
+	],
+	rides: [
+		{ line: 1, position: 'Pallet 2, nose, in fruit', exposure: 0.18 },
+		{ line: 2, position: 'Pallet 9, middle, in fruit', exposure: 0.45, offsetCelsius: 0.3 },
+		{
+			line: 3,
+			position: 'Pallet 16, door end, in fruit',
+			exposure: 1,
+			offsetCelsius: 0.2,
+			gap: { leg: 2, afterHours: 27, hours: 2.2 }
+		}
+	],
+	incidents: [
+		{ leg: 1, afterHours: 0, hours: 1.2, airCelsius: 12 },
+		{ leg: 3, afterHours: 0.8, hours: 9.6, airCelsius: 12.5 },
+		{ leg: 4, afterHours: 8.5, hours: 3.6, airCelsius: -3.4 }
+	],
+	pulpCelsius: [0.8, 1.0, 1.4],
+	doorNote: 'Cold at the door, but the tail pallets are wet under the film.',
+	hold: { afterMinutes: 39, reason: 'Tail pallets wet, driver stood at the hub' },
+	trimFirstMinutes: 30,
+	notes: [
+		{
+			by: 'dock',
+			afterMinutes: 42,
+			text: 'Cold at the door, but the tail pallets are wet under the film. Driver says they stood outside at the hub "half the day".'
+		},
+		{ by: 'qa', afterMinutes: 200, text: 'Asked Sarn Quay for their door log.' }
+	]
+};
+
+const strawberries: LoadPlan = {
+	key: key('strawberries'),
+	lane: 'tessil',
+	due: { minutes: -140 },
+	lateHours: [0, 0.42],
+	goods: [
+		goods(['Strawberries', 'Strawberries, 10 × 400 g'], [360, 90], 18.5, 12, 3.2),
+		goods(['Strawberries', 'Strawberries, 20 × 227 g'], [240, 80], 21.4, 12, 3.2)
+	],
+	incidents: [{ leg: 1, afterHours: 6, hours: 4.5, airCelsius: 9 }],
+	pulpCelsius: [2.4, 2.9],
+	hold: { afterMinutes: 31, reason: 'Low under the need on both lots' }
+};
+
+const atTheDoor: readonly LoadPlan[] = [
+	{
+		key: key('fish'),
+		lane: 'salmon',
+		due: { minutes: -25 },
+		lateHours: [0, 0.2],
+		reads: 0,
+		pulpCelsius: [0.9]
+	},
+	{
+		key: key('lettuce'),
+		lane: 'lettuce',
+		due: { minutes: -20 },
+		lateHours: [0, 0.05],
+		rides: [
+			{ line: 1, position: 'Pallet 3, nose' },
+			{ line: 1, position: 'Pallet 10, door end', exposure: 0.8 }
+		],
+		reads: 1,
+		question: 'two-probes'
+	}
+];
+
+const expected: readonly LoadPlan[] = [
+	{ key: key('tulips next'), lane: 'tulips', due: { minutes: 10 }, isExpected: true },
+	{
+		key: key('asparagus next'),
+		lane: 'asparagus',
+		due: { minutes: 45 },
+		isExpected: true,
+		rides: [
+			{ line: 1, position: 'Pallet 1, nose' },
+			{ line: 1, position: 'Pallet 5, door end' }
+		]
+	},
+	{ key: key('tomatoes next'), lane: 'tomatoes', due: { minutes: 85 }, isExpected: true },
+	{ key: key('grapes next'), lane: 'grapes', due: { minutes: 175 }, isExpected: true },
+	{ key: key('cod next'), lane: 'cod', due: { minutes: 220 }, isExpected: true }
+];
+
+const done: readonly LoadPlan[] = [
+	{
+		key: key('milk'),
+		lane: 'milk',
+		due: { minutes: -79 },
+		lateHours: [0, 0.07],
+		decided: { afterMinutes: 38 }
+	},
+	{
+		key: key('asparagus'),
+		lane: 'asparagus',
+		due: { minutes: -94 },
+		lateHours: [0, -0.07],
+		decided: { afterMinutes: 39 }
+	},
+	{
+		key: key('smoked'),
+		lane: 'smoked',
+		due: { minutes: -165 },
+		lateHours: [0, 0.2],
+		incidents: [{ leg: 1, afterHours: 4, hours: 13, airCelsius: 26 }],
+		pulpCelsius: [14.8, 16.1],
+		doorNote: 'Unit off at the door. Driver: alarm since the ferry.',
+		decided: {
+			afterMinutes: 53,
+			outcomes: ['reject'],
+			reasons: 'Unit failed on the ferry. The pack rose above 3.3 °C for thirteen hours.',
+			notify: true
+		}
+	},
+	{
+		key: key('tulips'),
+		lane: 'tulips',
+		due: { minutes: -230 },
+		lateHours: [0, -0.08],
+		decided: { afterMinutes: 46 }
+	},
+	{
+		key: key('tomatoes'),
+		lane: 'tomatoes',
+		due: { minutes: -270 },
+		lateHours: [0, 0.43],
+		incidents: [{ leg: 1, afterHours: 3, hours: 8, airCelsius: 4 }],
+		decided: { afterMinutes: 41, condition: 'Ship first, within three days; keep at 12 °C.' }
+	},
+	{
+		key: key('broccoli'),
+		lane: 'broccoli',
+		due: { minutes: -295 },
+		lateHours: [0, 0.07],
+		decided: { afterMinutes: 51 }
+	},
+	{
+		key: key('cod'),
+		lane: 'cod',
+		due: { minutes: -315 },
+		lateHours: [0, -0.13],
+		decided: { afterMinutes: 68 }
+	}
+];
+
+/** Today at Pell Staithe: some done, two held, two at the door, five to come. */
+export const todayStaithe: readonly LoadPlan[] = [atQa, strawberries, ...atTheDoor, ...expected, ...done];

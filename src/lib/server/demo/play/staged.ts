@@ -1,0 +1,91 @@
+import { msPerHour, msPerMinute } from '../../../domain/units';
+import { suppliers } from '../cast/partners';
+import { sites } from '../cast/sites';
+import { chanceOf, type Chance } from '../chance';
+import type { PlacedLeg, Ride } from '../journeys/journey';
+import { placeLegs } from '../journeys/place-legs';
+import type { Goods, Lane } from '../loads/lane';
+import { lanes } from '../loads/lanes';
+import type { LoadPlan } from '../loads/load';
+import { drawnTogether, instantOf } from '../loads/when';
+
+/** A load with its times worked out. */
+export interface Staged {
+	plan: LoadPlan;
+	lane: Lane;
+	zone: string;
+	goods: readonly Goods[];
+	rides: readonly Ride[];
+	legs: readonly PlacedLeg[];
+	dueMs: number;
+	arrivedMs: number;
+	/** When its docket was opened. */
+	advisedMs: number;
+	/** By how much the minutes after the arrival are drawn together. */
+	pace: number;
+	chance: Chance;
+}
+
+const positions = ['Pallet 2, nose', 'Pallet 6, middle', 'Pallet 9, door end'] as const;
+/** Nobody opens a docket later than this before the load is due. */
+const latestAdviceHours = 1.5;
+
+/** Ordinary loads vary by a few pallets. */
+function usualGoods(lane: Lane, chance: Chance): Goods[] {
+	return lane.goods.map((row) => ({
+		...row,
+		cases: row.cases + chance.whole(-1, 1) * row.casesPerPallet,
+		openingHours: row.openingHours === null ? null : row.openingHours + chance.whole(-1, 2)
+	}));
+}
+
+function ridesOf(plan: LoadPlan, lane: Lane, lines: number): Ride[] {
+	const usual = Array.from({ length: lines }, (_, at) => ({ line: at + 1 }));
+	return (plan.rides ?? usual).map((ride, at) => ({
+		line: 1,
+		position: positions[at % positions.length] ?? positions[0],
+		placement: lane.placement,
+		exposure: 1,
+		offsetCelsius: 0,
+		layout: lane.layout,
+		...ride
+	}));
+}
+
+/** Works a plan's times out against the anchor. */
+export function stage(plan: LoadPlan, anchor: Date): Staged {
+	const lane = lanes[plan.lane];
+	const { zone } = sites[lane.site];
+	const chance = chanceOf(plan.key);
+	const isDoneToday = plan.decided && 'minutes' in plan.due;
+	const pace = isDoneToday ? drawnTogether(anchor, zone) : 1;
+	const due = 'minutes' in plan.due ? { minutes: plan.due.minutes * pace } : plan.due;
+	const dueMs = Math.round(instantOf(due, anchor, zone) / msPerMinute) * msPerMinute;
+	const late = plan.lateHours ?? [];
+	const lateHours = late.reduce((sum, hours) => sum + hours, 0) * pace;
+	const legs = placeLegs(lane.legs, dueMs, late);
+	const lastStartMs = legs.at(-1)?.actualMs ?? dueMs;
+	const goods = plan.goods ?? usualGoods(lane, chance);
+	return {
+		...{ plan, lane, zone, goods, legs, dueMs, pace, chance },
+		rides: ridesOf(plan, lane, goods.length),
+		arrivedMs: dueMs + Math.round(lateHours * 60) * msPerMinute,
+		advisedMs: Math.min(
+			Math.max(lastStartMs + 20 * msPerMinute, dueMs - 40 * msPerHour),
+			dueMs - latestAdviceHours * msPerHour,
+			anchor.getTime() - chance.whole(95, 180) * msPerMinute
+		)
+	};
+}
+
+/** The lots of a load: the supplier's letters, the day of packing, the line. */
+export function lotOf({ plan, lane, legs }: Staged, line: number): string {
+	const prefix = suppliers.find(({ key }) => key === lane.supplier)?.prefix ?? 'LT';
+	const packed = new Date(legs[0]?.actualMs ?? 0);
+	const yearStart = Date.UTC(packed.getUTCFullYear(), 0, 1);
+	const day = 1 + Math.floor((packed.getTime() - yearStart) / (24 * msPerHour));
+	const year = String(packed.getUTCFullYear() % 100);
+	// One more for every sort of goods packed that day, so that two lanes of one supplier do not share a lot.
+	const nth = line + (Object.keys(lanes).indexOf(plan.lane) % 4) * 2;
+	return `${prefix}-${year}${String(day).padStart(3, '0')}-${nth}`;
+}

@@ -1,0 +1,37 @@
+import { Readable } from 'node:stream';
+import { keepRead } from '../../reads/keep-read';
+import { receiveUpload } from '../../reads/receive-upload';
+import type { Context } from '../../context';
+import { exportOf, type ExportFile } from '../journeys/exports';
+import type { LayoutName, Ride } from '../journeys/journey';
+import { temperaturesOf } from '../journeys/temperatures';
+import { chanceOf } from '../chance';
+import type { Staged } from './staged';
+
+/** The export of one logger of a load. */
+export function exportOfRide(staged: Staged, ride: Ride, serial: string, layout: LayoutName): ExportFile {
+	const { plan, legs, arrivedMs, zone } = staged;
+	const course = { legs, arrivedMs, incidents: plan.incidents ?? [] };
+	const written = temperaturesOf(course, ride, chanceOf(`${plan.key} ${ride.line} ${ride.position}`));
+	return exportOf(layout, { serial, trip: staged.goods[0]?.description ?? '', zone, written });
+}
+
+/** Uploads an export as a browser would. @returns the read's id */
+export async function upload(ctx: Context, number: string, file: ExportFile): Promise<string> {
+	const form = new FormData();
+	form.append('files', new File([file.text], file.name, { type: file.mediaType }));
+	const sent = new Response(form);
+	const answer = await receiveUpload(ctx, number, {
+		body: Readable.from(Buffer.from(await sent.arrayBuffer())),
+		contentType: sent.headers.get('content-type')
+	});
+	const read = answer.reads[0];
+	if (!read) throw new Error(`The export ${file.name} of ${number} was not taken.`);
+	return read.id;
+}
+
+/** Keeps a read for its logger on its line. */
+export async function keep(ctx: Context, readId: string, ride: Ride, serial: string, lineId: string | null) {
+	const { position, placement } = ride;
+	await keepRead(ctx, readId, { serial, lineId, position, placement, accuracyCelsius: null });
+}
