@@ -118,6 +118,12 @@ describe('what the curve misses', () => {
 		expect(worstMisfit(table)).toBeNull();
 	});
 
+	it('is not blamed where two sources disagree and the curve follows one', () => {
+		const rival = { text: 'd', point: { celsius: 0, lifeHours: 336 }, lifeHoursHigh: 504 };
+		expect(worstMisfit({ ...table, sources: [...table.sources, rival] })).toBeNull();
+		expect(worstMisfit({ ...table, sources: [rival] })).toMatchObject({ source: 1, publishedHours: 504 });
+	});
+
 	it('is the published point furthest off: two lives pass 5 °C at 11.8 d where 14 are published', () => {
 		const misfit = worstMisfit(twoLives);
 		expect(misfit).toMatchObject({ source: 2, celsius: 5, publishedHours: 336 });

@@ -1,4 +1,4 @@
-import type { Spec } from '../../domain/shelf-life/spec';
+import type { Spec, SpecSource } from '../../domain/shelf-life/spec';
 import { lifeHoursAt, spokenFor } from './life-at';
 
 /** A published life the curve does not pass: which source, and how far off. */
@@ -15,20 +15,33 @@ export interface Misfit {
 /** As much as a curve may differ from a printed life, which is itself a round number. */
 const tolerance = 0.05;
 
-/** The published point the curve misses by most, if it misses any by more than a twentieth. */
+/** How far a life lies outside a printed one, or its range, as a part of the nearer end. */
+function offBy(
+	curveHours: number,
+	{ point, lifeHoursHigh }: SpecSource
+): { hours: number; fraction: number } {
+	const low = point?.lifeHours ?? 0;
+	const high = lifeHoursHigh ?? low;
+	if (curveHours >= low && curveHours <= high) return { hours: curveHours, fraction: 0 };
+	const hours = curveHours > high ? high : low;
+	return { hours, fraction: curveHours / hours - 1 };
+}
+
+/**
+ * The published point the curve misses by most, if it misses any by more than a twentieth. Where sources disagree at one
+ * temperature, a curve that follows one of them is not blamed for the other.
+ */
 export function worstMisfit(spec: Spec): Misfit | null {
 	const { fromCelsius, toCelsius } = spokenFor(spec);
-	let worst: Misfit | null = null;
-	spec.sources.forEach(({ point, lifeHoursHigh }, at) => {
-		if (!point || point.celsius < fromCelsius || point.celsius > toCelsius) return;
-		const curveHours = lifeHoursAt(spec, point.celsius);
-		if (curveHours === null) return;
-		const highHours = lifeHoursHigh ?? point.lifeHours;
-		const publishedHours = curveHours > highHours ? highHours : point.lifeHours;
-		const isWithin = curveHours >= point.lifeHours && curveHours <= highHours;
-		const fraction = isWithin ? 0 : curveHours / publishedHours - 1;
-		if (Math.abs(fraction) <= Math.max(tolerance, Math.abs(worst?.fraction ?? 0))) return;
-		worst = { source: at + 1, celsius: point.celsius, publishedHours, curveHours, fraction };
+	const misfits = spec.sources.flatMap((source, at): Misfit[] => {
+		const celsius = source.point?.celsius ?? null;
+		if (celsius === null || celsius < fromCelsius || celsius > toCelsius) return [];
+		const curveHours = lifeHoursAt(spec, celsius);
+		if (curveHours === null) return [];
+		const rivals = spec.sources.filter(({ point }) => point?.celsius === celsius);
+		if (rivals.some((rival) => Math.abs(offBy(curveHours, rival).fraction) <= tolerance)) return [];
+		const { hours, fraction } = offBy(curveHours, source);
+		return [{ source: at + 1, celsius, publishedHours: hours, curveHours, fraction }];
 	});
-	return worst;
+	return misfits.sort((a, b) => Math.abs(b.fraction) - Math.abs(a.fraction))[0] ?? null;
 }
