@@ -10,6 +10,7 @@ import { guardRoutes } from '$lib/server/hooks/guard-routes';
 import { isDatabaseAway } from '$lib/server/hooks/database-away';
 import { openScope } from '$lib/server/hooks/open-scope';
 import { setHeaders } from '$lib/server/hooks/set-headers';
+import { wearTheme } from '$lib/server/hooks/wear-theme';
 import { log } from '$lib/server/log';
 
 export const init: ServerInit = () => {
@@ -22,7 +23,8 @@ export const handle: Handle = sequence(
 	guardOrigin,
 	authHandle,
 	attachContext,
-	guardRoutes
+	guardRoutes,
+	wearTheme
 );
 
 export const handleError: HandleServerError = ({ error, event, status, message }) => {

@@ -63,10 +63,10 @@ export function linkMailWords(kind: LinkMailKind, facts: LinkMailFacts): LinkMai
 
 export const linkMailLabels = {
 	greeting: (name: string) => `Dear ${name},`,
-	signsIn: 'Signs in',
-	firm: 'Sees the loads of',
+	signsIn: 'You sign in as',
+	firm: 'You see the loads of',
 	docket: 'Docket',
 	works: 'Works until',
 	foot: (organisation: string) =>
-		`Sent by ${organisation} through Wharfinger. Never pass a link on: it stands for you. Life left is an estimate of quality from temperature alone. It does not assess safety.`
+		`Sent by ${organisation} through Wharfinger. Never pass a link on: it stands for you.`
 } as const;

@@ -1,10 +1,10 @@
-import { systemContext } from '../context';
 import { Token } from '../db/models/token';
 import { User } from '../db/models/user';
 import { inTransaction } from '../db/transaction';
 import { Refusal } from '../refusals';
 import type { RequestScope } from '../request-scope';
 import { hashPassword } from './password';
+import { personContext } from './person-context';
 import { isWithinLimit } from './rate-limit';
 import { findToken, useToken } from './tokens';
 
@@ -33,14 +33,12 @@ export async function acceptInvitation(
 	if (!(await isWithinLimit(`invitation from ${scope.address}`, guesses, scope.now)))
 		throw new Refusal('too-many-attempts');
 	const passwordHash = await hashPassword(password);
-	const ctx = { ...systemContext(scope.now, scope.requestId), address: scope.address };
-	return inTransaction(ctx, async ({ transaction, record }) => {
+	const userId = (await findToken(secret))?.userId;
+	if (!userId) throw new Refusal('link-used');
+	return inTransaction(personContext(scope, 'user', userId), async ({ transaction, record }) => {
 		const token = await useToken(secret, ['invitation'], scope.now, transaction);
-		const user = token?.userId
-			? await User.findByPk(token.userId, { transaction, lock: transaction.LOCK.UPDATE })
-			: null;
+		const user = token && (await User.findByPk(userId, { transaction, lock: transaction.LOCK.UPDATE }));
 		if (!user || user.switchedOffAt) throw new Refusal('link-used');
-		const userId = user.id;
 		const before = { name: user.name };
 		await user.update(
 			{ name, passwordHash, tokenVersion: user.tokenVersion + 1, failedPasswords: 0, lockedAt: null },

@@ -5,10 +5,11 @@ import { Notice } from '../db/models/notice';
 import { Shipment } from '../db/models/shipment';
 import { User } from '../db/models/user';
 import { inTransaction } from '../db/transaction';
-import { systemContext, type Context } from '../context';
+import type { Context } from '../context';
 import type { RequestScope } from '../request-scope';
+import { personContext } from './person-context';
 import { openSession, type Claims } from './sign-in';
-import { useToken } from './tokens';
+import { findToken, useToken } from './tokens';
 
 const linkSessionMs = 30 * 24 * 3_600_000;
 
@@ -47,9 +48,11 @@ async function openLinkSession(secret: string, ctx: Context): Promise<Claims | n
 
 /** Uses a mailed link up and opens the session it stands for. @returns null when it was used, ran out or is unknown. */
 export async function signInByLink(secret: string, scope: RequestScope): Promise<Claims | null> {
-	const ctx = { ...systemContext(scope.now, scope.requestId), address: scope.address };
 	const token = await useToken(secret, ['sign-in'], scope.now);
-	if (!token) return openLinkSession(secret, ctx);
+	if (!token) {
+		const contactId = (await findToken(secret))?.contactId;
+		return contactId ? openLinkSession(secret, personContext(scope, 'link', contactId)) : null;
+	}
 	const user = token.userId ? await User.findByPk(token.userId) : null;
 	return user && !user.switchedOffAt ? openSession(user, scope, 'link') : null;
 }

@@ -4,6 +4,7 @@ import { systemContext, type Context } from '../context';
 import { Refusal } from '../refusals';
 import type { RequestScope } from '../request-scope';
 import { isPassword } from './password';
+import { personContext } from './person-context';
 import { clearLimit, isWithinLimit } from './rate-limit';
 
 const quarterHourMs = 15 * 60_000;
@@ -69,7 +70,7 @@ export async function signInByPassword(
 
 /** Records that a session began. */
 export async function openSession(user: User, scope: RequestScope, by: 'password' | 'link'): Promise<Claims> {
-	await inTransaction(contextOfScope(scope), async ({ record, transaction }) => {
+	await inTransaction(personContext(scope, 'user', user.id), async ({ record, transaction }) => {
 		await User.update({ lastSignInAt: scope.now }, { where: { id: user.id }, transaction });
 		record('session.opened', { scope: 'account', id: user.id }, { by, userId: user.id });
 	});
