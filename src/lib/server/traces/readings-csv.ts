@@ -36,8 +36,13 @@ export async function readingsCsv(
 	const trace = shifted(unpackTrace(row.packed), Number(row.clockShiftMs));
 	return {
 		fileName: `${shipment.number}-${serial}-readings.csv`,
-		open: () => Readable.from(csvRows(trace, site?.zone ?? 'UTC', facts))
+		open: () => Readable.from(csvBytes(trace, site?.zone ?? 'UTC', facts))
 	};
+}
+
+// Bytes, because a web stream of text is not a response's body.
+function* csvBytes(trace: Trace, zone: string, facts: readonly string[]): Generator<Buffer> {
+	for (const text of csvRows(trace, zone, facts)) yield Buffer.from(text, 'utf8');
 }
 
 /** RFC 4180: a header, CRLF, and quotes where a cell needs them. */

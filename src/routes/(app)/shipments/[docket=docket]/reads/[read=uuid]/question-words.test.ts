@@ -1,3 +1,4 @@
+// @vitest-environment node
 import { describe, expect, it } from 'vitest';
 import type { Choice, Question } from '$lib/domain/ingest/ingestion';
 import { answerNote, outsideJourney, rememberLabel, useWords } from './question-words';
