@@ -43,8 +43,8 @@ export function lifeRows(spec: Spec, unit: TemperatureUnit): LifeRow[] {
 		});
 }
 
-/** Where versions are compared: 2 °C, the common set-point, where the model speaks for it; else the reference. */
+/** Where versions are compared: 2 °C, a common set-point, for what is referred to colder and modelled there; else the reference. */
 export function comparedAtCelsius(spec: Spec): number {
 	const { fromCelsius, toCelsius } = spokenFor(spec);
-	return fromCelsius <= 2 && toCelsius >= 2 ? 2 : spec.referenceCelsius;
+	return spec.referenceCelsius <= 2 && fromCelsius <= 2 && toCelsius >= 2 ? 2 : spec.referenceCelsius;
 }
