@@ -1,11 +1,13 @@
 import type { SubmitFunction } from '@sveltejs/kit';
 import { showToast } from '../ui/toaster.svelte';
 
-/** Submits in place, keeps what was typed, and says so once it is done. */
-export function saying(text: string): SubmitFunction {
+/** Submits in place, keeps what was typed, and says so once it is done; a form that adds to a list is emptied then. */
+export function saying(text: string, { isEmptied = false } = {}): SubmitFunction {
 	return () =>
-		async ({ result, update }) => {
-			await update({ reset: result.type === 'success' });
-			if (result.type === 'redirect' || result.type === 'success') showToast(text);
+		async ({ result, update, formElement }) => {
+			await update({ reset: false });
+			if (result.type !== 'redirect' && result.type !== 'success') return;
+			if (isEmptied) formElement.reset();
+			showToast(text);
 		};
 }
