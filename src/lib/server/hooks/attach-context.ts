@@ -4,8 +4,10 @@ import { requestScope } from '../request-scope';
 
 /** Looks up who the session speaks of, anew at every request: a switched-off user is out at once. */
 export const attachContext: Handle = async ({ event, resolve }) => {
-	const isAsset = event.url.pathname.startsWith('/_app/');
-	const session = isAsset ? null : await event.locals.auth();
+	const { pathname } = event.url;
+	// Health must answer while the database is away, also to a browser that has a session.
+	const isForAll = pathname.startsWith('/_app/') || pathname === '/api/v1/health';
+	const session = isForAll ? null : await event.locals.auth();
 	if (session?.claims) {
 		const scope = requestScope();
 		const actor = await loadActor(session.claims, scope.now);

@@ -10,13 +10,21 @@ const attemptsAllowed = 12;
 const firstPauseMs = 2_000;
 const longestPauseMs = 30 * 60_000;
 
+/** Somebody may be waiting for a younger job; an older one is backlog, after an outage or a load of old data. */
+const backlogAfterMs = 60 * 60_000;
+
 /** Leases one due job, committed before its work begins: no row lock is held through an effect. */
 async function lease(owner: string, now: Date): Promise<Job | null> {
 	return database().transaction(async (transaction) => {
 		const [due] = await database().query<{ id: string }>(
 			`SELECT id FROM jobs WHERE done_at IS NULL AND failed_at IS NULL AND run_at <= :now
-			 AND (leased_until IS NULL OR leased_until < :now) ORDER BY run_at LIMIT 1 FOR UPDATE SKIP LOCKED`,
-			{ replacements: { now }, transaction, type: QueryTypes.SELECT }
+			 AND (leased_until IS NULL OR leased_until < :now) ORDER BY run_at < :backlog, run_at
+			 LIMIT 1 FOR UPDATE SKIP LOCKED`,
+			{
+				replacements: { now, backlog: new Date(now.getTime() - backlogAfterMs) },
+				transaction,
+				type: QueryTypes.SELECT
+			}
 		);
 		if (!due) return null;
 		const job = await Job.findByPk(due.id, { transaction });
