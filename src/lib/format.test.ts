@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import {
 	addUp,
 	count,
+	counted,
 	decimal,
 	duration,
 	fileSize,
@@ -155,5 +156,13 @@ describe('rows that add up', () => {
 	it('leaves exact rows alone and takes an empty table', () => {
 		expect(addUp([0.1, 0.2, 0.3], 1)).toEqual([0.1, 0.2, 0.3]);
 		expect(addUp([], 1)).toEqual([]);
+	});
+});
+
+describe('a count with its noun', () => {
+	it('speaks of one as one', () => {
+		expect(counted(1, 'gap')).toBe('1 gap');
+		expect(counted(0, 'gap')).toBe('0 gaps');
+		expect(counted(1120, 'box', 'boxes')).toBe('1,120 boxes');
 	});
 });

@@ -42,6 +42,11 @@ export function count(value: number, locale: string): string {
 	return decimal(value, 0, locale);
 }
 
+/** A count with its noun: `1 gap`, `2 gaps`. */
+export function counted(value: number, one: string, many = `${one}s`, locale = 'en'): string {
+	return `${count(value, locale)} ${value === 1 ? one : many}`;
+}
+
 /** As `decimal`, with a plus before what is not negative. */
 export function signed(value: number, digits: number, locale: string): string {
 	const text = decimal(value, digits, locale);

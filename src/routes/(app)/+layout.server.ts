@@ -13,6 +13,8 @@ export const load: LayoutServerLoad = async ({ locals, cookies }) => {
 		viewer: { name: actor.name, title: actor.title, email: actor.email, roles: [...actor.roles] },
 		site,
 		sites: await listOwnSites(ctx),
+		/** The reader's own choice, where they made one; a docket else speaks in its site's unit. */
+		preferredUnit: actor.temperatureUnit,
 		temperatureUnit: actor.temperatureUnit ?? site.temperatureUnit,
 		mayReadRecord: may(actor, 'audit.view'),
 		mayWorkClaims: may(actor, 'claim.view'),

@@ -6,7 +6,7 @@ import type { Handover as HandoverRow } from '../db/models/handover';
 import type { ShipmentLine } from '../db/models/shipment-line';
 import { assessInputOf, type PinnedInputs } from './assessment-inputs';
 import type { DocketEvidence, LoadedTrace } from './load-evidence';
-import type { SignedSpec } from './spec-in-force';
+import type { SignedSpec } from '../specs/find-spec-in-force';
 
 /** What one trace says about one line, with what it rests on. */
 export interface LineAssessment {

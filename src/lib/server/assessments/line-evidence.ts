@@ -7,7 +7,7 @@ import type { ShipmentLine } from '../db/models/shipment-line';
 import { shifted } from './assessment-inputs';
 import { governingOf, openingOf, tracesOfLine, type LineAssessment } from './assess-line';
 import type { DocketEvidence, LoadedTrace } from './load-evidence';
-import type { SignedSpec } from './spec-in-force';
+import type { SignedSpec } from '../specs/find-spec-in-force';
 
 /** Everything the recommendation for one line rests on. */
 export function lineEvidence(

@@ -15,7 +15,7 @@ import { inputsSha256 } from './assessment-inputs';
 import { assessLine, governingOf, type LineAssessment } from './assess-line';
 import { lineEvidence } from './line-evidence';
 import { loadEvidence, type DocketEvidence } from './load-evidence';
-import { findSpecInForce } from './spec-in-force';
+import { findSpecInForce } from '../specs/find-spec-in-force';
 import { writeAssessment } from './write-assessment';
 
 interface JudgedLine {

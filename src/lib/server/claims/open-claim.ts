@@ -27,7 +27,7 @@ export async function openClaim(ctx: Context, input: ClaimOpening): Promise<{ id
 			order: [['version', 'DESC']],
 			transaction
 		});
-		const number = await nextNumber(w, shipment.siteId, 'claim', ctx.now);
+		const number = await nextNumber(shipment.siteId, 'claim', ctx.now, transaction);
 		const { againstId, amountMinor, currency, basis } = input;
 		await Claim.create(
 			{

@@ -23,12 +23,12 @@ import { clockViews, noticeViews, signatureViews } from './signatures-view';
 import { stageOf } from './stage';
 
 /** The specs in force for lines that nothing was assessed for yet. */
-async function specFinder(rows: DocketRows, now: Date) {
+async function specFinder(rows: DocketRows, now: Date, transaction?: Transaction) {
 	const found = new Map<string, Awaited<ReturnType<typeof findSpecInForce>>>();
 	for (const line of rows.lines) {
 		const key = `${line.productId} ${line.varietyId}`;
 		if (!found.has(key))
-			found.set(key, await findSpecInForce(line.productId, line.varietyId, rows.shipment.arrivedAt ?? now));
+			found.set(key, await findSpecInForce(line, rows.shipment.arrivedAt ?? now, transaction));
 	}
 	return (productId: string, varietyId: string | null) =>
 		found.get(`${productId} ${varietyId}`)?.figures ?? null;
@@ -41,7 +41,7 @@ export async function docketView(
 	transaction?: Transaction
 ): Promise<DocketView> {
 	const rows = await loadDocketRows(shipment, transaction);
-	const findSpec = await specFinder(rows, now);
+	const findSpec = await specFinder(rows, now, transaction);
 	const hold = holdView(rows);
 	const supplier = partyView(rows, shipment.supplierId);
 	if (!supplier) throw new Error(`The supplier of ${shipment.number} is missing.`);

@@ -32,7 +32,7 @@ export async function queueNotice(
 	const contact = await contactOf(shipment.supplierId, w);
 	const noticeId = uuid();
 	const answerByAt = new Date(ctx.now.getTime() + answerWithinMs);
-	const number = await nextNumber(w, shipment.siteId, 'notice', ctx.now);
+	const number = await nextNumber(shipment.siteId, 'notice', ctx.now, transaction);
 	await Notice.create(
 		{
 			id: noticeId,

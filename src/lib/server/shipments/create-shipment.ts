@@ -10,7 +10,7 @@ import { inTransaction } from '../db/transaction';
 import { authorize } from '../policies';
 import { Refusal } from '../refusals';
 import { docketRows, type DocketRows } from './docket-rows';
-import { nextDocketNumber } from './next-number';
+import { nextNumber } from '../sites/next-number';
 import { getOwnSite } from './own-site';
 import { preparePapers } from './prepare-papers';
 import type { Transaction } from 'sequelize';
@@ -43,7 +43,7 @@ export async function createShipment(
 	const rows = docketRows(prepared, id);
 
 	return inTransaction(ctx, async ({ transaction, record }) => {
-		const number = await nextDocketNumber(site, ctx.now, transaction);
+		const number = await nextNumber(site.id, 'docket', ctx.now, transaction);
 		// The series' lock has made requests that were sent twice wait for each other.
 		const known = await Shipment.findByPk(id, { transaction });
 		if (known && known.siteId !== site.id) throw new Refusal('duplicate');

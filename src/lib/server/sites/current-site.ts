@@ -17,9 +17,15 @@ export function siteView(site: Site): SiteView {
 	};
 }
 
-/** The actor's sites, by name. */
+/** The actor's sites, the oldest first. */
 export async function listOwnSites({ actor }: Context): Promise<SiteView[]> {
-	const sites = await Site.findAll({ where: { id: [...actor.siteIds] }, order: [['name', 'ASC']] });
+	const sites = await Site.findAll({
+		where: { id: [...actor.siteIds] },
+		order: [
+			['createdAt', 'ASC'],
+			['name', 'ASC']
+		]
+	});
 	return sites.map(siteView);
 }
 

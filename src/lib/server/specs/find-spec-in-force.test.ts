@@ -36,23 +36,27 @@ describe('the spec in force', () => {
 		const second = await addVersion(product.id, {});
 		await addVersion(product.id, { number: 3, state: 'draft', signedAt: null, inForceFrom: null });
 
-		expect(await findSpecInForce(product.id, null, at('2026-01-15'))).toMatchObject({
-			id: spec.id,
-			number: 1
-		});
-		expect(await findSpecInForce(product.id, null, at('2026-02-01'))).toMatchObject({ id: second.id });
-		expect(await findSpecInForce(product.id, null, at('2026-03-01'))).toEqual({
+		expect(await findSpecInForce({ productId: product.id, varietyId: null }, at('2026-01-15'))).toMatchObject(
+			{
+				id: spec.id,
+				number: 1
+			}
+		);
+		expect(await findSpecInForce({ productId: product.id, varietyId: null }, at('2026-02-01'))).toMatchObject(
+			{ id: second.id }
+		);
+		expect(await findSpecInForce({ productId: product.id, varietyId: null }, at('2026-03-01'))).toEqual({
 			id: second.id,
 			number: 2,
-			productName: product.name,
+			figuresSha256: second.figuresSha256,
 			figures: testSpec
 		});
 	});
 
 	it('is null before the first version was signed, and for a product that is not known', async () => {
 		const { product } = await buildProduct();
-		expect(await findSpecInForce(product.id, null, at('2025-12-31'))).toBeNull();
-		expect(await findSpecInForce(uuid(), null, at('2026-03-01'))).toBeNull();
+		expect(await findSpecInForce({ productId: product.id, varietyId: null }, at('2025-12-31'))).toBeNull();
+		expect(await findSpecInForce({ productId: uuid(), varietyId: null }, at('2026-03-01'))).toBeNull();
 	});
 
 	it("is the variety's own where it has one, else the product's", async () => {
@@ -61,8 +65,14 @@ describe('the spec in force', () => {
 		const other = await Variety.create({ id: uuid(), productId: product.id, name: 'No spec' });
 		const variety = await addVersion(product.id, { varietyId: own.id, number: 1 });
 
-		expect(await findSpecInForce(product.id, own.id, at('2026-03-01'))).toMatchObject({ id: variety.id });
-		expect(await findSpecInForce(product.id, own.id, at('2026-01-15'))).toMatchObject({ id: spec.id });
-		expect(await findSpecInForce(product.id, other.id, at('2026-03-01'))).toMatchObject({ id: spec.id });
+		expect(
+			await findSpecInForce({ productId: product.id, varietyId: own.id }, at('2026-03-01'))
+		).toMatchObject({ id: variety.id });
+		expect(
+			await findSpecInForce({ productId: product.id, varietyId: own.id }, at('2026-01-15'))
+		).toMatchObject({ id: spec.id });
+		expect(
+			await findSpecInForce({ productId: product.id, varietyId: other.id }, at('2026-03-01'))
+		).toMatchObject({ id: spec.id });
 	});
 });

@@ -1,44 +1,35 @@
-import { Op } from 'sequelize';
+import { Op, type Transaction } from 'sequelize';
 import type { Spec } from '../../domain/shelf-life/spec';
-import { Product } from '../db/models/product';
 import { SpecVersion } from '../db/models/spec-version';
-import { figuresFrom } from './figures';
 
-/** A signed version as an assessment uses it. */
-export interface SpecInForce {
+/** A signed version with its figures parsed. */
+export interface SignedSpec {
 	id: string;
 	number: number;
-	productName: string;
+	figuresSha256: string;
 	figures: Spec;
 }
 
-/**
- * The signed version that holds for a product at a moment: the variety's own where it has one in force,
- * else the product's. Null where nothing has been signed for it by then.
- */
-export async function findSpecInForce(
-	productId: string,
-	varietyId: string | null,
-	at: Date
-): Promise<SpecInForce | null> {
-	const version =
-		(varietyId === null ? null : await findVersion(productId, varietyId, at)) ??
-		(await findVersion(productId, null, at));
-	if (!version) return null;
-	const product = await Product.findByPk(productId);
-	return {
-		id: version.id,
-		number: version.number,
-		productName: product?.name ?? '',
-		figures: figuresFrom(version.figures)
-	};
+/** The figures of a version's stored text. They were validated when it was saved, and the engine checks them again. */
+export function parseSpecFigures(text: string): Spec {
+	return JSON.parse(text) as Spec;
 }
 
-function findVersion(productId: string, varietyId: string | null, at: Date): Promise<SpecVersion | null> {
-	return SpecVersion.findOne({
+function signedSpec(row: SpecVersion): SignedSpec {
+	const { id, number, figuresSha256 } = row;
+	return { id, number, figuresSha256, figures: parseSpecFigures(row.figures) };
+}
+
+/** The version a line is judged by at a moment: its variety's, else its product's; null where none was in force. */
+export async function findSpecInForce(
+	line: { productId: string; varietyId: string | null },
+	at: Date,
+	transaction?: Transaction
+): Promise<SignedSpec | null> {
+	const versions = await SpecVersion.findAll({
 		where: {
-			productId,
-			varietyId,
+			productId: line.productId,
+			varietyId: line.varietyId === null ? null : { [Op.or]: [line.varietyId, null] },
 			state: 'signed',
 			inForceFrom: { [Op.lte]: at },
 			supersededAt: { [Op.or]: [null, { [Op.gt]: at }] }
@@ -46,6 +37,16 @@ function findVersion(productId: string, varietyId: string | null, at: Date): Pro
 		order: [
 			['inForceFrom', 'DESC'],
 			['number', 'DESC']
-		]
+		],
+		transaction
 	});
+	const own = versions.find((version) => line.varietyId !== null && version.varietyId === line.varietyId);
+	const found = own ?? versions.find((version) => version.varietyId === null);
+	return found ? signedSpec(found) : null;
+}
+
+/** The version an assessment pinned, in force or not. */
+export async function findSpecVersion(id: string, transaction?: Transaction): Promise<SignedSpec | null> {
+	const row = await SpecVersion.findByPk(id, { transaction });
+	return row ? signedSpec(row) : null;
 }

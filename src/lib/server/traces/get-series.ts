@@ -6,7 +6,7 @@ import { celsiusOf } from '../../domain/trace/trace';
 import type { SeriesView } from '../../schemas/docket';
 import type { SeriesQuery } from '../../schemas/series';
 import { assessInputOf, shifted } from '../assessments/assessment-inputs';
-import { findSpecVersion } from '../assessments/spec-in-force';
+import { findSpecVersion } from '../specs/find-spec-in-force';
 import { parseFigures } from '../assessments/stored-figures';
 import type { Context } from '../context';
 import { AssessmentRow } from '../db/models/assessment-row';
