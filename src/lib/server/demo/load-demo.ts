@@ -14,8 +14,8 @@ import { pastStories } from './loads/past-stories';
 import { todayMill } from './loads/today-mill';
 import { todayStaithe } from './loads/today-staithe';
 import { playLoad } from './play/play-load';
-import { stage, type Staged } from './play/staged';
-import { contextOf, known, type World } from './play/world';
+import { stage, withLots, type Staged } from './play/staged';
+import { contextOf, type World } from './play/world';
 
 const loadedAt = 'demo-loaded-at';
 /** The house was founded this long before the first load. */
@@ -46,21 +46,30 @@ async function enterCast(anchor: Date): Promise<World> {
 }
 
 /** Numbers go on from what the house had before, so that the first docket is not the first of its life. */
-const numbersBefore: Record<SiteKey, Record<'docket' | 'notice' | 'claim', number>> = {
+const numbersBefore = {
 	PS: { docket: 1127, notice: 205, claim: 41 },
 	HM: { docket: 412, notice: 88, claim: 16 }
-};
+} as const;
+/** The docket that waits at QA today has this number, whatever came before it, unless the year is too young. */
+const numberAtQa = 1184;
 
-async function startNumbers(world: World, firstMs: number): Promise<void> {
+function yearOf(ms: number, site: SiteKey): number {
+	return DateTime.fromMillis(ms, { zone: sites[site].zone }).year;
+}
+
+function lastDocketBefore(staged: readonly Staged[], site: SiteKey): number {
+	const own = staged.filter(({ lane }) => lane.site === site);
+	const at = own.findIndex(({ plan }) => plan === todayStaithe[0]);
+	const isOneYear = at >= 0 && yearOf(own[0]?.advisedMs ?? 0, site) === yearOf(own[at]?.advisedMs ?? 0, site);
+	return isOneYear ? numberAtQa - 1 - at : numbersBefore[site].docket;
+}
+
+async function startNumbers(world: World, staged: readonly Staged[]): Promise<void> {
 	for (const site of ['PS', 'HM'] as const) {
-		const { year } = DateTime.fromMillis(firstMs, { zone: sites[site].zone });
+		const [siteId, year] = [world.siteIds[site], yearOf(staged[0]?.advisedMs ?? 0, site)];
+		const last = { ...numbersBefore[site], docket: lastDocketBefore(staged, site) };
 		for (const kind of ['docket', 'notice', 'claim'] as const)
-			await NumberSeries.create({
-				siteId: known(new Map(Object.entries(world.siteIds)), site),
-				year,
-				kind,
-				last: numbersBefore[site][kind]
-			});
+			await NumberSeries.create({ siteId, year, kind, last: last[kind] });
 	}
 }
 
@@ -85,8 +94,9 @@ export async function loadDemo(anchor = new Date(), say: Say = () => {}): Promis
 	say('Sites, people, partners, products and loggers are there.');
 
 	const plans = [...pastStories, ...pastOrdinary, ...todayStaithe, ...todayMill, ...ahead];
-	const staged = plans.map((plan) => stage(plan, moment)).sort((a, b) => a.advisedMs - b.advisedMs);
-	await startNumbers(world, staged[0]?.advisedMs ?? 0);
+	const inOrder = plans.map((plan) => stage(plan, moment)).sort((a, b) => a.advisedMs - b.advisedMs);
+	const staged = withLots(inOrder);
+	await startNumbers(world, staged);
 	const steps = withSerials(staged)
 		.flatMap(({ load, serials }) => playLoad(world, load, serials))
 		.sort((a, b) => a.atMs - b.atMs);

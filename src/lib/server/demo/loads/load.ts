@@ -43,6 +43,10 @@ export interface LoadPlan {
 	short?: number;
 	pulpCelsius?: readonly number[];
 	doorNote?: string;
+	/** The load went on from the dock into store, so many minutes after the arrival; its loggers rode along. */
+	intoStore?: { minutes: number; plannedMinutes: number; place: string; dockCelsius: number };
+	/** Left out: as soon as the papers are done. */
+	readAfterMinutes?: number;
 	/** Exports read and kept; left out: all. */
 	reads?: number;
 	/** Another export was uploaded, and asks something. */

@@ -14,6 +14,7 @@ export const pastStories: readonly LoadPlan[] = [
 		decided: {
 			afterMinutes: 62,
 			notify: true,
+			outcomes: ['conditions'],
 			condition: 'Ship first, within four days.',
 			reasons: 'Two and a half hours in the open yard; life left is more than the order needs.'
 		}
@@ -55,11 +56,11 @@ export const pastStories: readonly LoadPlan[] = [
 		key: 'late',
 		lane: 'grapes',
 		due: at(-9, '09:30'),
-		lateHours: [2, 21],
+		lateHours: [2, 34],
 		decided: {
 			afterMinutes: 80,
 			condition: 'Shorter date; move within a week.',
-			reasons: 'A day late at the border.'
+			reasons: 'A day and a half late at the border.'
 		}
 	},
 	{
@@ -139,7 +140,7 @@ export const pastStories: readonly LoadPlan[] = [
 			afterMinutes: 58,
 			notify: true,
 			condition: 'Ripe trade only, watch for pitting.',
-			reasons: 'Nine hours under the chilling threshold.'
+			reasons: 'Ten hours under the chilling threshold.'
 		},
 		aftermath: {
 			answer: { kind: 'acknowledge', afterHours: 8, text: 'The driver had mixed goods with salad at 4 °C.' }
@@ -150,7 +151,7 @@ export const pastStories: readonly LoadPlan[] = [
 		lane: 'vaccine',
 		due: at(-27, '11:40'),
 		lateHours: [0, 0.8],
-		incidents: [{ leg: 1, afterHours: 3, hours: 2.2, airCelsius: 24 }],
+		incidents: [{ leg: 1, afterHours: 3, hours: 1.7, airCelsius: 16 }],
 		pulpCelsius: [6.9],
 		hold: { afterMinutes: 12, reason: 'Above 8 °C in transit; stability to be asked' },
 		decided: {
@@ -243,11 +244,11 @@ export const pastStories: readonly LoadPlan[] = [
 		lane: 'peas',
 		due: at(-44, '12:30'),
 		lateHours: [0, 0.5],
-		incidents: [{ leg: 1, afterHours: 2, hours: 3.5, airCelsius: 2 }],
+		incidents: [{ leg: 1, afterHours: 2, hours: 4.6, airCelsius: 2 }],
 		decided: {
 			afterMinutes: 47,
 			outcomes: ['reject'],
-			reasons: 'Above −15 °C for three hours; lumps in the bags.',
+			reasons: 'Above −15 °C for over four hours; lumps in the bags.',
 			notify: true
 		},
 		aftermath: {

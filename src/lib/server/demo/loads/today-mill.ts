@@ -57,6 +57,7 @@ export const todayMill: readonly LoadPlan[] = [
 		incidents: [{ leg: 1, afterHours: 9, hours: 2.5, airCelsius: -6 }],
 		decided: {
 			afterMinutes: 57,
+			outcomes: ['conditions'],
 			condition: 'Own label only; sell within eight weeks.',
 			reasons: 'Defrost cycle ran long. Taken with a shorter date.'
 		}

@@ -11,13 +11,13 @@ const atQa: LoadPlan = {
 	due: { minutes: -245 },
 	lateHours: [0, 0.1, 0.25, 0, 0.02],
 	goods: [
-		goods(['Blueberries', 'Blueberries, 12 × 125 g'], [960, 192], 14.4, 20),
-		goods(['Blueberries', 'Blueberries, 8 × 250 g'], [1120, 160], 16.2, 20),
-		goods(['Blueberries', 'Blueberries, 12 × 125 g'], [640, 160], 14.4, 49)
+		goods(['Blueberries', 'Blueberries, 12 × 125 g'], [960, 192], 14.4, 20, 8),
+		goods(['Blueberries', 'Blueberries, 8 × 250 g'], [1120, 160], 16.2, 34, 8),
+		goods(['Blueberries', 'Blueberries, 12 × 125 g'], [640, 160], 14.4, 49, 8)
 	],
 	rides: [
 		{ line: 1, position: 'Pallet 2, nose, in fruit', exposure: 0.18 },
-		{ line: 2, position: 'Pallet 9, middle, in fruit', exposure: 0.45, offsetCelsius: 0.3 },
+		{ line: 2, position: 'Pallet 9, middle, in fruit', exposure: 0.5, offsetCelsius: 0.3 },
 		{
 			line: 3,
 			position: 'Pallet 16, door end, in fruit',
@@ -28,12 +28,14 @@ const atQa: LoadPlan = {
 	],
 	incidents: [
 		{ leg: 1, afterHours: 0, hours: 1.2, airCelsius: 12 },
-		{ leg: 3, afterHours: 0.8, hours: 9.6, airCelsius: 12.5 },
-		{ leg: 4, afterHours: 8.5, hours: 3.6, airCelsius: -3.4 }
+		{ leg: 3, afterHours: 0.8, hours: 9.6, airCelsius: 19 },
+		{ leg: 4, afterHours: 6.4, hours: 3, airCelsius: -4 }
 	],
 	pulpCelsius: [0.8, 1.0, 1.4],
 	doorNote: 'Cold at the door, but the tail pallets are wet under the film.',
 	hold: { afterMinutes: 39, reason: 'Tail pallets wet, driver stood at the hub' },
+	intoStore: { minutes: 78, plannedMinutes: 45, place: 'chill room', dockCelsius: 2 },
+	readAfterMinutes: 86,
 	trimFirstMinutes: 30,
 	notes: [
 		{
@@ -51,11 +53,11 @@ const strawberries: LoadPlan = {
 	due: { minutes: -140 },
 	lateHours: [0, 0.42],
 	goods: [
-		goods(['Strawberries', 'Strawberries, 10 × 400 g'], [360, 90], 18.5, 12, 3.2),
-		goods(['Strawberries', 'Strawberries, 20 × 227 g'], [240, 80], 21.4, 12, 3.2)
+		goods(['Strawberries', 'Strawberries, 10 × 400 g'], [360, 90], 18.5, 12, 4),
+		goods(['Strawberries', 'Strawberries, 20 × 227 g'], [240, 80], 21.4, 12, 4)
 	],
-	incidents: [{ leg: 1, afterHours: 6, hours: 4.5, airCelsius: 9 }],
-	pulpCelsius: [2.4, 2.9],
+	incidents: [{ leg: 1, afterHours: 6, hours: 6, airCelsius: 11 }],
+	pulpCelsius: [1.4, 1.9],
 	hold: { afterMinutes: 31, reason: 'Low under the need on both lots' }
 };
 

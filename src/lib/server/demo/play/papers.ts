@@ -1,3 +1,4 @@
+import { msPerMinute } from '../../../domain/units';
 import { completedKey } from '../../../domain/gs1/check-digit';
 import { composedSscc } from '../../../domain/gs1/sscc';
 import { shipmentInput, type ShipmentInput } from '../../../schemas/shipment-form';
@@ -55,6 +56,17 @@ function handoversOf(world: World, { legs, advisedMs }: Staged) {
 	}));
 }
 
+/** Custody ends with us: at the dock, or behind it. */
+function ourHandovers({ plan, lane, dueMs }: Staged) {
+	const { name: holder, docks } = sites[lane.site];
+	const { intoStore } = plan;
+	const dockCelsius = intoStore?.dockCelsius ?? lane.legs.at(-1)?.setPointCelsius;
+	const dock = { holder, place: docks[lane.dock], planned: iso(dueMs), setPointCelsius: dockCelsius };
+	if (!intoStore) return [dock];
+	const planned = iso(dueMs + intoStore.plannedMinutes * msPerMinute);
+	return [dock, { holder, place: intoStore.place, planned, setPointCelsius: dockCelsius }];
+}
+
 /** The papers of a load, as the advance notice brings them. */
 export function papersOf(world: World, staged: Staged, serials: readonly string[]): ShipmentInput {
 	const { plan, lane, goods, rides, dueMs } = staged;
@@ -75,15 +87,7 @@ export function papersOf(world: World, staged: Staged, serials: readonly string[
 		rejectBasis: 'Supply terms § 6, from arrival',
 		due: iso(dueMs),
 		lines: goods.map((_, at) => lineOf(world, staged, at)),
-		handovers: [
-			...handoversOf(world, staged),
-			{
-				holder: sites[lane.site].name,
-				place: sites[lane.site].docks[lane.dock],
-				planned: iso(dueMs),
-				setPointCelsius: lane.legs.at(-1)?.setPointCelsius
-			}
-		],
+		handovers: [...handoversOf(world, staged), ...ourHandovers(staged)],
 		loggers: rides.map(({ line, position, placement }, at) => ({
 			serial: serials[at],
 			line,

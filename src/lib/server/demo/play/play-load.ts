@@ -12,6 +12,7 @@ import { arrivalOf } from './at-the-door';
 import { decide } from './decide';
 import { papersOf } from './papers';
 import type { Staged } from './staged';
+import { writeStore } from './write-store';
 import { exportOfRide, keep, upload } from './upload';
 import { contextOf, type Step, type World } from './world';
 
@@ -44,7 +45,7 @@ function arrivalStep({ world, staged, docket, after }: Play): Step {
 function readSteps({ world, staged, serials, docket, after }: Play): Step[] {
 	const { plan, rides } = staged;
 	const kept = rides.slice(0, plan.reads ?? rides.length).map((ride, at) => {
-		const atMs = after(firstReadAfter + at * 3);
+		const atMs = after((plan.readAfterMinutes ?? firstReadAfter) + at * 3);
 		const act = async () => {
 			const serial = serials[at] ?? '';
 			const file = exportOfRide(staged, ride, serial, ride.layout);
@@ -60,6 +61,16 @@ function readSteps({ world, staged, serials, docket, after }: Play): Step[] {
 	const file = () => exportOfRide(staged, asking, serials[kept.length] ?? '', plan.question ?? asking.layout);
 	const act = async () => void (await upload(contextOf(world, 'dock', atMs), docket().number, file()));
 	return [...kept, { atMs, act }];
+}
+
+/** Custody is written on from the dock to the store. */
+function storeSteps({ world, staged, serials, docket, after }: Play): Step[] {
+	const { intoStore } = staged.plan;
+	if (!intoStore) return [];
+	const atMs = after(intoStore.minutes + 2);
+	const act = () =>
+		writeStore(contextOf(world, 'dock', atMs), docket(), papersOf(world, staged, serials), staged);
+	return [{ atMs, act }];
 }
 
 /** The first minutes of a trace are somebody's hand, not the load. */
@@ -127,5 +138,12 @@ export function playLoad(world: World, staged: Staged, serials: readonly string[
 		return [...steps, { atMs, act }];
 	}
 	if (plan.isExpected) return steps;
-	return [...steps, arrivalStep(play), ...readSteps(play), ...wordsSteps(play), ...decisionSteps(play)];
+	return [
+		...steps,
+		arrivalStep(play),
+		...storeSteps(play),
+		...readSteps(play),
+		...wordsSteps(play),
+		...decisionSteps(play)
+	];
 }

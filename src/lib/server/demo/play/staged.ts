@@ -23,7 +23,8 @@ export interface Staged {
 	advisedMs: number;
 	/** By how much the minutes after the arrival are drawn together. */
 	pace: number;
-	chance: Chance;
+	/** Lots of the same day that went on other loads. */
+	lotFrom: number;
 }
 
 const positions = ['Pallet 2, nose', 'Pallet 6, middle', 'Pallet 9, door end'] as const;
@@ -67,7 +68,7 @@ export function stage(plan: LoadPlan, anchor: Date): Staged {
 	const lastStartMs = legs.at(-1)?.actualMs ?? dueMs;
 	const goods = plan.goods ?? usualGoods(lane, chance);
 	return {
-		...{ plan, lane, zone, goods, legs, dueMs, pace, chance },
+		...{ plan, lane, zone, goods, legs, dueMs, pace, lotFrom: 0 },
 		rides: ridesOf(plan, lane, goods.length),
 		arrivedMs: dueMs + Math.round(lateHours * 60) * msPerMinute,
 		advisedMs: Math.min(
@@ -78,14 +79,26 @@ export function stage(plan: LoadPlan, anchor: Date): Staged {
 	};
 }
 
-/** The lots of a load: the supplier's letters, the day of packing, the line. */
-export function lotOf({ plan, lane, legs }: Staged, line: number): string {
-	const prefix = suppliers.find(({ key }) => key === lane.supplier)?.prefix ?? 'LT';
+/** Day of packing as it stands on cases: year and day of the year. */
+function packedOn({ legs }: Staged): string {
 	const packed = new Date(legs[0]?.actualMs ?? 0);
-	const yearStart = Date.UTC(packed.getUTCFullYear(), 0, 1);
-	const day = 1 + Math.floor((packed.getTime() - yearStart) / (24 * msPerHour));
-	const year = String(packed.getUTCFullYear() % 100);
-	// One more for every sort of goods packed that day, so that two lanes of one supplier do not share a lot.
-	const nth = line + (Object.keys(lanes).indexOf(plan.lane) % 4) * 2;
-	return `${prefix}-${year}${String(day).padStart(3, '0')}-${nth}`;
+	const day = 1 + Math.floor((packed.getTime() - Date.UTC(packed.getUTCFullYear(), 0, 1)) / (24 * msPerHour));
+	return `${packed.getUTCFullYear() % 100}${String(day).padStart(3, '0')}`;
+}
+
+/** The lots of a load: the supplier's letters, the day of packing, a number. */
+export function lotOf(staged: Staged, line: number): string {
+	const prefix = suppliers.find(({ key }) => key === staged.lane.supplier)?.prefix ?? 'LT';
+	return `${prefix}-${packedOn(staged)}-${staged.lotFrom + line}`;
+}
+
+/** Numbers the lots that a supplier packs on one day over all its loads. */
+export function withLots(loads: readonly Staged[]): Staged[] {
+	const packed = new Map<string, number>();
+	return loads.map((load) => {
+		const key = `${load.lane.supplier} ${packedOn(load)}`;
+		const lotFrom = packed.get(key) ?? 0;
+		packed.set(key, lotFrom + load.goods.length);
+		return { ...load, lotFrom };
+	});
 }

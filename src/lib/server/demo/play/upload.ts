@@ -1,4 +1,5 @@
 import { Readable } from 'node:stream';
+import { msPerMinute } from '../../../domain/units';
 import { keepRead } from '../../reads/keep-read';
 import { receiveUpload } from '../../reads/receive-upload';
 import type { Context } from '../../context';
@@ -8,10 +9,21 @@ import { temperaturesOf } from '../journeys/temperatures';
 import { chanceOf } from '../chance';
 import type { Staged } from './staged';
 
+/** What the loggers rode through: to the door, or on into the store. */
+function courseOf({ plan, lane, legs, arrivedMs }: Staged) {
+	const { intoStore, incidents = [] } = plan;
+	if (!intoStore) return { legs, arrivedMs, incidents };
+	const dock = {
+		...{ by: lane.carrier, place: 'dock', hours: 0, setPointCelsius: intoStore.dockCelsius },
+		...{ plannedMs: arrivedMs, actualMs: arrivedMs }
+	};
+	return { legs: [...legs, dock], arrivedMs: arrivedMs + intoStore.minutes * msPerMinute, incidents };
+}
+
 /** The export of one logger of a load. */
 export function exportOfRide(staged: Staged, ride: Ride, serial: string, layout: LayoutName): ExportFile {
-	const { plan, legs, arrivedMs, zone } = staged;
-	const course = { legs, arrivedMs, incidents: plan.incidents ?? [] };
+	const { plan, zone } = staged;
+	const course = courseOf(staged);
 	const written = temperaturesOf(course, ride, chanceOf(`${plan.key} ${ride.line} ${ride.position}`));
 	return exportOf(layout, { serial, trip: staged.goods[0]?.description ?? '', zone, written });
 }
