@@ -50,8 +50,8 @@ export class SpecEditor {
 
 	/** Whether anything differs from what was loaded. */
 	get isChanged(): boolean {
-		const names = new Set([...Object.keys(this.first), ...Object.keys(this.values)]);
-		return [...names].some((name) => (this.values[name] ?? '') !== (this.first[name] ?? ''));
+		const names = Object.keys({ ...this.first, ...this.values });
+		return names.some((name) => (this.values[name] ?? '') !== (this.first[name] ?? ''));
 	}
 
 	/** Rows to offer: the filled ones and an empty one, unless there is nothing to fill in. */
@@ -73,15 +73,16 @@ export class SpecEditor {
 	};
 
 	private publishedPoints(): [string, string][] {
-		const points = new Map<string, string>();
+		const points: [string, string][] = [];
 		for (let at = 0; at < filledRows(this.values, 'source'); at++) {
 			const degrees = this.values[`source${at}Degrees`] ?? '';
 			const life = this.values[`source${at}Life`] ?? '';
 			const isOwn =
 				Number(degrees.replace('−', '-')) === Number((this.values.reference ?? '').replace('−', '-'));
-			if (degrees && life && !isOwn && !points.has(degrees)) points.set(degrees, life);
+			const isKnown = points.some(([known]) => known === degrees);
+			if (degrees && life && !isOwn && !isKnown) points.push([degrees, life]);
 		}
-		return [...points];
+		return points;
 	}
 }
 
