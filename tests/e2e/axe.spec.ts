@@ -1,0 +1,65 @@
+import AxeBuilder from '@axe-core/playwright';
+import type { Page } from '@playwright/test';
+import { places, test } from './every-page';
+import { complaintsOf, expect } from './people';
+
+test.describe.configure({ mode: 'parallel' });
+
+const wide = { width: 1440, height: 900 };
+const narrow = { width: 390, height: 844 };
+const looks = [
+	{ name: 'wide and light', viewport: wide, colorScheme: 'light' },
+	{ name: 'narrow and dark', viewport: narrow, colorScheme: 'dark' },
+	{ name: 'wide and dark', viewport: wide, colorScheme: 'dark' },
+	{ name: 'narrow and light', viewport: narrow, colorScheme: 'light' }
+] as const;
+/** The pages the work is done on are looked at in all four. */
+const inAllLooks = new Set(['arrivals', 'a docket at QA', 'reads', 'signing', 'a load of a supplier']);
+const rules = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
+
+/** What axe finds: the rule and where, so that a failure reads as a list of what to mend. */
+async function findings(page: Page): Promise<string[]> {
+	const { violations } = await new AxeBuilder({ page }).withTags(rules).analyze();
+	return violations.flatMap(({ id, impact, nodes }) =>
+		nodes.map(({ target, failureSummary }) => `${impact} ${id}: ${target.join(' ')}: ${failureSummary}`)
+	);
+}
+
+/** Elements that reach beyond the right edge while the page itself can be scrolled sideways. */
+function sideways(page: Page): Promise<string[]> {
+	return page.evaluate(() => {
+		const { scrollWidth, clientWidth } = document.documentElement;
+		if (scrollWidth <= clientWidth) return [];
+		return [...document.querySelectorAll('body *')]
+			.filter((element) => element.getBoundingClientRect().right > clientWidth + 1)
+			.slice(0, 5)
+			.map((element) => `${element.tagName} ${element.className}`);
+	});
+}
+
+for (const [at, look] of looks.entries()) {
+	for (const place of places.filter(({ name }) => at < 2 || inAllLooks.has(name))) {
+		test(`${place.name}, ${look.name}: open to everybody, silent, no wider than its window`, async ({
+			pageOf,
+			found
+		}) => {
+			const { viewport, colorScheme } = look;
+			const session = place.as === 'supplier' ? { storageState: found.supplierSession } : {};
+			const person = place.as === 'supplier' ? null : place.as;
+			const page = await pageOf(person, { viewport, colorScheme, ...session });
+			const complaints = complaintsOf(page);
+			const path = typeof place.path === 'string' ? place.path : place.path(found);
+			const answer = await page.goto(path, { waitUntil: 'networkidle' });
+			expect(answer?.status()).toBe(200);
+			expect(new URL(page.url()).pathname).toBe(path.split('?')[0]);
+
+			expect(await findings(page)).toEqual([]);
+			expect(await sideways(page)).toEqual([]);
+			if (viewport === narrow) {
+				await page.setViewportSize({ width: 360, height: 780 });
+				expect(await sideways(page)).toEqual([]);
+			}
+			expect(complaints.all).toEqual([]);
+		});
+	}
+}
