@@ -6,6 +6,8 @@ const staff = ['dock', 'qa', 'claims', 'admin'] as const;
 /** Who may do what. A role that is not named may not. */
 const acts = {
 	'shipment.view': ['dock', 'qa', 'claims', 'admin', 'supplier'],
+	/** The whole docket with notes, papers and every party; suppliers have a view of their own. */
+	'docket.view': staff,
 	'shipment.list': staff,
 	'shipment.create': ['dock', 'qa', 'admin'],
 	'shipment.change': ['dock', 'qa', 'admin'],

@@ -81,6 +81,6 @@ export async function docketView(
 /** A docket by its number, for staff of its site. @throws Refusal `not-found`, `not-allowed` */
 export async function getDocket(ctx: Context, number: string): Promise<DocketView> {
 	const shipment = await Shipment.findOne({ where: { number } });
-	authorizeShipment(ctx, 'shipment.view', shipment);
+	authorizeShipment(ctx, 'docket.view', shipment);
 	return docketView(shipment as Shipment, ctx.now);
 }

@@ -12,7 +12,7 @@ import { alsoOnDockets, readRowView } from './views';
 
 /** A read with what was understood, or asked, and what is proposed for its logger. */
 export async function getRead(ctx: Context, readId: string): Promise<ReadView> {
-	const { read, shipment } = await getReadFor(ctx, readId, 'shipment.view');
+	const { read, shipment } = await getReadFor(ctx, readId, 'docket.view');
 	const site = await Site.findByPk(shipment.siteId);
 	const row = await readRowView(read);
 	const traces = await TraceRow.findAll({

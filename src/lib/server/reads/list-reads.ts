@@ -14,7 +14,7 @@ export interface DocketReads {
 
 /** The reads of a docket, newest first; those withdrawn stay visible. */
 export async function listReads(ctx: Context, number: string): Promise<DocketReads> {
-	const shipment = await getShipmentFor(ctx, number, 'shipment.view');
+	const shipment = await getShipmentFor(ctx, number, 'docket.view');
 	const site = await Site.findByPk(shipment.siteId);
 	const rows = await LoggerRead.findAll({
 		where: { shipmentId: shipment.id },
