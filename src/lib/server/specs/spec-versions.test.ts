@@ -163,12 +163,14 @@ describe('signing a version', () => {
 		const { id } = await draftOf(ctx, product.id);
 		expect(await sign(ctx, id)).toEqual({ number: 2 });
 
-		expect(await findSpecInForce(product.id, null, testNow)).toMatchObject({
+		expect(await findSpecInForce({ productId: product.id, varietyId: null }, testNow)).toMatchObject({
 			id,
 			number: 2,
 			figures: warmer
 		});
-		expect(await findSpecInForce(product.id, null, new Date(testNow.getTime() - 1))).toMatchObject({
+		expect(
+			await findSpecInForce({ productId: product.id, varietyId: null }, new Date(testNow.getTime() - 1))
+		).toMatchObject({
 			id: spec.id
 		});
 		const sheet = await getSpecSheet(ctx, product.id, null);
@@ -183,8 +185,10 @@ describe('signing a version', () => {
 		const { product, spec } = await buildProduct();
 		const { id } = await draftOf(ctx, product.id);
 		await sign(ctx, id, { inForceFrom: later });
-		expect(await findSpecInForce(product.id, null, testNow)).toMatchObject({ id: spec.id });
-		expect(await findSpecInForce(product.id, null, later)).toMatchObject({ id });
+		expect(await findSpecInForce({ productId: product.id, varietyId: null }, testNow)).toMatchObject({
+			id: spec.id
+		});
+		expect(await findSpecInForce({ productId: product.id, varietyId: null }, later)).toMatchObject({ id });
 		expect((await getSpecSheet(ctx, product.id, null)).versions[0]?.standing).toBe('to-come');
 	});
 
