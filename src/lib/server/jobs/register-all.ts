@@ -1,3 +1,4 @@
+import { mailLink } from '../accounts/mail-link';
 import { sendNotice } from '../notices/send-notice';
 import { ensureReport } from '../reports/make-report';
 import { registerJobKind } from './job-kinds';
@@ -8,5 +9,6 @@ export function registerAllJobs(): void {
 		'report',
 		async (ctx, { dispositionId }) => void (await ensureReport(ctx, dispositionId ?? ''))
 	);
+	registerJobKind('mail-link', mailLink);
 	registerJobKind('notice', (ctx, { noticeId }) => sendNotice(ctx, noticeId ?? ''));
 }
