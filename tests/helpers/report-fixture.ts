@@ -287,6 +287,7 @@ function frozenDocket(lines: DocketLineView[]): FrozenDocket {
 				.filter((line) => line.remainingHours !== null)
 				.map((line) => assessmentOf(line.ordinal, line)),
 			handovers: [],
+			trims: [],
 			pulp: [
 				{
 					id: 'u1',

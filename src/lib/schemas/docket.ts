@@ -206,6 +206,8 @@ export interface DocketView {
 	assessments: AssessmentView[];
 	handovers: HandoverView[];
 	pulp: PulpView[];
+	/** Stretches a person left out, and why. */
+	trims: { id: string; logger: string; fromAt: string; toAt: string; reason: string; by: string }[];
 	photos: { id: string; caption: string; kind: string; by: string; at: string; bytes: number }[];
 	notes: { id: string; text: string; by: string; at: string }[];
 	clocks: ClockView[];

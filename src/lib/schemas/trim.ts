@@ -19,3 +19,15 @@ export const trimForm = z
 		message: 'The end lies before the beginning.'
 	});
 export type TrimForm = z.output<typeof trimForm>;
+
+/** The same as a form sends it, its ends by the clock of the site. */
+export const typedTrim = z.object({
+	traceId: z.uuid('Choose a trace.'),
+	fromAt: neededText(32, 'Say from when.'),
+	toAt: neededText(32, 'Say until when.'),
+	reason: neededText(300, 'Say why these readings are not the journey.')
+});
+export type TypedTrim = z.output<typeof typedTrim>;
+
+/** Takes a trim back. */
+export const trimUndoing = z.object({ trimId: z.uuid('Choose a trim.') });

@@ -2,6 +2,7 @@ import { celsiusFromFahrenheit } from '../../domain/units';
 import type { ArrivalView, DocketView, HandoverView, PartyView, PulpView } from '../../schemas/docket';
 import type { PulpReading } from '../db/models/pulp-reading';
 import type { DocketRows } from './load-rows';
+import { labelsOf } from './loggers-view';
 
 const nameOf = (rows: DocketRows, userId: string) =>
 	rows.users.find((user) => user.id === userId)?.name ?? 'somebody';
@@ -78,6 +79,18 @@ export function noteViews(rows: DocketRows): DocketView['notes'] {
 		text: row.text,
 		by: nameOf(rows, row.writtenBy),
 		at: row.writtenAt.toISOString()
+	}));
+}
+
+export function trimViews(rows: DocketRows): DocketView['trims'] {
+	const labels = labelsOf(rows);
+	return rows.trims.map((row) => ({
+		id: row.id,
+		logger: labels.get(row.traceId) ?? '?',
+		fromAt: row.fromAt.toISOString(),
+		toAt: row.toAt.toISOString(),
+		reason: row.reason,
+		by: nameOf(rows, row.madeBy)
 	}));
 }
 

@@ -13,7 +13,8 @@ import {
 	noteViews,
 	partyView,
 	photoViews,
-	pulpViews
+	pulpViews,
+	trimViews
 } from './door-view';
 import { lineView } from './lines-view';
 import { loadDocketRows, type DocketRows } from './load-rows';
@@ -68,6 +69,7 @@ export async function docketView(
 		assessments: assessmentViews(rows),
 		handovers: handoverViews(rows),
 		pulp: pulpViews(rows),
+		trims: trimViews(rows),
 		photos: photoViews(rows),
 		notes: noteViews(rows),
 		clocks: clockViews(rows),

@@ -26,6 +26,7 @@ import { Site } from '../db/models/site';
 import { SpecVersion } from '../db/models/spec-version';
 import { StoredFile } from '../db/models/stored-file';
 import { TraceRow } from '../db/models/trace-row';
+import { TrimRow } from '../db/models/trim-row';
 import { User } from '../db/models/user';
 import { Variety } from '../db/models/variety';
 
@@ -85,7 +86,13 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 		where: { [key]: values },
 		transaction
 	});
+	const trims = await TrimRow.findAll({
+		where: { traceId: traces.map((row) => row.id), undoneAt: null },
+		order: ['fromAt'],
+		transaction
+	});
 	const userIds = ids([
+		...trims.map((row) => row.madeBy),
 		arrival?.loggedBy,
 		...holds.map((row) => row.putBy),
 		...notes.map((row) => row.writtenBy),
@@ -134,6 +141,7 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 		calibrations,
 		reads,
 		traces,
+		trims,
 		assessments,
 		specs,
 		recommendations,

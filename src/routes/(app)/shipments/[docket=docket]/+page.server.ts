@@ -1,11 +1,15 @@
 import { fail } from '@sveltejs/kit';
 import { holdInput, noteInput } from '$lib/schemas/note';
+import { trimUndoing, typedTrim } from '$lib/schemas/trim';
 import { getDocket } from '$lib/server/dockets/get-docket';
 import { liftHold } from '$lib/server/holds/lift-hold';
 import { putHold } from '$lib/server/holds/put-hold';
 import { addNote } from '$lib/server/notes/add-note';
 import { may } from '$lib/server/policies';
 import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
+import { InvalidFields } from '$lib/server/shipments/invalid-fields';
+import { trimAsTyped } from '$lib/server/traces/trim-as-typed';
+import { undoTrim } from '$lib/server/traces/trims';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, params, depends }) => {
@@ -50,6 +54,33 @@ export const actions = {
 
 		try {
 			await putHold(ctx, params.docket, form.data);
+		} catch (e) {
+			return orFail(e, form.data);
+		}
+	},
+
+	trim: async ({ locals, request }) => {
+		const ctx = contextOf(locals);
+
+		const form = await parseForm(request, typedTrim);
+		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'trim' });
+
+		try {
+			await trimAsTyped(ctx, form.data);
+		} catch (e) {
+			if (e instanceof InvalidFields) return fail(422, { values: form.data, issues: e.issues, code: 'trim' });
+			return orFail(e, form.data);
+		}
+	},
+
+	untrim: async ({ locals, request }) => {
+		const ctx = contextOf(locals);
+
+		const form = await parseForm(request, trimUndoing);
+		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'trim' });
+
+		try {
+			await undoTrim(ctx, form.data.trimId);
 		} catch (e) {
 			return orFail(e, form.data);
 		}
