@@ -16,7 +16,11 @@ export async function checkHealth(): Promise<Health> {
 			 FROM jobs WHERE done_at IS NULL`,
 			{ type: QueryTypes.SELECT }
 		);
-		return { version, database: 'up', queue: { waiting: Number(row?.waiting ?? 0), failed: Number(row?.failed ?? 0) } };
+		return {
+			version,
+			database: 'up',
+			queue: { waiting: Number(row?.waiting ?? 0), failed: Number(row?.failed ?? 0) }
+		};
 	} catch {
 		// The one place that reports an outage as data: that is its question.
 		return { version, database: 'away', queue: null };
