@@ -1,4 +1,5 @@
 import { v7 as uuid } from 'uuid';
+import { msPerMinute } from '../../../domain/units';
 import { loadActor } from '../../accounts/load-actor';
 import { hashPassword } from '../../accounts/password';
 import { systemContext, type Actor } from '../../context';
@@ -65,7 +66,9 @@ export async function openSites(at: Date): Promise<Staff> {
 	const entry = { passwordHash, siteIds: [] as string[], partnerId: null, at };
 	const adminId = await addPerson(admin, entry);
 	const founder = { ...systemContext(at, 'demo-sites'), actor: await actorOf(adminId, at) };
-	const siteIds = { PS: await addSite(founder, sites.PS), HM: await addSite(founder, sites.HM) };
+	// The older site is the one people see first.
+	const later = { ...founder, now: new Date(at.getTime() + 10 * msPerMinute) };
+	const siteIds = { PS: await addSite(founder, sites.PS), HM: await addSite(later, sites.HM) };
 
 	const actors = new Map([[admin.key, await actorOf(adminId, at)]]);
 	for (const person of people.filter(({ partner }) => !partner)) {

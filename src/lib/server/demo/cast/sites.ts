@@ -31,7 +31,7 @@ export const sites: Record<SiteKey, SiteForm> = {
 		temperatureUnit: 'fahrenheit',
 		pageSize: 'letter',
 		currency: 'USD',
-		opening: week('05:00', '22:00'),
+		opening: week('02:00', '22:00'),
 		docks: ['Door 1', 'Door 2', 'Door 3'],
 		revision: ''
 	}

@@ -6,12 +6,12 @@ const berries = { rejectWithinHours: 8, placement: 'in-product' } as const;
 const staithe = {
 	olmarisa: {
 		...berries,
-		...{ site: 'PS', supplier: 'olmarisa', carrier: 'anselm', mode: 'sea', layout: 'iso', dock: 0 },
+		...{ site: 'PS', supplier: 'olmarisa', carrier: 'anselm', mode: 'road', layout: 'iso', dock: 0 },
 		legs: [
 			leg('olmarisa', 'cold room', 12.5, 0.5, 'Olmarisa packhouse'),
 			leg('trascoll', 'road', 8.5, 0.5),
 			leg('merrow', 'sea, reefer container', 46, 0.5),
-			leg('sarn', 'cross-dock', 5, 1),
+			leg('sarn', 'cross-dock and store', 11, 1),
 			leg('anselm', 'road', 13.5, 0.5)
 		],
 		goods: [

@@ -8,6 +8,7 @@ import { ShipmentLine } from '../../db/models/shipment-line';
 import { answerNotice } from '../../notices/answer-notice';
 import { sites } from '../cast/sites';
 import type { Aftermath } from '../loads/load';
+import { inOffice } from '../loads/when';
 import { settleNotice } from './settle-notice';
 import type { Staged } from './staged';
 import { contextOf, known, linkContext, type Step, type World } from './world';
@@ -51,11 +52,12 @@ function claimSteps(world: World, staged: Staged, docket: () => Opened, decidedM
 		const ctx = contextOf(world, 'claims', atMs);
 		claimId = (await openClaim(ctx, { docket: docket().number, ...fields, ...amount })).id;
 	};
-	const openedMs = decidedMs + plan.afterHours * msPerHour;
+	const office = (ms: number) => inOffice(ms, staged.zone, world.anchor);
+	const openedMs = office(decidedMs + plan.afterHours * msPerHour);
 	return [
 		{ atMs: openedMs, act: () => open(openedMs) },
 		...(plan.then ?? []).map(({ status, afterHours }) => {
-			const atMs = openedMs + afterHours * msPerHour;
+			const atMs = office(openedMs + afterHours * msPerHour);
 			const act = async () => {
 				const { version } = await Claim.findByPk(claimId, { rejectOnEmpty: true });
 				await changeClaim(contextOf(world, 'claims', atMs), claimId, {
@@ -85,7 +87,7 @@ export function aftermathSteps(
 	if (said || sentMs < world.anchor.getTime() - leftToWorkerHours * msPerHour)
 		steps.push({ atMs: sentMs, act: () => settleNotice(docket().id, sentMs) });
 	if (said) {
-		const atMs = decidedMs + said.afterHours * msPerHour;
+		const atMs = inOffice(decidedMs + said.afterHours * msPerHour, staged.zone, world.anchor);
 		steps.push({ atMs, act: () => answer(docket(), said, atMs) });
 	}
 	return steps;

@@ -56,10 +56,10 @@ function ridesOf(plan: LoadPlan, lane: Lane, lines: number): Ride[] {
 /** Works a plan's times out against the anchor. */
 export function stage(plan: LoadPlan, anchor: Date): Staged {
 	const lane = lanes[plan.lane];
-	const { zone } = sites[lane.site];
+	const { zone, opening } = sites[lane.site];
 	const chance = chanceOf(plan.key);
 	const isDoneToday = plan.decided && 'minutes' in plan.due;
-	const pace = isDoneToday ? drawnTogether(anchor, zone) : 1;
+	const pace = isDoneToday ? drawnTogether(anchor, zone, opening.mon?.[0] ?? '00:00') : 1;
 	const due = 'minutes' in plan.due ? { minutes: plan.due.minutes * pace } : plan.due;
 	const dueMs = Math.round(instantOf(due, anchor, zone) / msPerMinute) * msPerMinute;
 	const late = plan.lateHours ?? [];
