@@ -60,15 +60,15 @@ function excursionsSection(draft: Draft, chapter: Chapter): Content[] {
 			finding: `${lineNames(chapter.lines)}${limitsText(draft, chapter)}`,
 			columns: [
 				{ head: '', width: 18 },
-				{ head: 'What', width: 53 },
-				{ head: 'From', width: 74 },
+				{ head: 'What', width: 50 },
+				{ head: 'From', width: 71 },
 				{ head: 'To', width: 30 },
-				{ head: 'Lasted\nh:min', width: 31, align: 'right' },
-				{ head: `Extreme\n${sign}`, width: 32, align: 'right' },
-				{ head: `Mean\n${sign}`, width: 25, align: 'right' },
-				{ head: 'Degree-\nmin', width: 30, align: 'right' },
+				{ head: 'Lasted\nh:min', width: 28, align: 'right' },
+				{ head: `Extreme\n${sign}`, width: 29, align: 'right' },
+				{ head: `Mean\n${sign}`, width: 23, align: 'right' },
+				{ head: 'Degree-\nmin', width: 28, align: 'right' },
 				{ head: 'Life\nh', width: 24, align: 'right' },
-				{ head: 'Leg', width: 19 },
+				{ head: 'Leg', width: 18 },
 				{ head: 'Severity', width: '*' }
 			],
 			rows: assessment.excursions.map((excursion, i) => excursionRow(draft, excursion, i + 1))

@@ -12,10 +12,10 @@ import { figure, label, sentence, words } from './type-styles';
 /** Page one's counterfoil: verdict, outcome by line, life left against the need, when it ends. */
 export function firstCounterfoil(draft: Draft): Content[] {
 	const { docket, sheet } = draft;
-	const verdict = verdictOf(docket.verdict);
+	const verdict = verdictOf(docket);
 	return [
 		...counterfoilTop(draft),
-		outcomeMark(verdict.mark, 19),
+		...(verdict.mark ? [outcomeMark(verdict.mark, 19)] : []),
 		words(verdict.word, { size: sizePoints.verdict, bold: true, margin: [0, 8, 0, 0], lineHeight: 0.95 }),
 		hairline(sheet.stubWidth, 9),
 		...outcomes(docket.lines),

@@ -1,6 +1,8 @@
 import type { ContentSvg } from 'pdfmake/interfaces';
 import type { Outcome } from '../../../domain/receiving/recommendation';
-import type { Verdict } from '../../../schemas/docket';
+import type { DocketView, Verdict } from '../../../schemas/docket';
+import { partQuantities } from '../../../domain/receiving/quantities';
+import { count } from '../../../format';
 import { palette } from './palette';
 
 const tick = '<path d="M5 10.4L8.6 14L15 6.6" fill="none"';
@@ -15,16 +17,21 @@ const drawings: Record<Outcome, string> = {
 	reject: `<path d="M3 3L17 17M17 3L3 17" fill="none" stroke="${palette.hull}" stroke-width="3.4"/>`
 };
 
+/** A verdict as printed. */
+interface VerdictPrint {
+	readonly mark: Outcome | null;
+	readonly word: string;
+}
+
 const outcomeWords: Record<Outcome, string> = {
 	accept: 'Accept',
 	conditions: 'Accept with conditions',
 	hold: 'Hold',
 	reject: 'Reject'
 };
-const verdicts: Record<Verdict, { readonly mark: Outcome; readonly word: string }> = {
+const verdicts: Record<Exclude<Verdict, 'part'>, VerdictPrint> = {
 	accepted: { mark: 'accept', word: 'Accepted' },
 	conditions: { mark: 'conditions', word: 'Accepted with\u00a0conditions' },
-	part: { mark: 'conditions', word: 'Accepted in\u00a0part' },
 	rejected: { mark: 'reject', word: 'Rejected' }
 };
 
@@ -41,9 +48,12 @@ export function outcomeWord(outcome: Outcome): string {
 	return outcomeWords[outcome];
 }
 
-/** A docket that is signed but still held has no verdict yet; it says so. */
-export function verdictOf(verdict: Verdict | null): { readonly mark: Outcome; readonly word: string } {
-	return verdict === null ? { mark: 'hold', word: 'On hold' } : verdicts[verdict];
+/** No tick stands over a part: its quantities say it. A docket that is signed but still held has no verdict yet. */
+export function verdictOf({ verdict, lines }: Pick<DocketView, 'verdict' | 'lines'>): VerdictPrint {
+	if (verdict === null) return { mark: 'hold', word: 'On hold' };
+	if (verdict !== 'part') return verdicts[verdict];
+	const { unit, taken, refused } = partQuantities(lines);
+	return { mark: null, word: `${count(taken, 'en')} ${unit} in, ${count(refused, 'en')} refused` };
 }
 
 /** Bollard parted by an indented cut. */

@@ -1,5 +1,6 @@
 import type { MarkKind } from '$lib/components/ui/mark';
 import type { DocketView, Verdict } from '$lib/schemas/docket';
+import { partQuantities } from '$lib/domain/receiving/quantities';
 import type { Outcome } from '$lib/domain/receiving/recommendation';
 import { count, lifeHours } from '$lib/format';
 
@@ -26,13 +27,9 @@ const doneVerdicts: Record<Verdict, { mark: MarkKind | null; word: string }> = {
 };
 
 /** "12 pallets in, 4 refused": what a partly taken load comes to, in its own units. */
-export function quantitiesOf(docket: DocketView, locale = 'en'): string {
-	const refused = docket.lines.filter((line) => line.outcome?.outcome === 'reject');
-	const taken = docket.lines.filter((line) => line.outcome && line.outcome.outcome !== 'reject');
-	const sum = (lines: DocketView['lines'], key: 'cases' | 'pallets') =>
-		lines.reduce((total, line) => total + (line.outcome?.[key] ?? 0), 0);
-	const unit = sum(taken, 'pallets') + sum(refused, 'pallets') > 0 ? 'pallets' : 'cases';
-	return `${count(sum(taken, unit), locale)} ${unit} in, ${count(sum(refused, unit), locale)} refused`;
+export function quantitiesOf(docket: Pick<DocketView, 'lines'>, locale = 'en'): string {
+	const { unit, taken, refused } = partQuantities(docket.lines);
+	return `${count(taken, locale)} ${unit} in, ${count(refused, locale)} refused`;
 }
 
 export function verdictOf(docket: DocketView): { mark: MarkKind | null; word: string } {
