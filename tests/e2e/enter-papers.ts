@@ -24,7 +24,7 @@ export async function openDocket(page: Page): Promise<string> {
 		[2, story.carrier, story.collected]
 	] as const) {
 		const handover = page.getByRole('group', { name: `Handover ${nth}` });
-		await handover.getByLabel('To').selectOption({ label: to });
+		await handover.getByLabel('To', { exact: true }).selectOption({ label: to });
 		await handover.getByLabel('Planned').fill(planned);
 		await handover.getByLabel('Set-point').fill('0');
 	}

@@ -44,7 +44,7 @@ export async function logArrival(page: Page, docket: string): Promise<void> {
 	// 38 °C in a chilled load is more likely 38 °F: asked, and nothing typed is lost.
 	await expect(page.getByText('Did you mean °F?')).toBeVisible();
 	await expect(page.getByLabel('Driver’s name')).toHaveValue('Jos Tarn');
-	await pulp.getByLabel('Unit').selectOption({ label: '°F' });
+	await pulp.getByLabel('Unit', { exact: true }).selectOption({ label: '°F' });
 	await page.getByRole('button', { name: 'Log this arrival' }).click();
 	await expect(page).toHaveURL(new RegExp(`/shipments/${docket}$`));
 }

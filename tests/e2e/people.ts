@@ -16,6 +16,15 @@ export async function signIn(page: Page, email: string, password = demoPassword)
 	await expect(page).not.toHaveURL(/sign-in/);
 }
 
+/** Chooses where somebody of several sites works now. */
+export async function workAt(page: Page, site: string): Promise<void> {
+	await page.goto('/settings');
+	await page.getByRole('radio', { name: site }).check();
+	await page.getByRole('button', { name: 'Work there' }).click();
+	await expect(page.getByRole('region', { name: /Where you work now$/ })).toContainText(site);
+	await expect(page.getByText('Site chosen.')).toBeVisible();
+}
+
 /** What a browser must never say on our pages. */
 export interface Complaints {
 	readonly all: string[];
@@ -57,6 +66,7 @@ export const test = base.extend<Rooms, Sessions>({
 				const context = await browser.newContext({ baseURL: worker.project.use.baseURL });
 				const page = await context.newPage();
 				await signIn(page, `${person}@wharfinger.example`);
+				await workAt(page, 'Pell Staithe');
 				const session = await context.storageState();
 				await context.close();
 				return session;

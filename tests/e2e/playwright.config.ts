@@ -30,6 +30,7 @@ export default defineConfig({
 		baseURL: process.env.E2E_ADDRESS,
 		launchOptions: chromium,
 		locale: 'en-GB',
+		actionTimeout: 15_000,
 		trace: 'off'
 	}
 });
