@@ -150,6 +150,6 @@ export const test = base.extend<object, Worker>({
 			for (const page of pages) await page.context().close();
 			await use({ ...found, supplierSession });
 		},
-		{ scope: 'worker', timeout: 60_000 }
+		{ scope: 'worker', timeout: 110_000 }
 	]
 });
