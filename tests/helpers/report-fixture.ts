@@ -253,6 +253,7 @@ function frozenDocket(lines: DocketLineView[]): FrozenDocket {
 			verdict: 'part',
 			site: {
 				id: 'site-1',
+				code: 'PS',
 				name: 'Pell Staithe',
 				gln: '9506000050010',
 				zone: 'Europe/Berlin',

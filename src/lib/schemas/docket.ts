@@ -13,6 +13,8 @@ export type Verdict = 'accepted' | 'conditions' | 'part' | 'rejected';
 /** Instants travel as ISO 8601 strings in UTC, calendar days as YYYY-MM-DD; temperatures as °C; life as hours. */
 export interface SiteView {
 	id: string;
+	/** What its dockets' numbers begin with. */
+	code: string;
 	name: string;
 	gln: string | null;
 	zone: string;

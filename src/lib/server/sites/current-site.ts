@@ -9,6 +9,7 @@ export const siteCookie = 'site';
 export function siteView(site: Site): SiteView {
 	return {
 		id: site.id,
+		code: site.code,
 		name: site.name,
 		gln: site.gln,
 		zone: site.zone,
