@@ -1,3 +1,13 @@
+import { DateTime } from 'luxon';
+
+const zone = 'Europe/Amsterdam';
+const base = DateTime.now().setZone(zone).startOf('minute');
+
+/** As a clock field takes it, by the clock of Pell Staithe. */
+export function clockAt(at: DateTime): string {
+	return at.setZone(zone).toFormat("yyyy-MM-dd'T'HH:mm");
+}
+
 /** What the walk enters and looks for again; new at every run, so that a run may follow another on one database. */
 const mark = Date.now().toString(36).slice(-6);
 
@@ -15,9 +25,9 @@ export const story = {
 	lot: `OB-${mark}`,
 	bill: `BL-${mark}`,
 	seal: `S${mark}`,
-	/** Covers the sample `cod-two-probes.csv`: 14 April 10:00 to 15 April 10:45 UTC; Amsterdam is two hours ahead. */
-	departed: '2026-04-14T12:00',
-	collected: '2026-04-14T18:00',
-	due: '2026-04-15T11:30',
-	arrived: '2026-04-15T12:20'
+	departed: clockAt(base.minus({ hours: 26 })),
+	collected: clockAt(base.minus({ hours: 20 })),
+	due: clockAt(base.minus({ minutes: 30 })),
+	/** The last reading of the export; the others lie a day before it. */
+	lastReadingAt: base.minus({ minutes: 45 })
 };

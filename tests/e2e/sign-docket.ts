@@ -15,7 +15,9 @@ export async function rejectAndSign(page: Page, docket: string): Promise<void> {
 
 	await page.getByLabel('Password').fill('not-my-password');
 	await page.getByRole('button', { name: 'Sign as Ruth Calloway' }).click();
-	await expect(page.getByText('Nothing was signed.')).toBeVisible();
+	await expect(
+		page.getByText('That is not your password. Nothing was signed.', { exact: true })
+	).toBeVisible();
 	await expect(page.getByLabel('Reason, printed on the report')).toHaveValue(
 		'Warm from the first reading on.'
 	);

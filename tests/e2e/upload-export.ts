@@ -1,14 +1,27 @@
+import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import type { Page } from '@playwright/test';
+import { DateTime } from 'luxon';
 import { story } from './load-story';
 import { expect } from './people';
 
-const sample = join(import.meta.dirname, '../../sample-uploads/cod-two-probes.csv');
+const path = join(import.meta.dirname, '../../sample-uploads/cod-two-probes.csv');
+const stamp = /^\d{4}-\d\d-\d\d \d\d:\d\d:\d\d/gm;
+const utc = (text: string) => DateTime.fromSQL(text, { zone: 'utc' });
+
+/** The sample as its logger would have written it on this journey: the same readings, days later. */
+function sample() {
+	const text = readFileSync(path, 'utf8');
+	const last = utc(text.match(stamp)?.at(-1) ?? '');
+	const later = story.lastReadingAt.diff(last);
+	const moved = text.replace(stamp, (at) => utc(at).plus(later).toFormat('yyyy-MM-dd HH:mm:ss'));
+	return { name: 'cod-two-probes.csv', mimeType: 'text/csv', buffer: Buffer.from(moved) };
+}
 
 /** Uploads an export that cannot say which probe rode with the goods, answers, looks at what was understood, keeps it. */
 export async function uploadAndKeep(page: Page, docket: string): Promise<void> {
 	await page.goto(`/shipments/${docket}/reads`);
-	await page.getByLabel('Choose files').setInputFiles(sample);
+	await page.getByLabel('Choose files').setInputFiles(sample());
 	await expect(
 		page.getByRole('heading', { name: 'Which column is the temperature of the goods?' })
 	).toBeVisible();
@@ -16,9 +29,10 @@ export async function uploadAndKeep(page: Page, docket: string): Promise<void> {
 	await page.getByRole('button', { name: /^Use Probe B|^Use / }).click();
 
 	const understood = page.getByRole('region', { name: 'What was understood' });
-	await expect(understood).toContainText('Tue 14 Apr 12:00');
-	await expect(understood).toContainText('Wed 15 Apr 12:45');
-	await expect(understood).toContainText('CEST');
+	const { lastReadingAt } = story;
+	for (const at of [lastReadingAt.minus({ hours: 24, minutes: 45 }), lastReadingAt])
+		await expect(understood).toContainText(at.setLocale('en').toFormat('ccc d LLL HH:mm'));
+	await expect(understood).toContainText(/CES?T/);
 	await expect(understood).toContainText('every 15 min');
 	await expect(page.getByRole('region', { name: 'Channels' })).toContainText('Probe B');
 	await page.getByLabel('Serial').fill(story.logger);
@@ -30,7 +44,7 @@ export async function uploadAndKeep(page: Page, docket: string): Promise<void> {
 /** The same bytes again are recognised, not doubled. */
 export async function uploadAgain(page: Page, docket: string): Promise<void> {
 	await page.goto(`/shipments/${docket}/reads`);
-	await page.getByLabel('Choose files').setInputFiles(sample);
+	await page.getByLabel('Choose files').setInputFiles(sample());
 	await expect(page.getByRole('heading', { level: 1, name: 'cod-two-probes.csv' })).toBeVisible();
 	await page.goto(`/shipments/${docket}/reads`);
 	await expect(page.getByRole('link', { name: 'cod-two-probes.csv' })).toHaveCount(1);
