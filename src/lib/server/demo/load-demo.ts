@@ -10,6 +10,7 @@ import { admin } from './cast/people';
 import { sites, type SiteKey } from './cast/sites';
 import { ahead } from './loads/ahead';
 import { pastOrdinary } from './loads/past-ordinary';
+import { pastRefused } from './loads/past-refused';
 import { pastStories } from './loads/past-stories';
 import { todayMill } from './loads/today-mill';
 import { todayStaithe } from './loads/today-staithe';
@@ -93,7 +94,7 @@ export async function loadDemo(anchor = new Date(), say: Say = () => {}): Promis
 	const world = await enterCast(moment);
 	say('Sites, people, partners, products and loggers are there.');
 
-	const plans = [...pastStories, ...pastOrdinary, ...todayStaithe, ...todayMill, ...ahead];
+	const plans = [...pastStories, ...pastRefused, ...pastOrdinary, ...todayStaithe, ...todayMill, ...ahead];
 	const inOrder = plans.map((plan) => stage(plan, moment)).sort((a, b) => a.advisedMs - b.advisedMs);
 	const staged = withLots(inOrder);
 	await startNumbers(world, staged);

@@ -28,7 +28,7 @@ const atQa: LoadPlan = {
 	],
 	incidents: [
 		{ leg: 1, afterHours: 0, hours: 1.2, airCelsius: 12 },
-		{ leg: 3, afterHours: 0.8, hours: 9.6, airCelsius: 19 },
+		{ leg: 3, afterHours: 0.8, hours: 9.6, airCelsius: 14 },
 		{ leg: 4, afterHours: 6.4, hours: 3, airCelsius: -4 }
 	],
 	pulpCelsius: [0.8, 1.0, 1.4],
@@ -127,7 +127,7 @@ const done: readonly LoadPlan[] = [
 		decided: {
 			afterMinutes: 53,
 			outcomes: ['reject'],
-			reasons: 'Unit failed on the ferry. The pack rose above 3.3 °C for thirteen hours.',
+			reasons: 'Unit failed on the ferry. The pack rose above 3.3 °C for sixteen hours.',
 			notify: true
 		}
 	},

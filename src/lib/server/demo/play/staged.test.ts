@@ -1,13 +1,14 @@
 import { describe, expect, it } from 'vitest';
 import { ahead } from '../loads/ahead';
 import { pastOrdinary } from '../loads/past-ordinary';
+import { pastRefused } from '../loads/past-refused';
 import { pastStories } from '../loads/past-stories';
 import { todayMill } from '../loads/today-mill';
 import { todayStaithe } from '../loads/today-staithe';
 import { lotOf, stage, withLots } from './staged';
 import { exportOfRide } from './upload';
 
-const plans = [...pastStories, ...pastOrdinary, ...todayStaithe, ...todayMill, ...ahead];
+const plans = [...pastStories, ...pastRefused, ...pastOrdinary, ...todayStaithe, ...todayMill, ...ahead];
 const anchor = new Date('2026-05-12T09:35:00Z');
 const staged = (at: Date) => withLots(plans.map((plan) => stage(plan, at)));
 
