@@ -10,8 +10,11 @@ function actOf(stage: Stage, { due, kept, questions }: Reads, actor: Actor): Nex
 	if (stage === 'expected') return may(actor, 'arrival.log') ? 'log-arrival' : 'open';
 	if (questions > 0 && may(actor, 'read.upload')) return 'answer';
 	const isRead = kept >= due && kept > 0;
-	if (!isRead && may(actor, 'read.upload') && stage === 'at-the-door') return 'upload';
-	if (!may(actor, 'disposition.sign')) return 'open';
+	const maySign = may(actor, 'disposition.sign');
+	// No trace is normal: a load without loggers waits for QA, not for a read.
+	const awaitsRead = !isRead && !(due === 0 && maySign);
+	if (awaitsRead && may(actor, 'read.upload') && stage === 'at-the-door') return 'upload';
+	if (!maySign) return 'open';
 	return isRead ? 'sign' : 'review';
 }
 
@@ -33,7 +36,8 @@ export function nextAct(
 	const { stage, reads } = load;
 	const act = actOf(stage, reads, actor);
 	const isQa = may(actor, 'disposition.sign');
-	const isForQa = stage === 'on-hold' || act === 'sign' || (act === 'answer' && load.isAskedOfQa);
+	const isForQa =
+		stage === 'on-hold' || act === 'sign' || act === 'review' || (act === 'answer' && load.isAskedOfQa);
 	const isForDock = stage === 'at-the-door' && (act === 'upload' || act === 'answer');
 	const isMine = isQa ? isForQa : may(actor, 'arrival.log') && isForDock;
 	return { act, href: hrefOf(load.number, act, load.questionIds), questions: reads.questions, isMine };

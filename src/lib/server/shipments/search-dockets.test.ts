@@ -1,6 +1,7 @@
 import { v7 as uuid } from 'uuid';
 import { describe, expect, it } from 'vitest';
 import {
+	buildProduct,
 	buildShipment,
 	buildSite,
 	buildUser,
@@ -16,7 +17,10 @@ useTestDatabase();
 
 describe('finding a docket', () => {
 	it('goes by everything that stands on its papers, pallets and loggers', async () => {
-		const { shipment, site, lines, supplier } = await buildShipment({ seal: 'SEAL-771', vehicle: 'QZ-88' });
+		const { product } = await buildProduct();
+		const { shipment, site, lines, supplier } = await buildShipment({
+			...{ product, seal: 'SEAL-771', vehicle: 'QZ-88' }
+		});
 		await buildShipment({ site });
 		const lineId = lines[0]?.id ?? '';
 		await Pallet.create({ id: uuid(), lineId, ordinal: 1, sscc: '106141412345678908', cases: 1 });
@@ -30,11 +34,12 @@ describe('finding a docket', () => {
 			'LG-47',
 			'(00)106141412345678908',
 			shipment.purchaseOrder ?? '',
-			supplier.name
+			supplier.name,
+			product.name
 		])
 			expect((await searchDockets(ctx, q)).map((found) => found.number)).toContain(shipment.number);
 		expect(await searchDockets(ctx, 'QZ-88')).toMatchObject([
-			{ stage: 'expected', supplier: supplier.name, vehicle: 'QZ-88' }
+			{ stage: 'expected', supplier: supplier.name, vehicle: 'QZ-88', zone: 'Europe/Amsterdam' }
 		]);
 	});
 

@@ -1,13 +1,15 @@
 import { Op } from 'sequelize';
-import type { Stage } from '../../schemas/docket';
+import type { Stage, Verdict } from '../../schemas/docket';
 import { stageOf } from '../arrivals/stage-of';
 import type { Context } from '../context';
 import { Hold } from '../db/models/hold';
 import { LoggerTrip } from '../db/models/logger-trip';
 import { Pallet } from '../db/models/pallet';
 import { Partner } from '../db/models/partner';
+import { Product } from '../db/models/product';
 import { Shipment } from '../db/models/shipment';
 import { ShipmentLine } from '../db/models/shipment-line';
+import { Site } from '../db/models/site';
 import { authorize } from '../policies';
 
 /** A docket among what was found, and by what. */
@@ -16,6 +18,9 @@ export interface FoundDocket {
 	number: string;
 	title: string;
 	stage: Stage;
+	verdict: Verdict | null;
+	/** Of its own site: what is found may lie in another zone than the one worked in. */
+	zone: string;
 	supplier: string;
 	vehicle: string | null;
 	dueAt: string | null;
@@ -37,7 +42,12 @@ async function findMarks(q: string) {
 	const pallets = /^\d{6,18}$/.test(digits)
 		? await Pallet.findAll({ where: { sscc: containing(digits) }, limit })
 		: [];
-	const byLine = [{ lot: like }, { id: { [Op.in]: pallets.map((pallet) => pallet.lineId) } }];
+	const products = await Product.findAll({ where: { name: like }, limit, attributes: ['id'] });
+	const byLine = [
+		{ lot: like },
+		{ productId: { [Op.in]: products.map((product) => product.id) } },
+		{ id: { [Op.in]: pallets.map((pallet) => pallet.lineId) } }
+	];
 	const gtin = /^\d{8,14}$/.test(digits) ? [{ gtin: digits.padStart(14, '0') }] : [];
 	const [lines, trips, partners] = await Promise.all([
 		ShipmentLine.findAll({ where: { [Op.or]: [...byLine, ...gtin] }, limit, attributes: ['shipmentId'] }),
@@ -79,10 +89,12 @@ export async function searchDockets(ctx: Context, q: string, limit = 20): Promis
 
 async function foundViews(found: Shipment[]): Promise<FoundDocket[]> {
 	const ids = found.map((shipment) => shipment.id);
-	const [holds, suppliers] = await Promise.all([
+	const [holds, suppliers, sites] = await Promise.all([
 		Hold.findAll({ where: { shipmentId: { [Op.in]: ids }, liftedAt: null } }),
-		Partner.findAll({ where: { id: { [Op.in]: found.map((shipment) => shipment.supplierId) } } })
+		Partner.findAll({ where: { id: { [Op.in]: found.map((shipment) => shipment.supplierId) } } }),
+		Site.findAll({ where: { id: { [Op.in]: found.map((shipment) => shipment.siteId) } } })
 	]);
+	const zones = new Map(sites.map((site) => [site.id, site.zone]));
 	const names = new Map(suppliers.map((partner) => [partner.id, partner.name]));
 	return found.map((shipment) => ({
 		id: shipment.id,
@@ -92,6 +104,8 @@ async function foundViews(found: Shipment[]): Promise<FoundDocket[]> {
 			...shipment.get(),
 			isHeld: holds.some((hold) => hold.shipmentId === shipment.id)
 		}),
+		verdict: shipment.verdict,
+		zone: zones.get(shipment.siteId) ?? 'UTC',
 		supplier: names.get(shipment.supplierId) ?? '',
 		vehicle: shipment.vehicle,
 		dueAt: shipment.dueAt?.toISOString() ?? null,

@@ -15,8 +15,8 @@ export function followBoard(first: () => BoardView, search: () => string, startM
 	const board = $derived(later?.of === first() ? later.board : first());
 
 	function take(next: BoardView) {
-		const before = new Map(board.rows.map((row) => [row.id, JSON.stringify(row)]));
-		for (const row of next.rows) if (before.get(row.id) !== JSON.stringify(row)) changed.add(row.id);
+		const before = Object.fromEntries(board.rows.map((row) => [row.id, JSON.stringify(row)]));
+		for (const row of next.rows) if (before[row.id] !== JSON.stringify(row)) changed.add(row.id);
 		later = { of: first(), board: next };
 		setTimeout(() => changed.clear(), washMs);
 	}
