@@ -11,6 +11,13 @@ const mostMemoryMegabytes = 1024;
 /** More at once would only wait for each other. */
 const mostAtOnce = 2;
 
+let builtProgram = import.meta.env.PROD ? join(process.cwd(), builtWorker) : null;
+
+/** For a program that reads many small exports of its own making, such as the seed: a thread each would cost more. */
+export function readInPlace(): void {
+	builtProgram = null;
+}
+
 let running = 0;
 const waiting: (() => void)[] = [];
 
@@ -18,10 +25,7 @@ const waiting: (() => void)[] = [];
  * Reads an export in a thread of its own, so that a long file holds up nobody and a hostile one ends alone.
  * Unbuilt, in development and tests, it is read in place.
  */
-export async function runReader(
-	order: ReadOrder,
-	program = import.meta.env.PROD ? join(process.cwd(), builtWorker) : null
-): Promise<ReadResult> {
+export async function runReader(order: ReadOrder, program = builtProgram): Promise<ReadResult> {
 	if (program === null) return readBytes(order);
 	if (running >= mostAtOnce) await new Promise<void>((resolve) => waiting.push(resolve));
 	running++;

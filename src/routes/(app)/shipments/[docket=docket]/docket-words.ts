@@ -1,8 +1,8 @@
 import type { MarkKind } from '$lib/components/ui/mark';
-import type { DocketView, Verdict } from '$lib/schemas/docket';
+import type { AssessmentView, DocketView, Verdict } from '$lib/schemas/docket';
 import { partQuantities } from '$lib/domain/receiving/quantities';
 import type { Outcome } from '$lib/domain/receiving/recommendation';
-import { count, lifeHours } from '$lib/format';
+import { addUp, count, lifeHours } from '$lib/format';
 
 /** Each outcome with its mark and word. */
 export const outcomeWords: Record<Outcome, { mark: MarkKind; word: string }> = {
@@ -70,4 +70,26 @@ export function legLetter(ordinal: number): string {
 
 export function lifeUnit(referenceCelsius: number): string {
 	return `h at ${lifeHours(referenceCelsius, 'en').replace(/\.0$/, '')} °C`;
+}
+
+/** The over-use of all legs as the table prints it, so that index, table and counterfoil never disagree. */
+export function printedOverUse(legs: AssessmentView['legs']): {
+	warm: number[];
+	late: number[];
+	over: number[];
+	totalOver: number;
+	totalWarm: number;
+	totalLate: number;
+} {
+	const warm = addUp(
+		legs.map((leg) => leg.tooWarmHours ?? 0),
+		1
+	);
+	const late = addUp(
+		legs.map((leg) => leg.tooLateHours ?? 0),
+		1
+	);
+	const over = legs.map((_, index) => (warm[index] ?? 0) + (late[index] ?? 0));
+	const total = (values: number[]) => values.reduce((sum, value) => sum + value, 0);
+	return { warm, late, over, totalOver: total(over), totalWarm: total(warm), totalLate: total(late) };
 }
