@@ -163,9 +163,9 @@ test('the claims desk opens a claim and takes the bundle, whose hashes hold', as
 	const row = page.getByRole('row').filter({ hasText: docket });
 	await row.getByRole('button', { name: 'Open a claim' }).click();
 	await expect(page.getByLabel('Amount')).toBeVisible();
-	await page.getByLabel('Against').selectOption({ label: story.carrier });
+	await page.getByLabel('Against', { exact: true }).selectOption({ label: story.carrier });
 	await page.getByLabel('Amount').fill('4720.50');
-	await page.getByLabel('Status').selectOption({ label: 'Filed' });
+	await page.getByLabel('Status', { exact: true }).selectOption({ label: 'Filed' });
 	await page.getByLabel('What it rests on').fill('Warm in the carrier’s hands; invoice value.');
 	await page.getByRole('button', { name: 'Save the claim' }).click();
 	await expect(page.getByText('4,720.50').first()).toBeVisible();
