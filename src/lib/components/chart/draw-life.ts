@@ -84,7 +84,7 @@ export function drawOpening(pen: Pen, { model, palette, locale, layout }: Drawin
 	line(pen, x, pen.y(model.fullDays), x, begins);
 	pen.ctx.setLineDash([]);
 	if (layout.isNarrow) return;
-	const y = pen.y(model.fullDays) + 8;
+	const y = Math.max(pen.top + 7, pen.y(model.fullDays) - 9);
 	text(pen, words.openingBalance, x + 8, y, { font: wordFontQuiet, colour: palette.ink2 });
 	const wide = pen.ctx.measureText(words.openingBalance).width;
 	text(pen, `${lifeHours(model.openingHours, locale)} h`, x + 12 + wide, y, {

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { ChartModel } from './chart-model';
 import { layoutOf } from './drawing';
-import { pointHeights, temperatureScale } from './heights';
+import { lifeScale, pointHeights, temperatureScale } from './heights';
 
 const model: ChartModel = {
 	traces: [[0], [4]],
@@ -31,5 +31,16 @@ describe('points of the crosshair', () => {
 	it('leave out what was not read', () => {
 		expect(pointHeights(model, layout, { temperature: null, lifeDays: null })).toEqual([]);
 		expect(pointHeights({ ...model, life: null }, layout, { temperature: 4, lifeDays: 9 })).toHaveLength(1);
+	});
+});
+
+describe('the scale of the life panel', () => {
+	it('reaches the full life, and further where the high does', () => {
+		expect(lifeScale(model).to).toBe(18);
+		expect(lifeScale({ ...model, life: [[0], [17], [13], [21]] }).to).toBe(21);
+	});
+
+	it('goes below zero for a life that is over-used', () => {
+		expect(lifeScale({ ...model, life: [[0], [-1], [-2], [0]] }).from).toBeLessThanOrEqual(-2);
 	});
 });

@@ -11,7 +11,18 @@ export function temperatureScale(model: ChartModel): Scale {
 }
 
 export function lifeScale(model: ChartModel): Scale {
-	return lifeTicks(Math.min(0, leastOf(model.life?.[2] ?? [])), model.fullDays, 4);
+	const [, , low = [], high = []] = model.life ?? [];
+	// The spec's own uncertainty can lift the high over the full life: the band is shown whole.
+	return lifeTicks(Math.min(0, leastOf(low)), Math.max(model.fullDays, mostOf(high)), 4);
+}
+
+function mostOf(column: ArrayLike<number | null | undefined>): number {
+	let most = -Infinity;
+	for (let at = 0; at < column.length; at++) {
+		const value = column[at];
+		if (typeof value === 'number' && value > most) most = value;
+	}
+	return most;
 }
 
 function leastOf(column: ArrayLike<number | null | undefined>): number {

@@ -15,6 +15,8 @@ export interface TimeTicks {
 
 const minute = 60_000;
 const hour = 60 * minute;
+/** A day's name at the left edge, and half of the next, which stands centred on its midnight. */
+const edgeRoomPx = 116;
 const dayMs = 24 * hour;
 
 /** Steps that end on local midnight, so that a day's first tick is always its beginning. */
@@ -68,7 +70,7 @@ function dayTicks(
 	}
 	const next = days[0]?.ms ?? Infinity;
 	// The part of a day that comes first is named too, where its name does not touch the next.
-	if ((next - fromMs) / perPx > 84)
+	if ((next - fromMs) / perPx > edgeRoomPx)
 		days.unshift({ ms: fromMs, text: day(fromMs, zone, locale), isAtEdge: true });
 	return days;
 }
