@@ -38,7 +38,7 @@ for (const [what, bytes, sentence] of unreadable)
 	test(`${what} is refused with a sentence, and nothing of it counts as evidence`, async ({ pageOf }) => {
 		const page = await pageOf('dock');
 		const docket = await openDocket(page);
-		await page.goto(`/shipments/${docket}/reads`);
+		await page.goto(`/shipments/${docket}/reads`, { waitUntil: 'networkidle' });
 		await page.locator('input[type=file]').first().setInputFiles(bytes);
 		await expect(page.getByText('This file cannot be read.')).toBeVisible();
 		await expect(page.getByText(sentence).first()).toBeVisible();
@@ -52,7 +52,7 @@ test('an empty file and one of 51 MB are not sent, and the page says why', async
 	const page = await pageOf('dock');
 	const docket = await openDocket(page);
 	const before = await readsOf(page, docket);
-	await page.goto(`/shipments/${docket}/reads`);
+	await page.goto(`/shipments/${docket}/reads`, { waitUntil: 'networkidle' });
 	const choose = page.locator('input[type=file]').first();
 	await choose.setInputFiles(file('nothing.csv', ''));
 	await expect(page.getByRole('alert')).toContainText('It is empty. Export it again.');
@@ -67,7 +67,7 @@ test('51 MB sent past the page are refused by the server with the limit', async 
 	const page = await pageOf('dock');
 	const docket = await openDocket(page);
 	const before = await readsOf(page, docket);
-	await page.goto(`/shipments/${docket}/reads`);
+	await page.goto(`/shipments/${docket}/reads`, { waitUntil: 'networkidle' });
 	const answer = await page.evaluate(async (url) => {
 		const form = new FormData();
 		form.append('files', new File([new Uint8Array(51_000_000)], 'huge.csv'));
@@ -85,7 +85,7 @@ test('a formula in a file stays text', async ({ pageOf }) => {
 	const docket = await openDocket(page);
 	const rows = Array.from({ length: 30 }, (_, n) => `2026-04-01T10:${String(n).padStart(2, '0')}:00Z;1.5`);
 	const formula = '=HYPERLINK("http://x.example","<img src=x onerror=alert(1)>")';
-	await page.goto(`/shipments/${docket}/reads`);
+	await page.goto(`/shipments/${docket}/reads`, { waitUntil: 'networkidle' });
 	await page
 		.locator('input[type=file]')
 		.first()
@@ -133,7 +133,7 @@ test.describe('without JavaScript', () => {
 		await page.getByRole('button', { name: 'Add the note' }).click();
 		await expect(page.getByText(note)).toBeVisible();
 
-		await page.goto(`/shipments/${docket}/reads`);
+		await page.goto(`/shipments/${docket}/reads`, { waitUntil: 'networkidle' });
 		await page.locator('input[type=file]').first().setInputFiles(file('refused-report.pdf'));
 		await page.getByRole('button', { name: 'Upload' }).click();
 		await expect(page.getByText('This is a PDF').first()).toBeVisible();

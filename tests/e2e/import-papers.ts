@@ -18,7 +18,7 @@ function file(rows: string[]) {
 
 /** Advance notices from a file: faults are shown by row before anything is written, then the good file opens dockets. */
 export async function importPapers(page: Page): Promise<void> {
-	await page.goto('/shipments/import');
+	await page.goto('/shipments/import', { waitUntil: 'networkidle' });
 	const choose = page.getByLabel('Choose a file', { exact: true });
 	const good = [
 		row('N1', story.product, '40'),

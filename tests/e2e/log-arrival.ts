@@ -24,7 +24,7 @@ async function draw(page: Page): Promise<void> {
 
 /** The dock writes down what it sees at the door: one photograph, counts, pulp, the seal, the driver's name and hand. */
 export async function logArrival(page: Page, docket: string): Promise<void> {
-	await page.goto(`/shipments/${docket}/arrival`);
+	await page.goto(`/shipments/${docket}/arrival`, { waitUntil: 'networkidle' });
 	await page
 		.getByLabel('Choose files')
 		.setInputFiles({ name: 'door.jpg', mimeType: 'image/jpeg', buffer: Buffer.from(samplePhoto) });

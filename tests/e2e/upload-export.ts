@@ -20,7 +20,7 @@ function sample() {
 
 /** Uploads an export that cannot say which probe rode with the goods, answers, looks at what was understood, keeps it. */
 export async function uploadAndKeep(page: Page, docket: string): Promise<void> {
-	await page.goto(`/shipments/${docket}/reads`);
+	await page.goto(`/shipments/${docket}/reads`, { waitUntil: 'networkidle' });
 	await page.getByLabel('Choose files').setInputFiles(sample());
 	await expect(
 		page.getByRole('heading', { name: 'Which column is the temperature of the goods?' })
@@ -43,9 +43,9 @@ export async function uploadAndKeep(page: Page, docket: string): Promise<void> {
 
 /** The same bytes again are recognised, not doubled. */
 export async function uploadAgain(page: Page, docket: string): Promise<void> {
-	await page.goto(`/shipments/${docket}/reads`);
+	await page.goto(`/shipments/${docket}/reads`, { waitUntil: 'networkidle' });
 	await page.getByLabel('Choose files').setInputFiles(sample());
 	await expect(page.getByRole('heading', { level: 1, name: 'cod-two-probes.csv' })).toBeVisible();
-	await page.goto(`/shipments/${docket}/reads`);
+	await page.goto(`/shipments/${docket}/reads`, { waitUntil: 'networkidle' });
 	await expect(page.getByRole('link', { name: 'cod-two-probes.csv' })).toHaveCount(1);
 }
