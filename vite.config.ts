@@ -37,6 +37,7 @@ const nodeBuild: UserConfig = {
 
 /** Tests against the private database share two cores with it: few workers, one database each. */
 const tests: UserConfig['test'] = {
+	maxWorkers: 2,
 	projects: [
 		{
 			extends: true,
@@ -58,8 +59,7 @@ const tests: UserConfig['test'] = {
 				include: ['src/lib/server/**/*.test.ts', 'src/cli/**/*.test.ts'],
 				globalSetup: ['tests/helpers/database-server.ts'],
 				testTimeout: 30_000,
-				hookTimeout: 60_000,
-				maxWorkers: 2
+				hookTimeout: 60_000
 			}
 		},
 		{
@@ -69,8 +69,7 @@ const tests: UserConfig['test'] = {
 				include: ['tests/handlers/**/*.test.ts'],
 				globalSetup: ['tests/helpers/database-server.ts'],
 				testTimeout: 30_000,
-				hookTimeout: 60_000,
-				maxWorkers: 2
+				hookTimeout: 60_000
 			}
 		},
 		{

@@ -1,3 +1,4 @@
+import type { PartQuantities } from '../domain/receiving/quantities';
 import { z } from 'zod';
 import type { Stage, Verdict } from './docket';
 import { optionalDay, optionalFlag, optionalId, optionalText } from './shipment-parts';
@@ -56,6 +57,8 @@ export interface BoardRow {
 	life: BoardLife | null;
 	rejectBy: { startsAt: string; deadlineAt: string } | null;
 	decided: { by: string; at: string } | null;
+	/** What came in and what was refused, of a load taken in part. */
+	part: PartQuantities | null;
 	next: NextAct;
 }
 

@@ -2,6 +2,7 @@ import { Op } from 'sequelize';
 import { AssessmentRow } from '../db/models/assessment-row';
 import { Clock } from '../db/models/clock';
 import { Disposition } from '../db/models/disposition';
+import { DispositionLine } from '../db/models/disposition-line';
 import { ExcursionRow } from '../db/models/excursion-row';
 import { Hold } from '../db/models/hold';
 import { LoggerRead } from '../db/models/logger-read';
@@ -74,9 +75,12 @@ export async function findBoardFacts(shipments: readonly Shipment[]) {
 		findPeople(shipments),
 		findAssessed(where)
 	]);
-	const products = await Product.findAll({
-		where: { id: { [Op.in]: [...new Set(lines.map((line) => line.productId))] } }
-	});
+	const [products, outcomes] = await Promise.all([
+		Product.findAll({
+			where: { id: { [Op.in]: [...new Set(lines.map((line) => line.productId))] } }
+		}),
+		DispositionLine.findAll({ where: { dispositionId: { [Op.in]: dispositions.map((row) => row.id) } } })
+	]);
 	return {
 		...assessed,
 		partners,
@@ -86,7 +90,8 @@ export async function findBoardFacts(shipments: readonly Shipment[]) {
 		reads: grouped(reads, byShipment),
 		holds: grouped(holds, byShipment),
 		clocks: grouped(clocks, byShipment),
-		dispositions: grouped(dispositions, byShipment)
+		dispositions: grouped(dispositions, byShipment),
+		outcomes: grouped(outcomes, (row) => row.dispositionId)
 	};
 }
 

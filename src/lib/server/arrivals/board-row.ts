@@ -1,3 +1,4 @@
+import { partQuantities } from '../../domain/receiving/quantities';
 import type { BoardLife, BoardRow } from '../../schemas/board';
 import type { Actor } from '../context';
 import type { AssessmentRow } from '../db/models/assessment-row';
@@ -100,6 +101,10 @@ export function boardRow(actor: Actor, shipment: Shipment, facts: BoardFacts): B
 				? { startsAt: clock.startsAt.toISOString(), deadlineAt: clock.deadlineAt.toISOString() }
 				: null,
 		decided: signed ? { by: signed.signedName, at: signed.signedAt.toISOString() } : null,
+		part:
+			signed && verdict === 'part'
+				? partQuantities((facts.outcomes.get(signed.id) ?? []).map((outcome) => ({ outcome })))
+				: null,
 		next: nextAct(actor, {
 			...{ number, stage, reads },
 			questionIds: questions.map((read) => read.id),

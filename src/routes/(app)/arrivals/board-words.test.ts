@@ -17,7 +17,14 @@ const base: BoardRow = {
 	...{ id: '1', number: 'PS-26-1184', version: 0, stage: 'expected', verdict: null },
 	...{ dueAt: '2026-04-03T07:45:00Z', arrivedAt: null, supplier: 'Olmarisa', carrier: null, vehicle: null },
 	...{ dock: 'Dock 1', goods: { product: 'Blueberries', lots: 3, cases: 2720, unit: 'case' } },
-	...{ reads: { due: 1, kept: 0, questions: 0 }, finding: null, life: null, rejectBy: null, decided: null },
+	...{
+		reads: { due: 1, kept: 0, questions: 0 },
+		finding: null,
+		life: null,
+		rejectBy: null,
+		decided: null,
+		part: null
+	},
 	next: { act: 'open', href: '/', questions: 0, isMine: false }
 };
 const row = (changes: Partial<BoardRow>): BoardRow => ({ ...base, ...changes });

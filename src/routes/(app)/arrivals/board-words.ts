@@ -16,8 +16,6 @@ export const groups: readonly { stage: Stage; name: string; short: string }[] = 
 const verdicts: Record<string, { word: string; mark: MarkKind | null }> = {
 	accepted: { word: 'Accepted', mark: 'accept' },
 	conditions: { word: 'With conditions', mark: 'conditions' },
-	// Some in, some refused: no tick over a part.
-	part: { word: 'Taken in part', mark: null },
 	rejected: { word: 'Rejected', mark: 'reject' }
 };
 
@@ -25,6 +23,12 @@ export function verdictOf(row: BoardRow): { word: string; mark: MarkKind | null 
 	if (row.stage === 'at-the-door') return { word: 'At the door', mark: 'at-the-door' };
 	if (row.stage === 'on-hold') return { word: 'On hold', mark: 'hold' };
 	if (row.stage === 'expected') return { word: 'Expected', mark: 'expected' };
+	// Some in, some refused: no tick over a part, its quantities say it.
+	if (row.part)
+		return {
+			word: `${count(row.part.taken, 'en')} in, ${count(row.part.refused, 'en')} refused`,
+			mark: null
+		};
 	return verdicts[row.verdict ?? 'accepted'] ?? { word: 'Done', mark: null };
 }
 
