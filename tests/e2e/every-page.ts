@@ -21,7 +21,6 @@ export interface Found {
 	mail: string;
 	claim: string;
 	load: string;
-	checkCode: string;
 }
 
 /** A page, as whom it is looked at, and where it is. */
@@ -39,8 +38,10 @@ export const places: readonly Place[] = [
 	{ name: 'a link that is not known', as: null, path: '/link/not-a-secret' },
 	{ name: 'an invitation that no longer works', as: null, path: '/invitation/not-a-secret' },
 	{ name: 'checking a report', as: null, path: '/check' },
+	{ name: 'a report nobody has sealed', as: null, path: '/check/0000000000000000' },
 	{ name: 'parts', as: null, path: '/parts' },
 	{ name: 'arrivals', as: 'dock', path: '/arrivals' },
+	{ name: 'arrivals to log', as: 'dock', path: '/arrivals/log' },
 	{ name: 'dockets', as: 'qa', path: '/shipments' },
 	{ name: 'a new docket', as: 'dock', path: '/shipments/new' },
 	{ name: 'dockets from a file', as: 'dock', path: '/shipments/import' },
@@ -49,7 +50,6 @@ export const places: readonly Place[] = [
 	{ name: 'an expected docket', as: 'dock', path: docketOf('', 'expected') },
 	{ name: 'papers of a docket', as: 'dock', path: docketOf('/edit', 'expected') },
 	{ name: 'logging an arrival', as: 'dock', path: docketOf('/arrival', 'expected') },
-	{ name: 'what was seen at the door', as: 'dock', path: docketOf('/arrival', 'atQa') },
 	{ name: 'reads', as: 'dock', path: docketOf('/reads', 'atQa') },
 	{ name: 'a question about a file', as: 'dock', path: ({ question }) => question },
 	{ name: 'a kept read', as: 'qa', path: ({ kept }) => kept },
@@ -125,7 +125,6 @@ async function find(admin: Page, qa: Page, supplier: Page): Promise<Found> {
 		mail: await firstOf(admin, '/mailbox', single('/mailbox')),
 		claim: await firstOf(qa, '/claims', single('/claims')),
 		load: await firstOf(supplier, '/loads', single('/loads')),
-		checkCode: ''
 	};
 }
 
