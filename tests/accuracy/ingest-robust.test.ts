@@ -1,5 +1,6 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { parse } from 'csv-parse/sync';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Ingestion, ReadContext, Understanding } from '../../src/lib/domain/ingest/ingestion';
@@ -134,20 +135,25 @@ describe('bounds', () => {
 		});
 	});
 
-	it('reads 100,000 rows in less than a second', () => {
+	it('reads 100,000 rows in less than three times what csv-parse takes to split them', () => {
 		const rows = Array.from({ length: 100_000 }, (_, i) => {
 			const at = new Date(Date.UTC(2024, 0, 1) + i * 600_000).toISOString().slice(0, 19).replace('T', ' ');
 			return `${at};${(4 + (i % 17) / 10).toFixed(1).replace('.', ',')}`;
 		});
-		const bytes = bytesOf(`time (UTC);temperature °C\n${rows.join('\n')}\n`);
-		// The best of three: other tests share the two cores.
-		const runs = [1, 2, 3].map(() => {
-			const started = performance.now();
-			const { readings } = understood(readExport(bytes, context));
-			return { readings, ms: performance.now() - started };
-		});
-		expect(runs.map(({ readings }) => readings)).toEqual([100_000, 100_000, 100_000]);
-		expect(Math.min(...runs.map(({ ms }) => ms))).toBeLessThan(1000);
+		const text = `time (UTC);temperature °C\n${rows.join('\n')}\n`;
+		const bytes = bytesOf(text);
+		// The best of three of each, in one run: a ratio says the same on a busy machine.
+		const best = (work: () => number) =>
+			Math.min(
+				...[1, 2, 3].map(() => {
+					const started = performance.now();
+					expect(work()).toBe(100_000);
+					return performance.now() - started;
+				})
+			);
+		const splitMs = best(() => parse(text, { delimiter: ';' }).length - 1);
+		const readMs = best(() => understood(readExport(bytes, context)).readings);
+		expect(readMs / splitMs).toBeLessThan(3);
 	});
 });
 

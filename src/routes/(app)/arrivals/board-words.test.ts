@@ -47,7 +47,9 @@ describe('the words of the board', () => {
 	});
 
 	it('put no tick over a part', () => {
-		expect(verdictOf(row({ stage: 'done', verdict: 'part' }))).toEqual({ word: 'Taken in part', mark: null });
+		expect(
+			verdictOf(row({ stage: 'done', verdict: 'part', part: { unit: 'pallets', taken: 12, refused: 4 } }))
+		).toEqual({ word: '12 in, 4 refused', mark: null });
 		expect(verdictOf(row({ stage: 'done', verdict: 'rejected' })).mark).toBe('reject');
 	});
 
