@@ -125,6 +125,9 @@ test.describe('without JavaScript', () => {
 		await page.getByLabel('Password').fill(demoPassword);
 		await page.getByRole('button', { name: 'Sign in', exact: true }).click();
 		await expect(page).toHaveURL(/arrivals/);
+		await page.goto('/settings');
+		await page.getByRole('radio', { name: 'Pell Staithe' }).check();
+		await page.getByRole('button', { name: 'Work there' }).click();
 
 		const docket = await openDocket(page);
 		await page.goto(`/shipments/${docket}`);

@@ -124,7 +124,7 @@ async function find(admin: Page, qa: Page, supplier: Page): Promise<Found> {
 		user: await firstOf(admin, '/settings/users', single('/settings/users')),
 		mail: await firstOf(admin, '/mailbox', single('/mailbox')),
 		claim: await firstOf(qa, '/claims', single('/claims')),
-		load: await firstOf(supplier, '/loads', single('/loads')),
+		load: await firstOf(supplier, '/loads', single('/loads'))
 	};
 }
 
