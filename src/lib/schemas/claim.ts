@@ -20,6 +20,8 @@ export const claimStatusWords: Record<ClaimStatus, string> = {
 export function minorUnitsOf(text: string, currency: string): number | null {
 	const digits = minorUnitDigits(currency);
 	const cleaned = text.trim().replace(/[\s' ]/g, '');
+	// Three decimals look like a group of thousands; in a currency that has three they are decimals.
+	if (digits === 3 && /^\d+[.,]\d{3}$/.test(cleaned)) return Number(cleaned.replace(/[.,]/, ''));
 	const match = /^(\d{1,3}(?:[.,]\d{3})+|\d+)(?:[.,](\d{1,3}))?$/.exec(cleaned);
 	if (!match?.[1]) return null;
 	const fraction = match[2] ?? '';
