@@ -2,6 +2,7 @@ import { error, fail, type ActionFailure } from '@sveltejs/kit';
 import type { z } from 'zod';
 import type { Context } from './context';
 import { Refusal } from './refusals';
+import { InvalidFields } from './shipments/invalid-fields';
 
 /** Who is asking. Every action and API handler begins with it. @throws 401 without a session */
 export function contextOf(locals: App.Locals): Context {
@@ -95,6 +96,11 @@ export async function asJson(work: () => Promise<unknown>): Promise<Response> {
 }
 
 export function refusalAsJson(e: unknown): Response {
+	if (e instanceof InvalidFields) {
+		// Some faults are questions to the one who types; to a program they are a statement.
+		const message = e.message.replace(/[.?!]?$/, '.');
+		return Response.json({ code: e.code, message, issues: e.issues }, { status: e.status });
+	}
 	if (e instanceof Refusal) return Response.json({ code: e.code, message: e.message }, { status: e.status });
 	throw e;
 }
@@ -103,6 +109,5 @@ export function refusalAsJson(e: unknown): Response {
 export function parseInput<Schema extends z.ZodType>(input: unknown, schema: Schema): z.output<Schema> {
 	const parsed = schema.safeParse(input);
 	if (parsed.success) return parsed.data;
-	const faults = Object.entries(issuesOf(parsed.error)).map(([field, text]) => `${field}: ${text}`);
-	throw new Refusal('invalid', faults.join('; '));
+	throw new InvalidFields(issuesOf(parsed.error));
 }
