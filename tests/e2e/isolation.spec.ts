@@ -126,7 +126,8 @@ test('the link of a notice opens one docket, neither another of its firm nor of 
 	const [qa, page] = [await pageOf('qa'), await pageOf(null)];
 	const own = await targetOf(qa, 'Skerrin Smokehouse');
 	await openMail(qa, own.contactEmail);
-	await page.goto(await linkInMail(qa, '/link/'));
+	// Pressed while the page still loads, the button may go from under the pointer.
+	await page.goto(await linkInMail(qa, '/link/'), { waitUntil: 'networkidle' });
 	await page.getByRole('button', { name: 'Open the docket' }).click();
 	await expect(page).toHaveURL(/\/loads\/[0-9a-f-]{36}/);
 	await expectNoWayIn(page, await targetOf(qa, 'Olmarisa Berry Growers'));

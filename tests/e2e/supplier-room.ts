@@ -19,7 +19,7 @@ export async function signInSupplier(admin: Page, page: Page, firm: string): Pro
 	await admin.getByRole('button', { name: 'Send invitation' }).click();
 	await expect(admin.getByRole('heading', { level: 1, name: 'Guest of a firm' })).toBeVisible();
 	await openMail(admin, email);
-	await page.goto(await linkInMail(admin, '/link/'));
+	await page.goto(await linkInMail(admin, '/link/'), { waitUntil: 'networkidle' });
 	await page.getByRole('button', { name: 'Sign in' }).click();
 	await expect(page).toHaveURL(/\/loads/);
 	return email;

@@ -136,7 +136,7 @@ test('the notice comes by mail, and looking at its link does not use it up', asy
 test('the supplier opens the link, sees its docket, and disputes', async ({ pageOf }) => {
 	const page = await pageOf(null);
 	const complaints = complaintsOf(page);
-	await page.goto(link);
+	await page.goto(link, { waitUntil: 'networkidle' });
 	await page.getByRole('button', { name: 'Open the docket' }).click();
 	await expect(page.getByRole('heading', { name: 'Goods of your load were refused' })).toBeVisible();
 	await expect(page.getByText(story.lot).first()).toBeVisible();
