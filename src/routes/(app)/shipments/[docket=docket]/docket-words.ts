@@ -93,3 +93,11 @@ export function printedOverUse(legs: AssessmentView['legs']): {
 	const total = (values: number[]) => values.reduce((sum, value) => sum + value, 0);
 	return { warm, late, over, totalOver: total(over), totalWarm: total(warm), totalLate: total(late) };
 }
+
+/** Why a line has no life figure, in a few words; null where it has one. */
+export function lifeNotKnown(docket: DocketView, line: DocketView['lines'][number]): string | null {
+	if (line.remainingHours) return null;
+	// A full life of nothing is what a line without a spec in force has.
+	if (line.fullLifeHours === 0) return 'no spec was in force';
+	return docket.loggers.some((logger) => logger.traceId !== null) ? 'no reading in custody' : 'no read yet';
+}
