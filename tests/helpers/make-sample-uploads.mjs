@@ -681,6 +681,11 @@ const readme = `# Exports to try
 Invented journeys of invented loggers, each in a layout of its own. Drop any of them on a docket’s page of readings.
 \`expected/\` holds what a careful person would read out of each, taken from the journey that was written, not from the
 reader. All are read as if uploaded on 20 April 2026 at 12:00 UTC; sites are in ${siteZone} unless a line says otherwise.
+
+On a docket of today they are read as well, but lie outside its journey, and the app says so. To see life figures from one,
+enter a load whose handovers lie around the days of the file (spring 2026), log its arrival at the last of them, and upload
+the file there.
+
 \`node tests/helpers/make-sample-uploads.mjs\` writes them anew, byte for byte.
 
 | file | shows | the app |
