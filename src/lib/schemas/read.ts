@@ -17,8 +17,8 @@ export const maxUploadBytes = 50_000_000;
 export const maxUploadFiles = 20;
 
 /** A channel without its readings: those stand in the trace. */
-export type ChannelSummary = Omit<Channel, 'trace' | 'lines'> & {
-	readings: number;
+export type ChannelSummary = Omit<Channel, 'trace' | 'lines' | 'longSteps' | 'unit'> & {
+	/** Of its trace; null where it has none. */
 	unit: TemperatureUnit | null;
 };
 

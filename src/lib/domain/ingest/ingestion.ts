@@ -21,11 +21,29 @@ export interface Answers {
 	readonly zone?: string;
 	/** Column (0-based) or JSON key of the temperature to use. */
 	readonly temperatureColumn?: string;
-	readonly intervalMinutes?: number;
+	readonly intervalSeconds?: number;
+	/** First moment of running times; for times counted back from the receipt, that moment. */
 	readonly startMs?: number;
+	/** Which of several sections; where a clock restarts, `before` it only or both `joined`. */
+	readonly part?: Part;
 }
 
-export type QuestionCode = 'date-order' | 'unit' | 'zone' | 'temperature-column' | 'interval' | 'start';
+/** Sections of a file by their place, up to what a person would tell apart. */
+export const sectionParts = [
+	'first',
+	'second',
+	'third',
+	'fourth',
+	'fifth',
+	'sixth',
+	'seventh',
+	'eighth'
+] as const;
+export const parts = [...sectionParts, 'before', 'joined'] as const;
+export type Part = (typeof parts)[number];
+
+export type QuestionCode =
+	'date-order' | 'unit' | 'zone' | 'temperature-column' | 'interval' | 'start' | 'part';
 
 /** One of two or three possible readings of the file, shown on the file's own first and last rows. */
 export interface Choice {
@@ -33,6 +51,7 @@ export interface Choice {
 	readonly firstMs: number | null;
 	readonly lastMs: number | null;
 	readonly firstCelsius: number | null;
+	readonly lastCelsius: number | null;
 	/** Codes of what speaks for or against: `fits-journey`, `before-journey`, `after-upload`, `plausible`, `implausible`. */
 	readonly evidence: readonly string[];
 	/** Days or hours the evidence speaks of (30 days before loading). */
@@ -56,7 +75,10 @@ export interface Question {
 	readonly rows: readonly ExampleRow[];
 	/** Rows between the first and last shown. */
 	readonly rowsBetween: number;
-	/** Why the file cannot tell: `all-one-day`, `all-days-up-to-12`, `no-unit`, `no-zone`, `several-temperatures`, `no-times`. */
+	/**
+	 * Why the file cannot tell: `all-one-day`, `all-days-up-to-12`, `no-unit`, `no-zone`, `several-temperatures`,
+	 * `no-times`, `relative-times`, `several-parts`, `clock-restarts`.
+	 */
 	readonly why: string;
 }
 
@@ -91,6 +113,60 @@ export interface Oddity {
 	readonly detail: string | null;
 }
 
+/** What a decision is about; the first seven can also be answered. */
+export type DecisionField =
+	| 'dateOrder'
+	| 'zone'
+	| 'unit'
+	| 'column'
+	| 'start'
+	| 'intervalSeconds'
+	| 'part'
+	| 'layout'
+	| 'encoding'
+	| 'delimiter'
+	| 'decimal'
+	| 'time';
+
+/** One thing that was decided about the file, with what decided it. */
+export interface Decision {
+	readonly field: DecisionField;
+	/** The answer that would decide the same: `dmy`, `+02:00`, `fahrenheit`, a column's head. */
+	readonly value: string;
+	/** Code of what decided: `answer`, `day-over-12`, `head`, `preamble`, `site`, `only-one` … */
+	readonly because: DecisionReason;
+	/** What the sentence names beside the value; null without. */
+	readonly detail: string | null;
+}
+
+export type DecisionReason =
+	| 'answer'
+	/** Of the order of dates. */
+	| 'iso'
+	| 'day-over-12'
+	| 'continuity'
+	| 'declared'
+	| 'journey'
+	| 'upload'
+	| 'month-name'
+	/** Of the zone. */
+	| 'offset'
+	| 'epoch'
+	| 'zone-named'
+	| 'site'
+	/** Of the unit. */
+	| 'beside-values'
+	| 'head'
+	| 'preamble'
+	| 'standard'
+	/** Of the column. */
+	| 'only-one'
+	| 'mean'
+	| 'twin'
+	/** Of what the file is written in. */
+	| 'signature'
+	| 'found';
+
 /** How the file was understood: enough to read it again to the same digits. */
 export interface Layout {
 	readonly kind: 'delimited' | 'json' | 'senml' | 'epcis';
@@ -108,12 +184,27 @@ export interface Layout {
 	readonly fingerprint: string;
 }
 
+/** One column of measurements. All are kept, only the primary temperature is assessed. */
 export interface Channel {
 	readonly name: string;
 	readonly quantity: Quantity;
+	/** Unit as written; of a temperature the one it was read in (`celsius`); null where the file names none. */
+	readonly unit: string | null;
+	readonly isPrimary: boolean;
+	/** Temperatures only: other quantities are kept as figures. */
 	readonly trace: Trace | null;
 	/** Line in the file of each reading of `trace`. */
 	readonly lines: Int32Array | null;
+	readonly readings: number;
+	/** Rows without a usable value. */
+	readonly missing: number;
+	readonly firstMs: number | null;
+	readonly lastMs: number | null;
+	/** The most frequent step; null below two readings. */
+	readonly usualIntervalMs: number | null;
+	/** Steps over 1.5 × the usual one as from, to, from, to …, UTC ms. */
+	readonly longSteps: Float64Array;
+	/** Of temperatures only; the mean is arithmetic over readings. */
 	readonly minCelsius: number | null;
 	readonly maxCelsius: number | null;
 	readonly meanCelsius: number | null;
@@ -131,6 +222,8 @@ export interface Declared {
 export interface Understanding {
 	readonly layout: Layout;
 	readonly declared: Declared;
+	/** What was decided, and by what. */
+	readonly decisions: readonly Decision[];
 	readonly channels: readonly Channel[];
 	/** Index in `channels` of the temperature to assess. */
 	readonly temperature: number;
@@ -169,6 +262,8 @@ export type RefusalCode =
 	| 'no-time-progress'
 	/** Several lists of readings side by side. */
 	| 'two-recordings'
+	/** Read any way, the dates lie before loggers existed or far ahead of the upload. */
+	| 'implausible-dates'
 	| 'too-deep'
 	| 'line-too-long'
 	| 'too-many-readings';

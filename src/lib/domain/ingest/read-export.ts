@@ -1,11 +1,13 @@
 import { decodeBytes } from './decode/decode-bytes';
 import { tableFromText } from './delimited/table-from-text';
-import type { Ingestion, ReadContext } from './ingestion';
+import type { Ingestion, ReadContext, RefusalCode } from './ingestion';
 import { parseDocument } from './json/parse-document';
 import { tableFromEpcis } from './json/epcis';
 import type { JsonNode } from './json/json-node';
 import { isSenml, tableFromSenml } from './json/senml';
 import { tableFromJson } from './json/table-from-json';
+import type { Sections, Table } from './layout/table';
+import { readSections } from './read/parts';
 import { readTable } from './read/read-table';
 import { refused } from './read/refusals';
 import { textKindOf } from './sniff/text-kind';
@@ -23,22 +25,31 @@ export function readExport(bytes: Uint8Array, context: ReadContext): Ingestion {
 }
 
 function readDelimited(text: string, encoding: string, context: ReadContext): Ingestion {
-	const table = tableFromText(text);
-	return 'code' in table ? refused(table.code, table.line, table.found) : readTable(table, encoding, context);
+	return readFound(tableFromText(text), encoding, context);
 }
 
 function readJson(text: string, encoding: string, context: ReadContext): Ingestion {
 	const document = parseDocument(text);
 	if ('code' in document) return refused(document.code, document.line, document.found);
 	const table = standardTable(document.root, text) ?? tableFromJson(document.root, text);
-	if ('code' in table) return refused(table.code, table.line, table.found);
-	const ingestion = readTable(table, encoding, context);
+	const ingestion = readFound(table, encoding, context);
 	if (ingestion.kind !== 'ok' || document.cutAtLine === null) return ingestion;
 	const cut = { code: 'cut-short', count: 1, lines: [document.cutAtLine], detail: null } as const;
 	return {
 		...ingestion,
 		understanding: { ...ingestion.understanding, oddities: [...ingestion.understanding.oddities, cut] }
 	};
+}
+
+type Found =
+	| Table
+	| Sections
+	| { readonly code: RefusalCode; readonly line: number | null; readonly found: string | null };
+
+/** One table is read; of several sections one is, by answer or question. */
+function readFound(found: Found, encoding: string, context: ReadContext): Ingestion {
+	if ('code' in found) return refused(found.code, found.line, found.found);
+	return 'tables' in found ? readSections(found, encoding, context) : readTable(found, encoding, context);
 }
 
 /** Open standards are read as they say, before anything is inferred. */

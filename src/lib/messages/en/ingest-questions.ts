@@ -42,7 +42,11 @@ const titles: Readonly<Record<QuestionCode, (question: Question) => string>> = {
 	zone: () => 'Which time zone are the times in?',
 	'temperature-column': () => 'Which column is the temperature of the goods?',
 	interval: () => 'How far apart are the readings?',
-	start: () => 'When did the logger start?'
+	start: () => 'When did the logger start?',
+	part: ({ why }) =>
+		why === 'clock-restarts'
+			? 'The clock starts anew inside the file. Which readings count?'
+			: 'Which of the recordings in the file is this load’s?'
 };
 
 const unitWords: Readonly<Record<string, string>> = { celsius: '°C', fahrenheit: '°F', kelvin: 'K' };
@@ -53,6 +57,8 @@ const whys: Readonly<Record<string, string>> = {
 	'no-unit': 'The file names no unit, so the figures alone would have to tell.',
 	'no-zone': 'The file gives local times without saying where.',
 	'several-temperatures': 'The file has several temperatures and does not say which rode with the goods.',
+	'several-parts': 'The file holds several recordings, one after the other.',
+	'clock-restarts': 'The times fall back and run on from there, so the file cannot tell.',
 	'no-times': 'The rows carry no time of their own.',
 	'relative-times': 'The file counts its times back from a moment it does not name.'
 };
@@ -67,13 +73,24 @@ export function questionWhy({ why }: Question): string {
 	return whys[why] ?? '';
 }
 
+const partWords: Readonly<Record<string, string>> = {
+	before: 'The readings before the clock starts anew',
+	joined: 'All readings, one after the other'
+};
+
+function partLabel(label: string, part: string): string {
+	const words = partWords[part] ?? `The ${part} recording`;
+	return label === '' || label === part ? words : `${words}: ${label}`;
+}
+
 /** What one choice is called: the day in words, the unit, the column, the interval. */
-export function choiceLabel({ code, subject }: Question, { label }: Choice): string {
+export function choiceLabel({ code, subject }: Question, { label, answer }: Choice): string {
 	if (code === 'date-order') {
 		const words = dayInWords(subject, label);
 		return words.charAt(0).toUpperCase() + words.slice(1);
 	}
 	if (code === 'unit') return unitWords[label] ?? label;
+	if (code === 'part') return partLabel(label, answer.part ?? '');
 	if (code === 'interval') return `Every ${label} min`;
 	if (code !== 'start') return label;
 	return label === 'upload' ? 'Back from the upload' : 'When the load was loaded';

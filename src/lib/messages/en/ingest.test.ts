@@ -8,6 +8,7 @@ const choice = (label: string, more: Partial<Choice> = {}): Choice => ({
 	firstMs: null,
 	lastMs: null,
 	firstCelsius: null,
+	lastCelsius: null,
 	evidence: [],
 	evidenceHours: null,
 	label,

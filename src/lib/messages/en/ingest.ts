@@ -50,6 +50,8 @@ const refusals: Readonly<Record<RefusalCode, (facts: RefusalFacts) => string>> =
 	truncated: (facts) => `The file ends in the middle${at(facts)}. Download the export again.`,
 	'unclosed-quote': (facts) =>
 		`A quoted cell that opens${at(facts)} never closes. Download the export again.`,
+	'implausible-dates': ({ line, found }) =>
+		`The dates cannot be right${found === null ? '' : `: the first reads ${found}`}${at({ line, found })}. Set the logger’s clock and export again.`,
 	'too-deep': (facts) => `The JSON is nested too deeply${at(facts)} to hold readings.`,
 	'line-too-long': (facts) => `A single line is longer than 64 KB${at(facts)}. This is no table of readings.`,
 	'too-many-readings': () =>

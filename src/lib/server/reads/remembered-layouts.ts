@@ -2,7 +2,7 @@ import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import { z } from 'zod';
 import { temperatureUnits } from '../../domain/units';
-import type { Answers } from '../../domain/ingest/ingestion';
+import { parts, type Answers } from '../../domain/ingest/ingestion';
 import type { StoredIngestion } from '../../schemas/read';
 import type { Context } from '../context';
 import { RememberedLayout } from '../db/models/remembered-layout';
@@ -15,8 +15,9 @@ export const answersSchema = z.object({
 	unit: z.enum(temperatureUnits).optional(),
 	zone: z.string().max(64).optional(),
 	temperatureColumn: z.string().max(200).optional(),
-	intervalMinutes: z.number().positive().optional(),
-	startMs: z.number().optional()
+	intervalSeconds: z.number().positive().optional(),
+	startMs: z.number().optional(),
+	part: z.enum(parts).optional()
 });
 
 /** Answers that hold for every file of a make; a start or an interval is one file's own. */

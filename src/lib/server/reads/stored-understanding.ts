@@ -5,9 +5,8 @@ import type { StoredIngestion } from '../../schemas/read';
 export function summaryOf(ingestion: Ingestion, context: ReadContext): StoredIngestion {
 	if (ingestion.kind !== 'ok') return { ...ingestion, context };
 	const { understanding } = ingestion;
-	const channels = understanding.channels.map(({ trace, lines: _, ...channel }) => ({
+	const channels = understanding.channels.map(({ trace, lines: _lines, longSteps: _steps, ...channel }) => ({
 		...channel,
-		readings: trace?.times.length ?? 0,
 		unit: trace?.unit ?? null
 	}));
 	return { kind: 'ok', context, ...understanding, channels };

@@ -1,3 +1,5 @@
+import type { Decision, Oddity } from '../ingestion';
+
 /** A key and value that stood outside the readings: preamble line, footer line, JSON metadata. */
 export interface Entry {
 	readonly key: string;
@@ -25,4 +27,16 @@ export interface Table {
 	textOf(row: number): string;
 	/** True when the last row lacks the line end that all others have. */
 	readonly isUnterminated: boolean;
+	/** Blank cells are moments at which a channel was not due, not values that are missing. */
+	readonly isSparse?: boolean;
+	/** What was decided or seen while the table was found, told as it stands. */
+	readonly decisions?: readonly Decision[];
+	readonly oddities?: readonly Oddity[];
+}
+
+/** Several sections of one file, each a recording of its own: one is to be read. */
+export interface Sections {
+	readonly tables: readonly Table[];
+	/** What each is called in the file; empty where it has no name. */
+	readonly names: readonly string[];
 }

@@ -13,7 +13,7 @@ export function isLastRowCut(table: Table, gathered: Gathered): boolean {
 	const above = table.cells(gathered.rows[last - 1] ?? 0);
 	if (cells.length < above.length) return true;
 	return gathered.values.some(({ decimals, isMissing }) => {
-		if (isMissing[last] === 1) return false;
+		if (isMissing[last] !== 0) return false;
 		const usual = decimals[0] ?? 0;
 		for (let i = 0; i < last; i++) if (isMissing[i] === 0 && decimals[i] !== usual) return false;
 		return (decimals[last] ?? 0) < usual;

@@ -5,6 +5,9 @@ import type { TemperatureUnit } from '../../units';
 import type { Gathered, GatheredTimes, GatheredValues, RowFault } from './gathered';
 import { timeReaderOf, type RowTime } from './row-time';
 
+/** Of a row at which the channel was not due: neither a reading nor missing. */
+const notDue = 2;
+
 interface ValueCollector {
 	readonly column: number;
 	readonly mantissa: Float64Array;
@@ -50,10 +53,17 @@ function keepTime(times: GatheredTimes, at: number, time: RowTime): void {
 	times.ms[at] = time.ms;
 }
 
-function keepValue(value: ValueCollector, at: number, cells: readonly string[], number: NumberText): void {
-	const state = scanNumber(cells[value.column] ?? '', number);
+function keepValue(
+	value: ValueCollector,
+	at: number,
+	cells: readonly string[],
+	number: NumberText,
+	isSparse: boolean
+): void {
+	const cell = cells[value.column] ?? '';
+	const state = scanNumber(cell, number);
 	if (state !== 'number') {
-		value.isMissing[at] = 1;
+		value.isMissing[at] = isSparse && cell === '' ? notDue : 1;
 		return;
 	}
 	value.mantissa[at] = number.mantissa;
@@ -72,10 +82,31 @@ function finished({ units, commas, ...value }: ValueCollector): GatheredValues {
 	};
 }
 
+/** The values of further columns over rows that were kept before. */
+export function gatherValues(
+	table: Table,
+	{ rows, count }: Pick<Gathered, 'rows' | 'count'>,
+	columns: readonly number[]
+): GatheredValues[] {
+	const collectors = columns.map((column) => collectorOf(column, count));
+	const number = emptyNumber();
+	for (let i = 0; i < count; i++) {
+		const cells = table.cells(rows[i] ?? 0);
+		for (const collector of collectors) keepValue(collector, i, cells, number, table.isSparse === true);
+	}
+	return collectors.map(finished);
+}
+
 const isBlankRow = (cells: readonly string[]): boolean => cells.every((cell) => cell.trim() === '');
 
 /** Reads the time and the values of every row once; rows that are no readings are told apart, not guessed at. */
-export function gather(table: Table, timing: Timing, columns: readonly number[]): Gathered {
+export function gather(
+	table: Table,
+	timing: Timing,
+	columns: readonly number[],
+	/** Columns without which a row is too short to be read. */
+	needed: readonly number[] = columns
+): Gathered {
 	const size = table.rowCount;
 	const times = timesOf(size);
 	const collectors = columns.map((column) => collectorOf(column, size));
@@ -89,13 +120,13 @@ export function gather(table: Table, timing: Timing, columns: readonly number[])
 	let zoneWord: string | null = null;
 	let count = 0;
 	let lastRow = -1;
-	const needed = Math.max(-1, ...columns);
+	const width = Math.max(-1, ...needed);
 	for (let row = 0; row < size; row++) {
 		const cells = table.cells(row);
 		const hasTime =
 			timing.kind === 'none' ? cells.some((c) => scanNumber(c, number) === 'number') : time.read(cells);
 		const isShort =
-			table.kind === 'delimited' && columns.length > 0 && cells.length <= Math.min(needed, ...columns);
+			table.kind === 'delimited' && needed.length > 0 && cells.length <= Math.min(width, ...needed);
 		if (!hasTime || isShort) {
 			if (!isBlankRow(cells))
 				pending.push({ code: faultOf(cells, heading, hasTime), line: table.lineOf(row) });
@@ -104,7 +135,7 @@ export function gather(table: Table, timing: Timing, columns: readonly number[])
 		if (pending.length > 0) for (const fault of pending.splice(0)) faults.push(fault);
 		keepTime(times, count, time);
 		zoneWord ??= time.stamp.zoneWord;
-		for (const collector of collectors) keepValue(collector, count, cells, number);
+		for (const collector of collectors) keepValue(collector, count, cells, number, table.isSparse === true);
 		lines[count] = table.lineOf(row);
 		rows[count++] = row;
 		lastRow = row;

@@ -19,7 +19,7 @@ export interface GatheredValues {
 	readonly column: number;
 	readonly mantissa: Float64Array;
 	readonly decimals: Uint8Array;
-	/** 0 a number, 1 no value. */
+	/** 0 a number, 1 no value, 2 none due at that moment. */
 	readonly isMissing: Uint8Array;
 	/** Unit written beside the values, where one is; null when none or several. */
 	readonly unit: TemperatureUnit | null;

@@ -7,9 +7,9 @@ import type { TemperatureUnit } from '../../units';
 /** Columns that may be the temperature to assess, and those kept beside it. */
 export interface Picked {
 	readonly candidates: readonly Column[];
-	/** The same sensor in the other unit: checked against the chosen one, then left out. */
+	/** The same sensor in the other unit: checked against the chosen one; among the others too. */
 	readonly twins: readonly Column[];
-	/** Humidity, light and the like, kept as channels by name. */
+	/** All other measurements, temperatures that are not chosen among them: kept as channels. */
 	readonly others: readonly Column[];
 }
 
@@ -57,6 +57,18 @@ function splitTwins(columns: readonly Column[]): { chosen: Column[]; twins: Colu
 	return { chosen: chosen.sort((a, b) => a.index - b.index), twins };
 }
 
+/** A measurement whose head explains nothing, beside one whose does: no clock and no counter. */
+function isOther({ name, meaning, isCounter, constant }: Column): boolean {
+	return (
+		name !== '' &&
+		!meaning.isTime &&
+		!meaning.isElapsed &&
+		!meaning.isIndex &&
+		!isCounter &&
+		constant === null
+	);
+}
+
 /** Finds the temperature columns: by head and unit first; else the number columns that nothing else explains. */
 export function pickTemperature(
 	columns: readonly Column[],
@@ -68,20 +80,22 @@ export function pickTemperature(
 	const measured = columns.filter(
 		(column) => !taken.has(column.index) && isMeasured(column) && column.epochUnit === null
 	);
-	const others = measured.filter((column) => !['temperature', null].includes(quantityOf(column)));
+	const besides = (chosen: readonly Column[]): readonly Column[] =>
+		measured.filter((column) => !chosen.includes(column) && (quantityOf(column) !== null || isOther(column)));
 	const named = measured.filter((column) => quantityOf(column) === 'temperature');
 	const answered = measured.find(
 		(column) =>
 			String(column.index) === answers.temperatureColumn || column.name === answers.temperatureColumn
 	);
-	if (answered !== undefined) return { candidates: [answered], twins: [], others };
+	if (answered !== undefined) return { candidates: [answered], twins: [], others: besides([answered]) };
 	if (named.length > 0) {
 		const { chosen, twins } = splitTwins(withoutExtremes(named));
-		return { candidates: chosen, twins, others };
+		return { candidates: chosen, twins, others: besides(chosen) };
 	}
 	// A column without any explaining word: a counter is no temperature unless it is all there is.
 	const unnamed = measured.filter((column) => quantityOf(column) === null && !column.meaning.isTime);
 	const steady = unnamed.filter((column) => !column.isCounter);
 	const left = steady.length > 0 || stated === null ? steady : unnamed;
-	return { candidates: withoutExtremes(left), twins: [], others };
+	const candidates = withoutExtremes(left);
+	return { candidates, twins: [], others: besides(candidates) };
 }

@@ -41,7 +41,7 @@ function timeEvidence(
 }
 
 /** First value of a column in °C, where its unit is known. */
-export function firstCelsiusOf(
+function firstCelsiusOf(
 	values: GatheredValues | undefined,
 	count: number,
 	unit: TemperatureUnit | null
@@ -52,6 +52,32 @@ export function firstCelsiusOf(
 			return celsiusFromScaled(values.mantissa[i] ?? 0, values.decimals[i] ?? 0, unit);
 	}
 	return null;
+}
+
+/** Last value of a column in °C, where its unit is known. */
+function lastCelsiusOf(
+	values: GatheredValues | undefined,
+	count: number,
+	unit: TemperatureUnit | null
+): number | null {
+	if (values === undefined || unit === null) return null;
+	for (let i = count - 1; i >= 0; i--) {
+		if (values.isMissing[i] === 0)
+			return celsiusFromScaled(values.mantissa[i] ?? 0, values.decimals[i] ?? 0, unit);
+	}
+	return null;
+}
+
+/** First and last value of a column, as a question shows them. */
+export function celsiusEnds(
+	values: GatheredValues | undefined,
+	count: number,
+	unit: TemperatureUnit | null
+): Pick<Choice, 'firstCelsius' | 'lastCelsius'> {
+	return {
+		firstCelsius: firstCelsiusOf(values, count, unit),
+		lastCelsius: lastCelsiusOf(values, count, unit)
+	};
 }
 
 /** The part of a time cell that can be read two ways: its first two numbers. */
@@ -66,7 +92,7 @@ export function timeQuestion(
 	timing: Timing,
 	gathered: Gathered,
 	context: ReadContext,
-	firstCelsius: number | null
+	ends: Pick<Choice, 'firstCelsius' | 'lastCelsius'>
 ): Question {
 	const [timeColumn] = columnsOf(timing);
 	const cellOf = (row: number): string =>
@@ -75,7 +101,7 @@ export function timeQuestion(
 		open.code === 'date-order' ? ambiguousPart(cellOf(row).trim()) : '';
 	const choices = open.options.map(({ answer, label, ms }) => {
 		const span = spanOf(ms);
-		return { answer, label, ...span, firstCelsius, ...timeEvidence(span, context) };
+		return { answer, label, ...span, ...ends, ...timeEvidence(span, context) };
 	});
 	return {
 		code: open.code,
@@ -93,7 +119,7 @@ const plausibleCelsius = { low: -90, high: 60 };
 function isPlausible(values: GatheredValues, count: number, unit: TemperatureUnit): boolean {
 	let [inside, all] = [0, 0];
 	for (let i = 0; i < count; i++) {
-		if (values.isMissing[i] === 1) continue;
+		if (values.isMissing[i] !== 0) continue;
 		const celsius = celsiusFromScaled(values.mantissa[i] ?? 0, values.decimals[i] ?? 0, unit);
 		all++;
 		if (celsius >= plausibleCelsius.low && celsius <= plausibleCelsius.high) inside++;
@@ -117,7 +143,7 @@ export function unitQuestion(
 		answer: { unit },
 		label: unit,
 		...spanOf(ms),
-		firstCelsius: firstCelsiusOf(values, gathered.count, unit),
+		...celsiusEnds(values, gathered.count, unit),
 		evidence: [isPlausible(values, gathered.count, unit) ? 'plausible' : 'implausible'],
 		evidenceHours: null
 	}));
@@ -145,7 +171,7 @@ export function columnQuestion(
 		answer: { temperatureColumn: String(column.index) },
 		label: column.name === '' ? String(column.index + 1) : column.name,
 		...spanOf(ms),
-		firstCelsius: firstCelsiusOf(
+		...celsiusEnds(
 			gathered.values.find((v) => v.column === column.index),
 			gathered.count,
 			unitFor(column)

@@ -4,12 +4,14 @@ import { profileColumns, unitColumnOf, type Column } from '../layout/columns';
 import { statedIn, type Stated } from '../layout/preamble';
 import type { Table } from '../layout/table';
 import { columnsOf, findTiming, type Timing } from '../layout/timing';
+import { columnsAtOnce } from './all-channels';
 import { withoutCutRow } from './cut-short';
 import { gather } from './gather';
 import type { Gathered } from './gathered';
-import { declaredBy, understand, type Readable } from './understand';
+import type { Readable } from './readable';
+import { declaredBy, understand } from './understand';
 import { pickTemperature, type Picked } from './pick-temperature';
-import { columnQuestion, firstCelsiusOf, timeQuestion, unitQuestion } from './questions';
+import { celsiusEnds, columnQuestion, timeQuestion, unitQuestion } from './questions';
 import { refused } from './refusals';
 import { timeAxisOf } from './time-axis';
 
@@ -33,7 +35,7 @@ function refusalOf(table: Table, { timing, picked, stated }: Plan, context: Read
 	const isUntimed =
 		timing.kind === 'none' &&
 		stated.intervalMinutes === null &&
-		context.answers.intervalMinutes === undefined;
+		context.answers.intervalSeconds === undefined;
 	const isStartless = stated.startText === null && context.answers.startMs === undefined;
 	return isUntimed && isStartless ? refused('no-time', table.lineOf(0), table.textOf(0).slice(0, 80)) : null;
 }
@@ -49,6 +51,14 @@ export function unitFor(
 	return context.answers.unit ?? values?.unit ?? column.unit ?? stated.unit;
 }
 
+/** One pass over the rows, with every measured column where that is not too much at once. */
+function gatherAll(table: Table, { timing, picked }: Plan): Gathered {
+	const needed = [...picked.candidates, ...picked.twins].map(({ index }) => index);
+	const others = picked.others.map(({ index }) => index).filter((index) => !needed.includes(index));
+	const room = Math.max(0, columnsAtOnce(table.rowCount) - needed.length);
+	return gather(table, timing, [...needed, ...(others.length <= room ? others : [])], needed);
+}
+
 /** Reads a table to an understanding, to one question, or to a refusal. */
 export function readTable(table: Table, encoding: string, context: ReadContext): Ingestion {
 	const columns = profileColumns(table);
@@ -58,8 +68,7 @@ export function readTable(table: Table, encoding: string, context: ReadContext):
 	const { timing, picked } = plan;
 	const refusal = refusalOf(table, plan, context);
 	if (refusal !== null) return refusal;
-	const wanted = [...picked.candidates, ...picked.twins].map(({ index }) => index);
-	const gathered = withoutCutRow(table, gather(table, timing, wanted));
+	const gathered = withoutCutRow(table, gatherAll(table, plan));
 	if (gathered.count === 0)
 		return refused(
 			columnsOf(timing).length === 0 ? 'no-readings' : 'no-time',
@@ -74,10 +83,10 @@ export function readTable(table: Table, encoding: string, context: ReadContext):
 	const valuesOf = (column: Column): Gathered['values'][number] | undefined =>
 		gathered.values.find((v) => v.column === column.index);
 	if ('options' in axis) {
-		const celsius = firstCelsiusOf(valuesOf(first), gathered.count, unitOf(first));
+		const ends = celsiusEnds(valuesOf(first), gathered.count, unitOf(first));
 		return {
 			kind: 'question',
-			question: timeQuestion(axis, table, timing, gathered, context, celsius),
+			question: timeQuestion(axis, table, timing, gathered, context, ends),
 			declared
 		};
 	}
@@ -100,6 +109,7 @@ export function readTable(table: Table, encoding: string, context: ReadContext):
 		table,
 		encoding,
 		timing,
+		stated,
 		picked,
 		gathered,
 		axis,

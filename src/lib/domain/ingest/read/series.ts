@@ -50,7 +50,7 @@ interface Kept {
 
 function firstPlausible(values: GatheredValues, ms: Float64Array, unit: TemperatureUnit): number {
 	for (let i = 0; i < ms.length; i++) {
-		if (values.isMissing[i] === 1) continue;
+		if (values.isMissing[i] !== 0) continue;
 		const raw = (values.mantissa[i] ?? 0) / (powers[values.decimals[i] ?? 0] ?? 1);
 		const celsius = celsiusFromScaled(values.mantissa[i] ?? 0, values.decimals[i] ?? 0, unit);
 		if (!isImpossible(celsius, raw, NaN) && !sentinels.has(raw)) return celsius;
@@ -63,7 +63,9 @@ export function seriesOf(
 	values: GatheredValues,
 	ms: Float64Array,
 	lines: Int32Array,
-	unit: TemperatureUnit
+	unit: TemperatureUnit,
+	/** Other quantities know no sentinel and no bound. */
+	isTemperature = true
 ): Series {
 	const count = ms.length;
 	const decimals = largestDecimals(values, count);
@@ -80,14 +82,14 @@ export function seriesOf(
 		const at = ms[i] ?? NaN;
 		const line = lines[i] ?? 0;
 		if (Number.isNaN(at)) continue;
-		if (values.isMissing[i] === 1) {
-			missing.push(line);
+		if (values.isMissing[i] !== 0) {
+			if (values.isMissing[i] === 1) missing.push(line);
 			continue;
 		}
 		const own = values.decimals[i] ?? 0;
 		const mantissa = values.mantissa[i] ?? 0;
 		const celsius = celsiusFromScaled(mantissa, own, unit);
-		if (isImpossible(celsius, mantissa / (powers[own] ?? 1), last)) {
+		if (isTemperature && isImpossible(celsius, mantissa / (powers[own] ?? 1), last)) {
 			impossible.push(line);
 			continue;
 		}

@@ -1,4 +1,4 @@
-import type { Answers, QuestionCode, ReadContext } from '../ingestion';
+import type { Answers, Decision, Oddity, QuestionCode, ReadContext } from '../ingestion';
 import type { Stated } from '../layout/preamble';
 import type { Timing } from '../layout/timing';
 import { msPerDay } from '../times/calendar';
@@ -15,6 +15,9 @@ export interface TimeAxis extends Instants {
 	readonly orderBy: OrderBy | null;
 	/** Whether local times had to be placed in a zone at all. */
 	readonly isLocal: boolean;
+	/** What else was decided or seen on the way, told as it stands. */
+	readonly decisions?: readonly Decision[];
+	readonly oddities?: readonly Oddity[];
 }
 
 /** What stays open about the times, with each answer and the times it would give. */
@@ -111,7 +114,8 @@ function runningAxis(
 	context: ReadContext
 ): TimeAxis | OpenTimes {
 	const { answers } = context;
-	const intervalMinutes = answers.intervalMinutes ?? stated.intervalMinutes;
+	const intervalSeconds =
+		answers.intervalSeconds ?? (stated.intervalMinutes === null ? null : stated.intervalMinutes * 60);
 	const stamped = openDaysIn(stated.startText);
 	const decided: DecidedOrder = decideOrder(stamped, stated, context);
 	const zone =
@@ -120,7 +124,7 @@ function runningAxis(
 			: ({ zone: 'UTC', by: 'answer' } satisfies UsedZone);
 	const start = (order: DateOrder | null): number | null =>
 		answers.startMs ?? momentMs(stated.startText, order, zone.zone);
-	const intervalMs = (intervalMinutes ?? 0) * 60_000;
+	const intervalMs = Math.round((intervalSeconds ?? 0) * 1000);
 	const offset = (ms: number): number => offsetAtOf(zone.zone)(ms) * 60_000;
 	const rowsFrom = (ms: number, step: number): Float64Array =>
 		running(gathered, timing, ms, step, offset(ms));
@@ -129,9 +133,9 @@ function runningAxis(
 	}
 	const startMs = start(decided.order);
 	if (startMs === null) return openStart(timing, gathered, context, intervalMs);
-	if (timing.kind === 'none' && intervalMinutes === null) {
+	if (timing.kind === 'none' && intervalSeconds === null) {
 		const options = usualIntervals.map((minutes) => ({
-			answer: { intervalMinutes: minutes },
+			answer: { intervalSeconds: minutes * 60 },
 			label: String(minutes),
 			ms: rowsFrom(startMs, minutes * 60_000)
 		}));

@@ -1,36 +1,18 @@
-import type { TemperatureUnit } from '../../units';
-import { celsiusFromScaled } from '../../units';
-import type { Channel, Declared, Ingestion, Layout, Oddity, ReadContext } from '../ingestion';
-import { quantityOf, type Column } from '../layout/columns';
+import type { Declared, Ingestion, Layout, Oddity, ReadContext } from '../ingestion';
 import { layoutFingerprint } from '../layout/fingerprint';
 import type { Stated } from '../layout/preamble';
-import type { Table } from '../layout/table';
-import { columnsOf, type Timing } from '../layout/timing';
-import { channelOf, namedChannel } from './channels';
+import { columnsOf } from '../layout/timing';
+import { channelsOf } from './all-channels';
+import { decisionsOf } from './decisions';
 import { exampleRows } from './example-rows';
-import type { Gathered, GatheredValues } from './gathered';
 import { momentMs } from './instants';
 import { intervalsOf } from './intervals';
 import { oddityOf, rowOddities, seriesOddities } from './oddities';
-import type { Picked } from './pick-temperature';
+import type { Readable } from './readable';
 import { refused } from './refusals';
 import { seriesOf, type Series } from './series';
 import type { TimeAxis } from './time-axis';
-
-/** Everything that is settled about a table once no question is left. */
-export interface Readable {
-	readonly table: Table;
-	readonly encoding: string;
-	readonly timing: Timing;
-	readonly picked: Picked;
-	readonly gathered: Gathered;
-	readonly axis: TimeAxis;
-	readonly declared: Declared;
-	readonly column: Column;
-	readonly values: GatheredValues;
-	readonly unit: TemperatureUnit;
-	readonly unitOf: (column: Column) => TemperatureUnit | null;
-}
+import { twinOddities } from './twins';
 
 /** What the preamble declares, in UTC where the times of the file are understood. */
 export function declaredBy(stated: Stated, axis: TimeAxis | null, context: ReadContext): Declared {
@@ -57,25 +39,6 @@ function layoutOf({ table, encoding, axis, values, gathered }: Readable): Layout
 		zoneBy: axis.zone.by,
 		fingerprint: layoutFingerprint(table.kind, table.delimiter, table.header)
 	};
-}
-
-/** Rows where the column in the other unit differs from the chosen one by more than both were rounded. */
-function twinOddities({ picked, gathered, values, unit, unitOf }: Readable): Oddity[] {
-	return picked.twins.flatMap((twin) => {
-		const other = gathered.values.find((v) => v.column === twin.index);
-		const otherUnit = unitOf(twin);
-		if (other === undefined || otherUnit === null) return [];
-		const apart: number[] = [];
-		for (let i = 0; i < gathered.count; i++) {
-			if (values.isMissing[i] === 1 || other.isMissing[i] === 1) continue;
-			const mine = celsiusFromScaled(values.mantissa[i] ?? 0, values.decimals[i] ?? 0, unit);
-			const theirs = celsiusFromScaled(other.mantissa[i] ?? 0, other.decimals[i] ?? 0, otherUnit);
-			const rounding = 0.5 / 10 ** (values.decimals[i] ?? 0) + 0.5 / 10 ** (other.decimals[i] ?? 0);
-			if (Math.abs(mine - theirs) > rounding + 1e-9) apart.push(gathered.lines[i] ?? 0);
-		}
-		const used = oddityOf('other-unit-column', [gathered.lines[0] ?? 0], twin.name);
-		return [used, oddityOf('twin-disagrees', apart, twin.name)].filter((oddity) => oddity !== null);
-	});
 }
 
 function axisOddities({ axis, gathered, declared }: Readable, series: Series): Oddity[] {
@@ -126,13 +89,9 @@ function merged(oddities: readonly Oddity[]): Oddity[] {
 	return [...byCode.values()];
 }
 
-function nameOf(column: Column): string {
-	return column.name === '' ? String(column.index + 1) : column.name;
-}
-
 /** From settled columns, times and unit to the understanding that is shown and kept. */
 export function understand(readable: Readable, context: ReadContext): Ingestion {
-	const { table, timing, picked, gathered, axis, column, values, unit, declared } = readable;
+	const { table, timing, gathered, axis, column, values, unit, declared } = readable;
 	const ms = axis.ms.subarray(0, gathered.count);
 	const series = seriesOf(values, ms, gathered.lines, unit);
 	const count = series.times.length;
@@ -144,18 +103,17 @@ export function understand(readable: Readable, context: ReadContext): Ingestion 
 			null
 		);
 	const intervals = intervalsOf(series.times);
-	const others: Channel[] = picked.others.map((other) =>
-		namedChannel(nameOf(other), quantityOf(other) ?? 'other')
-	);
+	const layout = layoutOf(readable);
 	const [timeColumn] = columnsOf(timing);
 	const subjectOf = (row: number): string =>
 		timeColumn === undefined ? '' : (table.cells(row)[timeColumn] ?? '').trim();
 	return {
 		kind: 'ok',
 		understanding: {
-			layout: layoutOf(readable),
+			layout,
+			decisions: decisionsOf(readable, layout.decimalComma, context),
 			declared,
-			channels: [channelOf(nameOf(column), series), ...others],
+			channels: channelsOf(readable, series),
 			temperature: 0,
 			readings: count,
 			firstMs: series.times[0] ?? 0,
@@ -165,7 +123,9 @@ export function understand(readable: Readable, context: ReadContext): Ingestion 
 				...rowOddities(gathered),
 				...seriesOddities(series, intervals, context),
 				...twinOddities(readable),
-				...axisOddities(readable, series)
+				...axisOddities(readable, series),
+				...(table.oddities ?? []),
+				...(axis.oddities ?? [])
 			]),
 			rows: exampleRows(table, gathered.rows, gathered.count, subjectOf)
 		}

@@ -11,6 +11,7 @@ const choice = (overrides: Partial<Choice> = {}): Choice => ({
 	firstMs: at('2026-04-03T00:40:00Z'),
 	lastMs: at('2026-04-03T06:10:00Z'),
 	firstCelsius: 1.4,
+	lastCelsius: 1.6,
 	evidence: ['fits-journey'],
 	evidenceHours: null,
 	...overrides

@@ -35,7 +35,7 @@ const orders: Readonly<Record<string, string>> = { dmy: 'Day first', mdy: 'Month
 
 /** What would be remembered; null for answers that belong to one file only. */
 export function rememberLabel(question: Question, choice: Choice | undefined): string | null {
-	if (question.code === 'interval' || question.code === 'start') return null;
+	if (['interval', 'start', 'part'].includes(question.code)) return null;
 	const what = choice?.answer.dateOrder
 		? orders[choice.answer.dateOrder]
 		: choice

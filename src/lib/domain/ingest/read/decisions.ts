@@ -1,0 +1,82 @@
+import type { Decision, ReadContext } from '../ingestion';
+import { nameOf } from './all-channels';
+import type { Readable } from './readable';
+
+const utf = /^utf-?(8|16)/i;
+
+function writing({ table, encoding }: Readable, decimalComma: boolean): Decision[] {
+	const made: Decision[] = [
+		{
+			field: 'layout',
+			value: table.kind,
+			because: table.kind === 'senml' || table.kind === 'epcis' ? 'standard' : 'found',
+			detail: null
+		},
+		{ field: 'encoding', value: encoding, because: utf.test(encoding) ? 'signature' : 'found', detail: null }
+	];
+	if (table.delimiter !== null)
+		made.push({ field: 'delimiter', value: table.delimiter, because: 'found', detail: null });
+	if (decimalComma) made.push({ field: 'decimal', value: ',', because: 'found', detail: null });
+	return made;
+}
+
+function zone({ axis, timing, gathered }: Readable): Decision {
+	const { zone: value, by } = axis.zone;
+	const isOffset = gathered.count > 0 && gathered.times.hasDate[0] === 1 && /^[+-]/.test(value);
+	const because = by !== 'file' ? by : timing.kind === 'epoch' ? 'epoch' : isOffset ? 'offset' : 'zone-named';
+	return { field: 'zone', value, because, detail: null };
+}
+
+function unit({ unit: value, column, values, stated, table }: Readable, isAnswered: boolean): Decision {
+	const because = isAnswered
+		? 'answer'
+		: table.kind === 'senml' || table.kind === 'epcis'
+			? 'standard'
+			: values.unit === value
+				? 'beside-values'
+				: column.unit === value
+					? 'head'
+					: stated.unit === value
+						? 'preamble'
+						: 'found';
+	return { field: 'unit', value, because, detail: null };
+}
+
+function column({ column: chosen, picked }: Readable, isAnswered: boolean): Decision {
+	const because = isAnswered
+		? 'answer'
+		: chosen.meaning.statistic === 'mean'
+			? 'mean'
+			: picked.twins.length > 0
+				? 'twin'
+				: 'only-one';
+	return { field: 'column', value: nameOf(chosen), because, detail: picked.twins[0]?.name ?? null };
+}
+
+function running({ timing, stated, declared }: Readable, answers: Answered): Decision[] {
+	if (timing.kind !== 'elapsed' && timing.kind !== 'none' && timing.kind !== 'time-of-day') return [];
+	const made: Decision[] = [];
+	if (declared.startMs !== null) {
+		const because = answers.startMs === undefined ? 'preamble' : 'answer';
+		made.push({ field: 'start', value: new Date(declared.startMs).toISOString(), because, detail: null });
+	}
+	const seconds = answers.intervalSeconds ?? (stated.intervalMinutes ?? 0) * 60;
+	if (timing.kind === 'none' && seconds > 0) {
+		const because = answers.intervalSeconds === undefined ? 'preamble' : 'answer';
+		made.push({ field: 'intervalSeconds', value: String(seconds), because, detail: null });
+	}
+	return made;
+}
+
+type Answered = ReadContext['answers'];
+
+/** Everything that was decided about a file, with what decided it. */
+export function decisionsOf(readable: Readable, decimalComma: boolean, { answers }: ReadContext): Decision[] {
+	const { axis, table } = readable;
+	const made = [...writing(readable, decimalComma), ...(table.decisions ?? [])];
+	if (axis.order !== null && axis.orderBy !== null)
+		made.push({ field: 'dateOrder', value: axis.order, because: axis.orderBy, detail: null });
+	made.push(zone(readable), column(readable, answers.temperatureColumn !== undefined));
+	made.push(unit(readable, answers.unit !== undefined), ...running(readable, answers));
+	return [...made, ...(axis.decisions ?? [])];
+}
