@@ -1,5 +1,7 @@
-import { isGap, usualIntervalMs } from '../trace/interval';
-import { celsiusOf, type Trace } from '../trace/trace';
+import { longestWatchedMs, usualIntervalMs } from '../trace/interval';
+import { levelsOf } from '../trace/levels';
+import type { Trace } from '../trace/trace';
+import { celsiusFromScaled } from '../units';
 
 /** How the time between a reading and the next counts. */
 export const observed = 0;
@@ -19,7 +21,7 @@ export interface Course {
 	readonly times: Float64Array;
 	readonly celsius: Float64Array;
 	readonly steps: Uint8Array;
-	/** Each distinct temperature once, and which of them each reading is: rates are worked out per level. */
+	/** Each distinct temperature once, coldest first, and which each reading is: rates are worked out per level. */
 	readonly levels: Float64Array;
 	readonly levelOf: Uint32Array;
 	/** Of the whole trace, so that trimming it does not redefine what a gap is. */
@@ -32,10 +34,11 @@ export interface Course {
  */
 export function courseOf(trace: Trace, window: Stretch | null, trims: readonly Stretch[]): Course {
 	const usualMs = usualIntervalMs(trace.times);
-	const counts = countedIndexes(trace.times, window, trims);
-	const times = picked(trace.times, counts);
-	const celsius = picked(celsiusOf(trace), counts);
-	const { levels, levelOf } = levelsOf(trace, celsius, counts);
+	const { times, scaled } = counted(trace, window, trims);
+	const { values, levelOf } = levelsOf(scaled);
+	const levels = Float64Array.from(values, (value) => celsiusFromScaled(value, trace.decimals, trace.unit));
+	const celsius = new Float64Array(levelOf.length);
+	for (let i = 0; i < celsius.length; i++) celsius[i] = levels[levelOf[i] as number] as number;
 	return {
 		times,
 		celsius,
@@ -44,6 +47,34 @@ export function courseOf(trace: Trace, window: Stretch | null, trims: readonly S
 		levelOf,
 		usualIntervalMs: usualMs
 	};
+}
+
+/** The readings that count. Without trims they are one run, of which nothing need be copied. */
+function counted(trace: Trace, window: Stretch | null, trims: readonly Stretch[]) {
+	const { times, scaled } = trace;
+	if (trims.length === 0) {
+		const from = window === null ? 0 : firstNotBefore(times, window.fromMs);
+		let to = window === null ? times.length : firstNotBefore(times, window.toMs);
+		if (window !== null && to < times.length && times[to] === window.toMs) to++;
+		return { times: times.subarray(from, to), scaled: scaled.subarray(from, to) };
+	}
+	const indexes = countedIndexes(times, window, trims);
+	return {
+		times: Float64Array.from(indexes, (at) => times[at] as number),
+		scaled: Int32Array.from(indexes, (at) => scaled[at] as number)
+	};
+}
+
+/** Index of the first time at or after a moment; the length where there is none. */
+function firstNotBefore(times: Float64Array, ms: number): number {
+	let low = 0;
+	let high = times.length;
+	while (low < high) {
+		const middle = (low + high) >> 1;
+		if ((times[middle] as number) < ms) low = middle + 1;
+		else high = middle;
+	}
+	return low;
 }
 
 function countedIndexes(times: Float64Array, window: Stretch | null, trims: readonly Stretch[]): Uint32Array {
@@ -60,36 +91,17 @@ function countedIndexes(times: Float64Array, window: Stretch | null, trims: read
 
 function stepsOf(times: Float64Array, trims: readonly Stretch[], usualMs: number): Uint8Array {
 	const steps = new Uint8Array(Math.max(0, times.length - 1));
+	const longestMs = longestWatchedMs(usualMs);
+	for (let i = 0; i < steps.length; i++) {
+		if ((times[i + 1] as number) - (times[i] as number) > longestMs) steps[i] = unobserved;
+	}
+	if (trims.length === 0) return steps;
 	for (let i = 0; i < steps.length; i++) {
 		const fromMs = times[i] as number;
 		const toMs = times[i + 1] as number;
 		if (trims.some((trim) => trim.fromMs < toMs && trim.toMs > fromMs && trim.toMs > trim.fromMs)) {
 			steps[i] = trimmed;
-		} else {
-			steps[i] = isGap(toMs - fromMs, usualMs) ? unobserved : observed;
 		}
 	}
 	return steps;
-}
-
-function levelsOf(trace: Trace, celsius: Float64Array, counts: Uint32Array) {
-	const known = new Map<number, number>();
-	const levels: number[] = [];
-	const levelOf = new Uint32Array(counts.length);
-	for (let i = 0; i < counts.length; i++) {
-		const scaled = trace.scaled[counts[i] as number] as number;
-		let level = known.get(scaled);
-		if (level === undefined) {
-			level = levels.push(celsius[i] as number) - 1;
-			known.set(scaled, level);
-		}
-		levelOf[i] = level;
-	}
-	return { levels: Float64Array.from(levels), levelOf };
-}
-
-function picked(values: Float64Array, indexes: Uint32Array): Float64Array {
-	const kept = new Float64Array(indexes.length);
-	for (let i = 0; i < kept.length; i++) kept[i] = values[indexes[i] as number] as number;
-	return kept;
 }

@@ -16,8 +16,8 @@ describe('a course', () => {
 		expect([...course.times]).toEqual([...trace.times]);
 		expect([...course.celsius]).toEqual([20, 4, 4.5, 5, 4, 21]);
 		expect([...course.steps]).toEqual(new Array(5).fill(observed));
-		expect([...course.levels]).toEqual([20, 4, 4.5, 5, 21]);
-		expect([...course.levelOf]).toEqual([0, 1, 2, 3, 1, 4]);
+		expect([...course.levels]).toEqual([4, 4.5, 5, 20, 21]);
+		expect([...course.levelOf]).toEqual([3, 0, 1, 2, 0, 4]);
 	});
 
 	it('has only readings within custody, both ends included', () => {
