@@ -7,5 +7,6 @@ export const load: PageServerLoad = ({ locals }) => {
 	const { actor } = contextOf(locals);
 	if (actor.roles.includes('supplier'))
 		redirect(303, actor.shipmentId ? `/loads/${actor.shipmentId}` : '/loads');
-	redirect(303, actor.roles.includes('claims') && actor.roles.length === 1 ? '/claims' : '/arrivals');
+	const [role] = actor.roles.length === 1 ? actor.roles : [];
+	redirect(303, role === 'claims' ? '/claims' : role === 'qa' ? '/shipments/waiting' : '/arrivals');
 };

@@ -124,7 +124,7 @@ test.describe('without JavaScript', () => {
 		await expect(page.getByLabel('E-mail', { exact: true })).toHaveValue('qa@wharfinger.example');
 		await page.getByLabel('Password').fill(demoPassword);
 		await page.getByRole('button', { name: 'Sign in', exact: true }).click();
-		await expect(page).toHaveURL(/arrivals/);
+		await expect(page).toHaveURL(/shipments\/waiting/);
 		await page.goto('/settings');
 		await page.getByRole('radio', { name: 'Pell Staithe' }).check();
 		await page.getByRole('button', { name: 'Work there' }).click();

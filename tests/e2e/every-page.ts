@@ -43,6 +43,7 @@ export const places: readonly Place[] = [
 	{ name: 'arrivals', as: 'dock', path: '/arrivals' },
 	{ name: 'arrivals to log', as: 'dock', path: '/arrivals/log' },
 	{ name: 'dockets', as: 'qa', path: '/shipments' },
+	{ name: 'dockets that wait for QA', as: 'qa', path: '/shipments/waiting' },
 	{ name: 'a new docket', as: 'dock', path: '/shipments/new' },
 	{ name: 'dockets from a file', as: 'dock', path: '/shipments/import' },
 	{ name: 'a docket at QA', as: 'qa', path: docketOf('', 'atQa') },

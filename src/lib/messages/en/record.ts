@@ -29,6 +29,8 @@ const sentences: Record<string, (data: Record<string, unknown>) => string> = {
 	'assessment.made': () => 'Life recomputed',
 	'hold.put': () => 'Put on hold',
 	'hold.lifted': () => 'Hold lifted',
+	'docket.taken': ({ from }) => (from === null ? 'Review taken on' : `Review taken over from ${from}`),
+	'docket.handed-back': () => 'Review handed back',
 	'disposition.signed': ({ version, verdict }) =>
 		`Version ${version} signed, ${outcomeWords[String(verdict)] ?? verdict}`,
 	'disposition.refused': () => 'Signature refused',

@@ -83,6 +83,8 @@ export interface EventData {
 	};
 	'hold.put': { reason: string };
 	'hold.lifted': { holdId: string };
+	'docket.taken': { from: string | null };
+	'docket.handed-back': Record<string, never>;
 	'disposition.signed': {
 		dispositionId: string;
 		version: number;

@@ -20,6 +20,7 @@ export const load: PageServerLoad = async ({ locals, cookies, url }) => {
 		items,
 		total,
 		choices: await getListChoices(ctx),
-		mayCreate: may(ctx.actor, 'shipment.create')
+		mayCreate: may(ctx.actor, 'shipment.create'),
+		mayDecide: may(ctx.actor, 'disposition.sign')
 	};
 };

@@ -32,6 +32,9 @@ export class Shipment extends Model<InferAttributes<Shipment>, InferCreationAttr
 	declare decidedAt: Date | null;
 	declare verdict: 'accepted' | 'conditions' | 'part' | 'rejected' | null;
 	declare createdBy: string | null;
+	/** Who of QA has taken its review on. */
+	declare takenBy: CreationOptional<string | null>;
+	declare takenAt: CreationOptional<Date | null>;
 	declare createdAt: Date;
 	declare cancelledAt: Date | null;
 	declare version: CreationOptional<number>;
@@ -63,6 +66,8 @@ export function defineShipment(sequelize: Sequelize): void {
 			decidedAt: { type: DataTypes.DATE(3), allowNull: true },
 			verdict: { type: DataTypes.ENUM('accepted', 'conditions', 'part', 'rejected'), allowNull: true },
 			createdBy: { type: DataTypes.UUID, allowNull: true },
+			takenBy: { type: DataTypes.UUID, allowNull: true },
+			takenAt: { type: DataTypes.DATE(3), allowNull: true },
 			createdAt: { type: DataTypes.DATE(3), allowNull: false },
 			cancelledAt: { type: DataTypes.DATE(3), allowNull: true },
 			version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 }

@@ -5,6 +5,7 @@ import { getDocket } from '$lib/server/dockets/get-docket';
 import { liftHold } from '$lib/server/holds/lift-hold';
 import { putHold } from '$lib/server/holds/put-hold';
 import { addNote } from '$lib/server/notes/add-note';
+import { findNextWaiting } from '$lib/server/queue/list-queue';
 import { may } from '$lib/server/policies';
 import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
 import { InvalidFields } from '$lib/server/shipments/invalid-fields';
@@ -16,9 +17,11 @@ export const load: PageServerLoad = async ({ locals, params, depends }) => {
 	depends('app:docket');
 	const ctx = contextOf(locals);
 	const docket = await orError(getDocket(ctx, params.docket));
+	const isDecidedHere = docket.stage === 'done' && may(ctx.actor, 'disposition.sign');
 
 	return {
 		docket,
+		nextWaiting: isDecidedHere ? await orError(findNextWaiting(ctx, docket.site.id, docket.number)) : null,
 		may: {
 			sign: may(ctx.actor, 'disposition.sign'),
 			log: may(ctx.actor, 'arrival.log'),

@@ -1,8 +1,10 @@
 import { boardQuery } from '$lib/schemas/board';
 import { queryOf } from '$lib/schemas/list';
+import { queueQuery } from '$lib/schemas/queue';
 import { shipmentInput } from '$lib/schemas/shipment-form';
 import { shipmentListQuery } from '$lib/schemas/shipment-list';
 import { listBoard } from '$lib/server/arrivals/list-board';
+import { listQueue } from '$lib/server/queue/list-queue';
 import { asJson, contextOf, parseInput, refusalAsJson } from '$lib/server/request';
 import { createShipment } from '$lib/server/shipments/create-shipment';
 import { listShipments } from '$lib/server/shipments/list-shipments';
@@ -11,20 +13,25 @@ import { getCurrentSite, siteCookie } from '$lib/server/sites/current-site';
 import { sha256Hex } from '$lib/server/storage/sha256';
 import type { RequestHandler } from './$types';
 
-/** The dockets of a site, or with `view=board` its board of a day; an answer that has not changed is told by its tag. */
+/**
+ * The dockets of a site, with `view=board` its board of a day, with `view=waiting` what waits for QA; an answer that
+ * has not changed is told by its tag.
+ */
 export const GET: RequestHandler = async ({ locals, url, cookies, request }) => {
 	const ctx = contextOf(locals);
 
 	const asked = queryOf(url.searchParams);
-	const isBoard = asked.view === 'board';
 
 	let body: string;
 	try {
 		const siteId = asked.site ?? (await getCurrentSite(ctx, cookies.get(siteCookie))).id;
-		const answer = isBoard
-			? await listBoard(ctx, siteId, boardQuery.parse(asked))
-			: await listShipments(ctx, siteId, shipmentListQuery.parse(asked));
-		body = JSON.stringify(answer);
+		const list =
+			asked.view === 'board'
+				? listBoard(ctx, siteId, boardQuery.parse(asked))
+				: asked.view === 'waiting'
+					? listQueue(ctx, siteId, queueQuery.parse(asked))
+					: listShipments(ctx, siteId, shipmentListQuery.parse(asked));
+		body = JSON.stringify(await list);
 	} catch (e) {
 		return refusalAsJson(e);
 	}
