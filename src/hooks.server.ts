@@ -7,6 +7,7 @@ import { env } from '$lib/server/env';
 import { attachContext } from '$lib/server/hooks/attach-context';
 import { guardOrigin } from '$lib/server/hooks/guard-origin';
 import { guardRoutes } from '$lib/server/hooks/guard-routes';
+import { keepRefusals } from '$lib/server/hooks/keep-refusals';
 import { isDatabaseAway } from '$lib/server/hooks/database-away';
 import { openScope } from '$lib/server/hooks/open-scope';
 import { setHeaders } from '$lib/server/hooks/set-headers';
@@ -23,6 +24,7 @@ export const handle: Handle = sequence(
 	guardOrigin,
 	authHandle,
 	attachContext,
+	keepRefusals,
 	guardRoutes,
 	wearTheme
 );

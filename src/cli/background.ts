@@ -2,6 +2,7 @@
 import { closeDatabase, openDatabase } from '../lib/server/db/sequelize';
 import { env, readEnv } from '../lib/server/env';
 import { registerAllJobs } from '../lib/server/jobs/register-all';
+import { startSchedule } from '../lib/server/jobs/schedule';
 import { startWorker } from '../lib/server/jobs/work';
 import { startMailbox } from '../lib/server/mail/local-mailbox';
 
@@ -17,9 +18,11 @@ export async function startBackground(
 	const mailbox = settings.isLocalMailbox
 		? await startMailbox(settings.mailFolder, Number(new URL(settings.smtpUrl).port))
 		: null;
+	const schedule = startSchedule();
 	const worker = startWorker(`${process.pid}`);
 	return {
 		async stop() {
+			schedule.stop();
 			await worker.stop();
 			await mailbox?.stop();
 			await closeDatabase();

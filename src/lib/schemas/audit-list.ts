@@ -29,7 +29,11 @@ export const auditSubjects = [
 	'claim',
 	'evidence',
 	'certificate',
-	'settings'
+	'settings',
+	'act',
+	'retention',
+	'copy',
+	'record'
 ] as const;
 export type AuditSubject = (typeof auditSubjects)[number];
 

@@ -16,6 +16,10 @@ export interface Actor {
 	temperatureUnit: 'celsius' | 'fahrenheit' | null;
 }
 
+/** How a caller came in: by password, by a mailed link, by an API token, or as the program itself. */
+export const sessionKinds = ['password', 'link', 'token', 'program'] as const;
+export type SessionKind = (typeof sessionKinds)[number];
+
 /** What every use case is told about its caller. */
 export interface Context {
 	actor: Actor;
@@ -23,6 +27,8 @@ export interface Context {
 	now: Date;
 	requestId: string;
 	address: string;
+	/** Absent while somebody is only just showing who they are. */
+	sessionKind?: SessionKind;
 }
 
 const systemActor: Actor = {
@@ -40,7 +46,7 @@ const systemActor: Actor = {
 
 /** The context of work nobody asked for in person: jobs, migrations, the seed. */
 export function systemContext(now: Date, requestId = 'system'): Context {
-	return { actor: systemActor, now, requestId, address: 'local' };
+	return { actor: systemActor, now, requestId, address: 'local', sessionKind: 'program' };
 }
 
 export function isSystem(actor: Actor): boolean {

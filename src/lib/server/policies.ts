@@ -1,5 +1,6 @@
 import type { Actor, Context, Role } from './context';
 import { Refusal } from './refusals';
+import { noteRefusedAct } from './request-scope';
 
 const staff = ['dock', 'qa', 'claims', 'admin'] as const;
 
@@ -61,7 +62,9 @@ export function isWithinSight(actor: Actor, shipment: ShipmentScope): boolean {
 
 /** Refuses an act the actor's roles do not allow. */
 export function authorize({ actor }: Context, act: Act): void {
-	if (!may(actor, act)) throw new Refusal('not-allowed');
+	if (may(actor, act)) return;
+	noteRefusedAct({ act, why: 'not-allowed', shipmentId: null });
+	throw new Refusal('not-allowed');
 }
 
 /** Refuses likewise, and a docket out of sight as if it did not exist: a guess learns nothing. */
@@ -70,6 +73,11 @@ export function authorizeShipment(
 	act: Act,
 	shipment: ShipmentScope | null
 ): asserts shipment is ShipmentScope {
-	if (!shipment || !isWithinSight(ctx.actor, shipment)) throw new Refusal('not-found');
-	authorize(ctx, act);
+	if (!shipment || !isWithinSight(ctx.actor, shipment)) {
+		if (shipment) noteRefusedAct({ act, why: 'out-of-sight', shipmentId: shipment.id });
+		throw new Refusal('not-found');
+	}
+	if (may(ctx.actor, act)) return;
+	noteRefusedAct({ act, why: 'not-allowed', shipmentId: shipment.id });
+	throw new Refusal('not-allowed');
 }

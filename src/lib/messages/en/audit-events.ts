@@ -28,7 +28,11 @@ export const auditSubjectWords: Record<string, string> = {
 	claim: 'Claims',
 	evidence: 'Evidence bundles',
 	certificate: 'Certificates',
-	settings: 'Settings'
+	settings: 'Settings',
+	act: 'Refused acts',
+	retention: 'Retention',
+	copy: 'Copies',
+	record: 'Exports of the record'
 };
 
 const sentences: Record<string, string> = {
@@ -49,7 +53,9 @@ const sentences: Record<string, string> = {
 	'spec.signed': 'Spec signed',
 	'logger.saved': 'Logger saved',
 	'certificate.made': 'Certificate made',
-	'settings.changed': 'Settings changed'
+	'settings.changed': 'Settings changed',
+	'act.refused': 'Act refused',
+	'record.exported': 'Record exported'
 };
 
 /** What happened, in a few words; docket events say it as the docket's own record does. */

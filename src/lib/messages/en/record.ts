@@ -45,7 +45,12 @@ const sentences: Record<string, (data: Record<string, unknown>) => string> = {
 	'answer.given': ({ kind }) => (kind === 'dispute' ? 'Supplier disputes' : 'Supplier acknowledges'),
 	'claim.opened': ({ number }) => `Claim ${number} opened`,
 	'claim.changed': () => 'Claim changed',
-	'evidence.taken': () => 'Evidence bundle taken'
+	'evidence.taken': () => 'Evidence bundle taken',
+	'copy.taken': () => 'Copy taken for an inspector',
+	'retention.held': () => 'Kept beyond its period, by hand',
+	'retention.released': () => 'No longer kept beyond its period',
+	'retention.blanked': () => 'Personal contents taken out by retention',
+	'retention.deleted': ({ what }) => `Taken out by retention, ${what}`
 };
 
 /** One line for a record: what happened. A payload blanked by retention leaves the kind of event. */

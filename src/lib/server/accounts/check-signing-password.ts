@@ -6,15 +6,28 @@ import { isPassword } from './password';
 
 const wrongPasswordsAllowed = 5;
 
-async function countWrong(ctx: Context, user: User): Promise<void> {
+/** Counts under a lock: two wrong passwords at the same moment are two. */
+async function countWrong(ctx: Context, userId: string): Promise<void> {
 	await inTransaction(ctx, async ({ transaction, record }) => {
+		const lock = transaction.LOCK.UPDATE;
+		const user = await User.findByPk(userId, { transaction, lock, rejectOnEmpty: true });
 		const failedPasswords = user.failedPasswords + 1;
 		const isLocked = failedPasswords >= wrongPasswordsAllowed;
-		await user.update({ failedPasswords, lockedAt: isLocked ? ctx.now : null }, { transaction });
+		await user.update(
+			{ failedPasswords, lockedAt: isLocked ? (user.lockedAt ?? ctx.now) : user.lockedAt },
+			{ transaction }
+		);
 		const chain = { scope: 'account', id: user.id } as const;
 		record('disposition.refused', chain, { why: 'wrong-password' });
-		if (isLocked) record('account.locked', chain, { userId: user.id, failedPasswords });
+		if (failedPasswords === wrongPasswordsAllowed)
+			record('account.locked', chain, { userId: user.id, failedPasswords });
 	});
+}
+
+async function recordLocked(ctx: Context, userId: string): Promise<void> {
+	await inTransaction(ctx, async ({ record }) =>
+		record('disposition.refused', { scope: 'account', id: userId }, { why: 'locked' })
+	);
 }
 
 /**
@@ -24,9 +37,12 @@ async function countWrong(ctx: Context, user: User): Promise<void> {
 export async function checkSigningPassword(ctx: Context, password: string): Promise<User> {
 	const user = await User.findByPk(ctx.actor.id);
 	if (!user || ctx.actor.kind !== 'user') throw new Refusal('not-allowed');
-	if (user.lockedAt) throw new Refusal('locked');
+	if (user.lockedAt) {
+		await recordLocked(ctx, user.id);
+		throw new Refusal('locked');
+	}
 	if (!(await isPassword(password, user.passwordHash))) {
-		await countWrong(ctx, user);
+		await countWrong(ctx, user.id);
 		throw new Refusal('wrong-password');
 	}
 	if (user.failedPasswords > 0) await user.update({ failedPasswords: 0 });

@@ -6,12 +6,13 @@ export interface Limit {
 	windowMs: number;
 }
 
-/** Counts an attempt; false once there were too many in the window. Kept in a table: the app holds no state. */
-export async function isWithinLimit(
-	name: string,
-	{ attempts, windowMs }: Limit,
-	now: Date
-): Promise<boolean> {
+/** Counts an attempt; false once there were too many in the window. */
+export async function isWithinLimit(name: string, limit: Limit, now: Date): Promise<boolean> {
+	return (await countAttempt(name, limit, now)) <= limit.attempts;
+}
+
+/** Counts an attempt. Kept in a table: the app holds no state. @returns how many there were in the window */
+export async function countAttempt(name: string, { windowMs }: Limit, now: Date): Promise<number> {
 	const expired = new Date(now.getTime() - windowMs);
 	await database().query(
 		`INSERT INTO rate_limits (name, window_started_at, attempts) VALUES (:name, :now, 1)
@@ -26,7 +27,7 @@ export async function isWithinLimit(
 			type: QueryTypes.SELECT
 		}
 	);
-	return (row?.attempts ?? 0) <= attempts;
+	return row?.attempts ?? 0;
 }
 
 export async function clearLimit(name: string): Promise<void> {

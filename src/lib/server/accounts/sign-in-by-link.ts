@@ -51,7 +51,9 @@ export async function signInByLink(secret: string, scope: RequestScope): Promise
 	const token = await useToken(secret, ['sign-in'], scope.now);
 	if (!token) {
 		const contactId = (await findToken(secret))?.contactId;
-		return contactId ? openLinkSession(secret, personContext(scope, 'link', contactId)) : null;
+		return contactId
+			? openLinkSession(secret, { ...personContext(scope, 'link', contactId), sessionKind: 'link' })
+			: null;
 	}
 	const user = token.userId ? await User.findByPk(token.userId) : null;
 	return user && !user.switchedOffAt ? openSession(user, scope, 'link') : null;

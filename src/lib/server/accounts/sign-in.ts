@@ -5,7 +5,7 @@ import { Refusal } from '../refusals';
 import type { RequestScope } from '../request-scope';
 import { isPassword } from './password';
 import { personContext } from './person-context';
-import { clearLimit, isWithinLimit } from './rate-limit';
+import { clearLimit, countAttempt } from './rate-limit';
 
 const quarterHourMs = 15 * 60_000;
 const perAddress = { attempts: 60, windowMs: quarterHourMs };
@@ -14,12 +14,14 @@ const perAccount = { attempts: 10, windowMs: quarterHourMs };
 /** What a session remembers of who opened it; the rest is looked up anew at every request. */
 export interface Claims {
 	kind: 'user' | 'link';
+	/** How a user came in; absent in sessions from before it was kept, which a password opened. */
+	by?: 'password' | 'link';
 	subjectId: string;
 	tokenVersion: number;
 }
 
 function contextOfScope(scope: RequestScope): Context {
-	return { ...systemContext(scope.now, scope.requestId), address: scope.address };
+	return { ...systemContext(scope.now, scope.requestId), address: scope.address, sessionKind: undefined };
 }
 
 async function recordRefused(
@@ -36,6 +38,23 @@ async function recordRefused(
 	);
 }
 
+/** Past a limit nothing is checked; the trail is told once a window, or whoever floods us would flood it too. */
+async function refuseTooMany(address: string, accountLimit: string, scope: RequestScope): Promise<void> {
+	const limits = [
+		[`sign-in from ${scope.address}`, perAddress],
+		[accountLimit, perAccount]
+	] as const;
+	for (const [name, limit] of limits) {
+		const attempts = await countAttempt(name, limit, scope.now);
+		if (attempts <= limit.attempts) continue;
+		if (attempts === limit.attempts + 1) {
+			const user = await User.findOne({ where: { email: address } });
+			await recordRefused(scope, user, address, 'too-many-attempts');
+		}
+		throw new Refusal('too-many-attempts');
+	}
+}
+
 /**
  * Checks an e-mail and password. Known and unknown addresses are answered alike and in like time.
  * @returns null for a wrong pair. @throws Refusal `too-many-attempts`; with the right pair `switched-off`, `locked`.
@@ -47,10 +66,7 @@ export async function signInByPassword(
 ): Promise<Claims | null> {
 	const address = email.trim().toLowerCase();
 	const accountLimit = `sign-in ${address.slice(0, 120)}`;
-	const isAllowed =
-		(await isWithinLimit(`sign-in from ${scope.address}`, perAddress, scope.now)) &&
-		(await isWithinLimit(accountLimit, perAccount, scope.now));
-	if (!isAllowed) throw new Refusal('too-many-attempts');
+	await refuseTooMany(address, accountLimit, scope);
 
 	const user = await User.findOne({ where: { email: address } });
 	const matches = await isPassword(password, user?.passwordHash ?? null);
@@ -70,9 +86,10 @@ export async function signInByPassword(
 
 /** Records that a session began. */
 export async function openSession(user: User, scope: RequestScope, by: 'password' | 'link'): Promise<Claims> {
-	await inTransaction(personContext(scope, 'user', user.id), async ({ record, transaction }) => {
+	const ctx = { ...personContext(scope, 'user', user.id), sessionKind: by };
+	await inTransaction(ctx, async ({ record, transaction }) => {
 		await User.update({ lastSignInAt: scope.now }, { where: { id: user.id }, transaction });
 		record('session.opened', { scope: 'account', id: user.id }, { by, userId: user.id });
 	});
-	return { kind: 'user', subjectId: user.id, tokenVersion: user.tokenVersion };
+	return { kind: 'user', by, subjectId: user.id, tokenVersion: user.tokenVersion };
 }

@@ -8,59 +8,23 @@ import { AuditChain } from '../db/models/audit-chain';
 import { AuditEntry } from '../db/models/audit-entry';
 import { AuditPayload } from '../db/models/audit-payload';
 import type { AuditEvent, ChainName } from './catalogue';
+import { emptyHeadSha256, entryText } from './entry-text';
 
-/** What a chain starts from. */
-export const emptyHeadSha256 = '0'.repeat(64);
+/** Rows written by one statement. */
+const rowsAtOnce = 500;
 
-/** The fields an entry's hash covers, in this order, one a line. Verification builds the same text from the row. */
-export function entryText(entry: {
-	chainId: string;
-	seq: number;
-	type: string;
-	actorId: string | null;
-	actorKind: string;
-	occurredAt: Date;
-	requestId: string;
-	address: string;
-	payloadSha256: string;
-	previousSha256: string;
-}): string {
-	const {
-		chainId,
-		seq,
-		type,
-		actorId,
-		actorKind,
-		occurredAt,
-		requestId,
-		address,
-		payloadSha256,
-		previousSha256
-	} = entry;
-	return [
-		chainId,
-		seq,
-		type,
-		actorId ?? '',
-		actorKind,
-		occurredAt.toISOString(),
-		requestId,
-		address,
-		payloadSha256,
-		previousSha256
-	].join('\n');
+interface Head {
+	length: number;
+	headSha256: string;
 }
 
 // Not INSERT IGNORE: that leaves a shared lock, and two writers who both want more than that deadlock.
-async function lockChain(
-	chain: ChainName,
-	transaction: Transaction
-): Promise<{ length: number; headSha256: string }> {
+async function lockChain(chain: ChainName, transaction: Transaction): Promise<Head> {
 	await database().query(
-		'INSERT INTO audit_chains (id, scope, length, head_sha256) VALUES (?, ?, 0, ?) ON DUPLICATE KEY UPDATE id = id',
+		'INSERT INTO audit_chains (id, scope, length, head_sha256) VALUES (?, ?, 0, ?) ON DUPLICATE KEY UPDATE length = length',
 		{ replacements: [chain.id, chain.scope, emptyHeadSha256], transaction }
 	);
-	const [row] = await database().query<{ length: number; headSha256: string }>(
+	const [row] = await database().query<Head>(
 		'SELECT length, head_sha256 AS headSha256 FROM audit_chains WHERE id = ? FOR UPDATE',
 		{ replacements: [chain.id], transaction, type: QueryTypes.SELECT }
 	);
@@ -71,6 +35,29 @@ async function lockChain(
 function actorOf({ actor }: Context): { actorId: string | null; actorKind: 'user' | 'link' | 'system' } {
 	if (isSystem(actor)) return { actorId: null, actorKind: 'system' };
 	return { actorId: actor.id, actorKind: actor.kind };
+}
+
+/** The entries that follow a chain's head, each hashed over the one before. */
+function chained(ctx: Context, chainId: string, head: Head, events: readonly AuditEvent[]) {
+	let previousSha256 = head.headSha256;
+	return events.map(({ type, data }, index) => {
+		const text = JSON.stringify(data);
+		const entry = {
+			id: uuid(),
+			chainId,
+			seq: head.length + index + 1,
+			type,
+			...actorOf(ctx),
+			sessionKind: ctx.sessionKind ?? null,
+			occurredAt: ctx.now,
+			requestId: ctx.requestId,
+			address: ctx.address,
+			payloadSha256: sha256Hex(text),
+			previousSha256
+		};
+		previousSha256 = sha256Hex(entryText(entry));
+		return { entry: { ...entry, sha256: previousSha256 }, text };
+	});
 }
 
 /** Appends the events of one transaction to their chains, chains in one order so that two writers never deadlock. */
@@ -84,31 +71,31 @@ export async function appendEvents(
 		const group = byChain.get(chainId) ?? [];
 		const chain = group[0]?.chain;
 		if (!chain) continue;
-		let { length, headSha256 } = await lockChain(chain, transaction);
-		for (const { type, data } of group) {
-			const text = JSON.stringify(data);
-			const entry = {
-				id: uuid(),
-				chainId,
-				seq: ++length,
-				type,
-				...actorOf(ctx),
-				occurredAt: ctx.now,
-				requestId: ctx.requestId,
-				address: ctx.address,
-				payloadSha256: sha256Hex(text),
-				previousSha256: headSha256
-			};
-			headSha256 = sha256Hex(entryText(entry));
-			await AuditEntry.create({ ...entry, sha256: headSha256 }, { transaction });
-			await AuditPayload.create({ entryId: entry.id, text }, { transaction });
+		const head = await lockChain(chain, transaction);
+		const added = chained(ctx, chainId, head, group);
+		for (let from = 0; from < added.length; from += rowsAtOnce) {
+			const rows = added.slice(from, from + rowsAtOnce);
+			await AuditEntry.bulkCreate(
+				rows.map(({ entry }) => entry),
+				{ transaction }
+			);
+			await AuditPayload.bulkCreate(
+				rows.map(({ entry, text }) => ({ entryId: entry.id, text })),
+				{ transaction }
+			);
 		}
+		const length = head.length + added.length;
+		const headSha256 = added.at(-1)?.entry.sha256 ?? head.headSha256;
 		await AuditChain.update({ length, headSha256 }, { where: { id: chainId }, transaction });
 	}
 }
 
 function groupByChain(events: readonly AuditEvent[]): Map<string, AuditEvent[]> {
 	const groups = new Map<string, AuditEvent[]>();
-	for (const event of events) groups.set(event.chain.id, [...(groups.get(event.chain.id) ?? []), event]);
+	for (const event of events) {
+		const group = groups.get(event.chain.id);
+		if (group) group.push(event);
+		else groups.set(event.chain.id, [event]);
+	}
 	return groups;
 }

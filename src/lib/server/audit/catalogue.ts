@@ -11,6 +11,7 @@ export interface EventData {
 	'account.unlocked': { userId: string };
 	'session.opened': { by: 'password' | 'link'; userId: string };
 	'session.refused': { email: string; why: string };
+	'act.refused': { act: string; why: string; shipmentId: string | null; route: string; method: string };
 	'link.sent': { kind: string; contactId: string | null; userId: string | null };
 	'link.used': { kind: string; contactId: string | null; userId: string | null };
 	'site.saved': { siteId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
@@ -106,7 +107,19 @@ export interface EventData {
 	'claim.changed': { claimId: string; before: Record<string, unknown>; after: Record<string, unknown> };
 	'evidence.taken': { claimId: string | null; shipmentId: string; files: number };
 	'certificate.made': { certificateId: string; sha256: string };
-	'settings.changed': { name: string };
+	'settings.changed': { name: string; before?: unknown; after?: unknown };
+	'retention.held': { reason: string };
+	'retention.released': { holdId: string; reason: string };
+	'retention.blanked': { entries: string; kinds: string[]; rule: string; periodMonths: number };
+	'retention.deleted': {
+		what: string;
+		fileSha256: string;
+		bytes: number;
+		rule: string;
+		periodMonths: number;
+	};
+	'copy.taken': { shipmentId: string; files: number; entries: number };
+	'record.exported': { as: 'csv' | 'pdf'; entries: number; filter: Record<string, string> };
 }
 
 export type EventType = keyof EventData;

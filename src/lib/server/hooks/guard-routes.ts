@@ -1,4 +1,5 @@
 import { redirect, type Handle } from '@sveltejs/kit';
+import { noteRefusedAct } from '../request-scope';
 
 /** API routes that answer without a session. */
 const openApi = new Set(['/api/v1/health']);
@@ -30,6 +31,7 @@ export const guardRoutes: Handle = ({ event, resolve }) => {
 		redirect(303, `/sign-in${to}`);
 	}
 	if (!isInRightGroup(routeId, context.actor.roles.includes('supplier'))) {
+		noteRefusedAct({ act: 'page.open', why: 'other-group', shipmentId: null });
 		return new Response('There is no such page.', { status: 404 });
 	}
 	return resolve(event);

@@ -1,4 +1,5 @@
 import { mailLink } from '../accounts/mail-link';
+import { makeCheckpoint } from '../audit/checkpoint';
 import { sendNotice } from '../notices/send-notice';
 import { ensureReport } from '../reports/make-report';
 import { registerJobKind } from './job-kinds';
@@ -9,6 +10,7 @@ export function registerAllJobs(): void {
 		'report',
 		async (ctx, { dispositionId }) => void (await ensureReport(ctx, dispositionId ?? ''))
 	);
+	registerJobKind('audit-checkpoint', async ({ now }) => void (await makeCheckpoint(now)));
 	registerJobKind('mail-link', mailLink);
 	registerJobKind('notice', (ctx, { noticeId }) => sendNotice(ctx, noticeId ?? ''));
 }

@@ -5,6 +5,7 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
+import type { SessionKind } from '../../context';
 
 /** One change, chained to the one before. Append only. */
 export class AuditEntry extends Model<InferAttributes<AuditEntry>, InferCreationAttributes<AuditEntry>> {
@@ -14,6 +15,8 @@ export class AuditEntry extends Model<InferAttributes<AuditEntry>, InferCreation
 	declare type: string;
 	declare actorId: string | null;
 	declare actorKind: 'user' | 'link' | 'system';
+	/** Null in entries from before it was kept. */
+	declare sessionKind: SessionKind | null;
 	declare occurredAt: Date;
 	declare requestId: string;
 	declare address: string;
@@ -31,6 +34,7 @@ export function defineAuditEntry(sequelize: Sequelize): void {
 			type: { type: DataTypes.STRING(60), allowNull: false },
 			actorId: { type: DataTypes.UUID, allowNull: true },
 			actorKind: { type: DataTypes.ENUM('user', 'link', 'system'), allowNull: false },
+			sessionKind: { type: DataTypes.STRING(12), allowNull: true },
 			occurredAt: { type: DataTypes.DATE(3), allowNull: false },
 			requestId: { type: DataTypes.STRING(40), allowNull: false },
 			address: { type: DataTypes.STRING(64), allowNull: false },
