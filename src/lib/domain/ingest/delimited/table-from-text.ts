@@ -1,7 +1,7 @@
 import { maxLineChars, maxReadings } from '../bounds';
 import type { RefusalCode } from '../ingestion';
 import { entryOf } from '../layout/entries';
-import type { Entry, Table } from '../layout/table';
+import type { Entry, RowText, Table } from '../layout/table';
 import { findBody, isHeaderOnly, type Body } from './body';
 import { findDelimiter, sampleIndexes } from './delimiter';
 import { findLines, type Lines } from './lines';
@@ -74,7 +74,20 @@ export function tableFromText(text: string): TableOrRefusal {
 		delimiter === null ? [textOf(row)] : splitRow(textOf(row), delimiter);
 	const body = findBody({ count: rows.count, cells });
 	if (body === null) return withoutBody(filled);
-	return tableOf(rows, body, delimiter, textOf, cells, lines.isUnterminated);
+	return {
+		...tableOf(rows, body, delimiter, textOf, cells, lines.isUnterminated),
+		rowText: rowTextOf(text, rows, body.first, delimiter)
+	};
+}
+
+function rowTextOf(text: string, rows: Rows, first: number, delimiter: Delimiter | null): RowText | null {
+	if (delimiter?.length !== 1) return null;
+	return {
+		text,
+		delimiter: delimiter.charCodeAt(0),
+		startOf: (row) => rows.starts[row + first] ?? 0,
+		endOf: (row) => rows.ends[row + first] ?? 0
+	};
 }
 
 function withoutBody(lines: readonly string[]): TableOrRefusal {

@@ -7,6 +7,15 @@ export interface Entry {
 	readonly line: number;
 }
 
+/** The text that rows are cut from, for a reader that needs no string of its own for each cell. */
+export interface RowText {
+	readonly text: string;
+	/** Character code of the delimiter: one character, outside quotes. */
+	readonly delimiter: number;
+	startOf(row: number): number;
+	endOf(row: number): number;
+}
+
 /** Readings as rows of cells, whatever the file was written in. Rows are split when asked for, not kept. */
 export interface Table {
 	readonly kind: 'delimited' | 'json' | 'senml' | 'epcis';
@@ -25,6 +34,8 @@ export interface Table {
 	lineOf(row: number): number;
 	/** The row as it stands in the file, for showing. */
 	textOf(row: number): string;
+	/** Null or absent where rows are no stretches of text with one delimiter. */
+	readonly rowText?: RowText | null;
 	/** True when the last row lacks the line end that all others have. */
 	readonly isUnterminated: boolean;
 	/** Blank cells are moments at which a channel was not due, not values that are missing. */

@@ -3,6 +3,7 @@ import type { Table } from '../layout/table';
 import type { Timing } from '../layout/timing';
 import type { TemperatureUnit } from '../../units';
 import type { Gathered, GatheredTimes, GatheredValues, RowFault } from './gathered';
+import { regularRowsOf, type RegularRows } from './regular-rows';
 import { timeReaderOf, type RowTime } from './row-time';
 
 /** Of a row at which the channel was not due: neither a reading nor missing. */
@@ -62,14 +63,25 @@ function keepValue(
 ): void {
 	const cell = cells[value.column] ?? '';
 	const state = scanNumber(cell, number);
-	if (state !== 'number') {
-		value.isMissing[at] = isSparse && cell === '' ? notDue : 1;
-		return;
-	}
+	if (state === 'number') keepNumber(value, at, number);
+	else value.isMissing[at] = isSparse && cell === '' ? notDue : 1;
+}
+
+function keepNumber(value: ValueCollector, at: number, number: NumberText): void {
 	value.mantissa[at] = number.mantissa;
 	value.decimals[at] = number.decimals;
 	if (number.unit !== null) value.units.add(number.unit);
 	if (number.hasComma) value.commas++;
+}
+
+/** The same of a row that was read in place. */
+function keepRegular(collectors: readonly ValueCollector[], at: number, regular: RegularRows): void {
+	for (let k = 0; k < collectors.length; k++) {
+		const [collector, number] = [collectors[k], regular.numbers[k]];
+		if (collector === undefined || number === undefined) continue;
+		if (regular.isBlank[k] === 1) collector.isMissing[at] = 1;
+		else keepNumber(collector, at, number);
+	}
 }
 
 function finished({ units, commas, ...value }: ValueCollector): GatheredValues {
@@ -90,7 +102,12 @@ export function gatherValues(
 ): GatheredValues[] {
 	const collectors = columns.map((column) => collectorOf(column, count));
 	const number = emptyNumber();
+	const regular = regularRowsOf(table, null, columns);
 	for (let i = 0; i < count; i++) {
+		if (regular?.read(rows[i] ?? 0, null) === true) {
+			keepRegular(collectors, i, regular);
+			continue;
+		}
 		const cells = table.cells(rows[i] ?? 0);
 		for (const collector of collectors) keepValue(collector, i, cells, number, table.isSparse === true);
 	}
@@ -121,7 +138,20 @@ export function gather(
 	let count = 0;
 	let lastRow = -1;
 	const width = Math.max(-1, ...needed);
+	const regular = regularRowsOf(table, timing, columns);
+	const keepRow = (row: number): void => {
+		if (pending.length > 0) for (const fault of pending.splice(0)) faults.push(fault);
+		keepTime(times, count, time);
+		lines[count] = table.lineOf(row);
+		rows[count++] = row;
+		lastRow = row;
+	};
 	for (let row = 0; row < size; row++) {
+		if (regular?.read(row, time) === true) {
+			keepRegular(collectors, count, regular);
+			keepRow(row);
+			continue;
+		}
 		const cells = table.cells(row);
 		const hasTime =
 			timing.kind === 'none' ? cells.some((c) => scanNumber(c, number) === 'number') : time.read(cells);
@@ -130,15 +160,13 @@ export function gather(
 		if (!hasTime || isShort) {
 			if (!isBlankRow(cells))
 				pending.push({ code: faultOf(cells, heading, hasTime), line: table.lineOf(row) });
+			regular?.forget();
 			continue;
 		}
-		if (pending.length > 0) for (const fault of pending.splice(0)) faults.push(fault);
-		keepTime(times, count, time);
 		zoneWord ??= time.stamp.zoneWord;
 		for (const collector of collectors) keepValue(collector, count, cells, number, table.isSparse === true);
-		lines[count] = table.lineOf(row);
-		rows[count++] = row;
-		lastRow = row;
+		keepRow(row);
+		regular?.learn(row, time);
 	}
 	const footerLines = pending.map(({ line }) => line);
 	return {

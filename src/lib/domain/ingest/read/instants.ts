@@ -4,7 +4,7 @@ import { dayNumber, fullYear, msPerDay } from '../times/calendar';
 import { dayInOrder, type DateOrder } from '../times/date-order';
 import { emptyStamp, noOffset, scanStamp } from '../times/stamp';
 import { fixedOffsetOf, offsetText, utcOfLocal, type LocalTimes } from '../times/zone';
-import type { Gathered } from './gathered';
+import type { Gathered, GatheredTimes } from './gathered';
 
 export interface UsedZone {
 	readonly zone: string;
@@ -51,24 +51,25 @@ export function momentMs(text: string | null, order: DateOrder | null, zone: str
 	return utcOfLocal(Float64Array.of(local), zone).utc[0] ?? null;
 }
 
+function dayOf(times: GatheredTimes, row: number, order: DateOrder | null): number {
+	const [a, b, c] = [times.a[row] ?? 0, times.b[row] ?? 0, times.c[row] ?? 0];
+	if (times.isSettled[row] !== 0) return dayNumber(fullYear(a, 4), b, c);
+	return order === null ? NaN : dayInOrder(a, b, c, order);
+}
+
 /** Local milliseconds of each row; NaN where the order gives no such day. */
 function localTimes(gathered: Gathered, order: DateOrder | null): Float64Array {
 	const { times, count } = gathered;
 	const local = new Float64Array(count);
-	let key = -1;
 	let day = NaN;
 	for (let i = 0; i < count; i++) {
-		const [a, b, c, isSettled] = [
-			times.a[i] ?? 0,
-			times.b[i] ?? 0,
-			times.c[i] ?? 0,
-			times.isSettled[i] !== 0
-		];
-		const rowKey = ((isSettled ? 1 : 0) * 100_000 + a) * 1e8 + b * 1e5 + c;
-		if (rowKey !== key) {
-			key = rowKey;
-			day = isSettled ? dayNumber(fullYear(a, 4), b, c) : order === null ? NaN : dayInOrder(a, b, c, order);
-		}
+		const isSame =
+			i > 0 &&
+			times.a[i] === times.a[i - 1] &&
+			times.b[i] === times.b[i - 1] &&
+			times.c[i] === times.c[i - 1] &&
+			times.isSettled[i] === times.isSettled[i - 1];
+		if (!isSame) day = dayOf(times, i, order);
 		local[i] = day * msPerDay + (times.msOfDay[i] ?? 0);
 	}
 	return local;
@@ -99,21 +100,21 @@ export function instantsOf(gathered: Gathered, order: DateOrder | null, zone: st
 	const isBackwards = isDescending(local);
 	const at = (i: number): number => (isBackwards ? count - 1 - i : i);
 	// Rows without a day or with an offset are left out of the walk through the zone's changes.
-	const open: number[] = [];
+	const open = new Int32Array(count);
+	const openLocal = new Float64Array(count);
+	let opened = 0;
 	const ms = new Float64Array(count);
 	for (let k = 0; k < count; k++) {
 		const i = at(k);
 		const offset = times.offsetMinutes[i] ?? noOffset;
 		if (offset !== noOffset) ms[i] = (local[i] ?? 0) - offset * 60_000;
 		else if (Number.isNaN(local[i])) ms[i] = NaN;
-		else open.push(i);
+		else {
+			openLocal[opened] = local[i] ?? 0;
+			open[opened++] = i;
+		}
 	}
-	const resolved = utcOfLocal(
-		Float64Array.from(open, (i) => local[i] ?? 0),
-		zone
-	);
-	open.forEach((i, k) => {
-		ms[i] = resolved.utc[k] ?? NaN;
-	});
+	const resolved = utcOfLocal(openLocal.subarray(0, opened), zone);
+	for (let k = 0; k < opened; k++) ms[open[k] ?? 0] = resolved.utc[k] ?? NaN;
 	return { ms, change: resolved.change, changeRows: resolved.rows.map((k) => open[k] ?? 0) };
 }

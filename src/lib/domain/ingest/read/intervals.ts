@@ -1,3 +1,5 @@
+import { usualIntervalMs } from '../../trace/interval';
+
 /** The usual interval and what departs from it. */
 export interface Intervals {
 	readonly usualMs: number;
@@ -13,22 +15,9 @@ const gapFloorMs = 30 * 60_000;
 /** So many equal steps in a row are a setting, not jitter. */
 const sustained = 5;
 
-function usualStep(times: Float64Array): number {
-	const counts = new Map<number, number>();
-	for (let i = 1; i < times.length; i++) {
-		const step = (times[i] ?? 0) - (times[i - 1] ?? 0);
-		counts.set(step, (counts.get(step) ?? 0) + 1);
-	}
-	let [usual, most] = [0, 0];
-	for (const [step, count] of counts) {
-		if (count > most || (count === most && step < usual)) [usual, most] = [step, count];
-	}
-	return usual;
-}
-
 /** The most frequent step, the gaps, and a lasting change of interval. */
 export function intervalsOf(times: Float64Array): Intervals {
-	const usualMs = usualStep(times);
+	const usualMs = usualIntervalMs(times);
 	const gaps: number[] = [];
 	let changed: Intervals['changed'] = null;
 	let run = 0;

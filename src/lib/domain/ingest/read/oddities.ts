@@ -20,8 +20,9 @@ const minutes = (ms: number): string => String(Math.round((ms / 60_000) * 1000) 
 export function seriesOddities(series: Series, intervals: Intervals, context: ReadContext): Oddity[] {
 	const { times, lines } = series;
 	const future: number[] = [];
-	for (let i = times.length - 1; i >= 0 && (times[i] ?? 0) > context.uploadedMs; i--)
-		future.unshift(lines[i] ?? 0);
+	let first = times.length;
+	while (first > 0 && (times[first - 1] ?? 0) > context.uploadedMs) first--;
+	for (let i = first; i < times.length; i++) future.push(lines[i] ?? 0);
 	const { changed } = intervals;
 	const longest = intervals.gaps.reduce(
 		(most, i) => Math.max(most, (times[i] ?? 0) - (times[i - 1] ?? 0)),

@@ -16,6 +16,11 @@ export interface RowTimeReader extends RowTime {
 
 const number = emptyNumber();
 const epochFactors = { s: 1000, ms: 1, us: 0.001 } as const;
+
+/** UTC of a count since 1970. */
+export function epochMsOf(count: number, unit: keyof typeof epochFactors): number {
+	return Math.round(count * epochFactors[unit]);
+}
 /** Day 25 569 of the spreadsheet calendar is 1970-01-01. Source: ECMA-376 part 1 §18.17.4.1. */
 const serialOf1970 = 25_569;
 
@@ -87,8 +92,7 @@ export function timeReaderOf(timing: Timing): RowTimeReader {
 		'date-and-time': (cells) =>
 			timing.kind === 'date-and-time' && readDateAndTime(stamp, cells[timing.date], cells[timing.time]),
 		epoch: (cells) =>
-			timing.kind === 'epoch' &&
-			setMs(Math.round(numberOf(cells[timing.column]) * epochFactors[timing.unit])),
+			timing.kind === 'epoch' && setMs(epochMsOf(numberOf(cells[timing.column]), timing.unit)),
 		'serial-day': (cells) =>
 			timing.kind === 'serial-day' &&
 			setMs(Math.round((numberOf(cells[timing.column]) - serialOf1970) * 86_400) * 1000),

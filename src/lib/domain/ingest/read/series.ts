@@ -38,7 +38,7 @@ const powers = [1, 10, 100, 1000, 10_000] as const;
 /** A value that cannot be a temperature: outside physics, or a known "no sensor" figure away from its neighbours. */
 function isImpossible(celsius: number, raw: number, lastCelsius: number): boolean {
 	if (celsius < coldestCelsius || celsius > warmestCelsius) return true;
-	return sentinels.has(raw) && !Number.isNaN(lastCelsius) && Math.abs(celsius - lastCelsius) > leapCelsius;
+	return Math.abs(celsius - lastCelsius) > leapCelsius && sentinels.has(raw);
 }
 
 interface Kept {
@@ -116,19 +116,43 @@ function stepsBack({ count, times, lines }: Kept): { back: number[]; down: numbe
 	return { back, down };
 }
 
+function isDescendingThroughout({ count, times }: Kept): boolean {
+	for (let i = 1; i < count; i++) if ((times[i] ?? 0) > (times[i - 1] ?? 0)) return false;
+	return true;
+}
+
 function permutation(kept: Kept, isDescending: boolean, isSorted: boolean): (k: number) => number {
 	if (isSorted) return (k) => k;
 	const { count, times } = kept;
 	const reversed = (k: number): number => count - 1 - k;
 	const base = isDescending ? reversed : (k: number): number => k;
-	const order = Array.from({ length: count }, (_, k) => base(k));
+	if (isDescending && isDescendingThroughout(kept)) return base;
+	const order = new Uint32Array(count);
+	for (let k = 0; k < count; k++) order[k] = base(k);
 	order.sort((p, q) => (times[p] ?? 0) - (times[q] ?? 0));
 	return (k) => order[k] ?? 0;
+}
+
+function hasRepeat({ count, times }: Kept): boolean {
+	for (let i = 1; i < count; i++) if (times[i] === times[i - 1]) return true;
+	return false;
 }
 
 function inOrder(kept: Kept): Ordered {
 	const { back, down } = stepsBack(kept);
 	const isDescending = kept.count > 2 && down > (kept.count - 1) / 2;
+	if (back.length === 0 && !hasRepeat(kept)) {
+		const { count, times, scaled, lines } = kept;
+		return {
+			times: times.subarray(0, count),
+			scaled: scaled.subarray(0, count),
+			lines: lines.subarray(0, count),
+			dropped: [],
+			conflicting: [],
+			resorted: back,
+			isDescending
+		};
+	}
 	const at = permutation(kept, isDescending, back.length === 0);
 	const times = new Float64Array(kept.count);
 	const scaled = new Int32Array(kept.count);
