@@ -1,8 +1,17 @@
 /** Progress on the terminal: one line a step, with its seconds when it ends. */
 
+/** Where progress goes. */
+/** @type {NodeJS.WriteStream} */
+let out = process.stdout;
+
+/** Programs whose standard output is their answer have their progress elsewhere. */
+export function sayOnStandardError() {
+	out = process.stderr;
+}
+
 /** @param {string} text */
 export function say(text) {
-	process.stdout.write(`${text}\n`);
+	out.write(`${text}\n`);
 }
 
 /**
@@ -14,11 +23,11 @@ export function say(text) {
  */
 export async function step(name, work) {
 	const startedMs = performance.now();
-	process.stdout.write(`· ${name} …`);
-	if (!process.stdout.isTTY) process.stdout.write('\n');
+	out.write(`· ${name} …`);
+	if (!out.isTTY) out.write('\n');
 	const result = await work();
 	const seconds = ((performance.now() - startedMs) / 1000).toFixed(1);
-	process.stdout.write(process.stdout.isTTY ? ` ${seconds} s\n` : `  ${name}: ${seconds} s\n`);
+	out.write(out.isTTY ? ` ${seconds} s\n` : `  ${name}: ${seconds} s\n`);
 	return result;
 }
 

@@ -10,6 +10,8 @@ const acts = {
 	/** The whole docket with notes, papers and every party; suppliers have a view of their own. */
 	'docket.view': staff,
 	'shipment.list': staff,
+	/** Figures for another program; nothing is looked up or kept. */
+	'life.compute': staff,
 	'shipment.create': ['dock', 'qa', 'admin'],
 	'shipment.change': ['dock', 'qa', 'admin'],
 	'arrival.log': ['dock', 'qa'],

@@ -90,15 +90,26 @@ export function hoursAbove(course: Course, celsius: number): number {
 	return hoursBeyond(course, celsius, 1);
 }
 
+/** The part of the step after reading `at` that lies strictly above (1) or below (−1) a temperature. */
+export function fractionBeyond(
+	readings: ArrayLike<number>,
+	at: number,
+	celsius: number,
+	sign: 1 | -1
+): number {
+	const a = sign * ((readings[at] as number) - celsius);
+	const b = sign * ((readings[at + 1] as number) - celsius);
+	if (a <= 0 && b <= 0) return 0;
+	return a >= 0 && b >= 0 ? 1 : Math.max(a, b) / Math.abs(a - b);
+}
+
 function hoursBeyond(course: Course, celsius: number, sign: 1 | -1): number {
 	const sum = new RunningSum();
 	for (let i = 0; i < course.steps.length; i++) {
 		if (course.steps[i] === trimmed) continue;
-		const a = sign * ((course.celsius[i] as number) - celsius);
-		const b = sign * ((course.celsius[i + 1] as number) - celsius);
-		if (a <= 0 && b <= 0) continue;
-		const fraction = a >= 0 && b >= 0 ? 1 : Math.max(a, b) / Math.abs(a - b);
-		sum.add((fraction * ((course.times[i + 1] as number) - (course.times[i] as number))) / msPerHour);
+		const fraction = fractionBeyond(course.celsius, i, celsius, sign);
+		if (fraction > 0)
+			sum.add((fraction * ((course.times[i + 1] as number) - (course.times[i] as number))) / msPerHour);
 	}
 	return sum.total;
 }

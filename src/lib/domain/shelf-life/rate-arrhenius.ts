@@ -1,6 +1,6 @@
 import { exp } from '../math/exp';
 import { ln } from '../math/ln';
-import { kelvinFromCelsius } from '../units';
+import { celsiusFromKelvin, kelvinFromCelsius } from '../units';
 import type { RatePiece } from './piece';
 import type { LifePoint } from './spec';
 
@@ -14,6 +14,9 @@ const outerNode = 0.906179845938664;
 const middleWeight = 128 / 225;
 const innerWeight = 0.478628670499366;
 const outerWeight = 0.236926885056189;
+
+/** A line that falls by more than e^60 is cut there: near absolute zero it would take parts without number. */
+const deepestFall = 60;
 
 /**
  * rate = e^((Ea/R)(1/Tref − 1/T)), T in kelvin.
@@ -33,19 +36,30 @@ export function arrheniusPiece(
 	// One quotient, so that the difference of two nearly equal reciprocals keeps its digits.
 	const lnRate = (celsius: number) => {
 		const kelvin = kelvinFromCelsius(celsius);
+		// Nothing happens at absolute zero; a reading lowered by the accuracy may pass it.
+		if (kelvin <= 0) return -Infinity;
 		return (theta * (kelvin - reference)) / (kelvin * reference);
 	};
 	const rateAt = (celsius: number) => exp(lnRate(celsius));
+	const meanBetween = (from: number, to: number) => {
+		const parts = Math.max(1, Math.ceil(Math.abs(lnRate(to) - lnRate(from))));
+		const width = (to - from) / parts;
+		let sum = 0;
+		for (let i = 0; i < parts; i++) sum += gaussMean(rateAt, from + width * (i + 0.5), width / 2);
+		return sum / parts;
+	};
 	return {
 		fromCelsius: -Infinity,
 		toCelsius: Infinity,
 		rateAt,
 		meanRate: (from, to) => {
-			const parts = Math.max(1, Math.ceil(Math.abs(lnRate(to) - lnRate(from))));
-			const width = (to - from) / parts;
-			let sum = 0;
-			for (let i = 0; i < parts; i++) sum += gaussMean(rateAt, from + width * (i + 0.5), width / 2);
-			return sum / parts;
+			const warmest = lnRate(to);
+			if (warmest - lnRate(from) > deepestFall) {
+				// 1/T at which ln rate is that much lower; what lies colder adds less than the last digit.
+				const cut = celsiusFromKelvin(1 / (1 / kelvinFromCelsius(to) + deepestFall / theta));
+				return (meanBetween(cut, to) * (to - cut)) / (to - from);
+			}
+			return meanBetween(from, to);
 		}
 	};
 }

@@ -106,3 +106,36 @@ describe('a chilling threshold', () => {
 		expect(rateCurve(banana).fromCelsius).toBe(-60);
 	});
 });
+
+describe('Arrhenius near absolute zero', () => {
+	const spec = buildSpec({
+		model: { kind: 'arrhenius', activationEnergyKilojoulesPerMole: 83.144 },
+		validFromCelsius: -Infinity,
+		validToCelsius: Infinity
+	});
+	const curve = rateCurve(spec);
+	const mean = (a: number, b: number) => meanRate(curve, a, b, curveRateAt(curve, a), curveRateAt(curve, b));
+
+	it('has no rate there, nor below where only an accuracy can lead', () => {
+		expect(rateAt(spec, -273.15)).toBe(0);
+		expect(rateAt(spec, -280)).toBe(0);
+		expect(rateAt(spec, -273.149)).toBe(0);
+	});
+
+	it('has the mean of a line that begins there, without counting for ever', () => {
+		// Source: θ e^(θ/Tref) [e^(−x)/x − E1(x)] over the width, x = θ/T, E1 by its asymptotic series.
+		const theta = 83_144 / 8.314462618;
+		const x = theta / 293.15;
+		let [term, series] = [1, 1];
+		for (let n = 1; n <= 25; n++) series += term *= -n / x;
+		const bracket = (Math.exp(theta / 273.15 - x) / x) * (1 - series);
+		const expected = (theta * bracket) / 293.15;
+		expect(Math.abs(mean(-273.15, 20) / expected - 1)).toBeLessThan(1e-9);
+		expect(mean(-273.149999999, 20)).toBeCloseTo(mean(-273.15, 20), 9);
+	});
+
+	it('does not jump where a line is first cut', () => {
+		// e^60 below the rate at 20 °C lies at 1/(1/293.15 + 60/θ), −166.9 °C.
+		expect(mean(-166.8, 20) * 186.8).toBeCloseTo(mean(-167, 20) * 187, 9);
+	});
+});
