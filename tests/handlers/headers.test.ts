@@ -24,7 +24,7 @@ it('tells anybody whether it is well: database, queue and version', async () => 
 	});
 });
 
-it.each(['/sign-in', '/check', '/api/v1/health', '/no/such/page'])(
+it.each(['/sign-in', '/verify', '/api/v1/health', '/no/such/page'])(
 	'guards the answer of %s',
 	async (path) => {
 		const { headers } = await new Visitor(product.address).request(path);

@@ -54,3 +54,25 @@ export function signatureOf(pdf: Uint8Array): { readonly content: Buffer; readon
 	const cms = padded.subarray(0, 4 + padded.readUInt16BE(2));
 	return { content: Buffer.concat([bytes.subarray(from, before), bytes.subarray(after, after + rest)]), cms };
 }
+
+/** What `openssl cms -verify` says of a detached CMS and its content; the certificate is its own anchor. */
+export function opensslVerifies(cms: Uint8Array, content: Uint8Array, certificatePem: string): string {
+	return inFolder((folder) => {
+		const at = (name: string) => join(folder, name);
+		writeFileSync(at('cms.der'), cms);
+		writeFileSync(at('content'), content);
+		writeFileSync(at('anchor.pem'), certificatePem);
+		const files = [
+			'-in',
+			at('cms.der'),
+			'-content',
+			at('content'),
+			'-CAfile',
+			at('anchor.pem'),
+			'-out',
+			at('out')
+		];
+		const args = ['cms', '-verify', '-inform', 'DER', '-binary', '-purpose', 'any', ...files];
+		return spawnSync('openssl', args, { encoding: 'utf8' }).stderr;
+	});
+}

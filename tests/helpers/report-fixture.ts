@@ -222,7 +222,7 @@ export function reportInput(overrides: Partial<ReportInput> = {}, lines = 3): Re
 				'Lowest reading −1.1 ±0.5 °C against a freezing stop of −1.3 °C: neither shown nor excluded.'
 			]
 		},
-		verifyAddress: 'https://pellstaithe.example/check/9D4020BE66864093',
+		verifyAddress: 'https://pellstaithe.example/verify/9D4020BE66864093',
 		attachments: ordinals.map((ordinal) => ({
 			name: `SB-3041${ordinal}.csv`,
 			bytes: new TextEncoder().encode(rawExport(ordinal)),

@@ -24,6 +24,7 @@ const settings = z.object({
 	S3_BUCKET: z.string().optional(),
 	S3_ENDPOINT: url(['http:', 'https:']).optional(),
 	S3_REGION: z.string().default('us-east-1'),
+	TIMESTAMP_URL: url(['http:', 'https:']).optional(),
 	CERTIFICATE_PASSPHRASE: z.string().optional(),
 	LOG_LEVEL: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'fatal', 'silent']).default('info'),
 	IS_DEMO: z.enum(['true', 'false']).default('false')
@@ -50,6 +51,8 @@ export interface Env {
 	keysFolder: string;
 	mailFolder: string;
 	certificatePassphrase: string;
+	/** RFC 3161 authority that stamps each seal; null asks none. */
+	timestampUrl: string | null;
 	logLevel: string;
 	isDemo: boolean;
 }
@@ -105,6 +108,7 @@ export function readEnv(source: Record<string, string | undefined>): Env {
 		keysFolder,
 		mailFolder: join(dataFolder, 'mail'),
 		certificatePassphrase: env.CERTIFICATE_PASSPHRASE ?? keptSecret(keysFolder, 'certificate-passphrase'),
+		timestampUrl: env.TIMESTAMP_URL ?? null,
 		logLevel: env.LOG_LEVEL,
 		isDemo: env.IS_DEMO === 'true'
 	};

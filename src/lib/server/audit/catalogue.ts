@@ -96,7 +96,13 @@ export interface EventData {
 		amendmentReason: string | null;
 	};
 	'disposition.refused': { why: string };
-	'report.sealed': { reportId: string; fileSha256: string; bytes: number };
+	'report.sealed': {
+		reportId: string;
+		fileSha256: string;
+		bytes: number;
+		/** Whether an authority stamped the signature, and why not. */
+		timestamp: { state: 'off' | 'stamped' | 'failed'; authority?: string; at?: string; why?: string };
+	};
 	'report.opened': { reportId: string };
 	'notice.queued': { noticeId: string; number: string; partnerId: string };
 	'notice.sent': { noticeId: string; messageId: string; to: string };

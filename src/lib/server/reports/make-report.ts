@@ -6,6 +6,8 @@ import { Report } from '../db/models/report';
 import { Shipment } from '../db/models/shipment';
 import { inTransaction } from '../db/transaction';
 import { organisationCertificate } from '../certificates/organisation-certificate';
+import { env } from '../env';
+import { log } from '../log';
 import { keepBytes } from '../storage/store';
 import { buildSealedReport } from './pdf/run-worker';
 import { reportOrder } from './report-order';
@@ -22,8 +24,10 @@ export async function ensureReport(ctx: Context, dispositionId: string): Promise
 	const disposition = await Disposition.findByPk(dispositionId, { rejectOnEmpty: true });
 	const shipment = await Shipment.findByPk(disposition.shipmentId, { rejectOnEmpty: true });
 	const { row: certificate, key } = await organisationCertificate(ctx);
-	const bytes = await buildSealedReport(await reportOrder(disposition), key);
-	const file = await keepBytes(bytes, 'application/pdf', ctx.now);
+	const order = await reportOrder(disposition);
+	const { pdf, timestamp } = await buildSealedReport(order, key, env().timestampUrl);
+	if (timestamp.state === 'failed') log().warn({ disposition: dispositionId, ...timestamp }, 'no timestamp');
+	const file = await keepBytes(pdf, 'application/pdf', ctx.now);
 	const id = uuid();
 	try {
 		return await inTransaction(ctx, async ({ transaction, record }) => {
@@ -42,7 +46,7 @@ export async function ensureReport(ctx: Context, dispositionId: string): Promise
 			record(
 				'report.sealed',
 				{ scope: 'shipment', id: shipment.id },
-				{ reportId: id, fileSha256: file.sha256, bytes: file.bytes }
+				{ reportId: id, fileSha256: file.sha256, bytes: file.bytes, timestamp }
 			);
 			return report;
 		});

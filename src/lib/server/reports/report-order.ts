@@ -58,7 +58,7 @@ function reasonTextsOf(docket: Pick<DocketView, 'lines' | 'site'>): Record<strin
 
 /** Where anyone holding the report may ask whether it is genuine and current. */
 export function checkAddress(frozenSha256: string): string {
-	return `${env().origin}/check/${frozenSha256.slice(0, 16)}`;
+	return `${env().origin}/verify/${frozenSha256.slice(0, 16)}`;
 }
 
 /** Everything the report of a signed version is drawn from: the frozen record and the bytes it names, nothing else. */

@@ -1,7 +1,5 @@
 import { redirect } from '@sveltejs/kit';
 import type { PageServerLoad } from './$types';
 
-export const load: PageServerLoad = ({ url }) => {
-	const code = url.searchParams.get('code')?.replace(/[\s-]/g, '');
-	if (code) redirect(303, `/check/${encodeURIComponent(code)}`);
-};
+/** Reports printed before the page moved carry this address. */
+export const load: PageServerLoad = ({ url }) => redirect(308, `/verify${url.search}`);

@@ -41,19 +41,19 @@ describe('a report built in a worker', () => {
 	afterAll(() => rmSync(folder, { recursive: true, force: true }));
 
 	it('comes back sealed and valid', async () => {
-		const verdict = pdfsig(await buildSealedReport(reportInput(), key, folder));
+		const verdict = pdfsig((await buildSealedReport(reportInput(), key, null, folder)).pdf);
 		expect(verdict).toContain('Signature is Valid.');
 		expect(verdict).toContain('Total document signed');
 	});
 
 	it('fails with the worker’s own reason', async () => {
-		await expect(buildSealedReport(reportInput(), { ...key, passphrase: 'guessed' }, folder)).rejects.toThrow(
-			/password/iu
-		);
+		await expect(
+			buildSealedReport(reportInput(), { ...key, passphrase: 'guessed' }, null, folder)
+		).rejects.toThrow(/password/iu);
 	});
 
 	it('says what to run when the worker was never built', async () => {
-		await expect(buildSealedReport(reportInput(), key, join(folder, 'elsewhere'))).rejects.toThrow(
+		await expect(buildSealedReport(reportInput(), key, null, join(folder, 'elsewhere'))).rejects.toThrow(
 			/npm run build/u
 		);
 	});

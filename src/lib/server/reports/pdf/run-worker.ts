@@ -2,7 +2,7 @@ import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import { Worker } from 'node:worker_threads';
 import type { ReportInput } from './report-input';
-import type { ReportOrder } from './sealed-report';
+import type { ReportOrder, SealedReport } from './sealed-report';
 
 /** Where `vite build --mode node` leaves the worker, from the folder the server is started in. */
 const builtWorker = join('build', 'node', 'report-worker.js');
@@ -17,17 +17,18 @@ export interface SealKey {
 export async function buildSealedReport(
 	input: ReportInput,
 	key: SealKey,
+	timestampUrl: string | null,
 	folder = process.cwd()
-): Promise<Uint8Array> {
+): Promise<SealedReport> {
 	const program = join(folder, builtWorker);
 	if (!existsSync(program))
 		throw new Error(`The report worker is not built: ${program} is missing. Run "npm run build".`);
-	const order: ReportOrder = { input, p12: key.p12, passphrase: key.passphrase };
+	const order: ReportOrder = { input, p12: key.p12, passphrase: key.passphrase, timestampUrl };
 	const worker = new Worker(program, { workerData: order });
 	return new Promise((resolve, reject) => {
-		worker.once('message', (message: unknown) => {
-			if (message instanceof Uint8Array) resolve(message);
-			else reject(new Error('The report worker answered with something other than bytes'));
+		worker.once('message', (message: SealedReport) => {
+			if (message.pdf instanceof Uint8Array) resolve(message);
+			else reject(new Error('The report worker answered with something other than a report'));
 		});
 		worker.once('error', reject);
 		worker.once('exit', (code) =>

@@ -2,37 +2,19 @@ import { spawnSync } from 'node:child_process';
 import { writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { inFolder, pdfsig, said, signatureOf, textOf } from '../../../../../tests/helpers/pdf-tools';
+import {
+	inFolder,
+	opensslVerifies,
+	pdfsig,
+	said,
+	signatureOf,
+	textOf
+} from '../../../../../tests/helpers/pdf-tools';
 import { reportInput } from '../../../../../tests/helpers/report-fixture';
+import type { ReportInput } from '../pdf/report-input';
 import { sealedReport } from '../pdf/sealed-report';
 import { createCertificate, loadCertificate } from './certificate';
 import { sealPdf } from './seal-pdf';
-
-/** `openssl cms -verify` over detached content; the certificate is its own anchor. */
-function opensslVerifies(cms: Buffer, content: Buffer, certificatePem: string): string {
-	return inFolder((folder) => {
-		const at = (name: string) => join(folder, name);
-		writeFileSync(at('cms.der'), cms);
-		writeFileSync(at('content'), content);
-		writeFileSync(at('anchor.pem'), certificatePem);
-		const args = [
-			'-inform',
-			'DER',
-			'-in',
-			at('cms.der'),
-			'-content',
-			at('content'),
-			'-binary',
-			'-CAfile',
-			at('anchor.pem'),
-			'-purpose',
-			'any',
-			'-out',
-			at('out')
-		];
-		return spawnSync('openssl', ['cms', '-verify', ...args], { encoding: 'utf8' }).stderr;
-	});
-}
 
 function cmsPrinted(cms: Buffer): string {
 	return inFolder((folder) => {
@@ -42,6 +24,10 @@ function cmsPrinted(cms: Buffer): string {
 			encoding: 'utf8'
 		}).stdout;
 	});
+}
+
+async function seal(input: ReportInput, p12: Uint8Array): Promise<Uint8Array> {
+	return (await sealedReport({ input, p12, passphrase: 'word', timestampUrl: null })).pdf;
 }
 
 describe('a sealed report', () => {
@@ -55,7 +41,7 @@ describe('a sealed report', () => {
 			now,
 			passphrase: 'word'
 		});
-		sealed = await sealedReport({ input: reportInput(), p12: made.p12, passphrase: 'word' });
+		sealed = await seal(reportInput(), made.p12);
 	});
 
 	it('is valid and signed as a whole, says pdfsig', () => {
@@ -91,11 +77,7 @@ describe('a sealed report', () => {
 	});
 
 	it('lends its signature to no other report', async () => {
-		const other = await sealedReport({
-			input: reportInput({ organisation: 'Pell Staithe Other' }),
-			p12: made.p12,
-			passphrase: 'word'
-		});
+		const other = await seal(reportInput({ organisation: 'Pell Staithe Other' }), made.p12);
 		const hex = signatureOf(sealed).cms.toString('hex');
 		const text = Buffer.from(other).toString('latin1');
 		const from = text.indexOf('/Contents <') + '/Contents <'.length;
@@ -147,7 +129,7 @@ describe('a sealed report', () => {
 	});
 
 	it('comes out byte for byte the same from the same input and key', async () => {
-		const again = await sealedReport({ input: reportInput(), p12: made.p12, passphrase: 'word' });
+		const again = await seal(reportInput(), made.p12);
 		expect(Buffer.from(again).equals(Buffer.from(sealed))).toBe(true);
 	});
 

@@ -16,8 +16,8 @@ export interface SealBox {
 	readonly height: number;
 }
 
-/** Room for the signature with a chain of certificates, in bytes. */
-const signatureBytes = 12_288;
+/** Room for the signature with a chain of certificates and a timestamp with its own, in bytes. */
+const signatureBytes = 18_432;
 const printFlag = 4;
 /** SignaturesExist and AppendOnly. Source: ISO 32000-1, table 219. */
 const signatureFlags = 3;

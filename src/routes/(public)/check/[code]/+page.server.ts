@@ -1,4 +1,6 @@
-import { checkReport } from '$lib/server/check/check-report';
+import { redirect } from '@sveltejs/kit';
 import type { PageServerLoad } from './$types';
 
-export const load: PageServerLoad = async ({ params }) => ({ standing: await checkReport(params.code) });
+/** Reports printed before the page moved carry this address in their code. */
+export const load: PageServerLoad = ({ params }) =>
+	redirect(308, `/verify/${encodeURIComponent(params.code)}`);
