@@ -1,13 +1,13 @@
 /** `npm start`: from a clean clone to a served product with its demo. No dependencies: it installs them. */
 import { spawn } from 'node:child_process';
-import { existsSync, readFileSync } from 'node:fs';
-import { join, resolve } from 'node:path';
+import { join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
 import { databasePrograms, ensurePrograms } from './setup/debian.mjs';
 import { startDatabase } from './setup/mariadb.mjs';
 import { prepareProject, projectFolder } from './setup/project.mjs';
 import { run } from './setup/run.mjs';
 import { SetupFault, endWith, say, step } from './setup/say.mjs';
+import { dataFolder, readDotEnv } from './setup/settings.mjs';
 
 const startedMs = performance.now();
 /** @type {(() => Promise<void> | void)[]} */
@@ -22,17 +22,6 @@ async function stop(code = 0) {
 }
 // Ctrl-C reaches npm and this program both, so the signal can come twice.
 for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => void stop());
-
-/** Settings in .env count where the environment is silent. */
-function readDotEnv() {
-	const path = join(projectFolder, '.env');
-	if (!existsSync(path)) return;
-	for (const line of readFileSync(path, 'utf8').split('\n')) {
-		const match = /^\s*([A-Z0-9_]+)\s*=\s*(.*?)\s*$/.exec(line);
-		if (match?.[1] && process.env[match[1]] === undefined)
-			process.env[match[1]] = match[2]?.replace(/^"(.*)"$/, '$1');
-	}
-}
 
 /** @param {NodeJS.ProcessEnv} env @param {number} port */
 async function serve(env, port) {
@@ -62,7 +51,7 @@ async function serve(env, port) {
 async function main() {
 	readDotEnv();
 	const isPrivate = !process.env.DATABASE_URL;
-	const data = resolve(projectFolder, process.env.WHARFINGER_DATA || '.data');
+	const data = dataFolder();
 	const port = Number(process.env.PORT || 3000);
 	const inUse = await fetch(`http://127.0.0.1:${port}/`).then(
 		() => true,

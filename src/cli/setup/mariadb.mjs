@@ -74,6 +74,11 @@ function runningPid(pidFile) {
 	return pid > 0 && isAlive(pid) ? pid : null;
 }
 
+/** Whether the private server of `folder` runs now. @param {string} folder absolute */
+export function isRunning(folder) {
+	return runningPid(join(folder, 'mariadbd.pid')) !== null;
+}
+
 /** @param {string} folder @param {Access} access @param {string[]} extra */
 function serverArguments(folder, access, extra) {
 	const sockets = socketFolder(folder);

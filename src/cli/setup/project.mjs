@@ -51,9 +51,11 @@ async function installDependencies() {
 	writeFileSync(stamp, digest);
 }
 
-async function build() {
-	const stamp = join(projectFolder, 'build/.sources-sha256');
-	const digest = digestOf([
+const productStamp = join(projectFolder, 'build/.sources-sha256');
+const programsStamp = join(projectFolder, 'build/.programs-sha256');
+
+function digestOfSources() {
+	return digestOf([
 		'src',
 		'static',
 		'package-lock.json',
@@ -62,13 +64,35 @@ async function build() {
 		'tailwind.config.ts',
 		'tsconfig.json'
 	]);
-	if (isStamped(stamp, digest)) return;
+}
+
+/** @param {string[]} options */
+function viteBuild(options) {
+	const vite = join(projectFolder, 'node_modules/vite/bin/vite.js');
+	return run(process.execPath, [vite, 'build', ...options], { cwd: projectFolder });
+}
+
+async function build() {
+	const digest = digestOfSources();
+	if (isStamped(productStamp, digest)) return;
 	await step('Building', async () => {
-		const vite = join(projectFolder, 'node_modules/vite/bin/vite.js');
-		await run(process.execPath, [vite, 'build'], { cwd: projectFolder });
-		await run(process.execPath, [vite, 'build', '--mode', 'node'], { cwd: projectFolder });
+		await viteBuild([]);
+		await viteBuild(['--mode', 'node']);
 	});
-	writeFileSync(stamp, digest);
+	writeFileSync(productStamp, digest);
+	writeFileSync(programsStamp, digest);
+}
+
+/** Only what runs outside the server, for a program that needs no more: seconds instead of a minute. */
+export async function preparePrograms() {
+	checkNode();
+	await withLock(join(projectFolder, '.preparing.lock'), async () => {
+		if (!existsSync(join(projectFolder, 'node_modules/vite'))) await installDependencies();
+		const digest = digestOfSources();
+		if (isStamped(programsStamp, digest)) return;
+		await step('Building', () => viteBuild(['--mode', 'node']));
+		writeFileSync(programsStamp, digest);
+	});
 }
 
 /** Packages installed and the product built, each only when something changed since. */

@@ -6,6 +6,11 @@
 export const temperatureUnits = ['celsius', 'fahrenheit', 'kelvin'] as const;
 export type TemperatureUnit = (typeof temperatureUnits)[number];
 
+/** Whether a text names one of them. */
+export function isTemperatureUnit(text: string | null): text is TemperatureUnit {
+	return temperatureUnits.some((unit) => unit === text);
+}
+
 /** 0 °C in kelvin, exact. Source: SI Brochure, 9th edition, 2.3.1. */
 export const zeroCelsiusInKelvin = 273.15;
 

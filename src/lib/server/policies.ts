@@ -17,6 +17,8 @@ const acts = {
 	'arrival.log': ['dock', 'qa'],
 	'read.upload': ['dock', 'qa'],
 	'read.withdraw': ['qa'],
+	/** A file is read for the caller and nothing is kept. */
+	'read.inspect': staff,
 	'note.write': staff,
 	'photo.add': ['dock', 'qa'],
 	'hold.put': ['dock', 'qa'],

@@ -164,7 +164,6 @@ export type DecisionReason =
 	| 'mean'
 	| 'twin'
 	/** Of what the file is written in. */
-	| 'signature'
 	| 'found';
 
 /** How the file was understood: enough to read it again to the same digits. */

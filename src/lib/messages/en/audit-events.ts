@@ -43,6 +43,8 @@ const sentences: Record<string, string> = {
 	'account.password-set': 'Password set',
 	'account.locked': 'Account locked',
 	'account.unlocked': 'Account unlocked',
+	'account.token-made': 'API token made',
+	'account.token-revoked': 'API token revoked',
 	'session.opened': 'Signed in',
 	'session.refused': 'Sign-in refused',
 	'site.saved': 'Site saved',

@@ -95,3 +95,10 @@ export function choiceLabel({ code, subject }: Question, { label, answer }: Choi
 	if (code !== 'start') return label;
 	return label === 'upload' ? 'Back from the upload' : 'When the load was loaded';
 }
+
+/** A reading as a choice would have it: `2026-04-03 06:10:00 UTC, 4.5 °C`; null where neither is known. */
+export function choiceReading(ms: number | null, celsius: number | null): string | null {
+	const at = ms === null ? null : `${new Date(ms).toISOString().slice(0, 19).replace('T', ' ')} UTC`;
+	const value = celsius === null ? null : `${Math.round(celsius * 100) / 100} °C`;
+	return [at, value].filter((part) => part !== null).join(', ') || null;
+}

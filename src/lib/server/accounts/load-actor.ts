@@ -15,6 +15,11 @@ async function loadUser({ subjectId, tokenVersion }: Claims): Promise<Actor | nu
 	const user = await User.findByPk(subjectId);
 	// A raised version ends every session opened before: after switching off, a new password, changed roles.
 	if (!user || user.switchedOffAt || user.tokenVersion !== tokenVersion) return null;
+	return actorOfUser(user);
+}
+
+/** A user as an actor, with the sites they work at now. */
+export async function actorOfUser(user: User): Promise<Actor> {
 	const sites = await UserSite.findAll({ where: { userId: user.id } });
 	return {
 		kind: 'user',

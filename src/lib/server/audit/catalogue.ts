@@ -9,6 +9,8 @@ export interface EventData {
 	'account.password-set': { userId: string };
 	'account.locked': { userId: string; failedPasswords: number };
 	'account.unlocked': { userId: string };
+	'account.token-made': { userId: string; tokenId: string };
+	'account.token-revoked': { userId: string; tokenId: string };
 	'session.opened': { by: 'password' | 'link'; userId: string };
 	'session.refused': { email: string; why: string };
 	'act.refused': { act: string; why: string; shipmentId: string | null; route: string; method: string };

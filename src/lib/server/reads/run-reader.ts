@@ -1,21 +1,26 @@
 import { join } from 'node:path';
 import { Worker } from 'node:worker_threads';
 import { Refusal } from '../refusals';
+import type { InspectAnswer } from '../../schemas/inspect';
+import { inspectFile, type InspectFileOrder } from './inspect-file';
 import { readBytes, type ReadOrder, type ReadResult } from './read-bytes';
 
-/** Where `vite build --mode node` leaves the worker, from the folder the server is started in. */
-const builtWorker = join('build', 'node', 'read-worker.js');
+/** Where `vite build --mode node` leaves the workers, from the folder the server is started in. */
+const builtFolder = join('build', 'node');
 /** No export a dock brings takes longer; one that does is built to. */
 const longestReadMs = 60_000;
 const mostMemoryMegabytes = 1024;
 /** More at once would only wait for each other. */
 const mostAtOnce = 2;
 
-let builtProgram = import.meta.env.PROD ? join(process.cwd(), builtWorker) : null;
+let isBuilt: boolean = import.meta.env.PROD;
+
+const builtProgram = (name: string): string | null =>
+	isBuilt ? join(process.cwd(), builtFolder, name) : null;
 
 /** For a program that reads many small exports of its own making, such as the seed: a thread each would cost more. */
 export function readInPlace(): void {
-	builtProgram = null;
+	isBuilt = false;
 }
 
 let running = 0;
@@ -25,30 +30,44 @@ const waiting: (() => void)[] = [];
  * Reads an export in a thread of its own, so that a long file holds up nobody and a hostile one ends alone.
  * Unbuilt, in development and tests, it is read in place.
  */
-export async function runReader(order: ReadOrder, program = builtProgram): Promise<ReadResult> {
-	if (program === null) return readBytes(order);
+export async function runReader(
+	order: ReadOrder,
+	program = builtProgram('read-worker.js')
+): Promise<ReadResult> {
+	return program === null ? readBytes(order) : inTurn<ReadResult>(order, program);
+}
+
+/** Inspects a file in a thread likewise; the two kinds wait for each other. */
+export async function runInspector(
+	order: InspectFileOrder,
+	program = builtProgram('inspect-worker.js')
+): Promise<InspectAnswer> {
+	return program === null ? inspectFile(order) : inTurn<InspectAnswer>(order, program);
+}
+
+async function inTurn<Result>(order: unknown, program: string): Promise<Result> {
 	if (running >= mostAtOnce) await new Promise<void>((resolve) => waiting.push(resolve));
 	running++;
 	try {
-		return await readInThread(order, program);
+		return await inThread<Result>(order, program);
 	} finally {
 		running--;
 		waiting.shift()?.();
 	}
 }
 
-function readInThread(order: ReadOrder, program: string): Promise<ReadResult> {
+function inThread<Result>(order: unknown, program: string): Promise<Result> {
 	const worker = new Worker(program, {
 		workerData: order,
 		resourceLimits: { maxOldGenerationSizeMb: mostMemoryMegabytes }
 	});
-	return new Promise<ReadResult>((resolve, reject) => {
+	return new Promise<Result>((resolve, reject) => {
 		const timer = setTimeout(() => reject(new Refusal('file-too-heavy')), longestReadMs);
 		const end = (act: () => void) => {
 			clearTimeout(timer);
 			act();
 		};
-		worker.once('message', (result: ReadResult) => end(() => resolve(result)));
+		worker.once('message', (result: Result) => end(() => resolve(result)));
 		worker.once('error', (error) =>
 			end(() => reject(isOutOfMemory(error) ? new Refusal('file-too-heavy') : error))
 		);

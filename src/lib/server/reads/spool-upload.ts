@@ -10,6 +10,8 @@ import { Refusal } from '../refusals';
 /** One file of an upload on this machine's disk. */
 export interface SpooledFile {
 	path: string;
+	/** The form's name for it. */
+	field: string;
 	fileName: string;
 	mediaType: string;
 	bytes: number;
@@ -48,8 +50,8 @@ export async function spoolUpload(
 	try {
 		const parser = parserFor(contentType, maxBytes, maxFiles);
 		parser.on('field', (name, value) => void fields.set(name, [...(fields.get(name) ?? []), value]));
-		parser.on('file', (_, stream, info) => {
-			const written = writeOne(stream, info, join(place, String(writes.length)), maxBytes);
+		parser.on('file', (field, stream, info) => {
+			const written = writeOne(stream, { ...info, field }, join(place, String(writes.length)), maxBytes);
 			// An error before anyone awaits this would otherwise end the process.
 			written.catch(() => {});
 			writes.push(written);
@@ -80,7 +82,7 @@ function parserFor(contentType: string | null, maxBytes: number, maxFiles: numbe
 
 async function writeOne(
 	stream: Readable,
-	info: busboy.FileInfo,
+	info: busboy.FileInfo & { field: string },
 	path: string,
 	maxBytes: number
 ): Promise<SpooledFile | null> {
@@ -101,6 +103,7 @@ async function writeOne(
 	if (!info.filename && bytes === 0) return null;
 	return {
 		path,
+		field: info.field,
 		fileName: safeFileName(info.filename),
 		mediaType: info.mimeType || 'application/octet-stream',
 		bytes,

@@ -1,7 +1,8 @@
 import { Gunzip } from 'fflate';
 import { maxFileBytes } from '../bounds';
 
-export type Gunzipped = { readonly bytes: Uint8Array } | { readonly fault: 'too-large' | 'broken-gzip' };
+export type Gunzipped =
+	{ readonly bytes: Uint8Array } | { readonly fault: 'too-large' | 'broken-gzip' | 'truncated' };
 
 /** A piece of this size unpacks to 1 MB at most: deflate packs no tighter than 1032 to 1. */
 const pieceBytes = 1024;
@@ -31,6 +32,13 @@ function trailerMatches(packed: Uint8Array, plain: Uint8Array): boolean {
 	return length === plain.length && checksum === crc32(plain);
 }
 
+/** fflate's code for an end inside a block. */
+const unexpectedEnd = 0;
+
+function isCutShort(error: unknown): boolean {
+	return error instanceof Error && 'code' in error && error.code === unexpectedEnd;
+}
+
 function unpack(packed: Uint8Array): Gunzipped {
 	const pieces: Uint8Array[] = [];
 	let total = 0;
@@ -42,9 +50,9 @@ function unpack(packed: Uint8Array): Gunzipped {
 		for (let at = 0; at < packed.length && total <= maxFileBytes; at += pieceBytes) {
 			stream.push(packed.subarray(at, at + pieceBytes), at + pieceBytes >= packed.length);
 		}
-	} catch {
+	} catch (error) {
 		// fflate throws on any malformed block; what it unpacked so far cannot be trusted.
-		return { fault: 'broken-gzip' };
+		return { fault: isCutShort(error) ? 'truncated' : 'broken-gzip' };
 	}
 	if (total > maxFileBytes) return { fault: 'too-large' };
 	const bytes = new Uint8Array(total);

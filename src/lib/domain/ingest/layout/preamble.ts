@@ -33,7 +33,7 @@ const keys = {
 	stop: /\b(stop(ped|zeit)?|end(ed|e|zeit|time)?|fin|ende|fine|final|einde|koniec|zakonczenie|bitis|last (reading|record|log|sample)|letzte messung|to|bis)\b|结束|終了|停止/,
 	interval:
 		/\b(interval\w*|intervall\w*|intervalo|intervallo|interwal\w*|cadence|messtakt|takt|sampling|sample (rate|period|every)|log(ging)? (rate|period|cycle|every)|rate|period(o|e|icidad)?|aufzeichnungsrate|messrate|czestotliwosc|aralik|every)\b|间隔|間隔/,
-	zone: /\b(time ?zone|tz|zeitzone|fuseau( horaire)?|zona horaria|fuso( horario| orario)?|tijdzone|strefa czasowa|saat dilimi|utc offset|gmt offset|time offset|all times)\b|时区|時區|タイムゾーン/,
+	zone: /\b(time ?zone|zone|tz|zeitzone|fuseau( horaire)?|zona horaria|fuso( horario| orario)?|tijdzone|strefa czasowa|saat dilimi|utc offset|gmt offset|time offset|all times)\b|时区|時區|タイムゾーン/,
 	unit: /\b(unit|units|einheit|unite|unidad|unidade|unita|eenheid|jednostka|birim|scale|temperatureinheit|temperatureenheid|uom)\b|单位|單位|単位/,
 	format: /\b(date ?format|datumsformat|format)\b/
 } as const;

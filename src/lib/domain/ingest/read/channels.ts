@@ -1,29 +1,32 @@
 import { usualIntervalMs } from '../../trace/interval';
 import type { Quantity } from '../../trace/trace';
-import { celsiusFromScaled } from '../../units';
+import { celsiusFromScaled, type TemperatureUnit } from '../../units';
 import type { Channel } from '../ingestion';
 import type { Series } from './series';
 
 /** A step over this many usual intervals is told as a long one. */
 const longFactor = 1.5;
 
-/** Mean by Neumaier's compensated sum: the same digits whatever the length. */
+/** The sum is of whole numbers, so it is exact; the mean is converted and divided once. */
 function statisticsOf({ scaled, decimals, unit }: Series): { min: number; max: number; mean: number } {
-	let [low, high, sum, rest] = [Infinity, -Infinity, 0, 0];
+	let [low, high, sum] = [Infinity, -Infinity, 0];
 	for (let i = 0; i < scaled.length; i++) {
 		const value = scaled[i] ?? 0;
 		if (value < low) low = value;
 		if (value > high) high = value;
-		const celsius = celsiusFromScaled(value, decimals, unit);
-		const next = sum + celsius;
-		rest += Math.abs(sum) >= Math.abs(celsius) ? sum - next + celsius : celsius - next + sum;
-		sum = next;
+		sum += value;
 	}
 	return {
 		min: celsiusFromScaled(low, decimals, unit),
 		max: celsiusFromScaled(high, decimals, unit),
-		mean: (sum + rest) / scaled.length
+		mean: meanCelsius(sum, scaled.length, 10 ** decimals, unit)
 	};
+}
+
+function meanCelsius(sum: number, count: number, scale: number, unit: TemperatureUnit): number {
+	if (unit === 'celsius') return sum / (count * scale);
+	if (unit === 'fahrenheit') return ((sum - 32 * scale * count) * 5) / (9 * scale * count);
+	return (sum * 100 - 27_315 * scale * count) / (100 * scale * count);
 }
 
 /** Steps over 1.5 usual intervals, each as its two ends one after the other. */

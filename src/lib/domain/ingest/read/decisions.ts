@@ -2,17 +2,17 @@ import type { Decision, ReadContext } from '../ingestion';
 import { nameOf } from './all-channels';
 import type { Readable } from './readable';
 
-const utf = /^utf-?(8|16)/i;
+const isStandard = ({ kind }: Readable['table']): boolean => kind === 'senml' || kind === 'epcis';
 
 function writing({ table, encoding }: Readable, decimalComma: boolean): Decision[] {
 	const made: Decision[] = [
 		{
 			field: 'layout',
 			value: table.kind,
-			because: table.kind === 'senml' || table.kind === 'epcis' ? 'standard' : 'found',
+			because: isStandard(table) ? 'standard' : 'found',
 			detail: null
 		},
-		{ field: 'encoding', value: encoding, because: utf.test(encoding) ? 'signature' : 'found', detail: null }
+		{ field: 'encoding', value: encoding, because: 'found', detail: null }
 	];
 	if (table.delimiter !== null)
 		made.push({ field: 'delimiter', value: table.delimiter, because: 'found', detail: null });
@@ -30,7 +30,7 @@ function zone({ axis, timing, gathered }: Readable): Decision {
 function unit({ unit: value, column, values, stated, table }: Readable, isAnswered: boolean): Decision {
 	const because = isAnswered
 		? 'answer'
-		: table.kind === 'senml' || table.kind === 'epcis'
+		: isStandard(table)
 			? 'standard'
 			: values.unit === value
 				? 'beside-values'
@@ -74,7 +74,7 @@ type Answered = ReadContext['answers'];
 export function decisionsOf(readable: Readable, decimalComma: boolean, { answers }: ReadContext): Decision[] {
 	const { axis, table } = readable;
 	const made = [...writing(readable, decimalComma), ...(table.decisions ?? [])];
-	if (axis.order !== null && axis.orderBy !== null)
+	if (axis.order !== null && axis.orderBy !== null && !isStandard(table))
 		made.push({ field: 'dateOrder', value: axis.order, because: axis.orderBy, detail: null });
 	made.push(zone(readable), column(readable, answers.temperatureColumn !== undefined));
 	made.push(unit(readable, answers.unit !== undefined), ...running(readable, answers));

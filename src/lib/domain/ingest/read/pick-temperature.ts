@@ -69,6 +69,17 @@ function isOther({ name, meaning, isCounter, constant }: Column): boolean {
 	);
 }
 
+/** The column an answer means: by its place, its head, or its head in other letters. */
+function answeredColumn(columns: readonly Column[], answer: string | undefined): Column | undefined {
+	if (answer === undefined) return undefined;
+	const folded = answer.trim().toLowerCase();
+	return (
+		columns.find(({ index }) => String(index) === answer) ??
+		columns.find(({ name }) => name === answer) ??
+		columns.find(({ name }) => name.trim().toLowerCase() === folded)
+	);
+}
+
 /** Finds the temperature columns: by head and unit first; else the number columns that nothing else explains. */
 export function pickTemperature(
 	columns: readonly Column[],
@@ -83,10 +94,7 @@ export function pickTemperature(
 	const besides = (chosen: readonly Column[]): readonly Column[] =>
 		measured.filter((column) => !chosen.includes(column) && (quantityOf(column) !== null || isOther(column)));
 	const named = measured.filter((column) => quantityOf(column) === 'temperature');
-	const answered = measured.find(
-		(column) =>
-			String(column.index) === answers.temperatureColumn || column.name === answers.temperatureColumn
-	);
+	const answered = answeredColumn(measured, answers.temperatureColumn);
 	if (answered !== undefined) return { candidates: [answered], twins: [], others: besides([answered]) };
 	if (named.length > 0) {
 		const { chosen, twins } = splitTwins(withoutExtremes(named));

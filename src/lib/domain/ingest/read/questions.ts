@@ -157,6 +157,12 @@ export function unitQuestion(
 	};
 }
 
+/** A column's head where it stands for no other, so that the answer fits the next file of the make; else its place. */
+function answerNaming({ name, index }: Column, header: readonly string[]): string {
+	const isOwn = header.filter((other) => other === name).length === 1;
+	return isOwn && !/^\d*$/.test(name) ? name : String(index);
+}
+
 /** Which of several temperature columns rode with the goods: only a person knows. */
 export function columnQuestion(
 	table: Table,
@@ -168,7 +174,7 @@ export function columnQuestion(
 	const [first] = columns;
 	const subjectOf = (row: number): string => (table.cells(row)[first?.index ?? 0] ?? '').trim();
 	const choices = columns.map((column) => ({
-		answer: { temperatureColumn: String(column.index) },
+		answer: { temperatureColumn: answerNaming(column, table.header) },
 		label: column.name === '' ? String(column.index + 1) : column.name,
 		...spanOf(ms),
 		...celsiusEnds(

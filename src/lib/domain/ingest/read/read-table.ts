@@ -10,6 +10,7 @@ import { gather } from './gather';
 import type { Gathered } from './gathered';
 import type { Readable } from './readable';
 import { declaredBy, understand } from './understand';
+import { hasPlausibleDate } from './plausible-dates';
 import { pickTemperature, type Picked } from './pick-temperature';
 import { celsiusEnds, columnQuestion, timeQuestion, unitQuestion } from './questions';
 import { refused } from './refusals';
@@ -59,6 +60,13 @@ function gatherAll(table: Table, { timing, picked }: Plan): Gathered {
 	return gather(table, timing, [...needed, ...(others.length <= room ? others : [])], needed);
 }
 
+function implausible({ lines }: Gathered, ms: Float64Array): Ingestion {
+	const at = ms.findIndex((moment) => !Number.isNaN(moment));
+	const found = new Date(ms[at] ?? 0);
+	const day = Number.isNaN(found.getTime()) ? null : found.toISOString().slice(0, 10);
+	return refused('implausible-dates', lines[at] ?? null, day);
+}
+
 /** Reads a table to an understanding, to one question, or to a refusal. */
 export function readTable(table: Table, encoding: string, context: ReadContext): Ingestion {
 	const columns = profileColumns(table);
@@ -91,6 +99,7 @@ export function readTable(table: Table, encoding: string, context: ReadContext):
 		};
 	}
 	const ms = axis.ms.subarray(0, gathered.count);
+	if (!hasPlausibleDate(ms, context.uploadedMs)) return implausible(gathered, ms);
 	if (picked.candidates.length > 1) {
 		return {
 			kind: 'question',

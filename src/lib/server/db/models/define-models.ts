@@ -51,6 +51,7 @@ import { defineAuditPayload } from './audit-payload';
 import { defineAuditCheckpoint } from './audit-checkpoint';
 import { defineJob } from './job';
 import { defineToken } from './token';
+import { defineApiToken } from './api-token';
 import { defineLinkSession } from './link-session';
 import { defineRateLimit } from './rate-limit';
 import { defineSetting } from './setting';
@@ -111,6 +112,7 @@ export function defineModels(sequelize: Sequelize): void {
 	defineAuditCheckpoint(sequelize);
 	defineJob(sequelize);
 	defineToken(sequelize);
+	defineApiToken(sequelize);
 	defineLinkSession(sequelize);
 	defineRateLimit(sequelize);
 	defineSetting(sequelize);
