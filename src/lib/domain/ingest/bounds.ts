@@ -4,5 +4,7 @@ export const maxReadings = 5_000_000;
 /** Of delimited text only: minified JSON is one line. */
 export const maxLineChars = 64 * 1024;
 export const maxJsonDepth = 64;
+/** Brackets, commas and colons of a JSON text: two to three for each cell of a reading. */
+export const maxJsonValues = 20_000_000;
 /** Values with more decimals are rounded to these: no logger resolves 0.0001 °C. */
 export const maxDecimals = 4;

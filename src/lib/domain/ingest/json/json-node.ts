@@ -4,7 +4,7 @@ export interface JsonObject {
 	readonly type: 'object';
 	readonly at: number;
 	/** Plain parallel lists: a key named `__proto__` is a key like any other. */
-	readonly keys: string[];
+	readonly keys: readonly string[];
 	readonly values: JsonNode[];
 }
 export interface JsonArray {
@@ -21,6 +21,9 @@ export type JsonNode = JsonObject | JsonArray | JsonNumber | string | boolean | 
 
 export type JsonFault = { readonly code: 'broken-json' | 'too-deep' | 'truncated'; readonly at: number };
 export type JsonParsed = { readonly node: JsonNode; readonly end: number } | JsonFault;
+
+/** Heads of rows repeat: a list of keys that equals the last row's is kept once. */
+const mostSharedKeys = 64;
 
 class FaultAt extends Error {
 	constructor(readonly fault: JsonFault) {
@@ -40,9 +43,15 @@ const escapes: Readonly<Record<string, string>> = {
 	t: '\t'
 };
 
+const longestShared = 8;
+const sharedNumbers = 8192;
+
 /** One pass over the text by the grammar of RFC 8259, with a bound on depth. NaN and Infinity are taken as null. */
 class Reader {
 	i: number;
+	/** By depth, the keys of the object read last. */
+	readonly lastKeys: (readonly string[])[] = [];
+	readonly numbers: (JsonNumber | undefined)[] = [];
 	constructor(
 		readonly text: string,
 		from: number
@@ -76,22 +85,45 @@ class Reader {
 	}
 
 	object(depth: number): JsonObject {
-		const node: JsonObject = { type: 'object', at: this.i++, keys: [], values: [] };
+		const at = this.i++;
+		const known = this.lastKeys[depth] ?? [];
+		const values: JsonNode[] = [];
+		let own: string[] | null = null;
 		if (this.space() === 125) {
 			this.i++;
-			return node;
+			return { type: 'object', at, keys: [], values };
 		}
 		for (;;) {
 			if (this.space() !== 34) this.fail();
-			node.keys.push(this.string());
+			const expected = known[values.length];
+			if (own === null && expected !== undefined && this.startsWithKey(expected)) {
+				this.i += expected.length + 2;
+			} else {
+				own ??= known.slice(0, values.length);
+				own.push(this.string());
+			}
 			if (this.space() !== 58) this.fail();
 			this.i++;
-			node.values.push(this.value(depth + 1));
+			values.push(this.value(depth + 1));
 			const next = this.space();
 			if (next !== 44 && next !== 125) this.fail();
 			this.i++;
-			if (next === 125) return node;
+			if (next === 125) break;
 		}
+		const keys = own ?? (values.length === known.length ? known : known.slice(0, values.length));
+		if (keys.length <= mostSharedKeys) this.lastKeys[depth] = keys;
+		return { type: 'object', at, keys, values };
+	}
+
+	/** Whether the quoted key at this place is just this text; one with escapes is read in full. */
+	startsWithKey(key: string): boolean {
+		const { text, i } = this;
+		if (text.charCodeAt(i + key.length + 1) !== 34) return false;
+		for (let k = 0; k < key.length; k++) {
+			const code = text.charCodeAt(i + 1 + k);
+			if (code !== key.charCodeAt(k) || code === 92 || code === 34) return false;
+		}
+		return true;
 	}
 
 	array(depth: number): JsonArray {
@@ -146,11 +178,23 @@ class Reader {
 
 	number(): JsonNode {
 		numberPattern.lastIndex = this.i;
-		const text = numberPattern.exec(this.text)?.[0];
-		if (text === undefined)
+		if (!numberPattern.test(this.text))
 			return this.text.startsWith('-Infinity', this.i) ? this.nothing('-Infinity') : this.fail();
-		this.i += text.length;
-		return { type: 'number', text };
+		const [from, to] = [this.i, numberPattern.lastIndex];
+		this.i = to;
+		return this.numberAt(from, to);
+	}
+
+	/** Temperatures come back again and again: each short text is kept once. */
+	numberAt(from: number, to: number): JsonNumber {
+		if (to - from > longestShared) return { type: 'number', text: this.text.slice(from, to) };
+		let hash = 0;
+		for (let i = from; i < to; i++) hash = (hash * 31 + this.text.charCodeAt(i)) & (sharedNumbers - 1);
+		const known = this.numbers[hash];
+		if (known?.text.length === to - from && this.text.startsWith(known.text, from)) return known;
+		const number: JsonNumber = { type: 'number', text: this.text.slice(from, to) };
+		this.numbers[hash] = number;
+		return number;
 	}
 
 	nothing(word: string): null {

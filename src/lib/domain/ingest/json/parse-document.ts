@@ -1,4 +1,5 @@
 import type { RefusalCode } from '../ingestion';
+import { outlineFault } from './json-outline';
 import { parseJson, type JsonNode } from './json-node';
 import { lineFinder } from './line-finder';
 
@@ -13,6 +14,8 @@ const space = /[\s,\ufeff\u001e]*/y;
 /** A JSON text, or JSON Lines: values one after the other, taken as one list. A last line cut short is dropped, told. */
 export function parseDocument(text: string): JsonDocument {
 	const lineOf = lineFinder(text);
+	const fault = outlineFault(text);
+	if (fault !== null) return { code: fault.code, line: lineOf(fault.at), found: excerpt(text, fault.at) };
 	const values: JsonNode[] = [];
 	let cutAtLine: number | null = null;
 	for (let at = skip(text, 0); at < text.length;) {
