@@ -49,7 +49,7 @@ const tests: UserConfig['test'] = {
 					'src/lib/domain/**/*.test.ts',
 					'src/lib/*.test.ts',
 					'src/lib/{schemas,messages}/**/*.test.ts',
-					'tests/accuracy/**/*.test.ts',
+					'tests/{accuracy,fuzz}/**/*.test.ts',
 					'tests/*.test.ts'
 				]
 			}
