@@ -61,7 +61,8 @@ export async function enterProduct(page: Page): Promise<void> {
 	await page.getByRole('button', { name: /^Save (as )?draft/ }).click();
 	await expect(page.getByLabel('Why this version')).toBeVisible();
 	await page.getByLabel('Why this version').fill('first version');
-	await page.getByLabel('Your password, again').fill(demoPassword);
+	await page.getByLabel('Your e-mail').fill('admin@wharfinger.example');
+	await page.getByLabel('Password').fill(demoPassword);
 	await page.getByRole('button', { name: 'Sign version 1' }).click();
 	await expect(page.getByRole('row', { name: /^v1 / })).toContainText('Hanneke Pryce');
 }

@@ -13,6 +13,8 @@ export async function rejectAndSign(page: Page, docket: string): Promise<void> {
 	await page.getByRole('radio', { name: /^Approval/ }).check();
 	await expect(page.getByRole('checkbox', { name: /^Notice to/ })).toBeChecked();
 
+	// The first signature of a session shows every component.
+	await page.getByLabel('Your e-mail').fill('qa@wharfinger.example');
 	await page.getByLabel('Password').fill('not-my-password');
 	await page.getByRole('button', { name: 'Sign as Ruth Calloway' }).click();
 	await expect(

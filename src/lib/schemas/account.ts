@@ -19,7 +19,11 @@ const newPassword = z
 
 export const signInForm = z.object({
 	email: z.string().trim().min(1, 'Enter your e-mail address.').max(254, 'That is too long for an address.'),
-	password: z.string().min(1, 'Enter your password.').max(longestPassword, 'That is too long for a password.')
+	password: z
+		.string()
+		.min(1, 'Enter your password.')
+		.max(longestPassword, 'That is too long for a password.'),
+	code: z.string().trim().max(12).default('')
 });
 
 export const linkRequestForm = z.object({ email: emailField });
@@ -107,3 +111,15 @@ export function ownPath(to: string | null): string | null {
 	const url = new URL(to, base);
 	return url.origin === base ? url.pathname + url.search + url.hash : null;
 }
+
+export const secondFactorBeginForm = z.object({
+	password: z.string().min(1, 'Enter your password.').max(longestPassword)
+});
+
+export const secondFactorCodeForm = z.object({
+	code: z.string().trim().min(1, 'Enter the six digits your authenticator shows.').max(12)
+});
+
+export const secondFactorRemoveForm = secondFactorBeginForm.extend({
+	code: z.string().trim().max(12).default('')
+});

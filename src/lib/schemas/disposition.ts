@@ -42,6 +42,9 @@ export const dispositionSchema = z.object({
 	reasons: z.string().trim().max(4000, 'At most 4,000 characters.').default(''),
 	meaning: z.enum(meanings, 'Say what this signature means.'),
 	password: z.string().min(1, 'Enter your password: it is asked at every signature.'),
+	/** Of the first signature of a series. */
+	email: z.string().trim().max(254).optional(),
+	code: z.string().trim().max(12).optional(),
 	evidenceSha256: z.string().regex(/^[0-9a-f]{64}$/, 'Open the page again: what you sign was not shown.'),
 	amendmentReason: optionalText(1000),
 	notify: z

@@ -15,6 +15,8 @@ export const specSignForm = z.object({
 	figuresSha256: sha256,
 	reason: neededText(500, 'Say why: it stands in the ledger of versions and in the record.'),
 	password: z.string({ error: 'Enter your password.' }).min(1, 'Enter your password.').max(200),
+	email: z.string().trim().max(254).default(''),
+	code: z.string().trim().max(12).default(''),
 	inForceOn: optionalDay
 });
 export type SpecSignForm = z.output<typeof specSignForm>;

@@ -14,6 +14,8 @@ export interface Actor {
 	/** Set for a session opened by a mailed link: the one docket it sees. */
 	shipmentId: string | null;
 	temperatureUnit: 'celsius' | 'fahrenheit' | null;
+	/** The session a person works in; without one (a job, a program) nothing is signed in series. */
+	sessionId?: string | null;
 }
 
 /** How a caller came in: by password, by a mailed link, by an API token, or as the program itself. */

@@ -16,6 +16,15 @@ const refusals = {
 		message: 'Somebody changed this docket while you were looking at it. Look again, then sign.'
 	},
 	'wrong-password': { status: 422, message: 'That is not your password. Nothing was signed.' },
+	'code-needed': {
+		status: 422,
+		message: 'This account has a second factor. Enter the code your authenticator shows now.'
+	},
+	'wrong-code': {
+		status: 422,
+		message: 'That code is not the one for now. Look at your authenticator again, and at your phone’s clock.'
+	},
+	'second-factor-set': { status: 409, message: 'A second factor is set up already.' },
 	'last-admin': {
 		status: 409,
 		message: 'This is the last admin who can sign in. Make somebody else an admin first.'

@@ -45,6 +45,7 @@ const sentences: Record<string, string> = {
 	'account.unlocked': 'Account unlocked',
 	'account.token-made': 'API token made',
 	'account.token-revoked': 'API token revoked',
+	'account.second-factor': 'Second factor changed',
 	'session.opened': 'Signed in',
 	'session.refused': 'Sign-in refused',
 	'site.saved': 'Site saved',

@@ -22,10 +22,12 @@ const asUser = (claims: Claims | null) => (claims ? { id: claims.subjectId, clai
 
 const byPassword = Credentials({
 	id: 'password',
-	credentials: { email: {}, password: {} },
-	async authorize({ email, password }) {
+	credentials: { email: {}, password: {}, code: {} },
+	async authorize({ email, password, code }) {
 		if (typeof email !== 'string' || typeof password !== 'string') return null;
-		return asUser(await signInByPassword(email, password, requestScope()));
+		return asUser(
+			await signInByPassword(email, password, requestScope(), typeof code === 'string' ? code : null)
+		);
 	}
 });
 
@@ -95,9 +97,30 @@ function isRedirect(error: unknown): boolean {
 	return typeof error === 'object' && error !== null && 'status' in error && 'location' in error;
 }
 
-/** Sets the session cookie for a right pair. @returns false for a wrong one. @throws Refusal `too-many-attempts`, `switched-off`, `locked` */
-export function signInWithPassword(event: RequestEvent, email: string, password: string): Promise<boolean> {
-	return signIn(event, 'password', { email, password });
+/** Sets the session cookie for a right pair. @returns false for a wrong one. @throws Refusal `too-many-attempts`, `switched-off`, `locked`, `code-needed`, `wrong-code` */
+export function signInWithPassword(
+	event: RequestEvent,
+	{ email, password, code }: { email: string; password: string; code: string }
+): Promise<boolean> {
+	return signIn(event, 'password', { email, password, code });
+}
+
+/**
+ * Opens a session for who has just set this password; an account with a second factor shows its code at the sign-in
+ * page first. @returns where to go
+ */
+export async function goOnWithPassword(
+	event: RequestEvent,
+	email: string,
+	password: string
+): Promise<string> {
+	try {
+		await signInWithPassword(event, { email, password, code: '' });
+		return '/';
+	} catch (error) {
+		if (error instanceof Refusal && error.code === 'code-needed') return '/sign-in';
+		throw error;
+	}
 }
 
 /** Uses a mailed link up and sets the session cookie. @returns false when the link no longer works. */

@@ -11,7 +11,7 @@ export function rolesOf(user: User): Role[] {
 	return roles.filter((role) => kept.includes(role));
 }
 
-async function loadUser({ subjectId, tokenVersion }: Claims): Promise<Actor | null> {
+async function loadUser({ subjectId, tokenVersion, sessionId }: Claims): Promise<Actor | null> {
 	const user = await User.findByPk(subjectId);
 	// A raised version ends every session opened before: after switching off, a new password, changed roles.
 	if (!user || user.switchedOffAt || user.tokenVersion !== tokenVersion) return null;
@@ -31,7 +31,8 @@ export async function actorOfUser(user: User): Promise<Actor> {
 		siteIds: sites.map((site) => site.siteId),
 		partnerId: user.partnerId,
 		shipmentId: null,
-		temperatureUnit: user.temperatureUnit
+		temperatureUnit: user.temperatureUnit,
+		sessionId: sessionId ?? null
 	};
 }
 

@@ -1,3 +1,4 @@
+import { v7 as uuid } from 'uuid';
 import { User } from '../db/models/user';
 import { inTransaction } from '../db/transaction';
 import { systemContext, type Context } from '../context';
@@ -6,6 +7,7 @@ import type { RequestScope } from '../request-scope';
 import { isPassword } from './password';
 import { personContext } from './person-context';
 import { clearLimit, countAttempt } from './rate-limit';
+import { useCode } from './second-factor/check-code';
 
 const quarterHourMs = 15 * 60_000;
 const perAddress = { attempts: 60, windowMs: quarterHourMs };
@@ -18,6 +20,7 @@ export interface Claims {
 	by?: 'password' | 'link';
 	subjectId: string;
 	tokenVersion: number;
+	sessionId?: string;
 }
 
 function contextOfScope(scope: RequestScope): Context {
@@ -57,12 +60,14 @@ async function refuseTooMany(address: string, accountLimit: string, scope: Reque
 
 /**
  * Checks an e-mail and password. Known and unknown addresses are answered alike and in like time.
- * @returns null for a wrong pair. @throws Refusal `too-many-attempts`; with the right pair `switched-off`, `locked`.
+ * @returns null for a wrong pair. @throws Refusal `too-many-attempts`; with the right pair `switched-off`, `locked`,
+ * `code-needed`, `wrong-code`.
  */
 export async function signInByPassword(
 	email: string,
 	password: string,
-	scope: RequestScope
+	scope: RequestScope,
+	code: string | null = null
 ): Promise<Claims | null> {
 	const address = email.trim().toLowerCase();
 	const accountLimit = `sign-in ${address.slice(0, 120)}`;
@@ -80,8 +85,20 @@ export async function signInByPassword(
 		await recordRefused(scope, user, address, why);
 		throw new Refusal(why);
 	}
+	await showSecondFactor(user, code, scope);
 	await clearLimit(accountLimit);
 	return openSession(user, scope, 'password');
+}
+
+/** A wrong or missing code is written down like a wrong password, but said: the password was right. */
+async function showSecondFactor(user: User, code: string | null, scope: RequestScope): Promise<void> {
+	try {
+		await useCode(user, code, scope.now);
+	} catch (error) {
+		if (error instanceof Refusal && error.code !== 'code-needed')
+			await recordRefused(scope, user, user.email, error.code);
+		throw error;
+	}
 }
 
 /** Records that a session began. */
@@ -91,5 +108,5 @@ export async function openSession(user: User, scope: RequestScope, by: 'password
 		await User.update({ lastSignInAt: scope.now }, { where: { id: user.id }, transaction });
 		record('session.opened', { scope: 'account', id: user.id }, { by, userId: user.id });
 	});
-	return { kind: 'user', by, subjectId: user.id, tokenVersion: user.tokenVersion };
+	return { kind: 'user', by, subjectId: user.id, tokenVersion: user.tokenVersion, sessionId: uuid() };
 }

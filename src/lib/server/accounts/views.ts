@@ -2,6 +2,7 @@ import type { User } from '../db/models/user';
 import { rolesOf } from './load-actor';
 import { revisionOf } from '../catalogue/revision';
 import type { Role } from '../context';
+import { hasSecondFactor } from './second-factor/check-code';
 
 /** What an admin's form changes, and what the audit trail keeps of a change. */
 export interface AccountFields extends Record<string, unknown> {
@@ -31,6 +32,7 @@ export interface AccountView extends AccountFields {
 	id: string;
 	email: string;
 	state: AccountState;
+	hasSecondFactor: boolean;
 	siteNames: string[];
 	partnerName: string | null;
 	invitedAt: string | null;
@@ -52,6 +54,7 @@ export function accountView(
 		email: user.email,
 		...fields,
 		state: stateOf(user),
+		hasSecondFactor: hasSecondFactor(user),
 		siteNames: sites.map(({ name }) => name).sort(),
 		partnerName,
 		invitedAt: user.invitedAt?.toISOString() ?? null,

@@ -11,6 +11,7 @@ export interface EventData {
 	'account.unlocked': { userId: string };
 	'account.token-made': { userId: string; tokenId: string };
 	'account.token-revoked': { userId: string; tokenId: string };
+	'account.second-factor': { userId: string; act: 'begun' | 'set' | 'removed' | 'reset' };
 	'session.opened': { by: 'password' | 'link'; userId: string };
 	'session.refused': { email: string; why: string };
 	'act.refused': { act: string; why: string; shipmentId: string | null; route: string; method: string };

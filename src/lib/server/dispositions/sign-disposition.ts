@@ -1,7 +1,7 @@
 import { v7 as uuid } from 'uuid';
 import type { DocketView, FrozenSignature, SeriesView } from '../../schemas/docket';
 import type { DispositionInput } from '../../schemas/disposition';
-import { checkSigningPassword } from '../accounts/check-signing-password';
+import { checkSigningComponents } from '../accounts/check-signing-components';
 import type { Context } from '../context';
 import { Clock } from '../db/models/clock';
 import { Disposition } from '../db/models/disposition';
@@ -102,7 +102,7 @@ async function closeDocket(
 /**
  * Signs what becomes of a load: freezes the docket with its figures, and writes report and notice as jobs, all in one
  * transaction. A later signature is a new version with a reason; the old one stays.
- * @throws Refusal `not-found`, `not-allowed`, `wrong-password`, `locked`, `not-arrived`, `already-signed`,
+ * @throws Refusal `not-found`, `not-allowed`, `wrong-password`, `wrong-code`, `code-needed`, `locked`, `not-arrived`, `already-signed`,
  * `changed-meanwhile`, `invalid`
  */
 export async function signDisposition(
@@ -112,7 +112,7 @@ export async function signDisposition(
 ): Promise<{ version: number }> {
 	const seen = await Shipment.findOne({ where: { number } });
 	authorizeShipment(ctx, 'disposition.sign', seen);
-	const signer = await checkSigningPassword(ctx, input.password);
+	const signer = await checkSigningComponents(ctx, input);
 	const dispositionId = uuid();
 	const series = await frozenSeries(seen.id);
 	return inTransaction(ctx, async (w) => {

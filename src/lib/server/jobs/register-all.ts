@@ -1,4 +1,5 @@
 import { mailLink } from '../accounts/mail-link';
+import { mailLock } from '../accounts/tell-admins-of-lock';
 import { makeCheckpoint } from '../audit/checkpoint';
 import { sendNotice } from '../notices/send-notice';
 import { ensureReport } from '../reports/make-report';
@@ -12,5 +13,6 @@ export function registerAllJobs(): void {
 	);
 	registerJobKind('audit-checkpoint', async ({ now }) => void (await makeCheckpoint(now)));
 	registerJobKind('mail-link', mailLink);
+	registerJobKind('lock-mail', mailLock);
 	registerJobKind('notice', (ctx, { noticeId }) => sendNotice(ctx, noticeId ?? ''));
 }

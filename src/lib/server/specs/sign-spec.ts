@@ -1,6 +1,6 @@
 import { Op, type Transaction } from 'sequelize';
 import { validateSpec } from '../../domain/shelf-life/validate';
-import { checkSigningPassword } from '../accounts/check-signing-password';
+import { checkSigningComponents, type SigningComponents } from '../accounts/check-signing-components';
 import { organisationChain } from '../catalogue/organisation-chain';
 import type { Context } from '../context';
 import { SpecVersion } from '../db/models/spec-version';
@@ -10,11 +10,10 @@ import { Refusal } from '../refusals';
 import { figuresFrom } from './figures';
 import { lockProduct, savedMeanwhile } from './save-draft';
 
-export interface SpecSignature {
+export interface SpecSignature extends SigningComponents {
 	specVersionId: string;
 	/** Hash of the figures the signer was shown. */
 	figuresSha256: string;
-	password: string;
 	reason: string;
 	/** Null: from the moment it is signed. */
 	inForceFrom: Date | null;
@@ -23,14 +22,14 @@ export interface SpecSignature {
 /**
  * Puts a draft in force under the quality manager's signature; from then on it never changes. Whatever was in force,
  * or was to come, ends where this one begins.
- * @throws Refusal `not-allowed`, `wrong-password`, `locked`, `not-found`, `spec-signed`, `changed-meanwhile`, `invalid`
+ * @throws Refusal `not-allowed`, `wrong-password`, `wrong-code`, `code-needed`, `locked`, `not-found`, `spec-signed`, `changed-meanwhile`, `invalid`
  */
 export async function signSpec(ctx: Context, input: SpecSignature): Promise<{ number: number }> {
 	authorize(ctx, 'spec.sign');
 	const inForceFrom = input.inForceFrom ?? ctx.now;
 	if (inForceFrom < ctx.now)
 		throw new Refusal('invalid', 'A version cannot be in force before it is signed.');
-	const signer = await checkSigningPassword(ctx, input.password);
+	const signer = await checkSigningComponents(ctx, input);
 	return inTransaction(ctx, async ({ transaction, record }) => {
 		const version = await lockDraft(input, transaction);
 		const { id, productId, varietyId, number, figuresSha256 } = version;

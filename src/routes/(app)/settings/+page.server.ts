@@ -1,8 +1,24 @@
 import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
-import { ownAccountForm, passwordForm, siteChoiceForm, themeForm } from '$lib/schemas/account';
-import { signInWithPassword, signOut } from '$lib/server/accounts/auth';
+import type { z } from 'zod';
+import {
+	ownAccountForm,
+	passwordForm,
+	secondFactorBeginForm,
+	secondFactorCodeForm,
+	secondFactorRemoveForm,
+	siteChoiceForm,
+	themeForm
+} from '$lib/schemas/account';
+import { goOnWithPassword, signOut } from '$lib/server/accounts/auth';
 import { changeOwnAccount, changePassword } from '$lib/server/accounts/own-account';
-import { contextOf, nestedOf, orFail, parseForm } from '$lib/server/request';
+import {
+	beginSecondFactor,
+	confirmSecondFactor,
+	removeSecondFactor,
+	viewSecondFactor
+} from '$lib/server/accounts/second-factor/set-up';
+import type { Context } from '$lib/server/context';
+import { contextOf, nestedOf, orError, orFail, parseForm } from '$lib/server/request';
 import { getCurrentSite, siteCookie } from '$lib/server/sites/current-site';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -19,14 +35,38 @@ function remember({ cookies, url }: RequestEvent, name: string, value: string): 
 	});
 }
 
-export const load: PageServerLoad = ({ locals, cookies }) => {
-	const { actor } = contextOf(locals);
+export const load: PageServerLoad = async ({ locals, cookies }) => {
+	const ctx = contextOf(locals);
+	const { actor } = ctx;
 
 	return {
 		own: { name: actor.name, email: actor.email, temperatureUnit: actor.temperatureUnit ?? '' },
+		factor: await orError(viewSecondFactor(ctx)),
 		theme: themeForm.shape.theme.catch('system').parse(cookies.get(themeCookie))
 	};
 };
+
+/** An act on one's own second factor: the same beats for each. */
+function factorAct<Schema extends z.ZodType>(
+	schema: Schema,
+	work: (ctx: Context, input: z.output<Schema>) => Promise<void>
+) {
+	return async ({ locals, request }: RequestEvent) => {
+		const ctx = contextOf(locals);
+
+		const parsed = await parseForm(request, schema);
+		if (!parsed.ok) return fail(422, { ...parsed, of: 'factor' as const });
+
+		try {
+			await work(ctx, parsed.data);
+		} catch (e) {
+			const { status, data } = orFail(e);
+			return fail(status, { ...data, of: 'factor' as const });
+		}
+
+		redirect(303, '/settings#second-factor');
+	};
+}
 
 export const actions = {
 	save: async ({ locals, request }) => {
@@ -52,16 +92,17 @@ export const actions = {
 		const parsed = await parseForm(event.request, passwordForm);
 		if (!parsed.ok) return fail(422, { ...parsed, of: 'password' as const });
 
+		let to: string;
 		try {
 			await changePassword(ctx, parsed.data);
 			// The change ended every session; whoever made it goes on with a new one.
-			await signInWithPassword(event, ctx.actor.email, parsed.data.newPassword);
+			to = await goOnWithPassword(event, ctx.actor.email, parsed.data.newPassword);
 		} catch (e) {
 			const { status, data } = orFail(e);
 			return fail(status, { ...data, of: 'password' as const });
 		}
 
-		redirect(303, '/settings');
+		redirect(303, to === '/' ? '/settings' : to);
 	},
 
 	site: async (event) => {
@@ -75,6 +116,12 @@ export const actions = {
 
 		redirect(303, '/settings');
 	},
+
+	beginFactor: factorAct(secondFactorBeginForm, (ctx, { password }) => beginSecondFactor(ctx, password)),
+	confirmFactor: factorAct(secondFactorCodeForm, (ctx, { code }) => confirmSecondFactor(ctx, code)),
+	removeFactor: factorAct(secondFactorRemoveForm, (ctx, { password, code }) =>
+		removeSecondFactor(ctx, password, code)
+	),
 
 	theme: async (event) => {
 		contextOf(event.locals);

@@ -29,7 +29,7 @@ export const actions = {
 
 		let isRight: boolean;
 		try {
-			isRight = await signInWithPassword(event, parsed.data.email, parsed.data.password);
+			isRight = await signInWithPassword(event, parsed.data);
 		} catch (e) {
 			const { status, data } = orFail(e, nestedOf(await sent.formData()));
 			return fail(status, { ...data, of: 'password' as const });

@@ -24,6 +24,14 @@ export class User extends Model<InferAttributes<User>, InferCreationAttributes<U
 	declare invitedAt: Date | null;
 	declare lastSignInAt: Date | null;
 	declare switchedOffAt: Date | null;
+	/** Secret of the second factor, sealed; in force once `secondFactorSince` is set. */
+	declare secondFactorSealed: CreationOptional<string | null>;
+	declare secondFactorSince: CreationOptional<Date | null>;
+	/** The last time step a code was used of. */
+	declare secondFactorStep: CreationOptional<number | null>;
+	/** The session in which every component of a signature was last shown, and when one was last used there. */
+	declare signingSessionId: CreationOptional<string | null>;
+	declare signingSessionAt: CreationOptional<Date | null>;
 }
 
 export function defineUser(sequelize: Sequelize): void {
@@ -43,7 +51,12 @@ export function defineUser(sequelize: Sequelize): void {
 			createdAt: { type: DataTypes.DATE(3), allowNull: false },
 			invitedAt: { type: DataTypes.DATE(3), allowNull: true },
 			lastSignInAt: { type: DataTypes.DATE(3), allowNull: true },
-			switchedOffAt: { type: DataTypes.DATE(3), allowNull: true }
+			switchedOffAt: { type: DataTypes.DATE(3), allowNull: true },
+			secondFactorSealed: { type: DataTypes.STRING(255), allowNull: true },
+			secondFactorSince: { type: DataTypes.DATE(3), allowNull: true },
+			secondFactorStep: { type: DataTypes.BIGINT, allowNull: true },
+			signingSessionId: { type: DataTypes.UUID, allowNull: true },
+			signingSessionAt: { type: DataTypes.DATE(3), allowNull: true }
 		},
 		{ sequelize, modelName: 'User', tableName: 'users' }
 	);

@@ -5,6 +5,7 @@ import { productForm, varietyForm } from '$lib/schemas/product';
 import { readSpecForm } from '$lib/schemas/spec-form';
 import { specFormValues, type SpecFormValues } from '$lib/schemas/spec-form-values';
 import { draftRef, specDiscardForm, specSheetQuery, specSignForm } from '$lib/schemas/spec-signing';
+import { componentsAsked } from '$lib/server/accounts/check-signing-components';
 import { may } from '$lib/server/policies';
 import { listFamilies } from '$lib/server/products/list-products';
 import { addVariety, saveProduct, switchProduct } from '$lib/server/products/save-product';
@@ -34,6 +35,7 @@ export const load: PageServerLoad = async ({ locals, params, url, parent }) => {
 		isEditable: mayChange && (asked === null || asked.standing === 'draft'),
 		mayChange,
 		maySign: may(ctx.actor, 'spec.sign'),
+		asks: await componentsAsked(ctx),
 		values: shown ? specFormValues(shown.figures, temperatureUnit) : { unit: temperatureUnit },
 		families: mayChange ? await listFamilies(ctx) : [],
 		back: { href: '/specs', word: 'Specs', title: sheet.product.name }

@@ -1,7 +1,7 @@
 import { fail, redirect } from '@sveltejs/kit';
 import { invitationForm } from '$lib/schemas/account';
 import { acceptInvitation, findInvitation } from '$lib/server/accounts/accept-invitation';
-import { signInWithPassword } from '$lib/server/accounts/auth';
+import { goOnWithPassword } from '$lib/server/accounts/auth';
 import { nestedOf, orFail, parseForm } from '$lib/server/request';
 import { requestScope } from '$lib/server/request-scope';
 import type { Actions, PageServerLoad } from './$types';
@@ -21,13 +21,14 @@ export const actions = {
 		const parsed = await parseForm(event.request, invitationForm);
 		if (!parsed.ok) return fail(422, parsed);
 
+		let to: string;
 		try {
 			const email = await acceptInvitation(event.params.secret, parsed.data, requestScope());
-			await signInWithPassword(event, email, parsed.data.password);
+			to = await goOnWithPassword(event, email, parsed.data.password);
 		} catch (e) {
 			return orFail(e, nestedOf(await sent.formData()));
 		}
 
-		redirect(303, '/');
+		redirect(303, to);
 	}
 } satisfies Actions;

@@ -8,6 +8,7 @@ import {
 } from '$lib/server/accounts/change-account';
 import { resendInvitation } from '$lib/server/accounts/invite-account';
 import { getAccount } from '$lib/server/accounts/list-accounts';
+import { resetSecondFactor } from '$lib/server/accounts/second-factor/set-up';
 import type { Context } from '$lib/server/context';
 import { listPartnerChoices } from '$lib/server/partners/list-partners';
 import { contextOf, nestedOf, orError, orFail, parseForm } from '$lib/server/request';
@@ -64,5 +65,6 @@ export const actions = {
 	switchOff: act(switchAccountOff),
 	switchOn: act(switchAccountOn),
 	unlock: act(unlockAccount),
-	resend: act(resendInvitation)
+	resend: act(resendInvitation),
+	resetFactor: act(resetSecondFactor)
 } satisfies Actions;

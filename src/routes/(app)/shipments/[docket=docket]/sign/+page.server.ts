@@ -1,5 +1,6 @@
 import { fail, redirect } from '@sveltejs/kit';
 import { dispositionSchema } from '$lib/schemas/disposition';
+import { componentsAsked } from '$lib/server/accounts/check-signing-components';
 import { evidenceSha256 } from '$lib/server/dispositions/freeze';
 import { signDisposition } from '$lib/server/dispositions/sign-disposition';
 import { getDocket } from '$lib/server/dockets/get-docket';
@@ -20,6 +21,7 @@ export const load: PageServerLoad = async ({ locals, params, url }) => {
 		isAmendment,
 		evidenceSha256: evidenceSha256(docket),
 		signer: { name: ctx.actor.name, title: ctx.actor.title, email: ctx.actor.email },
+		asks: await componentsAsked(ctx),
 		frozenAt: ctx.now.toISOString(),
 		back: {
 			href: `/shipments/${docket.number}`,
