@@ -77,7 +77,7 @@ export interface Question {
 	readonly rowsBetween: number;
 	/**
 	 * Why the file cannot tell: `all-one-day`, `all-days-up-to-12`, `no-unit`, `no-zone`, `several-temperatures`,
-	 * `no-times`, `relative-times`, `several-parts`, `clock-restarts`.
+	 * `no-times`, `relative-times`, `two-calendars`, `clock-never-set`, `several-parts`, `clock-restarts`.
 	 */
 	readonly why: string;
 }
@@ -107,7 +107,11 @@ export interface Oddity {
 		/** The column in the other unit disagrees with the chosen one by more than rounding. */
 		| 'twin-disagrees'
 		/** A reading before the start that the file itself states. */
-		| 'before-start';
+		| 'before-start'
+		/** The clock leaps ahead, or slips for a row or three (their number is the detail; they are set aside). */
+		| 'clock-jump'
+		/** The clock was put back: later rows are left out (`before`) or moved to follow (`joined`). */
+		| 'clock-restart';
 	readonly count: number;
 	readonly lines: readonly number[];
 	readonly detail: string | null;

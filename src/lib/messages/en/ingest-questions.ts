@@ -60,6 +60,8 @@ const whys: Readonly<Record<string, string>> = {
 	'several-parts': 'The file holds several recordings, one after the other.',
 	'clock-restarts': 'The times fall back and run on from there, so the file cannot tell.',
 	'no-times': 'The rows carry no time of their own.',
+	'two-calendars': 'The days may be counted from 1900 or from 1904, four years apart.',
+	'clock-never-set': 'The times begin where a clock does that was never set.',
 	'relative-times': 'The file counts its times back from a moment it does not name.'
 };
 
@@ -83,6 +85,14 @@ function partLabel(label: string, part: string): string {
 	return label === '' || label === part ? words : `${words}: ${label}`;
 }
 
+const startWords: Readonly<Record<string, string>> = {
+	journey: 'When the load was loaded',
+	arrival: 'So that it ends at the arrival',
+	upload: 'So that it ends at the upload',
+	'as-written': 'As the file says',
+	'days-of-1904': 'Days counted from 1904'
+};
+
 /** What one choice is called: the day in words, the unit, the column, the interval. */
 export function choiceLabel({ code, subject }: Question, { label, answer }: Choice): string {
 	if (code === 'date-order') {
@@ -93,7 +103,7 @@ export function choiceLabel({ code, subject }: Question, { label, answer }: Choi
 	if (code === 'part') return partLabel(label, answer.part ?? '');
 	if (code === 'interval') return `Every ${label} min`;
 	if (code !== 'start') return label;
-	return label === 'upload' ? 'Back from the upload' : 'When the load was loaded';
+	return startWords[label] ?? label;
 }
 
 /** A reading as a choice would have it: `2026-04-03 06:10:00 UTC, 4.5 °C`; null where neither is known. */

@@ -119,7 +119,15 @@ const oddities: Readonly<Record<Oddity['code'], Say>> = {
 	'before-start': plural(
 		'reading is earlier than the start the file states',
 		'readings are earlier than the start the file states'
-	)
+	),
+	'clock-jump': (count, detail, isOne) =>
+		detail === ''
+			? `The clock leaps ahead ${isOne ? 'once' : `${count} times`}`
+			: `The clock leaps at ${count} ${isOne ? 'row' : 'rows'}; ${detail} with a date far from ${isOne ? 'its' : 'their'} neighbours ${detail === '1' ? 'is' : 'are'} set aside`,
+	'clock-restart': (count, detail, isOne) =>
+		detail === 'joined'
+			? `The clock was put back; the ${count} ${isOne ? 'reading' : 'readings'} after it are moved to follow on`
+			: `The clock was put back; the ${count} ${isOne ? 'reading' : 'readings'} after it are left out`
 };
 
 /** One oddity as a line, with its count; line numbers are shown beside it. */

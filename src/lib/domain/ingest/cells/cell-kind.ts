@@ -1,3 +1,4 @@
+import { isRunningTime } from '../times/running-time';
 import { emptyStamp, noTime, scanStamp } from '../times/stamp';
 import { emptyNumber, scanNumber } from './number-text';
 
@@ -15,7 +16,9 @@ export function cellKindOf(cell: string): CellKind {
 	if (state === 'number')
 		return /^(19|20)\d{6}(\d{4}|\d{6})?$/.test(bare) && scanStamp(bare, stamp) ? kindOfStamp() : 'number';
 	if (scanStamp(bare, stamp)) return kindOfStamp();
-	return state;
+	// Microseconds and nanoseconds since 1970 have more digits than any measured value.
+	if (/^\d{16,19}$/.test(bare) && epochUnitOf(Number(bare)) !== null) return 'number';
+	return state === 'text' && isRunningTime(bare) ? 'time' : state;
 }
 
 function kindOfStamp(): CellKind {
@@ -23,9 +26,12 @@ function kindOfStamp(): CellKind {
 	return stamp.msOfDay === noTime ? 'date' : 'moment';
 }
 
-/** A count of seconds, milliseconds or microseconds since 1970 that falls between 1990 and 2070; null otherwise. */
-export function epochUnitOf(value: number): 's' | 'ms' | 'us' | null {
+export type EpochUnit = 's' | 'ms' | 'us' | 'ns';
+
+/** A count of seconds to nanoseconds since 1970 that falls between 1990 and 2070; null otherwise. */
+export function epochUnitOf(value: number): EpochUnit | null {
 	if (value >= 631e6 && value < 3.16e9) return 's';
 	if (value >= 631e9 && value < 3.16e12) return 'ms';
-	return value >= 631e12 && value < 3.16e15 ? 'us' : null;
+	if (value >= 631e12 && value < 3.16e15) return 'us';
+	return value >= 631e15 && value < 3.16e18 ? 'ns' : null;
 }

@@ -1,6 +1,7 @@
 import type { Quantity } from '../../trace/trace';
 import type { TemperatureUnit } from '../../units';
-import { cellKindOf, epochUnitOf, type CellKind } from '../cells/cell-kind';
+import { emptyStamp, noTime, scanStamp } from '../times/stamp';
+import { cellKindOf, epochUnitOf, type CellKind, type EpochUnit } from '../cells/cell-kind';
 import { unitWithin, wholeUnitOf } from '../cells/unit-words';
 import { sampleIndexes } from '../delimited/delimiter';
 import type { Table } from './table';
@@ -21,7 +22,15 @@ export interface Column {
 	readonly high: number;
 	/** True where each number is greater than the one above it by the same amount. */
 	readonly isCounter: boolean;
-	readonly epochUnit: 's' | 'ms' | 'us' | null;
+	/** True where each of the first numbers is greater than the one above it. */
+	readonly isRising: boolean;
+	readonly epochUnit: EpochUnit | null;
+	/** The first few different texts of its cells. */
+	readonly texts: readonly string[];
+	/** Every moment of it stands at midnight: its clock says nothing. */
+	readonly isIdleClock: boolean;
+	/** Every moment of it stands on a spreadsheet's day zero (1899 to 1904): its date says nothing. */
+	readonly isIdleDate: boolean;
 	/** The one text all its sampled cells hold, such as a unit repeated in every row; null when they differ. */
 	readonly constant: string | null;
 	/** First filled cell, as an example. */
@@ -35,6 +44,20 @@ interface Tally {
 	numbers: number[];
 	texts: Set<string>;
 	example: string;
+	moments: number;
+	idleClocks: number;
+	idleDates: number;
+}
+
+const fewTexts = 6;
+const stamp = emptyStamp();
+
+function tallyMoment(cell: string, tally: Tally): void {
+	if (!scanStamp(cell, stamp)) return;
+	tally.moments++;
+	if (stamp.msOfDay === 0 || stamp.msOfDay === noTime) tally.idleClocks++;
+	const year = stamp.shape === 'open' ? stamp.c : stamp.a;
+	if (year >= 1899 && year <= 1904) tally.idleDates++;
 }
 
 function emptyTally(): Tally {
@@ -42,7 +65,10 @@ function emptyTally(): Tally {
 		counts: { blank: 0, missing: 0, number: 0, moment: 0, date: 0, time: 0, text: 0 },
 		numbers: [],
 		texts: new Set(),
-		example: ''
+		example: '',
+		moments: 0,
+		idleClocks: 0,
+		idleDates: 0
 	};
 }
 
@@ -75,6 +101,11 @@ function columnOf(table: Table, index: number, tally: Tally, rows: number): Colu
 		low: numbers.length === 0 ? NaN : Math.min(...numbers),
 		high: numbers.length === 0 ? NaN : Math.max(...numbers),
 		isCounter: isCounting(numbers),
+		isRising:
+			numbers.length > 1 && numbers.slice(0, 20).every((n, i) => i === 0 || n > (numbers[i - 1] ?? 0)),
+		texts: [...tally.texts],
+		isIdleClock: tally.moments > 0 && tally.idleClocks === tally.moments,
+		isIdleDate: tally.moments > 0 && tally.idleDates === tally.moments,
 		epochUnit: epochUnit !== null && numbers.every((n) => epochUnitOf(n) === epochUnit) ? epochUnit : null,
 		constant: tally.texts.size === 1 && tally.counts.blank === 0 ? tally.example : null,
 		example: tally.example
@@ -106,10 +137,11 @@ export function profileColumns(table: Table): Column[] {
 			const tally = (tallies[i] ??= emptyTally());
 			const kind = cellKindOf(cell);
 			tally.counts[kind]++;
-			if (tally.texts.size < 2) tally.texts.add(cell.trim());
+			if (tally.texts.size < fewTexts) tally.texts.add(cell.trim());
+			if (kind === 'moment' || kind === 'date') tallyMoment(cell, tally);
 			if (tally.example === '' && kind !== 'blank') tally.example = cell.trim();
 			const n = Number(cell.trim().replace(',', '.'));
-			if ((kind === 'number' || /^\d{9,16}$/.test(cell.trim())) && Number.isFinite(n)) tally.numbers.push(n);
+			if ((kind === 'number' || /^\d{9,19}$/.test(cell.trim())) && Number.isFinite(n)) tally.numbers.push(n);
 		});
 	}
 	return Array.from({ length: Math.max(table.header.length, tallies.length) }, (_, i) => {

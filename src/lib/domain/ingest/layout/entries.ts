@@ -1,6 +1,6 @@
 import type { Entry } from './table';
 
-const pair = /^\s*[#*/;"']*\s*([^:=;\t|]{1,60}?)\s*(?::(?!\d\d\b)|=|;|\t|\|)\s*(.*?)\s*[;,|"\t]*$/;
+const pair = /^\s*[#*/;"']*\s*([^:：=;\t|]{1,60}?)\s*(?::(?!\d\d\b)|：|=|;|\t|\|)\s*(.*?)\s*[;,|"\t]*$/;
 
 /** Reads one line outside the readings as key and value; null when it is neither. */
 export function entryOf(line: string, cells: readonly string[], lineNumber: number): Entry | null {

@@ -3,7 +3,7 @@ import { unitWithin, wholeUnitOf } from '../cells/unit-words';
 import { foldWord } from '../times/month-names';
 import { orderNamedIn, type DateOrder } from '../times/date-order';
 import { emptyStamp, scanStamp } from '../times/stamp';
-import { zoneNamedBy } from '../times/zone';
+import { zoneStatedIn } from './stated-zone';
 import type { Entry } from './table';
 
 /** Facts stated outside the readings, as text where they still depend on the order of dates. */
@@ -12,6 +12,8 @@ export interface Stated {
 	readonly tripName: string | null;
 	readonly startText: string | null;
 	readonly stopText: string | null;
+	/** A date that stands alone under the word for it: the day of times that carry none. */
+	readonly dateText: string | null;
 	readonly intervalMinutes: number | null;
 	readonly zone: string | null;
 	/** A zone the file names by letters that mean several. */
@@ -32,8 +34,7 @@ const keys = {
 		/\b(start(ed|zeit|datum|tid)?|begin+(n|time|ning|zeit)?|debut|inicio|inizio|aanvang|poczatek|rozpoczecie|baslangic|first (reading|record|log|sample)|erste messung|premiere? (mesure|lecture)|from|von)\b|开始|開始|首次/,
 	stop: /\b(stop(ped|zeit)?|end(ed|e|zeit|time)?|fin|ende|fine|final|einde|koniec|zakonczenie|bitis|last (reading|record|log|sample)|letzte messung|to|bis)\b|结束|終了|停止/,
 	interval:
-		/\b(interval\w*|intervall\w*|intervalo|intervallo|interwal\w*|cadence|messtakt|takt|sampling|sample (rate|period|every)|log(ging)? (rate|period|cycle|every)|rate|period(o|e|icidad)?|aufzeichnungsrate|messrate|czestotliwosc|aralik|every)\b|间隔|間隔/,
-	zone: /\b(time ?zone|zone|tz|zeitzone|fuseau( horaire)?|zona horaria|fuso( horario| orario)?|tijdzone|strefa czasowa|saat dilimi|utc offset|gmt offset|time offset|all times)\b|时区|時區|タイムゾーン/,
+		/\b(\w*interval\w*|intervalo|intervallo|interwal\w*|cadence|messtakt|takt|sampling|sample (rate|period|every)|log(ging)? (rate|period|cycle|every)|rate|period(o|e|icidad)?|aufzeichnungsrate|messrate|czestotliwosc|aralik|every)\b|间隔|間隔/,
 	unit: /\b(unit|units|einheit|unite|unidad|unidade|unita|eenheid|jednostka|birim|scale|temperatureinheit|temperatureenheid|uom)\b|单位|單位|単位/,
 	format: /\b(date ?format|datumsformat|format)\b/
 } as const;
@@ -94,30 +95,6 @@ function serialOf(entries: readonly Entry[]): string | null {
 	return device === undefined ? null : device.value.trim();
 }
 
-function zoneOf(entries: readonly Entry[], freeText: string): { zone: string | null; word: string | null } {
-	for (const { key, value } of entries) {
-		if (!keys.zone.test(key)) continue;
-		const zone = zoneNamedBy(value) ?? zoneOfNumber(value, key);
-		if (zone !== null) return { zone, word: null };
-		if (/^[A-Z]{2,5}$/.test(value.trim())) return { zone: null, word: value.trim() };
-	}
-	const stated =
-		/\b(?:times?|zeiten|heures|horas|orari?)\b[^\n]{0,40}?\b((?:UTC|GMT)(?:\s?[+\-−]\s?\d{1,2}(?::?\d{2})?)?)\b/i.exec(
-			freeText
-		)?.[1] ?? /\((?:UTC|GMT)\s?[+\-−]\s?\d{1,2}(?::?\d{2})?\)/.exec(freeText)?.[0];
-	return { zone: stated === undefined ? null : zoneNamedBy(stated), word: null };
-}
-
-/** `UTC offset: 2` or `-300` (minutes) has no sign word of its own. */
-function zoneOfNumber(value: string, key: string): string | null {
-	const match = /^\s*([+\-−]?)(\d{1,2}(?:\.5)?)\s*h?\s*$/.exec(value);
-	if (match === null || !/offset|zone|utc|gmt/.test(key)) return null;
-	const hours = Number(match[2]);
-	return hours > 14
-		? null
-		: zoneNamedBy(`${match[1] === '' ? '+' : match[1]}${Math.floor(hours)}:${hours % 1 === 0 ? '00' : '30'}`);
-}
-
 function unitOf(entries: readonly Entry[], freeText: string): TemperatureUnit | null {
 	for (const { key, value } of entries) {
 		if (!keys.unit.test(key)) continue;
@@ -139,7 +116,7 @@ export function statedIn(entries: readonly Entry[], freeText: string, header: re
 	const interval = folded
 		.map(({ key, value }) => (keys.interval.test(key) ? intervalOf(value, key) : null))
 		.find((minutes) => minutes !== null);
-	const zone = zoneOf(folded, freeText);
+	const zone = zoneStatedIn(folded, freeText);
 	const trip = folded.find(
 		({ key, value }) => keys.trip.test(key) && value !== '' && !hasStamp(value) && !keys.start.test(key)
 	);
@@ -147,18 +124,14 @@ export function statedIn(entries: readonly Entry[], freeText: string, header: re
 		...folded.filter(({ key }) => keys.format.test(key)).map(({ value }) => value),
 		...header
 	].map(orderNamedIn);
-	const named = header.map((cell) =>
-		/utc|gmt|zone/i.test(cell)
-			? zoneNamedBy(/(?:utc|gmt)\s*(?:[+\-−]\s*\d{1,2}(?::?\d{2})?)?/i.exec(cell)?.[0] ?? cell)
-			: null
-	);
 	return {
 		serial: serialOf(folded),
 		tripName: trip?.value.trim() ?? null,
 		startText: momentOf(folded, keys.start),
 		stopText: momentOf(folded, keys.stop),
+		dateText: momentOf(folded, /^(date|datum|fecha|data|dato|tarih|pvm)$|^(日期|日付|날짜)$/),
 		intervalMinutes: interval ?? null,
-		zone: zone.zone ?? named.find((text) => text !== null) ?? null,
+		zone: zone.zone,
 		zoneWord: zone.word,
 		unit: unitOf(folded, freeText),
 		order: format.find((order) => order !== null) ?? null,

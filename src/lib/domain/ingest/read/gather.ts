@@ -154,7 +154,7 @@ export function gather(
 		}
 		const cells = table.cells(row);
 		const hasTime =
-			timing.kind === 'none' ? cells.some((c) => scanNumber(c, number) === 'number') : time.read(cells);
+			time.read(cells) && (timing.kind !== 'none' || cells.some((c) => scanNumber(c, number) === 'number'));
 		const isShort =
 			table.kind === 'delimited' && needed.length > 0 && cells.length <= Math.min(width, ...needed);
 		if (!hasTime || isShort) {

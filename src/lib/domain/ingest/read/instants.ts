@@ -1,40 +1,10 @@
-import type { ReadContext } from '../ingestion';
-import type { Stated } from '../layout/preamble';
 import { dayNumber, fullYear, msPerDay } from '../times/calendar';
 import { dayInOrder, type DateOrder } from '../times/date-order';
 import { emptyStamp, noOffset, scanStamp } from '../times/stamp';
-import { fixedOffsetOf, offsetText, utcOfLocal, type LocalTimes } from '../times/zone';
+import { utcOfLocal, type LocalTimes } from '../times/local-times';
 import type { Gathered, GatheredTimes } from './gathered';
 
-export interface UsedZone {
-	readonly zone: string;
-	readonly by: 'file' | 'answer' | 'site';
-}
-
-/** The zone of local times: an answer first, then the file's own words, else the site's, assumed visibly. */
-export function zoneFor(gathered: Gathered, stated: Stated, context: ReadContext): UsedZone {
-	const { times, count } = gathered;
-	let withOffset = 0;
-	for (let i = 0; i < count; i++) if (times.offsetMinutes[i] !== noOffset) withOffset++;
-	const first = times.offsetMinutes[0] ?? noOffset;
-	if (count > 0 && withOffset === count) return { zone: offsetText(first), by: 'file' };
-	if (context.answers.zone !== undefined) return { zone: context.answers.zone, by: 'answer' };
-	const word = gathered.zoneWord ?? stated.zoneWord;
-	const wordOffset = word === null ? null : fixedOffsetOf(word);
-	if (wordOffset !== null) return { zone: offsetText(wordOffset), by: 'file' };
-	return stated.zone === null ? { zone: context.siteZone, by: 'site' } : { zone: stated.zone, by: 'file' };
-}
-
 const stamp = emptyStamp();
-
-/** The zone of times that run on from a stated start: the start's own offset where it has one. */
-export function zoneOfStart(gathered: Gathered, stated: Stated, context: ReadContext): UsedZone {
-	const { startText } = stated;
-	if (startText !== null && scanStamp(startText, stamp) && stamp.offsetMinutes !== noOffset) {
-		return { zone: offsetText(stamp.offsetMinutes), by: 'file' };
-	}
-	return zoneFor(gathered, stated, context);
-}
 
 /** One moment of the preamble in UTC, once order and zone are known; null when it is none. */
 export function momentMs(text: string | null, order: DateOrder | null, zone: string): number | null {
@@ -57,9 +27,10 @@ function dayOf(times: GatheredTimes, row: number, order: DateOrder | null): numb
 	return order === null ? NaN : dayInOrder(a, b, c, order);
 }
 
-/** Local milliseconds of each row; NaN where the order gives no such day. */
-function localTimes(gathered: Gathered, order: DateOrder | null): Float64Array {
-	const { times, count } = gathered;
+/** Local milliseconds of each row, or of the first few; NaN where the order gives no such day. */
+export function localTimes(gathered: Gathered, order: DateOrder | null, rows = gathered.count): Float64Array {
+	const { times } = gathered;
+	const count = Math.min(rows, gathered.count);
 	const local = new Float64Array(count);
 	let day = NaN;
 	for (let i = 0; i < count; i++) {

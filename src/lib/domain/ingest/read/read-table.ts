@@ -3,14 +3,13 @@ import type { Ingestion, ReadContext } from '../ingestion';
 import { profileColumns, unitColumnOf, type Column } from '../layout/columns';
 import { statedIn, type Stated } from '../layout/preamble';
 import type { Table } from '../layout/table';
-import { columnsOf, findTiming, type Timing } from '../layout/timing';
+import { columnsOf, findTiming, zoneOfTiming, type Timing } from '../layout/timing';
 import { columnsAtOnce } from './all-channels';
 import { withoutCutRow } from './cut-short';
 import { gather } from './gather';
 import type { Gathered } from './gathered';
 import type { Readable } from './readable';
 import { declaredBy, understand } from './understand';
-import { hasPlausibleDate } from './plausible-dates';
 import { pickTemperature, type Picked } from './pick-temperature';
 import { celsiusEnds, columnQuestion, timeQuestion, unitQuestion } from './questions';
 import { refused } from './refusals';
@@ -24,8 +23,11 @@ interface Plan {
 
 function planOf(table: Table, columns: readonly Column[], stated: Stated, context: ReadContext): Plan {
 	const timing = findTiming(columns);
+	const head = zoneOfTiming(columns, timing);
+	const isNamed = head.zone !== null || head.word !== null;
+	const told = isNamed ? { ...stated, zone: head.zone, zoneWord: head.word } : stated;
 	const picked = pickTemperature(columns, timing, context.answers, stated.unit);
-	return { timing, picked, stated };
+	return { timing, picked, stated: told };
 }
 
 function refusalOf(table: Table, { timing, picked, stated }: Plan, context: ReadContext): Ingestion | null {
@@ -60,20 +62,12 @@ function gatherAll(table: Table, { timing, picked }: Plan): Gathered {
 	return gather(table, timing, [...needed, ...(others.length <= room ? others : [])], needed);
 }
 
-function implausible({ lines }: Gathered, ms: Float64Array): Ingestion {
-	const at = ms.findIndex((moment) => !Number.isNaN(moment));
-	const found = new Date(ms[at] ?? 0);
-	const day = Number.isNaN(found.getTime()) ? null : found.toISOString().slice(0, 10);
-	return refused('implausible-dates', lines[at] ?? null, day);
-}
-
 /** Reads a table to an understanding, to one question, or to a refusal. */
 export function readTable(table: Table, encoding: string, context: ReadContext): Ingestion {
 	const columns = profileColumns(table);
 	const around = statedIn(table.entries, table.freeText, table.header);
-	const stated = { ...around, unit: unitColumnOf(columns) ?? around.unit };
-	const plan = planOf(table, columns, stated, context);
-	const { timing, picked } = plan;
+	const plan = planOf(table, columns, { ...around, unit: unitColumnOf(columns) ?? around.unit }, context);
+	const { timing, picked, stated } = plan;
 	const refusal = refusalOf(table, plan, context);
 	if (refusal !== null) return refusal;
 	const gathered = withoutCutRow(table, gatherAll(table, plan));
@@ -85,6 +79,7 @@ export function readTable(table: Table, encoding: string, context: ReadContext):
 		);
 	const unitOf = (column: Column): TemperatureUnit | null => unitFor(column, gathered, stated, context);
 	const axis = timeAxisOf(gathered, timing, stated, context);
+	if ('refusal' in axis) return refused(axis.refusal, gathered.lines[0] ?? null, axis.found);
 	const declared = declaredBy(stated, 'zone' in axis ? axis : null, context);
 	const [first] = picked.candidates;
 	if (first === undefined) return refused('no-temperature');
@@ -99,7 +94,6 @@ export function readTable(table: Table, encoding: string, context: ReadContext):
 		};
 	}
 	const ms = axis.ms.subarray(0, gathered.count);
-	if (!hasPlausibleDate(ms, context.uploadedMs)) return implausible(gathered, ms);
 	if (picked.candidates.length > 1) {
 		return {
 			kind: 'question',

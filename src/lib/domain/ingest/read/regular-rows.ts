@@ -42,7 +42,14 @@ function epochReader(text: string, cells: CellFinder, timing: Timing & { kind: '
 }
 
 /** Dates and clocks: the date must be that of the pattern, the clock is read. */
-function calendarReader(text: string, cells: CellFinder, date: number | null, clock: number): TimeReader {
+function calendarReader(
+	text: string,
+	cells: CellFinder,
+	date: number | null,
+	clock: number,
+	/** A clock without a date may turn out to be a length of time. */
+	isLength = false
+): TimeReader {
 	const pattern: ClockPattern = clockPatternOf(text);
 	let isLearned = false;
 	let dateFrom = 0;
@@ -61,6 +68,8 @@ function calendarReader(text: string, cells: CellFinder, date: number | null, cl
 			if (date === null) return;
 			dateFrom = cells.from[date] ?? 0;
 			dateLength = (cells.to[date] ?? 0) - dateFrom;
+			// A blank date stands for the one above it, until midnight passes: that is counted in full.
+			if (isBlankCell(text, dateFrom, dateFrom + dateLength)) isLearned = false;
 		},
 		forget: () => {
 			isLearned = false;
@@ -70,6 +79,7 @@ function calendarReader(text: string, cells: CellFinder, date: number | null, cl
 			const msOfDay = pattern.read(cells.from[clock] ?? 0, cells.to[clock] ?? 0);
 			if (msOfDay < 0) return false;
 			time.stamp.msOfDay = msOfDay;
+			if (isLength) time.ms = msOfDay;
 			return true;
 		}
 	};
@@ -77,9 +87,12 @@ function calendarReader(text: string, cells: CellFinder, date: number | null, cl
 
 function timeReaderOf({ text }: RowText, cells: CellFinder, timing: Timing): TimeReader | null {
 	if (timing.kind === 'epoch') return epochReader(text, cells, timing);
-	if (timing.kind === 'date-and-time') return calendarReader(text, cells, timing.date, timing.time);
+	// A zone or a half of the day in a cell of its own may change from row to row.
+	if ('zone' in timing && timing.zone !== null) return null;
+	if (timing.kind === 'date-and-time')
+		return timing.half === null ? calendarReader(text, cells, timing.date, timing.time) : null;
 	return timing.kind === 'moment' || timing.kind === 'time-of-day'
-		? calendarReader(text, cells, null, timing.column)
+		? calendarReader(text, cells, null, timing.column, timing.kind === 'time-of-day')
 		: null;
 }
 

@@ -1,187 +1,126 @@
-import type { Answers, Decision, Oddity, QuestionCode, ReadContext } from '../ingestion';
+import type { ReadContext } from '../ingestion';
 import type { Stated } from '../layout/preamble';
 import type { Timing } from '../layout/timing';
-import { msPerDay } from '../times/calendar';
-import type { DateOrder } from '../times/date-order';
-import { offsetAtOf, utcOfLocal } from '../times/zone';
+import { utcOfLocal } from '../times/local-times';
+import { settleClock } from './clock-run';
 import type { Gathered } from './gathered';
-import { instantsOf, momentMs, zoneFor, zoneOfStart, type Instants, type UsedZone } from './instants';
-import { decideOrder, openDaysIn, openDaysOf, type DecidedOrder, type OrderBy } from './order';
+import { instantsOf, isDescending, localTimes, type Instants } from './instants';
+import type { AxisOrOpen, OpenTimes } from './open-times';
+import { decideOrder, openDaysOf } from './order';
+import { judgeDates } from './plausible-dates';
+import { runningAxis } from './running-axis';
+import { distinctZones, zonesFor, type Placed } from './zone-choice';
 
-/** Every row in UTC, with what was taken to get there. */
-export interface TimeAxis extends Instants {
-	readonly zone: UsedZone;
-	readonly order: DateOrder | null;
-	readonly orderBy: OrderBy | null;
-	/** Whether local times had to be placed in a zone at all. */
-	readonly isLocal: boolean;
-	/** What else was decided or seen on the way, told as it stands. */
-	readonly decisions?: readonly Decision[];
-	readonly oddities?: readonly Oddity[];
-}
+export type { OpenTimes, TimeAxis } from './open-times';
 
-/** What stays open about the times, with each answer and the times it would give. */
-export interface OpenTimes {
-	readonly code: QuestionCode;
-	readonly why: string;
-	readonly options: readonly {
-		readonly answer: Answers;
-		readonly label: string;
-		readonly ms: Float64Array | null;
-	}[];
-}
-
-const noChange = { change: null, changeRows: [] } as const;
-/** Intervals to offer when the file names none: the usual settings of the trade (5 to 15 minutes). */
-const usualIntervals = [5, 10, 15] as const;
-
-function openOrder(
-	possible: readonly DateOrder[],
-	why: string,
-	msOf: (order: DateOrder) => Float64Array
-): OpenTimes {
+function openZone(places: readonly Placed<Instants>[]): OpenTimes {
 	return {
-		code: 'date-order',
-		why,
-		options: possible.map((order) => ({ answer: { dateOrder: order }, label: order, ms: msOf(order) }))
+		code: 'zone',
+		why: 'no-zone',
+		options: places.map(({ zone, placed }) => ({
+			answer: { zone: zone.zone },
+			label: zone.zone,
+			ms: placed.ms
+		}))
 	};
 }
 
 /** Rows that carry a whole calendar moment. */
-function calendarAxis(gathered: Gathered, stated: Stated, context: ReadContext): TimeAxis | OpenTimes {
+function calendarAxis(gathered: Gathered, stated: Stated, context: ReadContext): AxisOrOpen {
 	const days = openDaysOf(gathered);
 	const decided = decideOrder(days, stated, context);
-	const zone = zoneFor(gathered, stated, context);
+	const first = localTimes(gathered, decided.possible[0] ?? null, 1)[0] ?? NaN;
+	const zones = zonesFor(gathered, stated, context, first);
 	if (decided.possible.length > 1) {
-		return openOrder(decided.possible, decided.why, (order) => instantsOf(gathered, order, zone.zone).ms);
+		const zone = zones[0]?.zone ?? context.siteZone;
+		return {
+			code: 'date-order',
+			why: decided.why,
+			options: decided.possible.map((order) => ({
+				answer: { dateOrder: order },
+				label: order,
+				ms: instantsOf(gathered, order, zone).ms
+			}))
+		};
 	}
+	const places = distinctZones(
+		zones,
+		(zone) => instantsOf(gathered, decided.order, zone),
+		context.uploadedMs
+	);
+	const [only] = places;
+	if (only === undefined || places.length > 1) return openZone(places);
 	const isIso = days.length === 0;
 	return {
-		...instantsOf(gathered, decided.order, zone.zone),
-		zone,
+		...only.placed,
+		zone: only.zone,
 		order: isIso ? 'ymd' : decided.order,
 		orderBy: isIso ? (gathered.times.isSettled[0] === 2 ? 'month-name' : 'iso') : decided.by,
 		isLocal: true
 	};
 }
 
-function running(
-	gathered: Gathered,
-	timing: Timing,
-	startMs: number,
-	intervalMs: number,
-	offsetMs: number
-): Float64Array {
-	const ms = new Float64Array(gathered.count);
-	let days = 0;
-	for (let i = 0; i < gathered.count; i++) {
-		if (timing.kind === 'elapsed') ms[i] = startMs + (gathered.times.ms[i] ?? NaN);
-		else if (timing.kind === 'none') ms[i] = startMs + i * intervalMs;
-		else {
-			const clock = gathered.times.msOfDay[i] ?? 0;
-			// Time of day alone: midnight has passed where the clock falls back by more than half a day.
-			if (i > 0 && clock < (gathered.times.msOfDay[i - 1] ?? 0) - msPerDay / 2) days++;
-			const local = startMs + offsetMs;
-			ms[i] = Math.floor(local / msPerDay) * msPerDay + days * msPerDay + clock - offsetMs;
-		}
-	}
-	return ms;
+/** Local times, in the order of the file, placed in a zone. */
+function placeLocal(local: Float64Array, zone: string): Instants {
+	const isBackwards = isDescending(local);
+	const at = (i: number): number => (isBackwards ? local.length - 1 - i : i);
+	const { utc, change, rows } = utcOfLocal(isBackwards ? local.slice().reverse() : local, zone);
+	return { ms: isBackwards ? utc.slice().reverse() : utc, change, changeRows: rows.map(at) };
 }
 
-function openStart(timing: Timing, gathered: Gathered, context: ReadContext, intervalMs: number): OpenTimes {
-	// Counted back from "now": nobody but the dock knows when that was.
-	if (timing.kind === 'elapsed' && (gathered.times.ms[gathered.count - 1] ?? 1) <= 0) {
-		const ms = running(gathered, timing, context.uploadedMs, 0, 0);
-		return {
-			code: 'start',
-			why: 'relative-times',
-			options: [{ answer: { startMs: context.uploadedMs }, label: 'upload', ms }]
-		};
-	}
-	const { journeyFromMs: from } = context;
-	const options =
-		from === null
-			? []
-			: [{ answer: { startMs: from }, label: 'journey', ms: running(gathered, timing, from, intervalMs, 0) }];
-	return { code: 'start', why: 'no-times', options };
+function serialAxis(gathered: Gathered, stated: Stated, context: ReadContext): AxisOrOpen {
+	const local = gathered.times.ms.slice(0, gathered.count);
+	const zones = zonesFor(gathered, stated, context, local[0] ?? NaN);
+	const places = distinctZones(zones, (zone) => placeLocal(local, zone), context.uploadedMs);
+	const [only] = places;
+	if (only === undefined || places.length > 1) return openZone(places);
+	return { ...only.placed, zone: only.zone, order: null, orderBy: null, isLocal: true };
 }
 
-/** Rows that only run on from a start which is stated outside them. */
-function runningAxis(
-	gathered: Gathered,
-	timing: Timing,
-	stated: Stated,
-	context: ReadContext
-): TimeAxis | OpenTimes {
-	const { answers } = context;
-	const intervalSeconds =
-		answers.intervalSeconds ?? (stated.intervalMinutes === null ? null : stated.intervalMinutes * 60);
-	const stamped = openDaysIn(stated.startText);
-	const decided: DecidedOrder = decideOrder(stamped, stated, context);
-	const zone =
-		answers.startMs === undefined
-			? zoneOfStart(gathered, stated, context)
-			: ({ zone: 'UTC', by: 'answer' } satisfies UsedZone);
-	const start = (order: DateOrder | null): number | null =>
-		answers.startMs ?? momentMs(stated.startText, order, zone.zone);
-	const intervalMs = Math.round((intervalSeconds ?? 0) * 1000);
-	const offset = (ms: number): number => offsetAtOf(zone.zone)(ms) * 60_000;
-	const rowsFrom = (ms: number, step: number): Float64Array =>
-		running(gathered, timing, ms, step, offset(ms));
-	if (answers.startMs === undefined && decided.possible.length > 1) {
-		return openOrder(decided.possible, decided.why, (order) => rowsFrom(start(order) ?? 0, intervalMs));
+function rawAxis(gathered: Gathered, timing: Timing, stated: Stated, context: ReadContext): AxisOrOpen {
+	switch (timing.kind) {
+		case 'epoch':
+			return {
+				ms: gathered.times.ms.slice(0, gathered.count),
+				change: null,
+				changeRows: [],
+				zone: { zone: 'UTC', by: 'file' },
+				order: null,
+				orderBy: null,
+				isLocal: false
+			};
+		case 'serial-day':
+			return serialAxis(gathered, stated, context);
+		case 'moment':
+		case 'date':
+		case 'date-and-time':
+		case 'parts':
+			return calendarAxis(gathered, stated, context);
+		default:
+			return runningAxis(gathered, timing, stated, context);
 	}
-	const startMs = start(decided.order);
-	if (startMs === null) return openStart(timing, gathered, context, intervalMs);
-	if (timing.kind === 'none' && intervalSeconds === null) {
-		const options = usualIntervals.map((minutes) => ({
-			answer: { intervalSeconds: minutes * 60 },
-			label: String(minutes),
-			ms: rowsFrom(startMs, minutes * 60_000)
-		}));
-		return { code: 'interval', why: 'no-times', options };
-	}
-	return {
-		ms: rowsFrom(startMs, intervalMs),
-		...noChange,
-		zone,
-		order: decided.order,
-		orderBy: decided.by,
-		isLocal: zone.by !== 'answer'
-	};
 }
 
-/** Puts every gathered row on the UTC axis, or says what has to be asked first. */
+/** Several readings a day with nothing but its date cannot be placed. */
+function hasOnlyDates(gathered: Gathered): boolean {
+	const { times, count } = gathered;
+	let repeats = 0;
+	for (let i = 1; i < count; i++)
+		if (times.a[i] === times.a[i - 1] && times.b[i] === times.b[i - 1] && times.c[i] === times.c[i - 1])
+			repeats++;
+	return count > 2 && repeats > count / 2;
+}
+
+/** Puts every gathered row on the UTC axis, or says what has to be asked first, or why it cannot be done. */
 export function timeAxisOf(
 	gathered: Gathered,
 	timing: Timing,
 	stated: Stated,
 	context: ReadContext
-): TimeAxis | OpenTimes {
-	if (timing.kind === 'epoch') {
-		return {
-			ms: gathered.times.ms.slice(0, gathered.count),
-			...noChange,
-			zone: { zone: 'UTC', by: 'file' },
-			order: null,
-			orderBy: null,
-			isLocal: false
-		};
-	}
-	if (timing.kind === 'serial-day') {
-		const local = gathered.times.ms.slice(0, gathered.count);
-		const named = stated.zone;
-		const zone: UsedZone =
-			context.answers.zone !== undefined
-				? { zone: context.answers.zone, by: 'answer' }
-				: named === null
-					? { zone: context.siteZone, by: 'site' }
-					: { zone: named, by: 'file' };
-		const { utc, change, rows } = utcOfLocal(local, zone.zone);
-		return { ms: utc, change, changeRows: rows, zone, order: null, orderBy: null, isLocal: true };
-	}
-	if (timing.kind === 'elapsed' || timing.kind === 'none' || timing.kind === 'time-of-day') {
-		return runningAxis(gathered, timing, stated, context);
-	}
-	return calendarAxis(gathered, stated, context);
+): AxisOrOpen {
+	if (timing.kind === 'date' && hasOnlyDates(gathered)) return { refusal: 'no-time', found: null };
+	const raw = rawAxis(gathered, timing, stated, context);
+	if (!('zone' in raw)) return raw;
+	const judged = judgeDates(raw, timing, stated, context);
+	return 'zone' in judged ? settleClock(judged, gathered, context) : judged;
 }

@@ -54,7 +54,9 @@ function axisOddities({ axis, gathered, declared }: Readable, series: Series): O
 	)
 		early.push(series.lines[i] ?? 0);
 	const badDays: number[] = [];
-	axis.ms.forEach((ms, i) => i < gathered.count && Number.isNaN(ms) && badDays.push(line(i)));
+	axis.ms.forEach((ms, i) => {
+		if (i < gathered.count && Number.isNaN(ms) && axis.setAside?.has(i) !== true) badDays.push(line(i));
+	});
 	return [
 		oddityOf('bad-time', badDays),
 		oddityOf('zone-assumed', isAssumed ? first : [], axis.zone.zone),

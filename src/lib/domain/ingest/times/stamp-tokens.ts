@@ -9,6 +9,8 @@ export interface StampTokens {
 	words: string[];
 	/** How many numbers stood before each word. */
 	wordAt: number[];
+	/** Index of the word that named the half of the day; −1 without one. */
+	halfWord: number;
 }
 
 const most = 12;
@@ -21,7 +23,8 @@ export function emptyTokens(): StampTokens {
 		before: new Uint16Array(most),
 		used: new Uint8Array(most),
 		words: [],
-		wordAt: []
+		wordAt: [],
+		halfWord: -1
 	};
 }
 
@@ -43,6 +46,9 @@ const eastAsian: Readonly<Record<string, number>> = {
 	분: 58,
 	초: 32
 };
+
+/** Digits, letters and marks as wide as East Asian characters. */
+const fullWidth = /[\uff01-\uff5e]/;
 
 const isDigit = (code: number): boolean => code >= 48 && code <= 57;
 const isLetter = (code: number): boolean =>
@@ -67,10 +73,11 @@ function readNumber(text: string, from: number, before: number, tokens: StampTok
 function readWord(text: string, from: number, tokens: StampTokens): number {
 	let i = from;
 	while (i < text.length && isLetter(text.charCodeAt(i)) && eastAsian[text[i] ?? ''] === undefined) i++;
-	// "a. m.", "p.m." are one word each.
-	const dotted = /^([ap])\.?\s?m\b\.?/i.exec(text.slice(from, from + 5));
+	// "a. m.", "p.m.", "π.μ.", "v.m." are one word each.
+	const dotted =
+		i - from === 1 ? /^([apvnπμ])\.?\s?([mμ])(?!\p{L})\.?/iu.exec(text.slice(from, from + 5)) : null;
 	if (dotted !== null) {
-		tokens.words.push(`${dotted[1]}m`.toLowerCase());
+		tokens.words.push(`${dotted[1]}${dotted[2]}`.toLowerCase());
 		i = from + dotted[0].length;
 	} else tokens.words.push(text.slice(from, i).toLowerCase());
 	tokens.wordAt.push(tokens.count);
@@ -78,8 +85,10 @@ function readWord(text: string, from: number, tokens: StampTokens): number {
 }
 
 /** Splits a time text into numbers and words; false when it cannot be one. */
-export function tokenise(text: string, tokens: StampTokens): boolean {
+export function tokenise(written: string, tokens: StampTokens): boolean {
+	const text = fullWidth.test(written) ? written.normalize('NFKC') : written;
 	tokens.count = 0;
+	tokens.halfWord = -1;
 	if (tokens.words.length > 0) {
 		tokens.words = [];
 		tokens.wordAt = [];

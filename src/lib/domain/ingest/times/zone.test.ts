@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { fixedOffsetOf, utcOfLocal, zoneNamedBy } from './zone';
+import { utcOfLocal } from './local-times';
+import { fixedOffsetOf, zoneNamedBy } from './zone';
 
 const local = (...times: string[]): Float64Array =>
 	Float64Array.from(times, (time) => Date.parse(`${time}:00Z`));
@@ -14,7 +15,7 @@ describe('a zone', () => {
 		['GMT-5', '-05:00'],
 		['(UTC+05:30)', '+05:30'],
 		['+0200', '+02:00'],
-		['(UTC+01:00) Amsterdam, Berlin', '+01:00'],
+		['(UTC+01:00) Amsterdam, Berlin', 'Europe/Amsterdam'],
 		['CEST', '+02:00'],
 		['Mars/Base', null],
 		['CST', null],
