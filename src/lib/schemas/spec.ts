@@ -4,6 +4,7 @@ import type { Spec } from '../domain/shelf-life/spec';
 const figure = z.number();
 const absent = z.number().nullable();
 
+const lifeNeed = z.object({ hours: figure, celsius: figure });
 const lifePoint = z.object({ celsius: figure, lifeHours: figure });
 
 const rateModel = z.discriminatedUnion('kind', [
@@ -53,5 +54,9 @@ export const specSchema = z.object({
 		limitCelsius: absent
 	}),
 	sources: z.array(z.object({ text: z.string(), point: lifePoint.nullable(), lifeHoursHigh: absent })),
-	caution: z.string().nullable()
+	caution: z.string().nullable(),
+	// Younger than the first signed versions, whose text and hash know nothing of them.
+	sensitivityPlusMinus: figure.optional(),
+	neededAtDock: lifeNeed.optional(),
+	neededAtCustomer: lifeNeed.optional()
 }) satisfies z.ZodType<Spec>;

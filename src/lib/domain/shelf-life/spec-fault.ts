@@ -21,7 +21,10 @@ export const specFaultCodes = [
 	'limits-upside-down',
 	'stops-upside-down',
 	'severity-upside-down',
-	'more-than-full-life'
+	'more-than-full-life',
+	'sensitivity-without-figure',
+	'sensitivity-too-wide',
+	'need-disagrees'
 ] as const;
 export type SpecFaultCode = (typeof specFaultCodes)[number];
 

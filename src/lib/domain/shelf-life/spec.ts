@@ -51,6 +51,12 @@ export interface SpecSource {
 	readonly lifeHoursHigh: number | null;
 }
 
+/** Life that must be left, as whoever needs it says it: so long at that temperature. */
+export interface LifeNeed {
+	readonly hours: number;
+	readonly celsius: number;
+}
+
 /** A signed version's figures: everything the assessment needs to know about the product. */
 export interface Spec {
 	readonly referenceCelsius: number;
@@ -76,4 +82,10 @@ export interface Spec {
 	readonly mkt: MktRule;
 	readonly sources: readonly SpecSource[];
 	readonly caution: string | null;
+	/** ± of the model's own figure: Q10, kJ/mol, or °C of a square root's Tmin. Left out where none is known. */
+	readonly sensitivityPlusMinus?: number | undefined;
+	/** Life needed at the dock as it was stated; `neededHours` is its worth at the reference temperature. */
+	readonly neededAtDock?: LifeNeed | undefined;
+	/** Life that must be left when the customer has it, onward trip over. */
+	readonly neededAtCustomer?: LifeNeed | undefined;
 }

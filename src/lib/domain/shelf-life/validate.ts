@@ -1,6 +1,10 @@
+import { needWorthHours } from './need';
 import type { Limit, Spec } from './spec';
 import { fault, notNegative, positive, temperature, type SpecFault } from './spec-fault';
 import { coverOf, modelFaults } from './validate-model';
+
+/** A need stated and its worth may differ by the rounding of a form, no more. */
+const agreesTo = 1e-4;
 
 type Check = (faults: SpecFault[], spec: Spec) => void;
 
@@ -34,7 +38,9 @@ const checks: readonly Check[] = [
 		}
 		if (mkt.windowHours !== null) positive(faults, mkt.windowHours, 'mkt.windowHours');
 		if (mkt.limitCelsius !== null) temperature(faults, mkt.limitCelsius, 'mkt.limitCelsius');
-	}
+	},
+	sensitivityFaults,
+	needFaults
 ];
 
 function referenceFaults(faults: SpecFault[], spec: Spec): void {
@@ -49,6 +55,31 @@ function referenceFaults(faults: SpecFault[], spec: Spec): void {
 	if (spec.chillingCelsius === null) return;
 	temperature(faults, spec.chillingCelsius, 'chillingCelsius');
 	if (spec.chillingCelsius > reference) fault(faults, 'reference-below-chilling', 'chillingCelsius');
+}
+
+function sensitivityFaults(faults: SpecFault[], spec: Spec): void {
+	const { model, sensitivityPlusMinus: plusMinus, referenceCelsius } = spec;
+	if (plusMinus === undefined) return;
+	const field = 'sensitivityPlusMinus';
+	notNegative(faults, plusMinus, field);
+	if (model.kind === 'life-table') fault(faults, 'sensitivity-without-figure', field);
+	if (model.kind === 'square-root' && model.minCelsius + plusMinus >= referenceCelsius)
+		fault(faults, 'sensitivity-too-wide', field);
+}
+
+/** Needs are worth something only where the rest of the spec is whole. */
+function needFaults(faults: SpecFault[], spec: Spec): void {
+	const needs = { neededAtDock: spec.neededAtDock, neededAtCustomer: spec.neededAtCustomer };
+	for (const [field, need] of Object.entries(needs)) {
+		if (need === undefined) continue;
+		positive(faults, need.hours, `${field}.hours`);
+		temperature(faults, need.celsius, `${field}.celsius`);
+		if (faults.length > 0) continue;
+		const worthHours = needWorthHours(spec, need);
+		if (worthHours > spec.fullLifeHours) fault(faults, 'more-than-full-life', `${field}.hours`);
+		else if (field === 'neededAtDock' && Math.abs(worthHours - spec.neededHours) > worthHours * agreesTo)
+			fault(faults, 'need-disagrees', 'neededHours');
+	}
 }
 
 function limitFaults(faults: SpecFault[], spec: Spec): void {

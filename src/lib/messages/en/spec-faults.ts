@@ -19,6 +19,9 @@ const names: Record<string, string> = {
 	ceiling: 'Ceiling',
 	needed: 'Life needed',
 	openingDefault: 'Opening balance',
+	sensitivity: 'Model, give or take',
+	neededAtDock: 'Life needed at the dock',
+	neededAtCustomer: 'Life needed at the customer',
 	mktEnergy: 'Mean kinetic temperature, ΔH',
 	mktWindow: 'Mean kinetic temperature, window',
 	mktLimit: 'Mean kinetic temperature, limit',
@@ -69,6 +72,12 @@ const sentences: Record<FormFaultCode, Sentence> = {
 		`critical from ${value} comes before major from ${values[field.replace('Critical', 'Major')] ?? ''}. Enter that or later.`,
 	'more-than-full-life': (value, { fullLife = '' }) =>
 		`${value} days is more than the full life of ${fullLife}. Enter ${fullLife} or fewer.`,
+	'sensitivity-without-figure': () =>
+		'a table has no figure of its own to be off. Leave it empty, or choose another model.',
+	'sensitivity-too-wide': (value) =>
+		`${value} would lift Tmin to the reference temperature or above. Enter less.`,
+	'need-disagrees': (value) =>
+		`${value} days is not what the need at its own temperature comes to. Enter one of them again.`,
 	'row-incomplete': () => 'a highest figure needs a temperature and a life beside it. Enter both.',
 	'grace-in-all-short': (value, values, field) => {
 		const single = values[field.replace('InAll', '')] ?? '';
