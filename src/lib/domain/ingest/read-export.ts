@@ -53,7 +53,11 @@ function readFound(found: Found, encoding: string, context: ReadContext): Ingest
 }
 
 /** Open standards are read as they say, before anything is inferred. */
-function standardTable(root: JsonNode, text: string): ReturnType<typeof tableFromSenml> | null {
+function standardTable(
+	root: JsonNode,
+	text: string
+):
+	Table | { readonly code: RefusalCode; readonly line: number | null; readonly found: string | null } | null {
 	return isSenml(root)
 		? tableFromSenml(root, text)
 		: text.includes('sensorElementList')

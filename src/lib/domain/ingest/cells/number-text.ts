@@ -88,6 +88,42 @@ function roundToBound(into: NumberText): void {
 
 /** Reads a cell as a number with an optional unit; `missing` for blanks and words that stand for no value. */
 export function scanNumber(text: string, into: NumberText): NumberState {
+	const state = scanPlain(text, into);
+	if (state !== 'text' || text.length > longestFigure || !anyDigit.test(text)) return state;
+	const plain = plainFigure(text);
+	return plain === null ? state : scanPlain(plain, into);
+}
+
+/** Longer cells are sentences. */
+const longestFigure = 40;
+const anyDigit = /[\d\uff10-\uff19]/;
+const figure = String.raw`[-+\u2212]?\s?\d+(?:[.,]\d+)?`;
+const unitSign = String.raw`(?:°|º|˚)\s?[CF]|℃|℉`;
+const unitFirst = new RegExp(`^(${unitSign})\\s*(${figure})$`, 'i');
+const minusLast = /^(\d+(?:[.,]\d+)?)\s?[-\u2212]$/;
+/** A mark or letter behind the figure that says the value lies outside the limits. */
+const flagged = new RegExp(
+	`^(${figure}\\s*(?:${unitSign}|[CFK])?)\\s*(?:[*!^#↑↓▲▼]+|\\((?:HI?|LO?|H{2}|L{2}|high|low|alarm)\\)|\\s(?:HI?|LO?|H{2}|L{2}|high|low|alarm))$`,
+	'i'
+);
+
+/** The figure of a cell that is written in an unusual way, as others would write it; null when it holds none. */
+function plainFigure(text: string): string | null {
+	const bare = text
+		.normalize('NFKC')
+		.trim()
+		.replace(/^(?:=?"|')(.*?)["']?$/, '$1')
+		.trim();
+	const prefixed = unitFirst.exec(bare);
+	if (prefixed !== null) return `${prefixed[2]} ${prefixed[1]}`;
+	const negative = minusLast.exec(bare);
+	if (negative !== null) return `-${negative[1]}`;
+	const marked = flagged.exec(bare);
+	if (marked !== null) return marked[1] ?? null;
+	return bare === text ? null : bare;
+}
+
+function scanPlain(text: string, into: NumberText): NumberState {
 	let i = 0;
 	while (i < text.length && isSpace(text.charCodeAt(i))) i++;
 	if (i === text.length) return 'missing';
@@ -123,7 +159,9 @@ function readSuffix(rest: string, into: NumberText): boolean {
 			into.mantissa *= 10;
 			into.decimals++;
 		}
-		return into.decimals >= 0 && into.decimals < 20;
+		// A figure beyond all bounds (1E+30 for "no sensor") is one still, and as such set aside.
+		if (into.decimals < 0) into.decimals = 0;
+		return into.decimals < 20;
 	}
 	into.unit = wholeUnitOf(suffix);
 	return into.unit !== null || isUnitCell(suffix);

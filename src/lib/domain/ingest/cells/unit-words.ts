@@ -34,11 +34,15 @@ const wholeWords: Readonly<Record<string, TemperatureUnit>> = {
 
 /** Unit of a cell that holds nothing but a unit (`°C`, `[degF]`, `Cel`); null otherwise. */
 export function wholeUnitOf(text: string): TemperatureUnit | null {
-	const bare = text.toLowerCase().replace(/[\s°º˚\ufffd.()[\]"']/g, '');
+	const bare = text
+		.toLowerCase()
+		.replace(/[\s°º˚\ufffd.()[\]"'â]/g, '')
+		.replace(/^[ø¡](?=[cf]$)/, '');
 	return Object.hasOwn(wholeWords, bare) ? (wholeWords[bare] ?? null) : null;
 }
 
-const degreeSign = /(?:°|º|˚|\ufffd|\bdeg(?:rees?|\.)?|\bgrad)\s*([CFK])(?![a-z])/i;
+/** In DOS code pages the degree sign is the ø of Windows, on old Macs the ¡; `Â` before it is UTF-8 read twice. */
+const degreeSign = /(?:°|º|˚|\ufffd|(?<!\p{L})[ø¡]|\bdeg(?:rees?|\.)?|\bgrad)\s*([CFK])(?![a-z])/iu;
 const spelled = /celsius|celcius|celsjusz|fahrenheit|kelvin|℃|℉/i;
 const bracketed = /[([{/]\s*\??([CFK])\s*[)\]}]/;
 const trailing = /(?:^|[\s_,/.:-])\??([CFK])$|[a-z]([CFK])$|_([cfk])$/;

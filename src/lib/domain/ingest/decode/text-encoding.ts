@@ -9,6 +9,7 @@ export interface DecodedText {
 const tellingWords: readonly { encoding: string; words: RegExp }[] = [
 	{ encoding: 'shift_jis', words: /温度|湿度|日時|日付|時刻|測定|記録|℃/ },
 	{ encoding: 'gb18030', words: /温度|湿度|时间|日期|序号|记录|℃/ },
+	{ encoding: 'euc-jp', words: /温度|湿度|日時|日付|時刻|測定|記録/ },
 	{ encoding: 'big5', words: /溫度|濕度|時間|日期|序號|記錄|℃/ },
 	{ encoding: 'euc-kr', words: /온도|습도|시간|날짜|일시|℃/ },
 	{ encoding: 'windows-1251', words: /температура|влажность|дата|время/i },
@@ -16,7 +17,12 @@ const tellingWords: readonly { encoding: string; words: RegExp }[] = [
 		encoding: 'windows-1250',
 		words: /wilgotność|początek|średnia|teplota|vlhkost|čas|hőmérséklet|urządzeni|numer seryjny.*[ąęłśż]/i
 	},
-	{ encoding: 'windows-1254', words: /sıcaklık|başlangıç/i }
+	{ encoding: 'windows-1254', words: /sıcaklık|başlangıç|sıcaklığı/i },
+	{ encoding: 'koi8-r', words: /температура|влажность|дата и время/i },
+	{ encoding: 'windows-1253', words: /θερμοκρασία|υγρασία|ημερομηνία/i },
+	{ encoding: 'windows-1255', words: /טמפרטורה|תאריך/ },
+	{ encoding: 'windows-1256', words: /الحرارة|التاريخ/ },
+	{ encoding: 'windows-874', words: /อุณหภูมิ|ความชื้น/ }
 ];
 
 function decodeAs(bytes: Uint8Array, encoding: string, isFatal: boolean): string | null {
@@ -56,6 +62,18 @@ function decodeUtf8(bytes: Uint8Array): string | null {
 	return null;
 }
 
+/** A stray byte in UTF-8 (a note in another encoding) is outweighed by the letters that came out whole. */
+function decodeMendedUtf8(bytes: Uint8Array): string | null {
+	const text = decodeAs(bytes, 'utf-8', false) ?? '';
+	let [broken, whole] = [0, 0];
+	for (let i = 0; i < text.length; i++) {
+		const code = text.charCodeAt(i);
+		if (code === 0xfffd) broken++;
+		else if (code > 0x7f) whole++;
+	}
+	return whole >= 4 * broken ? text : null;
+}
+
 /** Bytes to text by what they show: mark, NUL pattern, valid UTF-8, telling words, else windows-1252. */
 export function decodeText(bytes: Uint8Array): DecodedText {
 	const marked = getBOMEncoding(bytes);
@@ -64,6 +82,8 @@ export function decodeText(bytes: Uint8Array): DecodedText {
 	if (sure !== null) return { text: decodeAs(bytes, sure, false) ?? '', encoding: sure };
 	const utf8 = decodeUtf8(bytes);
 	if (utf8 !== null) return { text: utf8, encoding: 'utf-8' };
+	const mended = decodeMendedUtf8(bytes);
+	if (mended !== null) return { text: mended, encoding: 'utf-8' };
 	const head = bytes.subarray(0, 65_536);
 	for (const { encoding, words } of tellingWords) {
 		const text = decodeAs(head, encoding, false);

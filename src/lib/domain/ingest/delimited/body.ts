@@ -1,5 +1,6 @@
 import { isUnitCell } from '../cells/unit-words';
 import { meaningOf } from '../layout/words';
+import { wideHeadsIn } from '../layout/wide-heads';
 import { shapeOf, type RowShape } from './delimiter';
 
 /** Access to the rows of a delimited file, split on demand. */
@@ -51,6 +52,7 @@ function rowAbove(rows: RawRows, row: number): number | null {
 function looksLikeHeader(cells: readonly string[], width: number): boolean {
 	const filled = cells.filter((cell) => cell.trim() !== '');
 	if (filled.length === 0) return false;
+	if (wideHeadsIn(cells) !== null) return true;
 	const shape = shapeOf(cells);
 	if (shape.hasMoment || (shape.values > 0 && shape.values >= shape.texts)) return false;
 	if (width === 1) return filled.length === 1 && !/[:=]\s*\S/.test(filled[0] ?? '');

@@ -1,5 +1,5 @@
 /** `space` is one or more spaces, `spaces` two or more (a cell may then hold a single one). */
-export const delimiters = ['\t', ';', '|', ',', 'spaces', 'space'] as const;
+export const delimiters = ['\t', ';', '|', ',', '^', 'spaces', 'space'] as const;
 export type Delimiter = (typeof delimiters)[number];
 
 const quote = 34;
@@ -26,10 +26,16 @@ function splitQuoted(text: string, delimiter: string): string[] {
 	}
 }
 
-/** Where the cell that starts at `from` ends: at the next delimiter outside quotes. */
-function cellEnd(text: string, from: number, delimiter: string): number {
+/** Where a quote may open: behind spaces, and behind the `=` with which a spreadsheet is told to leave text alone. */
+function quoteStart(text: string, from: number): number {
 	let i = from;
 	while (text.charCodeAt(i) === 32) i++;
+	return text.charCodeAt(i) === 61 && text.charCodeAt(i + 1) === quote ? i + 1 : i;
+}
+
+/** Where the cell that starts at `from` ends: at the next delimiter outside quotes. */
+function cellEnd(text: string, from: number, delimiter: string): number {
+	let i = quoteStart(text, from);
 	if (text.charCodeAt(i) === quote) {
 		for (i++; i < text.length; i++) {
 			if (text.charCodeAt(i) !== quote) continue;
@@ -42,7 +48,7 @@ function cellEnd(text: string, from: number, delimiter: string): number {
 }
 
 function unquoted(cell: string): string {
-	const bare = cell.trim();
+	const bare = cell.trim().replace(/^=(?=")/, '');
 	if (bare.length < 2 || bare.charCodeAt(0) !== quote || bare.charCodeAt(bare.length - 1) !== quote)
 		return cell;
 	return bare.slice(1, -1).replaceAll('""', '"');
@@ -53,8 +59,7 @@ export function hasOpenQuote(text: string, delimiter: Delimiter): boolean {
 	if (delimiter === 'spaces' || delimiter === 'space' || !text.includes('"')) return false;
 	let i = 0;
 	while (i <= text.length) {
-		let start = i;
-		while (text.charCodeAt(start) === 32) start++;
+		const start = quoteStart(text, i);
 		const end = cellEnd(text, i, delimiter);
 		if (text.charCodeAt(start) === quote && end >= text.length) return !closes(text, start);
 		i = end + 1;

@@ -1,21 +1,34 @@
 import { maxLineChars, maxReadings } from '../bounds';
 import type { RefusalCode } from '../ingestion';
-import { entryOf } from '../layout/entries';
-import type { Entry, RowText, Table } from '../layout/table';
-import { findBody, isHeaderOnly, type Body } from './body';
+import { reshaped } from '../layout/reshape';
+import type { Sections, Table } from '../layout/table';
+import { findBody } from './body';
 import { findDelimiter, sampleIndexes } from './delimiter';
+import { mergeDecimalCommas } from './decimal-commas';
 import { findLines, type Lines } from './lines';
-import { delimiters, hasOpenQuote, splitRow, type Delimiter } from './split-row';
+import { hasOpenQuote, splitRow, type Delimiter } from './split-row';
+import { tablesOf } from './tables';
+import { withoutBody } from './without-body';
 
 export type TableOrRefusal =
-	Table | { readonly code: RefusalCode; readonly line: number | null; readonly found: string | null };
+	| Table
+	| Sections
+	| { readonly code: RefusalCode; readonly line: number | null; readonly found: string | null };
 
-interface Rows {
+/** Rows of a delimited file as stretches of its text. */
+export interface Rows {
+	readonly text: string;
+	readonly delimiter: Delimiter | null;
 	readonly count: number;
 	readonly starts: Int32Array;
 	readonly ends: Int32Array;
 	/** Physical line (0-based) on which each row starts; null when rows and lines are the same. */
 	readonly lines: Int32Array | null;
+	readonly isUnterminated: boolean;
+	/** Whether cells are what stands between the delimiters, and not made of several. */
+	readonly isPlain: boolean;
+	cells(row: number): readonly string[];
+	textOf(row: number): string;
 }
 
 const sampledLines = 300;
@@ -28,8 +41,10 @@ function longLine(lines: Lines): number {
 	return -1;
 }
 
+type Spans = Pick<Rows, 'count' | 'starts' | 'ends' | 'lines'>;
+
 /** Joins lines whose quoted cell goes on; null with the line where a quote stays open. */
-function joinQuoted(text: string, lines: Lines, delimiter: Delimiter): Rows | { openAt: number } {
+function joinQuoted(text: string, lines: Lines, delimiter: Delimiter): Spans | { openAt: number } {
 	if (!text.includes('"')) return { ...lines, lines: null };
 	const starts = new Int32Array(lines.count);
 	const ends = new Int32Array(lines.count);
@@ -50,9 +65,15 @@ function joinQuoted(text: string, lines: Lines, delimiter: Delimiter): Rows | { 
 	return { count, starts: starts.subarray(0, count), ends: ends.subarray(0, count), lines: first };
 }
 
+/** Some programs quote with apostrophes: for splitting they are read as quotes. */
+function withPlainQuotes(text: string, sample: readonly string[]): string {
+	const quoted = sample.filter((line) => /^'[^']*'\s*[,;|\t]/.test(line)).length;
+	return quoted > sample.length * 0.8 ? text.replaceAll("'", '"') : text;
+}
+
 /** Delimited text to a table: lines, delimiter, body, heads, and what stands around them. */
-export function tableFromText(text: string): TableOrRefusal {
-	const lines = findLines(text);
+export function tableFromText(original: string): TableOrRefusal {
+	const lines = findLines(original);
 	const tooLong = longLine(lines);
 	if (tooLong >= 0)
 		return {
@@ -61,80 +82,36 @@ export function tableFromText(text: string): TableOrRefusal {
 			found: String((lines.ends[tooLong] ?? 0) - (lines.starts[tooLong] ?? 0))
 		};
 	if (lines.count > maxReadings) return { code: 'too-many-readings', line: null, found: String(lines.count) };
-	const lineText = (i: number): string => text.slice(lines.starts[i], lines.ends[i]);
-	const filled = sampleIndexes(lines.count, sampledLines)
-		.map(lineText)
-		.filter((line) => line.trim() !== '');
+	const sampled = (from: string): string[] =>
+		sampleIndexes(lines.count, sampledLines)
+			.map((i) => from.slice(lines.starts[i], lines.ends[i]))
+			.filter((line) => line.trim() !== '');
+	const text = withPlainQuotes(original, sampled(original));
+	const filled = sampled(text);
 	const delimiter = findDelimiter(filled);
-	const rows = delimiter === null ? { ...lines, lines: null } : joinQuoted(text, lines, delimiter);
-	if ('openAt' in rows)
-		return { code: 'unclosed-quote', line: rows.openAt + 1, found: lineText(rows.openAt).slice(0, 80) };
-	const textOf = (row: number): string => text.slice(rows.starts[row], rows.ends[row]);
-	const cells = (row: number): string[] =>
-		delimiter === null ? [textOf(row)] : splitRow(textOf(row), delimiter);
-	const body = findBody({ count: rows.count, cells });
-	if (body === null) return withoutBody(filled);
-	return {
-		...tableOf(rows, body, delimiter, textOf, cells, lines.isUnterminated),
-		rowText: rowTextOf(text, rows, body.first, delimiter)
-	};
-}
-
-function rowTextOf(text: string, rows: Rows, first: number, delimiter: Delimiter | null): RowText | null {
-	if (delimiter?.length !== 1) return null;
-	return {
-		text,
-		delimiter: delimiter.charCodeAt(0),
-		startOf: (row) => rows.starts[row + first] ?? 0,
-		endOf: (row) => rows.ends[row + first] ?? 0
-	};
-}
-
-function withoutBody(lines: readonly string[]): TableOrRefusal {
-	for (const line of lines) {
-		for (const delimiter of delimiters) {
-			const cells = splitRow(line, delimiter);
-			if (cells.length > 1 && isHeaderOnly(cells))
-				return { code: 'header-only', line: null, found: line.slice(0, 80) };
-		}
+	const spans = delimiter === null ? { ...lines, lines: null } : joinQuoted(text, lines, delimiter);
+	if ('openAt' in spans) {
+		const open = original.slice(lines.starts[spans.openAt], lines.ends[spans.openAt]);
+		return { code: 'unclosed-quote', line: spans.openAt + 1, found: open.slice(0, 80) };
 	}
-	return { code: 'no-readings', line: null, found: (lines[0] ?? '').trim().slice(0, 80) };
-}
-
-function tableOf(
-	rows: Rows,
-	body: Body,
-	delimiter: Delimiter | null,
-	textOf: (row: number) => string,
-	cells: (row: number) => string[],
-	isUnterminated: boolean
-): Table {
-	const lineOf = (row: number): number => (rows.lines === null ? row : (rows.lines[row] ?? 0)) + 1;
-	const trimmed = (row: number | null): string[] =>
-		row === null ? [] : cells(row).map((cell) => cell.trim());
-	const entries: Entry[] = [];
-	const free: string[] = [];
-	const outside = (row: number): void => {
-		const line = textOf(row);
-		if (line.trim() === '') return;
-		free.push(line);
-		const entry = entryOf(line, cells(row), lineOf(row));
-		if (entry !== null) entries.push(entry);
-	};
-	const preambleEnd = body.header ?? body.units ?? body.first;
-	for (let row = Math.max(0, preambleEnd - 500); row < preambleEnd; row++) outside(row);
-	return {
-		kind: 'delimited',
+	const { starts, ends } = spans;
+	const spanOf = (from: string, row: number): string => from.slice(starts[row], ends[row]);
+	const split = (row: number): string[] =>
+		delimiter === null ? [spanOf(text, row)] : splitRow(spanOf(text, row), delimiter);
+	const body = findBody({ count: spans.count, cells: split });
+	if (body === null) return withoutBody(filled);
+	const merged = mergeDecimalCommas({ count: spans.count, cells: split }, body, delimiter);
+	if (merged === 'ambiguous')
+		return { code: 'no-readings', line: body.first + 1, found: spanOf(original, body.first).slice(0, 80) };
+	const rows: Rows = {
+		...spans,
+		text,
 		delimiter,
-		header: trimmed(body.header),
-		headerLine: body.header === null ? null : lineOf(body.header),
-		units: trimmed(body.units),
-		entries,
-		freeText: free.join('\n'),
-		rowCount: rows.count - body.first,
-		cells: (row) => cells(row + body.first),
-		lineOf: (row) => lineOf(row + body.first),
-		textOf: (row) => textOf(row + body.first),
-		isUnterminated
+		isUnterminated: lines.isUnterminated,
+		isPlain: merged === null,
+		cells: merged ?? split,
+		textOf: (row) => spanOf(original, row)
 	};
+	const found = tablesOf(rows, body);
+	return 'tables' in found ? found : reshaped(found);
 }

@@ -1,5 +1,7 @@
+import type { RefusalCode } from '../ingestion';
 import type { Entry, Table } from '../layout/table';
 import { isArray, isObject, memberOf, textOfScalar, type JsonNode, type JsonObject } from './json-node';
+import { lineFinder } from './line-finder';
 import { tableOfRecords, type SensorRecord } from './pivot';
 
 const textIn = (object: JsonObject | undefined, key: string): string | null =>
@@ -10,30 +12,86 @@ function typeName(type: string): string {
 	return (/[^/:#]*$/.exec(type)?.[0] ?? type).replace(/^MT-/, '');
 }
 
-function reportsOf(element: JsonObject, eventTime: string | null): SensorRecord[] {
-	const metadata = memberOf(element, 'sensorMetadata');
-	const shared = isObject(metadata) ? metadata : undefined;
-	const reports = memberOf(element, 'sensorReport');
-	const list = isArray(reports) ? reports.items : [];
-	return list.flatMap((report) => {
-		const type = isObject(report) ? textIn(report, 'type') : null;
-		if (!isObject(report) || type === null) return [];
-		const time = textIn(report, 'time') ?? textIn(shared, 'time') ?? eventTime;
-		if (time === null) return [];
-		const device = textIn(report, 'deviceID') ?? textIn(shared, 'deviceID') ?? '';
-		const channel = [typeName(type), typeName(textIn(report, 'component') ?? ''), device]
-			.filter((part) => part !== '')
-			.join(' ');
-		// A report of an error without a value is no reading, and never a zero.
-		const value = textIn(report, 'value') ?? '';
-		if (value === '' && textIn(report, 'exception') === null) return [];
-		return [{ time, channel, unit: textIn(report, 'uom') ?? '', value, at: report.at }];
-	});
+interface Report extends SensorRecord {
+	/** Device that measured; else what was observed or where. Empty when the event names nothing. */
+	readonly subject: string;
 }
 
-/** Sensor reports of every event of a GS1 EPCIS 2.0 document, in the order of the file; null when it holds none. */
-export function tableFromEpcis(root: JsonNode, text: string): Table | null {
-	const records: SensorRecord[] = [];
+/** Fields that stand either in the metadata or in the report, never in both. Source: GS1 EPCIS conformance TCR-53. */
+const inlineFields = ['time', 'deviceID', 'deviceMetadata', 'rawData', 'dataProcessingMethod'] as const;
+
+/** What a report may state, with the word that names its column. */
+const figures = [
+	['value', ''],
+	['meanValue', 'mean'],
+	['minValue', 'min'],
+	['maxValue', 'max']
+] as const;
+
+/** An event without a device is told apart by its goods, else by its place. */
+function subjectOf(event: JsonObject): string {
+	const goods = memberOf(event, 'epcList');
+	const first = isArray(goods) ? textOfScalar(goods.items[0]) : null;
+	const place = memberOf(event, 'readPoint');
+	return first ?? textIn(event, 'parentID') ?? textIn(isObject(place) ? place : undefined, 'id') ?? '';
+}
+
+class Reports {
+	readonly found: Report[] = [];
+	/** A report that states a field its metadata states too. */
+	clash: { at: number; field: string } | null = null;
+
+	element(element: JsonObject, event: JsonObject, taken: Map<string, number>): void {
+		const metadata = memberOf(element, 'sensorMetadata');
+		const shared = isObject(metadata) ? metadata : undefined;
+		const reports = memberOf(element, 'sensorReport');
+		for (const report of isArray(reports) ? reports.items : []) {
+			const type = isObject(report) ? textIn(report, 'type') : null;
+			if (isObject(report) && type !== null) this.report(report, type, shared, event, taken);
+		}
+	}
+
+	report(
+		report: JsonObject,
+		type: string,
+		shared: JsonObject | undefined,
+		event: JsonObject,
+		taken: Map<string, number>
+	): void {
+		const field = inlineFields.find(
+			(name) =>
+				memberOf(report, name) !== undefined && shared !== undefined && memberOf(shared, name) !== undefined
+		);
+		if (field !== undefined) this.clash ??= { at: report.at, field };
+		const time =
+			textIn(report, 'time') ??
+			textIn(shared, 'time') ??
+			textIn(shared, 'endTime') ??
+			textIn(event, 'eventTime');
+		if (time === null) return;
+		const subject = textIn(report, 'deviceID') ?? textIn(shared, 'deviceID') ?? subjectOf(event);
+		const component = typeName(textIn(report, 'component') ?? '');
+		const name = [typeName(type), component].filter((part) => part !== '').join(' ');
+		// Two reports of one type at one moment are two sensors, whatever else they have in common.
+		const key = JSON.stringify([name, subject, time]);
+		const nth = (taken.get(key) ?? 0) + 1;
+		taken.set(key, nth);
+		const base = { time, subject, unit: textIn(report, 'uom') ?? '', at: report.at };
+		const channel = nth === 1 ? name : `${name} ${nth}`;
+		const isFault = textIn(report, 'exception') === 'ERROR_CONDITION';
+		const stated = figures.filter(([member]) => textIn(report, member) !== null);
+		for (const [member, word] of stated) {
+			const value = isFault ? 'error' : (textIn(report, member) ?? '');
+			this.found.push({ ...base, channel: word === '' ? channel : `${channel} ${word}`, value });
+		}
+		// A report of an exception without a figure is no reading, and never a zero.
+		if (stated.length === 0 && textIn(report, 'exception') !== null)
+			this.found.push({ ...base, channel, value: 'error' });
+	}
+}
+
+function reportsIn(root: JsonNode): Reports {
+	const reports = new Reports();
 	const walk = (node: JsonNode): void => {
 		if (isArray(node)) node.items.forEach(walk);
 		if (!isObject(node)) return;
@@ -42,19 +100,32 @@ export function tableFromEpcis(root: JsonNode, text: string): Table | null {
 			node.values.forEach(walk);
 			return;
 		}
-		for (const element of elements.items)
-			if (isObject(element)) records.push(...reportsOf(element, textIn(node, 'eventTime')));
+		const taken = new Map<string, number>();
+		for (const element of elements.items) if (isObject(element)) reports.element(element, node, taken);
 	};
 	walk(root);
-	if (records.length === 0) return null;
-	const devices = new Set(records.map(({ channel }) => channel.split(' ').at(-1) ?? ''));
-	const [device] = devices;
+	return reports;
+}
+
+type Refused = { readonly code: RefusalCode; readonly line: number | null; readonly found: string };
+
+/** Sensor reports of every event of a GS1 EPCIS 2.0 document, in the order of the file; null when it holds none. */
+export function tableFromEpcis(root: JsonNode, text: string): Table | Refused | null {
+	const { found, clash } = reportsIn(root);
+	if (clash !== null)
+		return {
+			code: 'broken-json',
+			line: lineFinder(text)(clash.at + 1),
+			found: `${clash.field}, ${clash.field}`
+		};
+	if (found.length === 0) return null;
+	const subjects = new Set(found.map(({ subject }) => subject));
+	const [only] = subjects;
 	const entries: Entry[] =
-		devices.size === 1 && device?.includes(':') === true ? [{ key: 'device', value: device, line: 1 }] : [];
+		subjects.size === 1 && only?.includes(':') === true ? [{ key: 'device', value: only, line: 1 }] : [];
 	// One device needs no naming in every channel.
-	const plain =
-		entries.length === 0
-			? records
-			: records.map((record) => ({ ...record, channel: record.channel.split(' ').slice(0, -1).join(' ') }));
-	return tableOfRecords('epcis', 'time', plain, entries, text);
+	const records = found.map(({ subject, ...record }) =>
+		subjects.size === 1 || subject === '' ? record : { ...record, channel: `${record.channel} ${subject}` }
+	);
+	return tableOfRecords('epcis', 'time', records, entries, text);
 }

@@ -30,6 +30,9 @@ function kindsIn(node: JsonNode, depth: number): { moments: number; numbers: num
 	return sum;
 }
 
+/** Whether something inside names a moment. */
+export const hasMoment = (node: JsonNode): boolean => kindsIn(node, 0).moments > 0;
+
 const isScalar = (node: JsonNode): boolean => !isObject(node) && !isArray(node);
 
 function spread<T>(items: readonly T[], wanted: number): T[] {

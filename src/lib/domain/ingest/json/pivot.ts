@@ -7,7 +7,7 @@ export interface SensorRecord {
 	readonly time: string;
 	readonly channel: string;
 	readonly unit: string;
-	/** Empty where the sensor reported a fault. */
+	/** A word for no value where the sensor reported a fault. */
 	readonly value: string;
 	readonly at: number;
 }
@@ -52,6 +52,7 @@ export function tableOfRecords(
 		cells: (row) => rows[row]?.cells ?? [],
 		lineOf: (row) => lineAt((rows[row]?.at ?? 0) + 1),
 		textOf: (row) => (rows[row]?.cells ?? []).join(', '),
-		isUnterminated: false
+		isUnterminated: false,
+		isSparse: true
 	};
 }

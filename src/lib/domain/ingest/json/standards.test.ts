@@ -84,7 +84,7 @@ describe('SenML', () => {
 					{ n: device, u: 'Cel', t: 1276020091000, v: 23.6 }
 				])
 			)
-		).toBe('no-time');
+		).toBe('implausible-dates');
 	});
 
 	it('adds a base value', () => {

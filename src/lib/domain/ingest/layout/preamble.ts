@@ -95,14 +95,23 @@ function serialOf(entries: readonly Entry[]): string | null {
 	return device === undefined ? null : device.value.trim();
 }
 
+/** A unit that the entries name; null where they name none or two, of which neither speaks of temperature alone. */
+function unitInEntries(entries: readonly Entry[]): TemperatureUnit | null | undefined {
+	const named = entries.flatMap(({ key, value }) => {
+		const unit = keys.unit.test(key) ? (wholeUnitOf(value) ?? unitWithin(value)) : null;
+		return unit === null ? [] : [{ unit, isOwn: /temp/.test(key) }];
+	});
+	const own = named.filter(({ isOwn }) => isOwn);
+	const units = new Set((own.length > 0 ? own : named).map(({ unit }) => unit));
+	const [only] = units;
+	return units.size === 0 ? undefined : units.size === 1 ? only : null;
+}
+
 function unitOf(entries: readonly Entry[], freeText: string): TemperatureUnit | null {
-	for (const { key, value } of entries) {
-		if (!keys.unit.test(key)) continue;
-		const unit = wholeUnitOf(value) ?? unitWithin(value);
-		if (unit !== null) return unit;
-	}
+	const stated = unitInEntries(entries);
+	if (stated !== undefined) return stated;
 	const seen = new Set(
-		[...freeText.matchAll(/(?:°|º|℃|℉|\ufffd)\s?([CF])?\b/gi)]
+		[...freeText.matchAll(/(?:°|º|˚|(?<!\p{L})[ø¡]|℃|℉|\ufffd|\bdeg\.?)\s?([CF])?(?!\p{L})/giu)]
 			.map((hit) => unitWithin(hit[0]))
 			.filter((unit) => unit !== null)
 	);
@@ -112,7 +121,10 @@ function unitOf(entries: readonly Entry[], freeText: string): TemperatureUnit | 
 
 /** Reads what the lines around the readings say. Limits and alarms name a unit, never a reading. */
 export function statedIn(entries: readonly Entry[], freeText: string, header: readonly string[]): Stated {
-	const folded = entries.map((entry) => ({ ...entry, key: foldWord(entry.key).replace(/[_.°]/g, ' ') }));
+	const folded = entries.map((entry) => ({
+		...entry,
+		key: foldWord(entry.key.replace(/(\p{Ll})(\p{Lu})/gu, '$1 $2')).replace(/[_.°]/g, ' ')
+	}));
 	const interval = folded
 		.map(({ key, value }) => (keys.interval.test(key) ? intervalOf(value, key) : null))
 		.find((minutes) => minutes !== null);

@@ -3,6 +3,8 @@ import {
 	temperature,
 	humidity,
 	dewPoint,
+	derived,
+	bound,
 	light,
 	shock,
 	other,
@@ -40,11 +42,14 @@ export interface HeaderMeaning {
 	readonly isOtherClock: boolean;
 	readonly isIndex: boolean;
 	readonly isLimit: boolean;
+	/** Words for the ends of a range, which only a figure that never moves makes limits. */
+	readonly isBound: boolean;
 	readonly statistic: 'min' | 'max' | 'mean' | null;
 }
 
 function quantityOf(words: readonly string[], text: string): Quantity | null {
 	if (says(words, text, dewPoint)) return 'dew-point';
+	if (says(words, text, derived)) return 'other';
 	// "Temp/RH sensor" style heads name the temperature first; a percent sign settles it the other way.
 	const isHumid = says(words, text, humidity);
 	if (isHumid && (text.includes('%') || !says(words, text, temperature))) return 'humidity';
@@ -66,7 +71,8 @@ export function meaningOf(header: string): HeaderMeaning {
 		isElapsed: !isValue && says(words, text, elapsed),
 		isOtherClock: says(words, text, otherClock),
 		isIndex: !isValue && says(words, text, index),
-		isLimit: says(words, text, limit),
+		isLimit: says(words, text, limit) || /\bset[ _-]?p(?:oin)?t\b/.test(text),
+		isBound: says(words, text, bound),
 		statistic: says(words, text, average)
 			? 'mean'
 			: says(words, text, lowest)

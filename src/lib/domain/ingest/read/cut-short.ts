@@ -12,8 +12,10 @@ export function isLastRowCut(table: Table, gathered: Gathered): boolean {
 	const cells = table.cells(gathered.rows[last] ?? 0);
 	const above = table.cells(gathered.rows[last - 1] ?? 0);
 	if (cells.length < above.length) return true;
-	return gathered.values.some(({ decimals, isMissing }) => {
-		if (isMissing[last] !== 0) return false;
+	return gathered.values.some(({ column, decimals, isMissing }) => {
+		// Nothing, or a figure up to its decimal sign, below a row that has one.
+		if (isMissing[last] !== 0)
+			return isMissing[last - 1] === 0 && /^\s*[-+]?\d*[.,]?$/.test(cells[column] ?? '');
 		const usual = decimals[0] ?? 0;
 		for (let i = 0; i < last; i++) if (isMissing[i] === 0 && decimals[i] !== usual) return false;
 		return (decimals[last] ?? 0) < usual;

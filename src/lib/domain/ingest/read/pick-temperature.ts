@@ -20,6 +20,7 @@ function isMeasured(column: Column): boolean {
 	return (
 		isNumeric(column) &&
 		!column.meaning.isLimit &&
+		!(column.meaning.isBound && column.constant !== null) &&
 		!(column.meaning.isIndex && (column.isCounter || column.meaning.quantity === null))
 	);
 }

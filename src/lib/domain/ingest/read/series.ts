@@ -22,9 +22,16 @@ const coldestCelsius = -200;
 const warmestCelsius = 150;
 /** Values that instruments write for "no sensor". Inside the possible range they only count as such after a leap. */
 const sentinels = new Set([
-	-127, -100, -99.9, -99, -99.99, -88.8, 85, 99, 99.9, 99.99, 100, 125, 127, 127.9, 128
+	-127, -100, -99.9, -99, -99.99, -88.8, -50, -55, -40, 80, 85, 99, 99.9, 99.99, 100, 120, 125, 127, 127.9,
+	128, 150
 ]);
 const leapCelsius = 30;
+const longestLoss = 500;
+
+/** A sentinel as written, or turned into the unit of the file by its writer. */
+function isSentinel(raw: number, celsius: number): boolean {
+	return sentinels.has(raw) || sentinels.has(Math.round(celsius * 100) / 100);
+}
 
 function largestDecimals(values: GatheredValues, count: number): number {
 	let most = 0;
@@ -35,10 +42,35 @@ function largestDecimals(values: GatheredValues, count: number): number {
 
 const powers = [1, 10, 100, 1000, 10_000] as const;
 
-/** A value that cannot be a temperature: outside physics, or a known "no sensor" figure away from its neighbours. */
-function isImpossible(celsius: number, raw: number, lastCelsius: number): boolean {
-	if (celsius < coldestCelsius || celsius > warmestCelsius) return true;
-	return Math.abs(celsius - lastCelsius) > leapCelsius && sentinels.has(raw);
+const isBeyondPhysics = (celsius: number): boolean => celsius < coldestCelsius || celsius > warmestCelsius;
+
+function rawOf(values: GatheredValues, i: number): number {
+	return (values.mantissa[i] ?? 0) / (powers[values.decimals[i] ?? 0] ?? 1);
+}
+
+/**
+ * A "no sensor" figure away from the readings before it, unless the readings go on from it: a logger put into a freezer
+ * leaps to −40 too, and stays near it.
+ */
+function isLeapToSentinel(
+	values: GatheredValues,
+	i: number,
+	count: number,
+	unit: TemperatureUnit,
+	last: number
+): boolean {
+	const celsiusAt = (k: number): number =>
+		celsiusFromScaled(values.mantissa[k] ?? 0, values.decimals[k] ?? 0, unit);
+	const celsius = celsiusAt(i);
+	// Most readings end here: the leap is the cheap question.
+	if (!(Math.abs(celsius - last) > leapCelsius) || !isSentinel(rawOf(values, i), celsius)) return false;
+	// A sensor that stays lost for longer than this is lost.
+	for (let k = i + 1; k < Math.min(count, i + longestLoss); k++) {
+		if (values.isMissing[k] !== 0 || values.mantissa[k] === values.mantissa[i]) continue;
+		const next = celsiusAt(k);
+		return isBeyondPhysics(next) || Math.abs(next - celsius) > leapCelsius / 3;
+	}
+	return true;
 }
 
 interface Kept {
@@ -51,9 +83,8 @@ interface Kept {
 function firstPlausible(values: GatheredValues, ms: Float64Array, unit: TemperatureUnit): number {
 	for (let i = 0; i < ms.length; i++) {
 		if (values.isMissing[i] !== 0) continue;
-		const raw = (values.mantissa[i] ?? 0) / (powers[values.decimals[i] ?? 0] ?? 1);
 		const celsius = celsiusFromScaled(values.mantissa[i] ?? 0, values.decimals[i] ?? 0, unit);
-		if (!isImpossible(celsius, raw, NaN) && !sentinels.has(raw)) return celsius;
+		if (!isBeyondPhysics(celsius) && !isSentinel(rawOf(values, i), celsius)) return celsius;
 	}
 	return NaN;
 }
@@ -89,7 +120,7 @@ export function seriesOf(
 		const own = values.decimals[i] ?? 0;
 		const mantissa = values.mantissa[i] ?? 0;
 		const celsius = celsiusFromScaled(mantissa, own, unit);
-		if (isTemperature && isImpossible(celsius, mantissa / (powers[own] ?? 1), last)) {
+		if (isTemperature && (isBeyondPhysics(celsius) || isLeapToSentinel(values, i, count, unit, last))) {
 			impossible.push(line);
 			continue;
 		}

@@ -41,11 +41,12 @@ function layoutOf({ table, encoding, axis, values, gathered }: Readable): Layout
 	};
 }
 
-function axisOddities({ axis, gathered, declared }: Readable, series: Series): Oddity[] {
+function axisOddities({ axis, gathered, declared, stated }: Readable, series: Series): Oddity[] {
 	const line = (row: number): number => gathered.lines[row] ?? 0;
 	const first = [line(0)];
 	const isAssumed = axis.isLocal && axis.zone.by === 'site';
-	const { startMs } = declared;
+	// Times counted back from their receipt lie before it: only a start that the file states is one.
+	const startMs = stated.startText === null ? null : declared.startMs;
 	const early: number[] = [];
 	for (
 		let i = 0;
