@@ -99,13 +99,17 @@ function leftOut(rows: Rows, segments: readonly Segment[]): Oddity[] {
 
 const serialIn = ({ entries, free }: Outside): string | null => statedIn(entries, free.join('\n'), []).serial;
 
+function headingOf(rows: Rows, segment: Segment | undefined): string | null {
+	const header = segment?.body.header ?? null;
+	return header === null ? null : rows.textOf(header).trim();
+}
+
 /** Whether the later table goes on with the recording of the earlier: same heads, same instrument, later times. */
 function goesOn(rows: Rows, earlier: Segment, later: Segment, known: string | null): boolean {
-	const heading = ({ body }: Segment): string | null =>
-		body.header === null ? null : rows.textOf(body.header).trim();
 	const serial = serialIn(aboveOf(rows, later));
 	const isSame =
-		heading(earlier) === heading(later) && (serial === null || known === null || serial === known);
+		headingOf(rows, earlier) === headingOf(rows, later) &&
+		(serial === null || known === null || serial === known);
 	if (!isSame) return false;
 	// The same rows once more are repeats, not another recording.
 	const isCopy = rows.textOf(earlier.body.first).trim() === rows.textOf(later.body.first).trim();
@@ -133,7 +137,11 @@ function nameOf(above: Outside, shared: Outside): string {
 /** The table of a file, or its recordings where there are several. */
 export function tablesOf(rows: Rows, body: Body): Table | Sections {
 	const segments = segmentsOf(rows, rows.textOf, body);
-	const recordings = segments.filter((segment) => isRecording(rows, segment));
+	// A stretch under the same heads is read with the one above, however short.
+	const recordings = segments.filter(
+		(segment, i) =>
+			isRecording(rows, segment) || (i > 0 && headingOf(rows, segment) === headingOf(rows, segments[0]))
+	);
 	const [only] = recordings.length === 0 ? segments : joined(rows, recordings);
 	const several = joined(rows, recordings);
 	if (only === undefined || several.length < 2) {

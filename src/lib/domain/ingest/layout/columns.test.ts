@@ -6,7 +6,7 @@ import { meaningOf } from './words';
 
 function profiled(text: string): ReturnType<typeof profileColumns> {
 	const table = tableFromText(text);
-	if ('code' in table) throw new Error(table.code);
+	if ('code' in table || 'tables' in table) throw new Error('no table');
 	return profileColumns(table);
 }
 

@@ -3,8 +3,6 @@ import {
 	temperature,
 	humidity,
 	dewPoint,
-	derived,
-	bound,
 	light,
 	shock,
 	other,
@@ -18,6 +16,7 @@ import {
 	average,
 	type Lexeme
 } from './lexicon';
+import { bound, derived } from './lexicon-besides';
 import { foldWord } from '../times/month-names';
 
 /** Header text as plain words: folded, camel case and punctuation apart, CJK kept. */
