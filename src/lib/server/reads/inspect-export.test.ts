@@ -103,6 +103,21 @@ describe('an inspection', () => {
 		]);
 	});
 
+	it('keeps its head and first rows where the sensor was silent at the start', () => {
+		const text =
+			'Time,Temp °C\n2026-03-01T00:00Z,ERR\n2026-03-01T00:05Z,---\n2026-03-01T00:10Z,4.0\n2026-03-01T00:15Z,n/a\n2026-03-01T00:20Z,NaN\n2026-03-01T00:25Z,-127\n2026-03-01T00:30Z,4.2\n';
+		expect(inspect(text).channels).toMatchObject([{ name: 'Temp °C', readings: 2, missing: 5 }]);
+	});
+
+	it('counts no row as missing at which a channel of single records was not due', () => {
+		const text =
+			'[{"bn":"urn:dev:mac:1:","bt":1770000000,"bu":"Cel","n":"t","v":4.5},{"n":"t","t":60,"v":4.6},{"n":"h","u":"%RH","v":80}]';
+		expect(inspect(text).channels.map(({ readings, missing }) => [readings, missing])).toEqual([
+			[2, 0],
+			[1, 0]
+		]);
+	});
+
 	it('says what decided', () => {
 		const text = 'Zone: Europe/Paris\n\ntime;temp °C\n13.04.2026 10:00;4,5\n13.04.2026 10:10;4,6\n';
 		expect(inspect(text).decisions).toEqual(
@@ -166,6 +181,7 @@ describe('a refusal', () => {
 		['json-syntax', '[{"time": "2026-04-03T10:00:00Z", "temp": 4.5},, {]'],
 		['truncated', '[{"time": "2026-04-03T10:00:00Z", "temp": 4.5}, {"ti'],
 		['truncated', gzipSync(new TextEncoder().encode(several.repeat(20))).subarray(0, 60)],
+		['truncated', gzipSync(new TextEncoder().encode(several)).subarray(0, -3)],
 		['too-deep', '['.repeat(5000)],
 		['line-too-long', `time,temp °C\n${'x'.repeat(70_000)}\n`],
 		['no-time-progress', 'time,temp °C\n2026-04-03T10:00:00Z,4.5\n'],

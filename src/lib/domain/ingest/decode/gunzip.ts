@@ -32,6 +32,19 @@ function trailerMatches(packed: Uint8Array, plain: Uint8Array): boolean {
 	return length === plain.length && checksum === crc32(plain);
 }
 
+/** Whether the file ends inside its own checksum and length: all is there but some of those eight bytes. */
+function isTrailerCut(packed: Uint8Array, plain: Uint8Array): boolean {
+	const trailer = new Uint8Array(8);
+	const view = new DataView(trailer.buffer);
+	view.setUint32(0, crc32(plain), true);
+	view.setUint32(4, plain.length, true);
+	for (let kept = 7; kept >= 3; kept--) {
+		const tail = packed.subarray(packed.length - kept);
+		if (tail.every((byte, i) => byte === trailer[i])) return true;
+	}
+	return false;
+}
+
 /** fflate's code for an end inside a block. */
 const unexpectedEnd = 0;
 
@@ -61,7 +74,8 @@ function unpack(packed: Uint8Array): Gunzipped {
 		bytes.set(piece, at);
 		at += piece.length;
 	}
-	return trailerMatches(packed, bytes) ? { bytes } : { fault: 'broken-gzip' };
+	if (trailerMatches(packed, bytes)) return { bytes };
+	return { fault: isTrailerCut(packed, bytes) ? 'truncated' : 'broken-gzip' };
 }
 
 /** Unpacks one gzip member piece by piece, so that a small file cannot grow beyond the bound. Zeros may pad it. */

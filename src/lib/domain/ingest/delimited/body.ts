@@ -24,6 +24,17 @@ function isBlank(cells: readonly string[]): boolean {
 const isReading = (shape: RowShape, isTimed: boolean): boolean =>
 	isTimed ? shape.hasMoment && shape.values > 0 : shape.values > 0 && shape.texts === 0 && !shape.hasMoment;
 
+/** A moment with nothing but words for no value beside it: the sensor was silent. */
+const isSilent = (shape: RowShape, width: number): boolean =>
+	shape.hasMoment && shape.values === 0 && shape.texts === 0 && shape.width === width && width > 1;
+
+/** A recording may begin with rows at which the sensor was silent. */
+function withSilentRows(rows: RawRows, first: number, width: number): number {
+	let at = first;
+	while (at > 0 && isSilent(shapeOf(rows.cells(at - 1)), width)) at--;
+	return at;
+}
+
 function firstReading(rows: RawRows, isTimed: boolean): number {
 	let fallback = -1;
 	for (let row = 0; row < rows.count; row++) {
@@ -37,6 +48,7 @@ function firstReading(rows: RawRows, isTimed: boolean): number {
 			seen++;
 			const other = shapeOf(cells);
 			if (isReading(other, isTimed) && Math.abs(other.width - shape.width) <= 1) return row;
+			if (isTimed && isSilent(other, shape.width)) return row;
 		}
 		if (row - fallback > 5000) break;
 	}
@@ -62,9 +74,10 @@ function looksLikeHeader(cells: readonly string[], width: number): boolean {
 /** Where readings begin, and which of the rows above are heads and units. */
 export function findBody(rows: RawRows): Body | null {
 	const timed = firstReading(rows, true);
-	const first = timed >= 0 ? timed : firstReading(rows, false);
-	if (first < 0) return null;
-	const width = shapeOf(rows.cells(first)).width;
+	const found = timed >= 0 ? timed : firstReading(rows, false);
+	if (found < 0) return null;
+	const width = shapeOf(rows.cells(found)).width;
+	const first = timed >= 0 ? withSilentRows(rows, found, width) : found;
 	let header = rowAbove(rows, first);
 	let units: number | null = null;
 	if (header !== null && isUnitRow(rows.cells(header))) {

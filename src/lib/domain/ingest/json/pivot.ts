@@ -37,7 +37,8 @@ export function tableOfRecords(
 			rows.push(row);
 			open.set(time, row);
 		}
-		row.cells[column] = value;
+		// A fault has no value and was due; a blank cell was not.
+		row.cells[column] = value === '' ? 'null' : value;
 	}
 	const lineAt = lineFinder(text);
 	return {

@@ -22,7 +22,7 @@ export function nameOf(column: Column): string {
 function headOf(readable: Readable, column: Column, isPrimary: boolean): ChannelHead {
 	const { gathered, unit, unitOf } = readable;
 	const quantity = isPrimary ? 'temperature' : (quantityOf(column) ?? 'other');
-	const own = isPrimary ? unit : quantity === 'temperature' ? unitOf(column) : null;
+	const own = isPrimary ? unit : quantity === 'temperature' ? unitOf(column) : column.unit;
 	const written = column.unitText === '' ? (unitInHead(column.name) ?? null) : column.unitText;
 	return {
 		name: nameOf(column),

@@ -27,7 +27,7 @@ export function spanWords(firstMs: number, lastMs: number, zone: string): string
 export function useWords(question: Question, choice: Choice | undefined): string {
 	if (!choice) return 'Use this answer';
 	const label = choiceLabel(question, choice);
-	const isSentence = /^(The|Every|When) /.test(label);
+	const isSentence = /^(The|Every|When|So|All) /.test(label);
 	return `Use ${isSentence ? label.charAt(0).toLowerCase() + label.slice(1) : label}`;
 }
 
