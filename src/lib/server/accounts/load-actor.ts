@@ -15,11 +15,11 @@ async function loadUser({ subjectId, tokenVersion, sessionId }: Claims): Promise
 	const user = await User.findByPk(subjectId);
 	// A raised version ends every session opened before: after switching off, a new password, changed roles.
 	if (!user || user.switchedOffAt || user.tokenVersion !== tokenVersion) return null;
-	return actorOfUser(user);
+	return actorOfUser(user, sessionId);
 }
 
-/** A user as an actor, with the sites they work at now. */
-export async function actorOfUser(user: User): Promise<Actor> {
+/** A user as an actor, with the sites they work at now; a program that acts for them has no session. */
+export async function actorOfUser(user: User, sessionId: string | null = null): Promise<Actor> {
 	const sites = await UserSite.findAll({ where: { userId: user.id } });
 	return {
 		kind: 'user',
@@ -32,7 +32,7 @@ export async function actorOfUser(user: User): Promise<Actor> {
 		partnerId: user.partnerId,
 		shipmentId: null,
 		temperatureUnit: user.temperatureUnit,
-		sessionId: sessionId ?? null
+		sessionId
 	};
 }
 
