@@ -9,7 +9,9 @@ import type { Understanding } from '../../src/lib/domain/ingest/ingestion';
 /** The text of a file as the platform decodes it, without the NULs that pad some. */
 function textOf(bytes: Buffer, encoding: string): string {
 	const plain = bytes[0] === 0x1f && bytes[1] === 0x8b ? gunzipSync(bytes) : bytes;
-	return new TextDecoder(encoding).decode(plain).replaceAll('\0', '');
+	const text = new TextDecoder(encoding).decode(plain).replaceAll('\0', '');
+	// Node's decoder leaves the dashes of windows-1252 (0x96, 0x97) as controls.
+	return text.replace(/[\u0096\u0097]/g, '–');
 }
 
 const minus = /[-−‐-―－﹣]\s?$/;

@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import type { ReadContext } from '../../domain/ingest/ingestion';
 import { readExport } from '../../domain/ingest/read-export';
 import { canonicalTraceBytes } from '../../domain/trace/digest';
@@ -10,9 +11,10 @@ import { summaryOf } from './stored-understanding';
 /** The reader whose understanding is stored; a change of what it understands takes a new version. */
 export const readerVersion = '1.0.0';
 
-/** What is asked of the reader. */
-export interface ReadOrder {
-	bytes: Uint8Array;
+/** What is asked of the reader; of a file on this machine's disk a thread is sent the path, not a copy. */
+export type ReadOrder = ReadWish & ({ bytes: Uint8Array } | { path: string });
+
+interface ReadWish {
 	context: ReadContext;
 	/** Traces are packed only for a read that is being kept. */
 	withTraces: boolean;
@@ -44,7 +46,9 @@ export interface ReadResult {
 }
 
 /** Reads an export, and packs its temperatures where they are wanted. */
-export function readBytes({ bytes, context, withTraces }: ReadOrder): ReadResult {
+export function readBytes(order: ReadOrder): ReadResult {
+	const { context, withTraces } = order;
+	const bytes = 'bytes' in order ? order.bytes : readFileSync(order.path);
 	const ingestion = readExport(bytes, context);
 	const summary = summaryOf(ingestion, context);
 	if (ingestion.kind !== 'ok' || !withTraces) return { summary, traces: [] };

@@ -1,4 +1,3 @@
-import { readFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import type { Readable } from 'node:stream';
 import { v7 as uuid, validate as isUuid } from 'uuid';
@@ -83,9 +82,9 @@ async function receiveOne(
 	await (await fileStore()).putFile(file.sha256, file.path);
 	const named = await nameFile(file.sha256, file.bytes, file.mediaType.slice(0, 100), ctx.now);
 	const context = await readContextOf(shipment, ctx.now, {});
-	const first = await runReader({ bytes: await readFile(file.path), context, withTraces: false });
-	const remembered = await rememberedReading(first.summary, shipment.supplierId, async (answers) =>
-		runReader({ bytes: await readFile(file.path), context: { ...context, answers }, withTraces: false })
+	const first = await runReader({ path: file.path, context, withTraces: false });
+	const remembered = await rememberedReading(first.summary, shipment.supplierId, (answers) =>
+		runReader({ path: file.path, context: { ...context, answers }, withTraces: false })
 	);
 	const { read, isDuplicate } = await writeReceived(ctx, shipment.id, {
 		id,

@@ -1,8 +1,10 @@
+import { stat } from 'node:fs/promises';
 import { join } from 'node:path';
 import { Worker } from 'node:worker_threads';
 import { Refusal } from '../refusals';
 import type { InspectAnswer } from '../../schemas/inspect';
 import { inspectFile, type InspectFileOrder } from './inspect-file';
+import { turnsOf } from './reading-turns';
 import { readBytes, type ReadOrder, type ReadResult } from './read-bytes';
 
 /** Where `vite build --mode node` leaves the workers, from the folder the server is started in. */
@@ -10,8 +12,9 @@ const builtFolder = join('build', 'node');
 /** No export a dock brings takes longer; one that does is built to. */
 const longestReadMs = 60_000;
 const mostMemoryMegabytes = 1024;
-/** More at once would only wait for each other. */
-const mostAtOnce = 2;
+/** More at once would only wait for each other; of heavy files one holds half a gigabyte. */
+const inTurn = turnsOf({ mostAtOnce: 2, mostHeavy: 1 });
+const heavyBytes = 8 * 1024 * 1024;
 
 let isBuilt: boolean = import.meta.env.PROD;
 
@@ -23,9 +26,6 @@ export function readInPlace(): void {
 	isBuilt = false;
 }
 
-let running = 0;
-const waiting: (() => void)[] = [];
-
 /**
  * Reads an export in a thread of its own, so that a long file holds up nobody and a hostile one ends alone.
  * Unbuilt, in development and tests, it is read in place.
@@ -34,7 +34,7 @@ export async function runReader(
 	order: ReadOrder,
 	program = builtProgram('read-worker.js')
 ): Promise<ReadResult> {
-	return program === null ? readBytes(order) : inTurn<ReadResult>(order, program);
+	return program === null ? readBytes(order) : queued<ReadResult>(order, program);
 }
 
 /** Inspects a file in a thread likewise; the two kinds wait for each other. */
@@ -42,23 +42,27 @@ export async function runInspector(
 	order: InspectFileOrder,
 	program = builtProgram('inspect-worker.js')
 ): Promise<InspectAnswer> {
-	return program === null ? inspectFile(order) : inTurn<InspectAnswer>(order, program);
+	return program === null ? inspectFile(order) : queued<InspectAnswer>(order, program);
 }
 
-async function inTurn<Result>(order: unknown, program: string): Promise<Result> {
-	if (running >= mostAtOnce) await new Promise<void>((resolve) => waiting.push(resolve));
-	running++;
-	try {
-		return await inThread<Result>(order, program);
-	} finally {
-		running--;
-		waiting.shift()?.();
-	}
+type Order = ReadOrder | InspectFileOrder;
+
+async function queued<Result>(order: Order, program: string): Promise<Result> {
+	const bytes = 'bytes' in order ? order.bytes.length : (await stat(order.path)).size;
+	return inTurn(bytes > heavyBytes, () => inThread<Result>(order, program));
 }
 
-function inThread<Result>(order: unknown, program: string): Promise<Result> {
+/** Bytes with a buffer of their own are handed over, not copied: nobody reads them here any more. */
+function handedOver(order: Order): ArrayBuffer[] {
+	if (!('bytes' in order)) return [];
+	const { buffer, byteLength } = order.bytes;
+	return buffer instanceof ArrayBuffer && buffer.byteLength === byteLength ? [buffer] : [];
+}
+
+function inThread<Result>(order: Order, program: string): Promise<Result> {
 	const worker = new Worker(program, {
 		workerData: order,
+		transferList: handedOver(order),
 		resourceLimits: { maxOldGenerationSizeMb: mostMemoryMegabytes }
 	});
 	return new Promise<Result>((resolve, reject) => {

@@ -30,6 +30,8 @@ describe('a cell read as a number', () => {
 		['1,234.5', [12345, 1, null]],
 		['1,234,567', [1234567, 0, null]],
 		['4.56789', [45679, 4, null]],
+		// Rounded digit by digit it would be 2.1777.
+		['2.1776477000', [21776, 4, null]],
 		['4.1e0', [41, 1, null]],
 		['4.5E-1', [45, 2, null]]
 	])('%j keeps its digits and unit', (text, expected) => {

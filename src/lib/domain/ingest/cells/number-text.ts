@@ -79,11 +79,11 @@ function scanDigits(text: string, from: number): void {
 	if (lastSeparator !== 0 && fraction === 0) digits.isBroken = true;
 }
 
+/** Rounds once: 2.17764770 is 2.1776, though rounding it digit by digit would give 2.1777. */
 function roundToBound(into: NumberText): void {
-	while (into.decimals > maxDecimals) {
-		into.mantissa = Math.round(into.mantissa / 10);
-		into.decimals--;
-	}
+	if (into.decimals <= maxDecimals) return;
+	into.mantissa = Math.round(into.mantissa / 10 ** (into.decimals - maxDecimals));
+	into.decimals = maxDecimals;
 }
 
 /** Reads a cell as a number with an optional unit; `missing` for blanks and words that stand for no value. */

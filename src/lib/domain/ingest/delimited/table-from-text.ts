@@ -32,6 +32,8 @@ export interface Rows {
 }
 
 const sampledLines = 300;
+/** Preamble, heads and footer stand beside as many readings as are taken. */
+const mostLinesBeside = 1000;
 /** A quoted cell that runs over more lines than this was never closed. */
 const mostLinesInCell = 100;
 
@@ -81,7 +83,7 @@ export function tableFromText(original: string): TableOrRefusal {
 			line: tooLong + 1,
 			found: String((lines.ends[tooLong] ?? 0) - (lines.starts[tooLong] ?? 0))
 		};
-	if (lines.count > maxReadings) return { code: 'too-many-readings', line: null, found: String(lines.count) };
+	if (lines.count > maxReadings + mostLinesBeside) return { code: 'too-many-readings', line: null, found: String(lines.count) };
 	const sampled = (from: string): string[] =>
 		sampleIndexes(lines.count, sampledLines)
 			.map((i) => from.slice(lines.starts[i], lines.ends[i]))

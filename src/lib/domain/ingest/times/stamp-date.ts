@@ -85,6 +85,8 @@ function readNamed(into: Stamp, month: number, p: number, q: number): boolean {
 	const isYearFirst = digitsOf(p) === 4;
 	const [yearAt, dayAt] = isYearFirst ? [p, q] : [q, p];
 	if (digitsOf(dayAt) > 2 || (digitsOf(yearAt) !== 2 && digitsOf(yearAt) !== 4)) return false;
+	// A year of four digits is written out: 0026 is damage, not the year 26.
+	if (digitsOf(yearAt) === 4 && value(yearAt) < 1900) return false;
 	into.shape = 'named';
 	into.a = fullYear(value(yearAt), digitsOf(yearAt));
 	into.b = month;

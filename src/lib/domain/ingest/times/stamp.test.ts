@@ -70,6 +70,7 @@ describe('a time text', () => {
 		'Temperature',
 		'1.2',
 		'33/44/2026',
+		'05-kwi-0026 08:00',
 		'10:30 and more words here'
 	])('%j is none', (text) => {
 		expect(scanned(text)).toBeNull();
