@@ -27,7 +27,8 @@ export function turnsOf({ mostAtOnce, mostHeavy }: TurnLimits) {
 		if (isHeavy) heavy--;
 		for (;;) {
 			const at = waiting.findIndex((next) => fits(next.isHeavy));
-			const [next] = at < 0 ? [] : waiting.splice(at, 1);
+			if (at < 0) return;
+			const [next] = waiting.splice(at, 1);
 			if (!next) return;
 			take(next.isHeavy);
 			next.start();
