@@ -35,7 +35,9 @@ function valuesIn(text: string): number[] {
 		}
 		const before = text.slice(Math.max(0, index - 3), index);
 		if (/[.,]$/.test(before)) forms.push(`.${digits}`);
-		const sign = minus.test(before.replace(/[.,]$/, '')) ? [1, -1] : [1];
+		// Some write it behind the figure: 4,5-.
+		const isNegative = minus.test(before.replace(/[.,]$/, '')) || /^[.,\d]*\s?[-−–]/.test(rest);
+		const sign = isNegative ? [1, -1] : [1];
 		for (const form of forms) for (const factor of sign) values.push(Number(form) * factor);
 	}
 	return values;
