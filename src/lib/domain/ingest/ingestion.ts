@@ -1,5 +1,6 @@
 import type { Quantity, Trace } from '../trace/trace';
 import type { TemperatureUnit } from '../units';
+import type { ClockProposal } from './read/clock-proposal';
 
 /** What the dock knows beside the file. All of it is argument: the reader has no clock of its own. */
 export interface ReadContext {
@@ -234,6 +235,8 @@ export interface Understanding {
 	readonly firstMs: number;
 	readonly lastMs: number;
 	readonly usualIntervalMs: number;
+	/** What the clock may have wrong against arrival and upload; null where the last reading fits, absent in old reads. */
+	readonly clockProposal?: ClockProposal | null;
 	readonly oddities: readonly Oddity[];
 	/** First and last rows of the file, as they stand. */
 	readonly rows: readonly ExampleRow[];

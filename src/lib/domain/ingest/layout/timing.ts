@@ -85,6 +85,7 @@ function digitsForm(column: Column): ClockForm | null {
 		column.name
 	);
 	const areWhole = column.texts.every((text) => /^\d*(?:\.0+)?$/.test(text));
+	if (column.texts.every((text) => /^\d{1,2}\.[0-5]\d$/.test(text)) && high <= 24) return 'clock';
 	if (isHour && high <= 24 && areWhole) return 'hour';
 	if (!areWhole) return high <= 1 ? 'fraction' : null;
 	return high > 59 && high <= 235_959 ? 'clock' : null;

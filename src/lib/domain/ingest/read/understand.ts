@@ -4,6 +4,7 @@ import type { Stated } from '../layout/preamble';
 import { columnsOf } from '../layout/timing';
 import { channelsOf } from './all-channels';
 import { decisionsOf } from './decisions';
+import { proposeClock } from './clock-proposal';
 import { exampleRows } from './example-rows';
 import { momentMs } from './instants';
 import { intervalsOf } from './intervals';
@@ -122,6 +123,10 @@ export function understand(readable: Readable, context: ReadContext): Ingestion 
 			firstMs: series.times[0] ?? 0,
 			lastMs: series.times[count - 1] ?? 0,
 			usualIntervalMs: intervals.usualMs,
+			clockProposal: proposeClock(
+				{ lastMs: series.times[count - 1] ?? 0, usualIntervalMs: intervals.usualMs },
+				context
+			),
 			oddities: merged([
 				...rowOddities(gathered),
 				...seriesOddities(series, intervals, context),

@@ -3,18 +3,28 @@
  * these, so that "Sept.", "septembre" and "September" need one entry. Source: Unicode CLDR month names.
  */
 const stems: readonly (readonly string[])[] = [
-	['jan', 'ene', 'gen', 'sty', 'oca', 'led', 'янв'],
-	['feb', 'fev', 'lut', 'sub', 'uno', 'фев'],
-	['mar', 'maa', 'mrt', 'mrz', 'maer', 'bre', 'мар'],
-	['apr', 'avr', 'abr', 'kwi', 'nis', 'dub', 'апр'],
-	['may', 'mai', 'mei', 'mag', 'maj', 'kve', 'мая', 'май'],
-	['jun', 'juin', 'giu', 'cze', 'haz', 'июн'],
-	['jul', 'juil', 'lug', 'lip', 'tem', 'июл'],
-	['aug', 'aou', 'ago', 'sie', 'agu', 'srp', 'авг'],
-	['sep', 'set', 'wrz', 'eyl', 'zar', 'сен'],
-	['oct', 'okt', 'out', 'ott', 'paz', 'eki', 'rij', 'окт'],
-	['nov', 'lis', 'kas', 'ноя'],
-	['dec', 'dez', 'dic', 'gru', 'ara', 'pro', 'дек']
+	['jan', 'ene', 'gen', 'sty', 'oca', 'led', 'янв', 'ιαν', 'ian', 'jaa', 'tammi', 'січ'],
+	['feb', 'fev', 'lut', 'sub', 'uno', 'фев', 'φεβ', 'vee', 'helmi', 'лют'],
+	['mar', 'maa', 'mrt', 'mrz', 'maer', 'bre', 'мар', 'μαρ', 'бер'],
+	['apr', 'avr', 'abr', 'kwi', 'nis', 'dub', 'апр', 'απρ', 'huhti', 'кві'],
+	['may', 'mai', 'mei', 'mag', 'maj', 'kve', 'мая', 'май', 'μαι', 'touko', 'тра'],
+	['jun', 'juin', 'giu', 'cze', 'haz', 'июн', 'ιουν', 'iun', 'juun', 'kesa', 'чер', 'cvn'],
+	['jul', 'juil', 'lug', 'lip', 'tem', 'июл', 'ιουλ', 'iul', 'juul', 'heina', 'лип', 'cvc'],
+	['aug', 'aou', 'ago', 'sie', 'agu', 'srp', 'авг', 'αυγ', 'elo', 'сер'],
+	['sep', 'set', 'wrz', 'eyl', 'zar', 'сен', 'σεπ', 'szep', 'syys', 'вер'],
+	['oct', 'okt', 'out', 'ott', 'paz', 'eki', 'rij', 'окт', 'οκτ', 'loka', 'жов'],
+	['nov', 'lis', 'kas', 'ноя', 'νοε', 'noi', 'лис'],
+	['dec', 'dez', 'dic', 'gru', 'ara', 'pro', 'дек', 'δεκ', 'joulu', 'гру', 'det', 'des']
+];
+
+/** Words that begin like a month's name and are another's, or none (temperature): looked up before the stems. */
+const longer: readonly (readonly [string, number])[] = [
+	['marras', 11],
+	['temp', 0],
+	['cervenec', 7],
+	['cervence', 7],
+	['cerven', 6],
+	['cervn', 6]
 ];
 
 /** Weekdays may stand before a date and say nothing more. */
@@ -43,8 +53,10 @@ export function monthOfName(word: string): number {
 	const known = remembered.get(word);
 	if (known !== undefined) return known;
 	const folded = foldWord(word).replace(/\.$/, '');
+	const exact = longer.find(([name]) => folded.startsWith(name))?.[1];
 	const found =
-		folded.length < 3 ? 0 : stems.findIndex((names) => names.some((name) => folded.startsWith(name))) + 1;
+		exact ??
+		(folded.length < 3 ? 0 : stems.findIndex((names) => names.some((name) => folded.startsWith(name))) + 1);
 	if (remembered.size < 1000) remembered.set(word, found);
 	return found;
 }

@@ -38,12 +38,17 @@ export function isRunningTime(text: string): boolean {
 	);
 }
 
-/** Milliseconds since midnight of bare digits: `930` and `1430`, `93015`, or an hour alone; NaN for others. */
+/** Milliseconds since midnight of digits: `930` and `1430`, `93015`, `9.30`, or an hour alone; NaN for others. */
 export function clockOfDigits(text: string, form: 'clock' | 'hour' | 'fraction'): number {
 	const bare = text.trim();
 	if (form === 'fraction') {
 		const part = Number(bare.replace(',', '.'));
 		return bare !== '' && part >= 0 && part <= 1 ? Math.round(part * 86_400) * 1000 : NaN;
+	}
+	const dotted = /^(\d{1,2})\.([0-5]\d)$/.exec(bare);
+	if (dotted !== null && form === 'clock') {
+		const ms = (Number(dotted[1]) * 60 + Number(dotted[2])) * 60_000;
+		return ms <= msPerDay ? ms : NaN;
 	}
 	if (!/^\d{1,6}(?:\.0+)?$/.test(bare)) return NaN;
 	const value = Number(bare);

@@ -137,9 +137,28 @@ const spelled: Readonly<Record<string, string>> = {
 	korean: 'Asia/Seoul'
 };
 
+/** Names of a zone that already hold both halves of its year. Source: IANA time zone database, `northamerica`. */
+const wholeYear: Readonly<Record<string, string>> = {
+	est5edt: 'America/New_York',
+	cst6cdt: 'America/Chicago',
+	mst7mdt: 'America/Denver',
+	pst8pdt: 'America/Los_Angeles',
+	et: 'America/New_York',
+	ct: 'America/Chicago',
+	mt: 'America/Denver',
+	pt: 'America/Los_Angeles',
+	'cet/cest': 'Europe/Berlin',
+	'mez/mesz': 'Europe/Berlin',
+	'est/edt': 'America/New_York',
+	'cst/cdt': 'America/Chicago',
+	'pst/pdt': 'America/Los_Angeles',
+	'gmt/bst': 'Europe/London'
+};
+
 /** IANA zone of a spelled-out name such as "W. Europe Standard Time" or "Central Time (US & Canada)"; null for others. */
 export function spelledZone(text: string): string | null {
 	const name = text.trim().toLowerCase().replace(/\s+/g, ' ');
+	if (Object.hasOwn(wholeYear, name)) return wholeYear[name] ?? null;
 	const bare =
 		/^(.+?) (?:standard|daylight|summer) time( \(mexico\))?$/.exec(name) ??
 		/^(.+?) time \((?:us & canada|us and canada|us|canada)\)$/.exec(name) ??
