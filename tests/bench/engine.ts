@@ -45,9 +45,35 @@ export function wanderingTrace(readings: number): Trace {
 	return { unit: 'celsius', decimals: 1, times, scaled };
 }
 
+const minutesADay = 1440;
+/** Every other day the doors stand open: minutes into the event and degrees above the set-point, tenths. */
+const doorMinutes = 60;
+const doorTenths = 55;
+
+/**
+ * A minute-by-minute log of a cold room at 0.1° steps: it hunts about 2 °C, and every other day an event of an hour
+ * takes it to 7.5 °C and back. The same every time.
+ */
+export function coldRoomTrace(readings: number): Trace {
+	const scaled = new Int32Array(readings);
+	let state = 12_345;
+	let value = 20;
+	for (let i = 0; i < readings; i++) {
+		// Source: Numerical Recipes, 7.1, the quick and dirty generator of 32 bits; its high bits are the good ones.
+		state = (Math.imul(state, 1_664_525) + 1_013_904_223) >>> 0;
+		const pull = Math.sign(20 - value);
+		value += [0, 0, 0, 0, 0, 1, -1, pull][state >>> 29] ?? 0;
+		const intoEvent = i % (2 * minutesADay);
+		const isOpen = intoEvent < doorMinutes;
+		scaled[i] = value + (isOpen ? Math.round(doorTenths * Math.sin((Math.PI * intoEvent) / doorMinutes)) : 0);
+	}
+	const times = Float64Array.from(scaled, (_, i) => startMs + i * minuteMs);
+	return { unit: 'celsius', decimals: 1, times, scaled };
+}
+
 /** Assesses one long trace by every model, with limits, handovers and a rolling window, and measures it. */
 export function measureEngine(readings: number, nowMs: () => number): EngineRatios {
-	const trace = wanderingTrace(readings);
+	const trace = coldRoomTrace(readings);
 	const exponentialMs = timeOf(nowMs, () => {
 		let sum = 0;
 		for (let i = 0; i < readings; i++) sum += Math.exp((trace.scaled[i] as number) / 100);
@@ -64,7 +90,7 @@ export function measureEngine(readings: number, nowMs: () => number): EngineRati
 	return { readings, seconds, exponentialsPerReading, packedBytesPerReading };
 }
 
-function inputOf(trace: Trace, model: RateModel) {
+export function inputOf(trace: Trace, model: RateModel) {
 	const mkt = { activationEnergyKilojoulesPerMole: null, windowHours: 24, limitCelsius: 8 };
 	const upper = buildLimit(6, { graceMinutes: 30, graceMinutesInAll: 90, hysteresisCelsius: 0.5 });
 	const spec = buildSpec({

@@ -1,5 +1,5 @@
 import type { LegUse } from '../receiving/assessment';
-import { observed, type Course } from '../shelf-life/course';
+import { trimmed, unobserved, type Course } from '../shelf-life/course';
 import { usedUntil, type LifeUsed } from '../shelf-life/life-used';
 import { curveRateAt, type RateCurve } from '../shelf-life/rate-curve';
 import { msPerHour, msPerMinute } from '../units';
@@ -85,13 +85,14 @@ function overUse(usedHours: number, allowed: number | null, atSetPointHours: num
 }
 
 /** Part of the leg in which readings stand at both ends of the step and no gap or trim lies between. */
-function coveredFraction(course: Course, fromMs: number, toMs: number): number {
-	if (toMs <= fromMs) return 0;
-	let coveredMs = 0;
-	for (let i = 0; i < course.steps.length; i++) {
-		const from = Math.max(fromMs, course.times[i] as number);
-		const to = Math.min(toMs, course.times[i + 1] as number);
-		if (to > from && course.steps[i] === observed) coveredMs += to - from;
+function coveredFraction({ times, steps, isEven = false }: Course, fromMs: number, toMs: number): number {
+	if (toMs <= fromMs || times.length === 0) return 0;
+	const within = (from: number, to: number) => Math.max(0, Math.min(toMs, to) - Math.max(fromMs, from));
+	let coveredMs = within(times[0] as number, times[times.length - 1] as number);
+	for (const kind of isEven ? [] : [unobserved, trimmed]) {
+		for (let i = steps.indexOf(kind); i >= 0; i = steps.indexOf(kind, i + 1)) {
+			coveredMs -= within(times[i] as number, times[i + 1] as number);
+		}
 	}
 	return coveredMs / (toMs - fromMs);
 }

@@ -1,7 +1,6 @@
 import type { StopHit, StopKind } from '../receiving/assessment';
 import type { Course } from '../shelf-life/course';
 import type { Spec } from '../shelf-life/spec';
-import { extremesOf } from '../trace/statistics';
 import type { Placement } from '../trace/trace';
 import { msPerMinute } from '../units';
 import { stretchesBeyond, type Beyond } from './beyond';
@@ -46,11 +45,11 @@ export function findStops(evidence: StopEvidence): StopHit[] {
 }
 
 function hitOf({ course, accuracyCelsius, placement }: StopEvidence, stop: Stop): StopHit | null {
-	const extremes = extremesOf(course.celsius);
-	if (extremes === null) return null;
+	const { levels } = course;
+	if (levels.length === 0) return null;
 	const isFreezing = stop.kind === 'freezing';
 	const sign = isFreezing ? -1 : 1;
-	const extremeCelsius = isFreezing ? extremes.min : extremes.max;
+	const extremeCelsius = (isFreezing ? levels[0] : levels[levels.length - 1]) as number;
 	const excess = sign * (extremeCelsius - stop.celsius);
 	const isReached = isFreezing ? excess >= 0 : excess > 0;
 	const hasLeftLimit = stop.limitCelsius === null || sign * (extremeCelsius - stop.limitCelsius) > 0;

@@ -4,15 +4,17 @@ import { placeExcursion } from '../custody/place-excursion';
 import { findExcursions } from '../excursions/find-excursions';
 import { findStops } from '../excursions/find-stops';
 import { courseOf, type Course } from '../shelf-life/course';
-import { hoursAbove, hoursBelow, lifeUsed, type LifeUsed } from '../shelf-life/life-used';
+import { hoursAbove, hoursBelow, type LifeUsed } from '../shelf-life/life-used';
 import { rateCurve, type RateCurve } from '../shelf-life/rate-curve';
 import type { SpecFault } from '../shelf-life/spec-fault';
 import { validateSpec } from '../shelf-life/validate';
+import { ownRoom, type Room } from '../trace/room';
 import { msPerHour } from '../units';
 import { engineVersion } from './engine-version';
 import type { AssessInput, Assessment, Gap, Range } from './assessment';
 import { openingHours } from './opening';
 import { gapsOf, journeyFigures } from './journey';
+import { lifeSides, type LifeSides } from './life-sides';
 
 /** Why there is nothing to assess; the spec's faults come with it where they are the reason. */
 export type AssessmentRefusalCode = 'spec-faulty' | 'no-readings-in-window' | 'one-reading-in-window';
@@ -29,35 +31,27 @@ export class AssessmentRefusal extends Error {
 	}
 }
 
-interface Sides {
-	readonly value: LifeUsed;
-	readonly low: LifeUsed;
-	readonly high: LifeUsed;
-}
-
 /**
  * What one trace says about one line: life used at every reading that counts, what is left, and what went wrong where.
  *
  * Low and high of what is left stack every bound the same way (warm readings, unkind gaps, the larger opening balance,
  * the shorter full life; and the reverse), because they are bounds and not deviations: the low holds if all are
  * unlucky at once, and the low decides.
+ *
+ * The series lies in `room`: in a shared one it lasts until the next assessment.
  */
-export function assess(input: AssessInput): Assessment {
+export function assess(input: AssessInput, room: Room = ownRoom): Assessment {
 	const { spec, trace, accuracyCelsius } = input;
 	const faults = validateSpec(spec);
 	if (faults.length > 0) throw new AssessmentRefusal('spec-faulty', faults);
 	const lastReadingMs = trace.times[trace.times.length - 1] ?? 0;
-	const course = courseOf(trace, custodyWindow(input.handovers, lastReadingMs), input.trims);
+	const course = courseOf(trace, custodyWindow(input.handovers, lastReadingMs), input.trims, room);
 	if (course.times.length === 0) throw new AssessmentRefusal('no-readings-in-window');
 	if (course.times.length === 1) throw new AssessmentRefusal('one-reading-in-window');
 	const curve = rateCurve(spec);
-	const sides: Sides = {
-		value: lifeUsed(course, curve, accuracyCelsius, 'value'),
-		low: lifeUsed(course, curve, accuracyCelsius, 'low'),
-		high: lifeUsed(course, curve, accuracyCelsius, 'high')
-	};
+	const sides = lifeSides(course, curve, accuracyCelsius, room);
 	const opening = openingHours(input.opening, spec, curve, course.times[0] as number);
-	const used = rangeAt(sides, course.times.length - 1);
+	const used = totalOf(sides);
 	const remaining = remainingOf(spec.fullLifeHours, spec.fullLifeUncertaintyHours, opening, used);
 	const gaps = gapsOf(course, sides);
 	return {
@@ -79,12 +73,8 @@ export function assess(input: AssessInput): Assessment {
 	};
 }
 
-function rangeAt(sides: Sides, index: number): Range {
-	return {
-		value: sides.value.usedHours[index] as number,
-		low: sides.low.usedHours[index] as number,
-		high: sides.high.usedHours[index] as number
-	};
+function totalOf({ value, lowHours, highHours }: LifeSides): Range {
+	return { value: value.usedHours[value.usedHours.length - 1] as number, low: lowHours, high: highHours };
 }
 
 /** Full − opening − used. The low takes the high of what was used, and the reverse; nothing is clipped at zero. */
@@ -110,10 +100,13 @@ function unobservedFigures(gaps: readonly Gap[]) {
 }
 
 function modelFigures(course: Course, curve: RateCurve, chillingCelsius: number | null) {
+	const coldest = course.levels[0] as number;
+	const warmest = course.levels[course.levels.length - 1] as number;
 	return {
-		belowModelHours: hoursBelow(course, curve.fromCelsius),
-		aboveModelHours: hoursAbove(course, curve.toCelsius),
-		chilledHours: chillingCelsius === null ? 0 : hoursBelow(course, chillingCelsius)
+		belowModelHours: coldest < curve.fromCelsius ? hoursBelow(course, curve.fromCelsius) : 0,
+		aboveModelHours: warmest > curve.toCelsius ? hoursAbove(course, curve.toCelsius) : 0,
+		chilledHours:
+			chillingCelsius !== null && coldest < chillingCelsius ? hoursBelow(course, chillingCelsius) : 0
 	};
 }
 
@@ -136,12 +129,19 @@ function custodyFigures(
 	};
 }
 
-function seriesOf(course: Course, sides: Sides): Assessment['series'] {
+/** The low and the high are worked out when they are asked for: only the chart draws them. */
+function seriesOf(course: Course, sides: LifeSides): Assessment['series'] {
+	let low: Float64Array | null = null;
+	let high: Float64Array | null = null;
 	return {
 		times: course.times,
 		celsius: course.celsius,
 		usedHours: sides.value.usedHours,
-		usedLowHours: sides.low.usedHours,
-		usedHighHours: sides.high.usedHours
+		get usedLowHours() {
+			return (low ??= sides.seriesOf('low'));
+		},
+		get usedHighHours() {
+			return (high ??= sides.seriesOf('high'));
+		}
 	};
 }

@@ -1,5 +1,6 @@
 import { longestWatchedMs, usualIntervalMs } from '../trace/interval';
-import { levelsOf } from '../trace/levels';
+import { levelsOf, type LevelBlocks } from '../trace/levels';
+import { ownRoom, type Room } from '../trace/room';
 import type { Trace } from '../trace/trace';
 import { celsiusFromScaled } from '../units';
 
@@ -23,7 +24,10 @@ export interface Course {
 	readonly steps: Uint8Array;
 	/** Each distinct temperature once, coldest first, and which each reading is: rates are worked out per level. */
 	readonly levels: Float64Array;
-	readonly levelOf: Uint32Array;
+	readonly levelOf: Int32Array;
+	readonly blocks?: LevelBlocks;
+	/** Every step is the usual interval and counts; left out where nobody looked. */
+	readonly isEven?: boolean;
 	/** Of the whole trace, so that trimming it does not redefine what a gap is. */
 	readonly usualIntervalMs: number;
 }
@@ -32,21 +36,47 @@ export interface Course {
  * The readings of a trace between the ends of `window` (all of them where it is null) and outside every trim.
  * A reading outside speaks for nothing inside: the logger may have lain in an office until the load was closed.
  */
-export function courseOf(trace: Trace, window: Stretch | null, trims: readonly Stretch[]): Course {
-	const usualMs = usualIntervalMs(trace.times);
+export function courseOf(
+	trace: Trace,
+	window: Stretch | null,
+	trims: readonly Stretch[],
+	room: Room = ownRoom
+): Course {
+	const isEven = isEvenlySpaced(trace.times);
+	const usualMs = isEven ? firstStepMs(trace.times) : usualIntervalMs(trace.times);
 	const { times, scaled } = counted(trace, window, trims);
-	const { values, levelOf } = levelsOf(scaled);
+	const { values, levelOf, blocks } = levelsOf(scaled, room);
 	const levels = Float64Array.from(values, (value) => celsiusFromScaled(value, trace.decimals, trace.unit));
-	const celsius = new Float64Array(levelOf.length);
+	const celsius = room.floats('celsius', levelOf.length);
 	for (let i = 0; i < celsius.length; i++) celsius[i] = levels[levelOf[i] as number] as number;
+	const steps = room.bytes('steps', Math.max(0, times.length - 1)).fill(observed);
+	// Of evenly spaced readings none can be missing but those trimmed away.
+	if (!isEven || trims.length > 0) markSteps(steps, times, trims, usualMs);
 	return {
 		times,
 		celsius,
-		steps: stepsOf(times, trims, usualMs),
+		steps,
 		levels,
 		levelOf,
-		usualIntervalMs: usualMs
+		blocks,
+		usualIntervalMs: usualMs,
+		isEven: isEven && trims.length === 0
 	};
+}
+
+function firstStepMs(times: Float64Array): number {
+	return times.length < 2 ? 0 : (times[1] as number) - (times[0] as number);
+}
+
+function isEvenlySpaced(times: Float64Array): boolean {
+	const stepMs = firstStepMs(times);
+	let before = times[0] as number;
+	for (let i = 1; i < times.length; i++) {
+		const at = times[i] as number;
+		if (at - before !== stepMs) return false;
+		before = at;
+	}
+	return true;
 }
 
 /** The readings that count. Without trims they are one run, of which nothing need be copied. */
@@ -89,13 +119,12 @@ function countedIndexes(times: Float64Array, window: Stretch | null, trims: read
 	return counted.subarray(0, count);
 }
 
-function stepsOf(times: Float64Array, trims: readonly Stretch[], usualMs: number): Uint8Array {
-	const steps = new Uint8Array(Math.max(0, times.length - 1));
+function markSteps(steps: Uint8Array, times: Float64Array, trims: readonly Stretch[], usualMs: number): void {
 	const longestMs = longestWatchedMs(usualMs);
 	for (let i = 0; i < steps.length; i++) {
 		if ((times[i + 1] as number) - (times[i] as number) > longestMs) steps[i] = unobserved;
 	}
-	if (trims.length === 0) return steps;
+	if (trims.length === 0) return;
 	for (let i = 0; i < steps.length; i++) {
 		const fromMs = times[i] as number;
 		const toMs = times[i + 1] as number;
@@ -103,5 +132,4 @@ function stepsOf(times: Float64Array, trims: readonly Stretch[], usualMs: number
 			steps[i] = trimmed;
 		}
 	}
-	return steps;
 }

@@ -8,6 +8,7 @@ export const customaryActivationEnergy = 83.144;
 /** J/(mol·K) as printed in USP ⟨1160⟩, so that the customary energy gives ΔH/R = 10 000 K. */
 const printedGasConstant = 8.3144;
 
+/** ΔH/R in kelvin; null: the customary energy. */
 function theta(activationEnergyKilojoulesPerMole: number | null): number {
 	return ((activationEnergyKilojoulesPerMole ?? customaryActivationEnergy) * 1000) / printedGasConstant;
 }
@@ -23,8 +24,7 @@ export function meanKineticCelsius(
 	weights: ArrayLike<number>,
 	activationEnergyKilojoulesPerMole: number | null = null
 ): number | null {
-	const energy = theta(activationEnergyKilojoulesPerMole);
-	const shares = new BoltzmannShares(celsius, energy);
+	const shares = boltzmannShares(celsius, activationEnergyKilojoulesPerMole);
 	const sum = new RunningSum();
 	const weight = new RunningSum();
 	for (let i = 0; i < celsius.length; i++) {
@@ -34,8 +34,16 @@ export function meanKineticCelsius(
 	return weight.total > 0 ? shares.meanKinetic(sum.total / weight.total) : null;
 }
 
+/** The shares of temperatures by an activation energy; null: the customary one. */
+export function boltzmannShares(
+	celsius: ArrayLike<number>,
+	activationEnergyKilojoulesPerMole: number | null
+): BoltzmannShares {
+	return new BoltzmannShares(celsius, theta(activationEnergyKilojoulesPerMole));
+}
+
 /** e^(−ΔH/RT) of each reading relative to the warmest one's; 1 there, so a mean of shares is between 0 and 1. */
-class BoltzmannShares {
+export class BoltzmannShares {
 	readonly #shares: Float64Array;
 	readonly #warmestKelvin: number;
 	readonly #energy: number;
@@ -78,7 +86,7 @@ export function worstWindowMeanKinetic(
 	windowMs: number,
 	activationEnergyKilojoulesPerMole: number | null = null
 ): number | null {
-	const shares = new BoltzmannShares(celsius, theta(activationEnergyKilojoulesPerMole));
+	const shares = boltzmannShares(celsius, activationEnergyKilojoulesPerMole);
 	const { ends, areas } = cumulated(shares, weightsMs);
 	const spanMs = ends[ends.length - 1] ?? 0;
 	if (spanMs <= windowMs) return meanKineticCelsius(celsius, weightsMs, activationEnergyKilojoulesPerMole);

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { levelsOf } from './levels';
+import { blocksOf, levelsOf } from './levels';
 
 describe('the levels of a trace', () => {
 	it.each([
@@ -40,5 +40,15 @@ describe('the levels of a trace', () => {
 			expect([...levelOf].map((level) => values[level])).toEqual([...scaled]);
 			expect([...values]).toEqual([...new Set(scaled)].sort((a, b) => a - b));
 		}
+	});
+
+	it('have the coldest and the warmest of each block of 64', () => {
+		const scaled = Int32Array.from({ length: 130 }, (_, i) => (i === 70 ? 90 : i === 71 ? -5 : 20));
+		const { blocks, levelOf } = levelsOf(scaled);
+		// The values are −5, 20 and 90.
+		expect([...blocks.coldest]).toEqual([1, 0, 1]);
+		expect([...blocks.warmest]).toEqual([1, 2, 1]);
+		expect(blocksOf(levelOf)).toEqual(blocks);
+		expect(blocksOf(new Int32Array(0)).coldest).toHaveLength(0);
 	});
 });
