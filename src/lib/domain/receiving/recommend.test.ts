@@ -7,7 +7,7 @@ import { recommend } from './recommend';
 import type { ReasonCode } from './recommendation';
 
 const spec = buildSpec({ upper: buildLimit(4), neededHours: 264 });
-const quiet = assess(buildInput(buildTrace([1, 1, 1, 1], 60), spec));
+const quiet = assess(buildInput(buildTrace(new Array<number>(37).fill(1), 5), spec));
 
 function assessmentWith(overrides: Partial<Assessment>): Assessment {
 	return { ...quiet, ...overrides };

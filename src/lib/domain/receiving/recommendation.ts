@@ -119,9 +119,66 @@ export type Reason =
 			readonly hours: number;
 			readonly fromCelsius: number;
 			readonly toCelsius: number;
+	  }
+	| GateReason;
+
+/** What is found without a trace, or beside it: the door, the unit, the clock, the calendar. */
+type GateReason =
+	| { readonly code: 'evidence-incomplete'; readonly grade: Grade }
+	| { readonly code: 'logger-missing'; readonly grade: Grade }
+	| {
+			readonly code: 'logger-started-late';
+			readonly grade: Grade;
+			readonly missingHours: number;
+			readonly startDelayMinutes: number;
+	  }
+	| {
+			readonly code: 'transit-late';
+			readonly grade: Grade;
+			readonly tookHours: number;
+			readonly plannedHours: number;
+	  }
+	| {
+			readonly code: 'unit-set-point-differs';
+			readonly grade: Grade;
+			readonly setPointCelsius: number;
+			readonly agreedCelsius: number;
+	  }
+	| {
+			readonly code: 'unit-return-air-warm';
+			readonly grade: Grade;
+			readonly returnAirCelsius: number;
+			readonly limitCelsius: number;
+	  }
+	| {
+			readonly code: 'interval-too-long';
+			readonly grade: Grade;
+			readonly everyMinutes: number;
+			readonly allowedMinutes: number;
+			readonly journeyHours: number;
+	  }
+	| { readonly code: 'date-passed'; readonly grade: Grade; readonly bestBeforeOn: string }
+	| {
+			readonly code: 'date-short';
+			readonly grade: Grade;
+			readonly bestBeforeOn: string;
+			readonly days: number;
+			readonly neededDays: number;
+	  }
+	| { readonly code: 'date-missing'; readonly grade: Grade }
+	| {
+			readonly code: 'older-than-last';
+			readonly grade: Grade;
+			readonly bestBeforeOn: string;
+			readonly lastBestBeforeOn: string;
 	  };
 
 export type ReasonCode = Reason['code'];
+
+/** What a product or a lane may make of a finding. */
+export const settableGrades = ['inform', 'note', 'hold'] as const;
+export type SettableGrade = (typeof settableGrades)[number];
+export type FindingGrades = Partial<Record<ReasonCode, SettableGrade>>;
 
 /** The strictest firing rule decides: any reject-grade reason rejects, any hold-grade reason holds. */
 export interface Recommendation {

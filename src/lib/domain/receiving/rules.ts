@@ -1,4 +1,13 @@
 import {
+	dateReasons,
+	incompleteReasons,
+	intervalReasons,
+	lateStartReasons,
+	loggerMissingReasons,
+	transitReasons,
+	unitReasons
+} from './gate-reasons';
+import {
 	calibrationReasons,
 	caseReasons,
 	disagreementReasons,
@@ -22,13 +31,19 @@ import {
 /** A rule looks at the evidence and says what it found: nothing, one thing or several. */
 export interface Rule {
 	readonly name: string;
+	/** Product and lane may grade what it finds otherwise. */
+	readonly isSettable: boolean;
 	readonly find: (evidence: Evidence) => readonly Reason[];
 }
 
+const fixed = (name: string, find: Rule['find']): Rule => ({ name, isSettable: false, find });
+const settable = (name: string, find: Rule['find']): Rule => ({ name, isSettable: true, find });
+
 /**
- * The rules, in the order their reasons are shown within one grade.
+ * The rules, in the order their reasons are shown within one grade. Life and stops are fixed; every other finding
+ * may be graded inform, note or hold by product and lane, the lane before the product.
  *
- * | finding | grade |
+ * | finding | grade unless set |
  * | --- | --- |
  * | low meets the need | inform |
  * | value meets it, low does not; or high alone does | hold |
@@ -36,28 +51,39 @@ export interface Rule {
  * | no trace | note: never a hold by itself |
  * | stop reached / in doubt | reject / hold |
  * | excursion minor / major / critical | inform / note / hold; in doubt never more than note |
+ * | at the door, and neither trace nor pulp speaks | hold |
+ * | printed date passed, too near for the customer, or older than the last received | hold |
+ * | printed date missing where the customer asks for one | note |
+ * | pulp beyond the limit, seal broken, loggers disagree | hold |
+ * | mean kinetic temperature over its limit | hold |
  * | unobserved up to a quarter of the window / more | note / hold |
  * | logger stopped up to 4 h early / more | note / hold |
- * | mean kinetic temperature over its limit | hold |
- * | time outside the model, opening undeclared, calibration overdue, pulp against trace, cases | note |
- * | loggers disagree, seal broken, pulp beyond the limit | hold |
+ * | logger started late, a required one missing | note |
+ * | without a trace: the journey took longer than planned | note |
+ * | unit's set-point not the agreed one, its return air over the limit | note |
+ * | time outside the model, opening undeclared, pulp against trace, cases | note |
+ * | calibration overdue, interval longer than EN 12830 has it | note |
  */
 export const rules: readonly Rule[] = [
-	{ name: 'life', find: lifeReasons },
-	{
-		name: 'stops',
-		find: (evidence) => (evidence.assessment?.stops ?? []).map((hit) => stopReason(hit, evidence))
-	},
-	{ name: 'excursions', find: ({ assessment }) => (assessment === null ? [] : excursionReasons(assessment)) },
-	{ name: 'pulp limit', find: pulpLimitReasons },
-	{ name: 'seal', find: sealReasons },
-	{ name: 'disagreement', find: disagreementReasons },
-	{ name: 'mean kinetic temperature', find: mktReasons },
-	{ name: 'early stop', find: earlyStopReasons },
-	{ name: 'unobserved', find: unobservedReasons },
-	{ name: 'outside the model', find: modelReasons },
-	{ name: 'opening', find: openingReasons },
-	{ name: 'pulp against trace', find: pulpAgainstTraceReasons },
-	{ name: 'cases', find: caseReasons },
-	{ name: 'calibration', find: calibrationReasons }
+	fixed('life', lifeReasons),
+	fixed('stops', (evidence) => (evidence.assessment?.stops ?? []).map((hit) => stopReason(hit, evidence))),
+	settable('excursions', ({ assessment }) => (assessment === null ? [] : excursionReasons(assessment))),
+	settable('evidence incomplete', incompleteReasons),
+	settable('printed date', dateReasons),
+	settable('pulp limit', pulpLimitReasons),
+	settable('seal', sealReasons),
+	settable('disagreement', disagreementReasons),
+	settable('mean kinetic temperature', mktReasons),
+	settable('early stop', earlyStopReasons),
+	settable('late start', lateStartReasons),
+	settable('unobserved', unobservedReasons),
+	settable('logger missing', loggerMissingReasons),
+	settable('transit', transitReasons),
+	settable('unit', unitReasons),
+	settable('outside the model', modelReasons),
+	settable('opening', openingReasons),
+	settable('pulp against trace', pulpAgainstTraceReasons),
+	settable('cases', caseReasons),
+	settable('calibration', calibrationReasons),
+	settable('interval', intervalReasons)
 ];

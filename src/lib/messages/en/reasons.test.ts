@@ -169,6 +169,59 @@ const cases: readonly (readonly [Reason, string])[] = [
 	[
 		{ code: 'outside-model', grade: 'note', hours: 4.17, fromCelsius: 0, toCelsius: 10 },
 		"4.2 h outside the model's 0.0 °C to 10.0 °C; the rate is held there."
+	],
+	[
+		{ code: 'evidence-incomplete', grade: 'hold' },
+		'Neither a trace nor a pulp reading speaks for this line.'
+	],
+	[
+		{ code: 'logger-missing', grade: 'note' },
+		'A logger is required on this lane; none was read for this line.'
+	],
+	[
+		{ code: 'logger-started-late', grade: 'note', missingHours: 2.5, startDelayMinutes: 30 },
+		'The readings begin 2.5 h after custody did; that time is not in the life used. The logger has a start delay of 30 min.'
+	],
+	[
+		{ code: 'logger-started-late', grade: 'note', missingHours: 2.5, startDelayMinutes: 0 },
+		'The readings begin 2.5 h after custody did; that time is not in the life used.'
+	],
+	[
+		{ code: 'transit-late', grade: 'note', tookHours: 61.5, plannedHours: 48 },
+		'The journey took 61.5 h; 48.0 h were planned.'
+	],
+	[
+		{ code: 'unit-set-point-differs', grade: 'note', setPointCelsius: 4, agreedCelsius: 1 },
+		'The unit was set to 4.0 °C; 1.0 °C were agreed.'
+	],
+	[
+		{ code: 'unit-return-air-warm', grade: 'note', returnAirCelsius: 9.2, limitCelsius: 4 },
+		"The unit's return air read 9.2 °C; the limit is 4.0 °C."
+	],
+	[
+		{ code: 'interval-too-long', grade: 'note', everyMinutes: 10, allowedMinutes: 5, journeyHours: 20 },
+		'A reading every 10 min on a journey of 20.0 h; EN 12830 has 5 min at most.'
+	],
+	[
+		{ code: 'date-passed', grade: 'hold', bestBeforeOn: '2026-04-02' },
+		'The printed date, Thu 2 Apr 2026, has passed.'
+	],
+	[
+		{ code: 'date-short', grade: 'hold', bestBeforeOn: '2026-04-10', days: 7, neededDays: 9 },
+		'7 d to the printed date, Fri 10 Apr 2026; the customer asks for 9 d.'
+	],
+	[
+		{ code: 'date-missing', grade: 'note' },
+		'No printed date is written down; the customer has a rule for it.'
+	],
+	[
+		{
+			code: 'older-than-last',
+			grade: 'hold',
+			bestBeforeOn: '2026-04-09',
+			lastBestBeforeOn: '2026-04-10'
+		},
+		'The printed date, Thu 9 Apr 2026, is before that last received, Fri 10 Apr 2026.'
 	]
 ];
 
@@ -178,7 +231,7 @@ describe('a reason in English', () => {
 	});
 
 	it('has a sentence for every code', () => {
-		expect(new Set(cases.map(([reason]) => reason.code)).size).toBe(18);
+		expect(new Set(cases.map(([reason]) => reason.code)).size).toBe(29);
 	});
 
 	it('speaks in the reader’s unit, a span scaled and not shifted', () => {

@@ -89,7 +89,28 @@ const sentences: Sentences = {
 		return `Mean kinetic temperature ${over} ${degrees(reason.mktCelsius)}; the limit is ${degrees(reason.limitCelsius)}.`;
 	},
 	'outside-model': (reason, { hours, degrees }) =>
-		`${hours(reason.hours)} outside the model's ${degrees(reason.fromCelsius)} to ${degrees(reason.toCelsius)}; the rate is held there.`
+		`${hours(reason.hours)} outside the model's ${degrees(reason.fromCelsius)} to ${degrees(reason.toCelsius)}; the rate is held there.`,
+	'evidence-incomplete': () => 'Neither a trace nor a pulp reading speaks for this line.',
+	'logger-missing': () => 'A logger is required on this lane; none was read for this line.',
+	'logger-started-late': (reason, { hours, lasting }) =>
+		`The readings begin ${hours(reason.missingHours)} after custody did; that time is not in the life used.` +
+		(reason.startDelayMinutes > 0
+			? ` The logger has a start delay of ${lasting(reason.startDelayMinutes)}.`
+			: ''),
+	'transit-late': (reason, { hours }) =>
+		`The journey took ${hours(reason.tookHours)}; ${hours(reason.plannedHours)} were planned.`,
+	'unit-set-point-differs': (reason, { degrees }) =>
+		`The unit was set to ${degrees(reason.setPointCelsius)}; ${degrees(reason.agreedCelsius)} were agreed.`,
+	'unit-return-air-warm': (reason, { degrees }) =>
+		`The unit's return air read ${degrees(reason.returnAirCelsius)}; the limit is ${degrees(reason.limitCelsius)}.`,
+	'interval-too-long': (reason, { lasting, hours }) =>
+		`A reading every ${lasting(reason.everyMinutes)} on a journey of ${hours(reason.journeyHours)}; EN 12830 has ${lasting(reason.allowedMinutes)} at most.`,
+	'date-passed': (reason, { day }) => `The printed date, ${day(reason.bestBeforeOn)}, has passed.`,
+	'date-short': (reason, { day, number }) =>
+		`${number(reason.days)} d to the printed date, ${day(reason.bestBeforeOn)}; the customer asks for ${number(reason.neededDays)} d.`,
+	'date-missing': () => 'No printed date is written down; the customer has a rule for it.',
+	'older-than-last': (reason, { day }) =>
+		`The printed date, ${day(reason.bestBeforeOn)}, is before that last received, ${day(reason.lastBestBeforeOn)}.`
 };
 
 function stopReached(reason: Extract<Reason, { code: 'stop-reached' }>, figures: Figures): string {
