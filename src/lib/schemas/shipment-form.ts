@@ -72,6 +72,7 @@ const line = z
 		openingPlusMinusHours: optionalNumber(0, 100_000, 'hours'),
 		openingSince: wallTime,
 		openingCelsius: optionalNumber(-60, 60, '°C'),
+		openingPlusMinusCelsius: optionalNumber(0, 30, '°C'),
 		openingBasis: optionalText(200)
 	})
 	.superRefine((row, ctx) => {

@@ -2,7 +2,9 @@ import { custodyWindow, legsOf } from '../custody/legs';
 import { legUses } from '../custody/leg-use';
 import { placeExcursion } from '../custody/place-excursion';
 import { findExcursions } from '../excursions/find-excursions';
+import { findIncidents } from '../excursions/find-incidents';
 import { findStops } from '../excursions/find-stops';
+import { limitTimes } from '../excursions/limit-times';
 import { courseOf, type Course } from '../shelf-life/course';
 import { hoursAbove, hoursBelow, type LifeUsed } from '../shelf-life/life-used';
 import { rateCurve, type RateCurve } from '../shelf-life/rate-curve';
@@ -13,7 +15,9 @@ import { msPerHour } from '../units';
 import { engineVersion } from './engine-version';
 import type { AssessInput, Assessment, Gap, Range } from './assessment';
 import { openingHours } from './opening';
+import { rangeParts } from './range-parts';
 import { gapsOf, journeyFigures } from './journey';
+import { levelTimes } from './level-times';
 import { lifeSides, type LifeSides } from './life-sides';
 
 /** Why there is nothing to assess; the spec's faults come with it where they are the reason. */
@@ -53,7 +57,10 @@ export function assess(input: AssessInput, room: Room = ownRoom): Assessment {
 	const opening = openingHours(input.opening, spec, curve, course.times[0] as number);
 	const used = totalOf(sides);
 	const remaining = remainingOf(spec.fullLifeHours, spec.fullLifeUncertaintyHours, opening, used);
-	const gaps = gapsOf(course, sides);
+	const unobserved = unobservedFigures(gapsOf(course, sides));
+	const held = levelTimes(course);
+	const journey = journeyFigures(course, spec.mkt, held);
+	const totalMs = held.besideMs.reduce((sum, ms) => sum + ms, 0) / 2;
 	return {
 		engineVersion,
 		windowFromMs: course.times[0] as number,
@@ -65,9 +72,12 @@ export function assess(input: AssessInput, room: Room = ownRoom): Assessment {
 		openingHours: opening,
 		usedHours: used,
 		remainingHours: remaining,
-		...journeyFigures(course, spec.mkt),
-		...unobservedFigures(gaps),
+		rangeParts: rangeParts(used, unobserved.unobservedUsedHours, opening, spec.fullLifeUncertaintyHours),
+		...journey,
+		...unobserved,
 		...modelFigures(course, curve, spec.chillingCelsius),
+		limitTimes: limitTimes(spec, course, { meanCelsius: journey.meanCelsius, totalMs }),
+		incidents: findIncidents(course, input.placement, held.standsForMs),
 		...custodyFigures(input, course, curve, sides.value, remaining.value, lastReadingMs),
 		series: seriesOf(course, sides)
 	};

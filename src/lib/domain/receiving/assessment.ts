@@ -1,5 +1,8 @@
+import type { Incident } from '../excursions/find-incidents';
+import type { LimitTime } from '../excursions/limit-times';
 import type { Placement, Trace } from '../trace/trace';
 import type { Spec } from '../shelf-life/spec';
+import type { RangePart } from './range-parts';
 
 /** A figure with its bounds. The low decides. */
 export interface Range {
@@ -152,6 +155,8 @@ export interface Assessment {
 	readonly usedHours: Range;
 	/** Full − opening − used; negative when over-consumed, never clipped. */
 	readonly remainingHours: Range;
+	/** What lies between that figure and its low and high. */
+	readonly rangeParts: readonly RangePart[];
 	readonly meanCelsius: number;
 	readonly minCelsius: number;
 	readonly maxCelsius: number;
@@ -164,6 +169,9 @@ export interface Assessment {
 	readonly aboveModelHours: number;
 	/** Hours below the chilling threshold, which earned no credit. */
 	readonly chilledHours: number;
+	readonly limitTimes: readonly LimitTime[];
+	/** Door openings and defrosts, kept as what they are; excursions count them all the same. */
+	readonly incidents: readonly Incident[];
 	readonly excursions: readonly Excursion[];
 	readonly stops: readonly StopHit[];
 	readonly legs: readonly LegUse[];

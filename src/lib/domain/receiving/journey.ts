@@ -3,14 +3,13 @@ import { meanKineticCelsius } from '../shelf-life/mean-kinetic';
 import type { MktRule } from '../shelf-life/spec';
 import { msPerHour } from '../units';
 import type { Gap } from './assessment';
-import { levelTimes, meanOverTime } from './level-times';
+import { meanOverTime, type LevelTimes } from './level-times';
 import type { LifeSides } from './life-sides';
 import { worstWindowOf } from './rolling-kinetic';
 
 /** Mean, extremes and mean kinetic temperature of a course with readings. */
-export function journeyFigures(course: Course, rule: MktRule) {
+export function journeyFigures(course: Course, rule: MktRule, times: LevelTimes) {
 	const { levels } = course;
-	const times = levelTimes(course);
 	const energy = rule.activationEnergyKilojoulesPerMole;
 	const coldest = levels[0] as number;
 	return {

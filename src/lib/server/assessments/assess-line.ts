@@ -16,16 +16,26 @@ export interface LineAssessment {
 	trimmedHours: number;
 }
 
-/** A line's own loggers' traces where any is assigned to it, else all of the docket that belong to no other line. */
-export function tracesOfLine(line: { id: string }, traces: readonly LoadedTrace[]): LoadedTrace[] {
-	const own = traces.filter(({ trip }) => trip.lineId === line.id);
-	return own.length > 0 ? own : traces.filter(({ trip }) => trip.lineId === null);
+/**
+ * The traces of the loggers assigned to a line or its pallets; where there is none, of those that rode in its
+ * compartment for all. Never another line's, and never another compartment's.
+ */
+export function tracesOfLine(
+	line: { id: string; compartmentId: string | null },
+	{ traces, shipment }: Pick<DocketEvidence, 'traces' | 'shipment'>
+): LoadedTrace[] {
+	const own = traces.filter(({ lineId }) => lineId === line.id);
+	if (own.length > 0) return own;
+	const compartment = line.compartmentId ?? shipment.compartmentId;
+	return traces.filter(
+		({ lineId, trip }) => lineId === null && (trip.compartmentId ?? shipment.compartmentId) === compartment
+	);
 }
 
 /** Assesses a line by each of its traces. A trace without readings in custody says nothing about it and is left out. */
 export function assessLine(line: ShipmentLine, spec: SignedSpec, evidence: DocketEvidence): LineAssessment[] {
 	const handovers = evidence.handovers.map(domainHandover);
-	return tracesOfLine(line, evidence.traces).flatMap((trace) => {
+	return tracesOfLine(line, evidence).flatMap((trace) => {
 		const inputs = pinnedInputs(line, spec, trace, handovers);
 		const assessment = assessOrNone(inputs, spec, trace);
 		return assessment ? [{ trace, inputs, assessment, trimmedHours: trimmedHours(trace) }] : [];
@@ -83,7 +93,8 @@ export function openingOf(line: ShipmentLine): OpeningBalance {
 	}
 	if (line.openingKind === 'computed' && line.openingSinceAt && line.openingCelsius !== null) {
 		const sinceMs = line.openingSinceAt.getTime();
-		return { kind: 'computed', sinceMs, celsius: line.openingCelsius, plusMinusCelsius: 0, basis };
+		const plusMinusCelsius = line.openingPlusMinusCelsius ?? 0;
+		return { kind: 'computed', sinceMs, celsius: line.openingCelsius, plusMinusCelsius, basis };
 	}
 	return { kind: 'undeclared' };
 }

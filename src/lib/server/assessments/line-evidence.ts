@@ -1,11 +1,13 @@
 import { DateTime } from 'luxon';
 import { disagreementOf } from '../../domain/receiving/disagreement';
-import type { Disagreement, Evidence } from '../../domain/receiving/evidence';
+import type { Disagreement, Evidence, PrintedDate, UnitAtDoor } from '../../domain/receiving/evidence';
 import { celsiusFromFahrenheit } from '../../domain/units';
+import type { Product } from '../db/models/product';
 import type { PulpReading } from '../db/models/pulp-reading';
 import type { ShipmentLine } from '../db/models/shipment-line';
 import { shifted } from './assessment-inputs';
 import { governingOf, openingOf, tracesOfLine, type LineAssessment } from './assess-line';
+import { gradesOf } from './finding-grades';
 import type { DocketEvidence, LoadedTrace } from './load-evidence';
 import type { SignedSpec } from '../specs/find-spec-in-force';
 
@@ -15,10 +17,12 @@ export function lineEvidence(
 	spec: SignedSpec,
 	assessed: readonly LineAssessment[],
 	docket: DocketEvidence,
-	now: Date
+	now: Date,
+	lastBestBeforeOn: string | null
 ): Evidence {
 	const governing = governingOf(assessed);
-	const traces = tracesOfLine(line, docket.traces);
+	const traces = tracesOfLine(line, docket);
+	const product = docket.products.find(({ id }) => id === line.productId) ?? null;
 	const { arrival, shipment } = docket;
 	const arrivedAt = arrival?.arrivedAt ?? shipment.arrivedAt;
 	return {
@@ -36,13 +40,49 @@ export function lineEvidence(
 		})),
 		arrivedOn: dayAt(arrivedAt ?? now, docket.siteZone),
 		disagreement: worstDisagreement(traces),
-		journeyEndMs: arrivedAt ? journeyEndMs(docket, arrivedAt) : null
+		journeyEndMs: arrivedAt ? journeyEndMs(docket, arrivedAt) : null,
+		journeyStartMs: docket.handovers[0]?.actualAt?.getTime() ?? null,
+		plannedJourneyMs: plannedJourneyMs(docket),
+		startDelayMinutes: governing?.trace.startDelayMinutes ?? 0,
+		isLoggerRequired: docket.lane?.isLoggerRequired || product?.isLoggerRequired || false,
+		unit: unitOf(line, docket),
+		printedDate: printedDateOf(line, product, lastBestBeforeOn),
+		grades: gradesOf(product, docket.lane)
 	};
 }
 
 function sealOf({ arrival, shipment }: DocketEvidence): Evidence['seal'] {
 	if (!arrival || arrival.isSealIntact === null) return null;
 	return { text: arrival.sealFound ?? shipment.seal ?? '', isIntact: arrival.isSealIntact };
+}
+
+function plannedJourneyMs({ handovers }: DocketEvidence): number | null {
+	const planned = handovers.map(({ plannedAt }) => plannedAt);
+	const [first, last] = [planned[0], planned[planned.length - 1]];
+	return handovers.length > 1 && first && last ? last.getTime() - first.getTime() : null;
+}
+
+/** What the unit of the line's compartment showed, else that of the whole load, against the last leg's set-point. */
+function unitOf(
+	line: ShipmentLine,
+	{ arrival, compartments, handovers, shipment }: DocketEvidence
+): UnitAtDoor {
+	const id = line.compartmentId ?? shipment.compartmentId;
+	const chamber = compartments.find((compartment) => compartment.id === id);
+	const lastLeg = handovers[handovers.length - 2];
+	return {
+		setPointCelsius: chamber?.setPointCelsius ?? arrival?.setPointCelsius ?? null,
+		agreedCelsius: lastLeg?.setPointCelsius ?? null,
+		returnAirCelsius: chamber?.returnAirCelsius ?? arrival?.returnAirCelsius ?? null
+	};
+}
+
+function printedDateOf(
+	{ bestBeforeOn }: ShipmentLine,
+	product: Product | null,
+	lastBestBeforeOn: string | null
+): PrintedDate {
+	return { bestBeforeOn, neededDays: product?.minimumDatedDays ?? null, lastBestBeforeOn };
 }
 
 function domainPulp({ degrees, unit, position }: PulpReading) {

@@ -3,10 +3,14 @@ import { unpackTrace } from '../../domain/trace/pack';
 import type { Trace } from '../../domain/trace/trace';
 import type { Trim } from '../../domain/receiving/assessment';
 import { Arrival } from '../db/models/arrival';
+import { Compartment } from '../db/models/compartment';
 import { Handover } from '../db/models/handover';
+import { Lane } from '../db/models/lane';
 import { Logger } from '../db/models/logger';
 import { LoggerRead } from '../db/models/logger-read';
 import { LoggerTrip } from '../db/models/logger-trip';
+import { Pallet } from '../db/models/pallet';
+import { Product } from '../db/models/product';
 import { PulpReading } from '../db/models/pulp-reading';
 import { Shipment } from '../db/models/shipment';
 import { ShipmentLine } from '../db/models/shipment-line';
@@ -26,7 +30,10 @@ export interface LoadedTrace {
 	clockShiftMs: number;
 	trims: Trim[];
 	trip: LoggerTrip;
+	/** The line of the pallet it rode on, else the line it was given to; null where it rode for all. */
+	lineId: string | null;
 	accuracyCelsius: number;
+	startDelayMinutes: number;
 	calibrationDueOn: string | null;
 }
 
@@ -35,6 +42,10 @@ export interface DocketEvidence {
 	shipment: Shipment;
 	siteZone: string;
 	lines: ShipmentLine[];
+	products: Product[];
+	lane: Lane | null;
+	/** The chambers its lines and loggers rode in. */
+	compartments: Compartment[];
 	handovers: Handover[];
 	traces: LoadedTrace[];
 	arrival: Arrival | null;
@@ -46,15 +57,33 @@ export async function loadEvidence(shipment: Shipment, transaction: Transaction)
 	const where = { shipmentId: shipment.id };
 	const site = await Site.findByPk(shipment.siteId, { transaction });
 	if (!site) throw new Error(`The site of docket ${shipment.number} is missing.`);
+	const lines = await ShipmentLine.findAll({ where, order: ['ordinal'], transaction });
 	return {
 		shipment,
 		siteZone: site.zone,
-		lines: await ShipmentLine.findAll({ where, order: ['ordinal'], transaction }),
+		lines,
+		products: await Product.findAll({ where: { id: lines.map(({ productId }) => productId) }, transaction }),
+		lane: shipment.laneId ? await Lane.findByPk(shipment.laneId, { transaction }) : null,
+		compartments: await loadCompartments(shipment, lines, transaction),
 		handovers: await Handover.findAll({ where, order: ['ordinal'], transaction }),
 		traces: await loadTraces(shipment.id, transaction),
 		arrival: await Arrival.findOne({ where, transaction }),
 		pulp: await PulpReading.findAll({ where, order: ['takenAt', 'id'], transaction })
 	};
+}
+
+async function loadCompartments(
+	{ compartmentId }: Shipment,
+	lines: readonly ShipmentLine[],
+	transaction: Transaction
+): Promise<Compartment[]> {
+	const ids = [compartmentId, ...lines.map((line) => line.compartmentId)].filter((id) => id !== null);
+	return ids.length === 0 ? [] : Compartment.findAll({ where: { id: ids }, transaction });
+}
+
+async function lineOfTrip(trip: LoggerTrip, transaction: Transaction): Promise<string | null> {
+	const pallet = trip.palletId ? await Pallet.findByPk(trip.palletId, { transaction }) : null;
+	return pallet?.lineId ?? trip.lineId;
 }
 
 /** The assessed traces whose instrument and accuracy are known; without an accuracy there is no range, so no figure. */
@@ -77,7 +106,9 @@ async function loadTraces(shipmentId: string, transaction: Transaction): Promise
 			clockShiftMs: Number(row.clockShiftMs),
 			trims: await trimsOf(row.id, transaction),
 			trip,
+			lineId: await lineOfTrip(trip, transaction),
 			accuracyCelsius: logger.accuracyCelsius,
+			startDelayMinutes: logger.startDelayMinutes,
 			calibrationDueOn: logger.calibrationDueOn
 		});
 	}

@@ -13,13 +13,17 @@ import { buildTrace, steadyTrace } from '../../../../tests/helpers/trace-factory
 import { useTestDatabase } from '../../../../tests/helpers/test-database';
 import { AssessmentRow } from '../db/models/assessment-row';
 import { AuditEntry } from '../db/models/audit-entry';
+import { Compartment } from '../db/models/compartment';
 import { Disposition } from '../db/models/disposition';
 import { ExcursionRow } from '../db/models/excursion-row';
+import { Lane } from '../db/models/lane';
 import { LegUseRow } from '../db/models/leg-use-row';
 import { LineRecommendation } from '../db/models/line-recommendation';
+import { Pallet } from '../db/models/pallet';
 import { PulpReading } from '../db/models/pulp-reading';
 import { SpecVersion } from '../db/models/spec-version';
 import { TrimRow } from '../db/models/trim-row';
+import { Visit } from '../db/models/visit';
 import { inTransaction } from '../db/transaction';
 import { sha256Hex } from '../storage/sha256';
 import { reassess } from './reassess';
@@ -33,9 +37,9 @@ const to = '2026-04-03T03:30:00Z';
 const journeyHours = 93 + 1 / 3;
 
 async function scene(options: Parameters<typeof buildShipment>[0] = {}) {
-	const site = await buildSite();
+	const site = options.site ?? (await buildSite());
 	const qa = await buildUser(['qa'], { sites: [site] });
-	const made = await buildShipment({ site, ...options });
+	const made = await buildShipment({ ...options, site });
 	const ctx = await contextFor(qa);
 	const run = () => inTransaction(ctx, (w) => reassess(w, ctx, made.shipment.id));
 	return { ...made, qa, run };
@@ -228,5 +232,127 @@ describe('reassess', () => {
 		});
 		await expect(run()).rejects.toMatchObject({ code: 'already-signed' });
 		expect(await LineRecommendation.count({ where: { shipmentId: shipment.id } })).toBe(0);
+	});
+
+	it('computes an opening balance with the ± of its assumed temperature', async () => {
+		const opening = {
+			openingKind: 'computed' as const,
+			openingSinceAt: new Date('2026-03-30T00:10:00Z'),
+			openingCelsius: 10,
+			openingPlusMinusCelsius: 10,
+			openingBasis: 'pack time'
+		};
+		const { shipment, qa, run } = await scene({ lines: [opening] });
+		await buildTrace(shipment, qa, steadyTrace(0, from, to));
+		await run();
+		const [row] = await current(shipment.id);
+		const { openingHours } = parseFigures(row?.figures ?? '');
+		// Six hours at 10 °C and a Q10 of 3, by its definition: 18; ten degrees colder 6, warmer 54.
+		expect(openingHours.value).toBeCloseTo(18, 9);
+		expect(openingHours.low).toBeCloseTo(6, 9);
+		expect(openingHours.high).toBeCloseTo(54, 9);
+	});
+
+	it('judges a line by the logger on its pallet, whatever line the trip names', async () => {
+		const { shipment, lines, qa, run } = await scene({ lines: [{}, {}] });
+		const pallet = await Pallet.create({
+			id: uuid(),
+			lineId: lines[1]?.id ?? '',
+			ordinal: 1,
+			sscc: null,
+			cases: 10,
+			whereabouts: null
+		});
+		const onPallet = await buildTrace(shipment, qa, steadyTrace(2, from, to), { palletId: pallet.id });
+		const free = await buildTrace(shipment, qa, steadyTrace(0, from, to));
+		await run();
+		const rows = await current(shipment.id);
+		const traceOf = (line: number) => rows.filter(({ lineId }) => lineId === lines[line]?.id);
+		expect(traceOf(1).map(({ traceId }) => traceId)).toEqual([onPallet.row.id]);
+		expect(traceOf(0).map(({ traceId }) => traceId)).toEqual([free.row.id]);
+	});
+
+	it('judges no line by a logger of another compartment', async () => {
+		const { shipment, lines, qa, run } = await scene({ lines: [{}, {}] });
+		const visit = await Visit.create({
+			id: uuid(),
+			siteId: shipment.siteId,
+			carrierId: null,
+			trailer: 'TR-1',
+			driverName: '',
+			dock: 'Dock 1',
+			stopsMade: null,
+			stopsToCome: null,
+			sealOff: null,
+			sealOn: null,
+			arrivedAt: testNow,
+			departedAt: null
+		});
+		const chamber = async (name: string) =>
+			Compartment.create({
+				id: uuid(),
+				visitId: visit.id,
+				name,
+				setPointCelsius: null,
+				supplyAirCelsius: null,
+				returnAirCelsius: null
+			});
+		const [front, rear] = [await chamber('front'), await chamber('rear')];
+		await shipment.update({ visitId: visit.id, compartmentId: front.id });
+		await lines[1]?.update({ compartmentId: rear.id });
+		const inFront = await buildTrace(shipment, qa, steadyTrace(0, from, to));
+		await run();
+		let rows = await current(shipment.id);
+		expect(rows.map(({ lineId, traceId }) => [lineId, traceId])).toEqual([[lines[0]?.id, inFront.row.id]]);
+		expect(await reasonCodes(lines[1]?.id ?? '')).toContain('life-not-known');
+		const inRear = await buildTrace(shipment, qa, steadyTrace(2, from, to), { compartmentId: rear.id });
+		await run();
+		rows = await current(shipment.id);
+		const traceOf = (line: number) => rows.filter(({ lineId }) => lineId === lines[line]?.id);
+		expect(traceOf(0).map(({ traceId }) => traceId)).toEqual([inFront.row.id]);
+		expect(traceOf(1).map(({ traceId }) => traceId)).toEqual([inRear.row.id]);
+	});
+
+	it('grades findings as the product says, and before it the lane', async () => {
+		const { product } = await buildProduct();
+		await product.update({ findingGrades: { 'opening-undeclared': 'hold', 'life-short': 'inform' } });
+		const { shipment, lines, qa, run } = await scene({ product, lines: [{ openingKind: 'undeclared' }] });
+		await buildTrace(shipment, qa, steadyTrace(0, from, to, 5));
+		const recommended = async () =>
+			(await LineRecommendation.findOne({ where: { lineId: lines[0]?.id } }))?.recommended;
+		await run();
+		expect(await recommended()).toBe('hold');
+		const lane = await Lane.create({
+			id: uuid(),
+			name: `lane ${uuid()}`,
+			supplierId: null,
+			siteId: shipment.siteId,
+			isLoggerRequired: false,
+			findingGrades: { 'opening-undeclared': 'note' },
+			createdAt: testNow,
+			switchedOffAt: null
+		});
+		await shipment.update({ laneId: lane.id });
+		await run();
+		expect(await recommended()).toBe('accept');
+	});
+
+	it('holds a printed date older than the last taken in, and one too near', async () => {
+		const { product } = await buildProduct();
+		await product.update({ isNotOlderThanLast: true, minimumDatedDays: 10 });
+		const site = await buildSite();
+		const before = new Date('2026-04-01T08:00:00Z');
+		await buildShipment({ site, product, arrivedAt: before, lines: [{ bestBeforeOn: '2026-04-20' }] });
+		const { shipment, lines, qa, run } = await scene({
+			site,
+			product,
+			arrivedAt: new Date(to),
+			lines: [{ bestBeforeOn: '2026-04-12' }]
+		});
+		await buildTrace(shipment, qa, steadyTrace(0, from, to, 5));
+		await run();
+		const codes = await reasonCodes(lines[0]?.id ?? '');
+		expect(codes).toContain('date-short');
+		expect(codes).toContain('older-than-last');
 	});
 });

@@ -11,6 +11,7 @@ import { Shipment } from '../db/models/shipment';
 import type { ShipmentLine } from '../db/models/shipment-line';
 import type { Writing } from '../db/transaction';
 import { Refusal } from '../refusals';
+import { findLastBestBefore } from './last-date';
 import { inputsSha256 } from './assessment-inputs';
 import { assessLine, governingOf, type LineAssessment } from './assess-line';
 import { lineEvidence } from './line-evidence';
@@ -59,7 +60,12 @@ async function judge(
 	const spec = await findSpecInForce(line, evidence.shipment.arrivedAt ?? ctx.now, transaction);
 	if (!spec) return { line, assessed: [], recommendation: null };
 	const assessed = assessLine(line, spec, evidence);
-	return { line, assessed, recommendation: recommend(lineEvidence(line, spec, assessed, evidence, ctx.now)) };
+	const isDated = evidence.products.some(
+		({ id, isNotOlderThanLast }) => id === line.productId && isNotOlderThanLast
+	);
+	const lastOn = isDated ? await findLastBestBefore(line, evidence.shipment, ctx.now, transaction) : null;
+	const found = lineEvidence(line, spec, assessed, evidence, ctx.now, lastOn);
+	return { line, assessed, recommendation: recommend(found) };
 }
 
 async function writeLine(

@@ -80,6 +80,7 @@ function prepareLine(row: LineInput, site: Site, known: Known, instantOf: Instan
 		openingSinceAt:
 			row.openingKind === 'computed' ? instantOf(row.openingSince, `lines.${row.at}.openingSince`) : null,
 		openingCelsius: row.openingKind === 'computed' ? row.openingCelsius : null,
+		openingPlusMinusCelsius: row.openingKind === 'computed' ? row.openingPlusMinusCelsius : null,
 		openingBasis: row.openingBasis
 	};
 }

@@ -15,6 +15,8 @@ export class LoggerTrip extends Model<InferAttributes<LoggerTrip>, InferCreation
 	declare ordinal: number;
 	declare lineId: string | null;
 	declare palletId: string | null;
+	/** Null: the shipment's own. */
+	declare compartmentId: string | null;
 	declare position: string | null;
 	declare placement: 'air' | 'between-cases' | 'in-product';
 	declare status: 'expected' | 'found' | 'not-found' | 'dead' | 'not-started' | 'other-load';
@@ -30,6 +32,7 @@ export function defineLoggerTrip(sequelize: Sequelize): void {
 			ordinal: { type: DataTypes.INTEGER, allowNull: false },
 			lineId: { type: DataTypes.UUID, allowNull: true },
 			palletId: { type: DataTypes.UUID, allowNull: true },
+			compartmentId: { type: DataTypes.UUID, allowNull: true },
 			position: { type: DataTypes.STRING(120), allowNull: true },
 			placement: { type: DataTypes.ENUM('air', 'between-cases', 'in-product'), allowNull: false },
 			status: {

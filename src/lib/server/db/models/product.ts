@@ -1,6 +1,7 @@
 import {
 	DataTypes,
 	Model,
+	type CreationOptional,
 	type InferAttributes,
 	type InferCreationAttributes,
 	type Sequelize
@@ -12,6 +13,11 @@ export class Product extends Model<InferAttributes<Product>, InferCreationAttrib
 	declare name: string;
 	declare family: string;
 	declare countUnit: string;
+	/** FindingGrades by code. */
+	declare findingGrades: CreationOptional<Record<string, string>>;
+	declare minimumDatedDays: number | null;
+	declare isNotOlderThanLast: CreationOptional<boolean>;
+	declare isLoggerRequired: CreationOptional<boolean>;
 	declare createdAt: Date;
 	declare switchedOffAt: Date | null;
 }
@@ -23,6 +29,10 @@ export function defineProduct(sequelize: Sequelize): void {
 			name: { type: DataTypes.STRING(120), allowNull: false },
 			family: { type: DataTypes.STRING(60), allowNull: false },
 			countUnit: { type: DataTypes.STRING(30), allowNull: false },
+			findingGrades: { type: DataTypes.JSON, allowNull: false, defaultValue: {} },
+			minimumDatedDays: { type: DataTypes.INTEGER, allowNull: true },
+			isNotOlderThanLast: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: false },
+			isLoggerRequired: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: false },
 			createdAt: { type: DataTypes.DATE(3), allowNull: false },
 			switchedOffAt: { type: DataTypes.DATE(3), allowNull: true }
 		},

@@ -32,7 +32,10 @@ export class ShipmentLine extends Model<
 	declare openingPlusMinusHours: number | null;
 	declare openingSinceAt: Date | null;
 	declare openingCelsius: number | null;
+	declare openingPlusMinusCelsius: number | null;
 	declare openingBasis: string | null;
+	/** Null: the shipment's own. */
+	declare compartmentId: string | null;
 }
 
 export function defineShipmentLine(sequelize: Sequelize): void {
@@ -59,6 +62,8 @@ export function defineShipmentLine(sequelize: Sequelize): void {
 			openingPlusMinusHours: { type: DataTypes.DOUBLE, allowNull: true },
 			openingSinceAt: { type: DataTypes.DATE(3), allowNull: true },
 			openingCelsius: { type: DataTypes.DOUBLE, allowNull: true },
+			openingPlusMinusCelsius: { type: DataTypes.DOUBLE, allowNull: true },
+			compartmentId: { type: DataTypes.UUID, allowNull: true },
 			openingBasis: { type: DataTypes.STRING(200), allowNull: true }
 		},
 		{ sequelize, modelName: 'ShipmentLine', tableName: 'shipment_lines' }
