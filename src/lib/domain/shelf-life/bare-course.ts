@@ -10,7 +10,7 @@ export function bareCourse(timesMs: Float64Array, celsius: Float64Array): Course
 		celsius,
 		steps: new Uint8Array(Math.max(0, timesMs.length - 1)).fill(observed),
 		levels,
-		levelOf: Uint32Array.from(celsius, (reading) => places.get(reading) as number),
+		levelOf: Int32Array.from(celsius, (reading) => places.get(reading) as number),
 		usualIntervalMs: usualIntervalMs(timesMs)
 	};
 }
