@@ -1,5 +1,5 @@
 /** Measures the main computations as ratios within one run: machines are noisy, ratios are not. */
-import { measureEngine } from '../../tests/bench/engine';
+import { engineLines, storedLines, whatIfLines } from '../../tests/bench/engine-lines';
 import { measurePeak, measurePeakApart } from '../../tests/bench/peak-memory';
 import { benchLayouts, measureReader } from '../../tests/bench/reader';
 
@@ -38,16 +38,10 @@ async function benchMemory(program: string): Promise<void> {
 	}
 }
 
-function benchEngine(readings: number): void {
-	const { seconds, exponentialsPerReading, packedBytesPerReading } = measureEngine(readings, nowMs);
-	console.log(
-		`Assessing ${readings.toLocaleString('en')} readings, with limits, legs, a rolling window and both bounds:`
-	);
-	for (const [model, value] of Object.entries(seconds)) {
-		const worth = exponentialsPerReading[model] ?? 0;
-		console.log(`  ${model.padEnd(14)} ${fixed(value, 2)} s, ${fixed(worth, 1)} exponentials a reading`);
-	}
-	console.log(`Packed: ${fixed(packedBytesPerReading, 3)} bytes a reading`);
+async function benchEngine(readings: number): Promise<void> {
+	for (const line of engineLines(readings)) console.log(line);
+	for (const line of whatIfLines()) console.log(line);
+	for (const line of await storedLines()) console.log(line);
 }
 
 const [program = '', first, path = ''] = process.argv.slice(1);
@@ -55,5 +49,5 @@ if (first === '--peak') console.log(JSON.stringify(measurePeak(path)));
 else {
 	benchReader();
 	await benchMemory(program);
-	benchEngine(Number(first ?? 1_000_000));
+	await benchEngine(Number(first ?? 1_000_000));
 }
