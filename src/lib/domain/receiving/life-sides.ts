@@ -1,6 +1,7 @@
 import { RunningSum } from '../math/sum';
 import { observed, trimmed, type Course } from '../shelf-life/course';
 import type { LifeUsed } from '../shelf-life/life-used';
+import type { RateBounds } from '../shelf-life/rate-bounds';
 import { curveRateAt, meanRate, type RateCurve } from '../shelf-life/rate-curve';
 import { ownRoom, type Room } from '../trace/room';
 import { msPerHour } from '../units';
@@ -26,19 +27,20 @@ const blockSteps = 256;
 
 /** The rate at each level on the three sides, and the mean between two levels, worked out once. */
 class LevelRates {
-	readonly curve: RateCurve;
+	readonly #curves: readonly [RateCurve, RateCurve, RateCurve];
 	readonly shifts: readonly [number, number, number];
 	readonly rates: readonly [Float64Array, Float64Array, Float64Array];
 	/** Mean rates value, low, high for level a to a + d at ((a × width) + d + reach) × 3; NaN until asked for. */
 	readonly means: Float64Array;
 	readonly #levels: Float64Array;
 
-	constructor(levels: Float64Array, curve: RateCurve, accuracyCelsius: number) {
-		this.curve = curve;
+	constructor(levels: Float64Array, curve: RateCurve, accuracyCelsius: number, bounds: RateBounds) {
+		this.#curves = [curve, bounds.low, bounds.high];
 		this.#levels = levels;
 		this.shifts = [0, -accuracyCelsius, accuracyCelsius];
-		const ratesBy = (shift: number) => levels.map((celsius) => curveRateAt(curve, celsius + shift));
-		this.rates = [ratesBy(0), ratesBy(-accuracyCelsius), ratesBy(accuracyCelsius)];
+		const ratesOf = (side: 0 | 1 | 2) =>
+			levels.map((celsius) => curveRateAt(this.#curves[side], celsius + this.shifts[side]));
+		this.rates = [ratesOf(0), ratesOf(1), ratesOf(2)];
 		this.means = new Float64Array(levels.length * width * sides).fill(NaN);
 	}
 
@@ -47,7 +49,7 @@ class LevelRates {
 		const rates = this.rates[side];
 		const from = (this.#levels[a] as number) + shift;
 		const to = (this.#levels[b] as number) + shift;
-		return meanRate(this.curve, from, to, rates[a] as number, rates[b] as number);
+		return meanRate(this.#curves[side], from, to, rates[a] as number, rates[b] as number);
 	}
 
 	fill(at: number, a: number, b: number): void {
@@ -77,15 +79,17 @@ class LevelRates {
  *
  * Low and high move every reading by the instrument's accuracy: an offset that lasts is the worst a calibrated logger
  * can do, so nothing averages out. What nobody watched may have been as cold, or as warm, as either neighbour all
- * through, moved likewise.
+ * through, moved likewise. `bounds` are the slowest and the fastest the model can be by its own ±: the low runs on
+ * the one, the high on the other.
  */
 export function lifeSides(
 	course: Course,
 	curve: RateCurve,
 	accuracyCelsius: number,
-	room: Room = ownRoom
+	room: Room = ownRoom,
+	bounds: RateBounds = { low: curve, high: curve }
 ): LifeSides {
-	const rates = new LevelRates(course.levels, curve, accuracyCelsius);
+	const rates = new LevelRates(course.levels, curve, accuracyCelsius, bounds);
 	const usedHours = room.floats('used', course.times.length).fill(0, 0, 1);
 	const [value, low, high] = [new RunningSum(), new RunningSum(), new RunningSum()];
 	const block = new Float64Array(sides);

@@ -65,4 +65,28 @@ describe('what the range of remaining life includes', () => {
 			raiseHours: 48
 		});
 	});
+
+	it('is wider by the ± of the model, in what was read, in gaps and in a computed balance', () => {
+		const unsure = buildSpec({ fullLifeHours: 336, sensitivityPlusMinus: 1 });
+		const opening = {
+			kind: 'computed',
+			sinceMs: startMs - 600 * minuteMs,
+			celsius: 10,
+			plusMinusCelsius: 0,
+			basis: 'field heat'
+		} as const;
+		const trace = traceAt(
+			[0, 10, 20].map((at) => startMs + at * minuteMs * 6),
+			[10, 10, 10]
+		);
+		const { usedHours, openingHours, remainingHours } = assess(buildInput(trace, unsure, { opening }));
+		// Two hours at 10 °C and ten before: Q10 3 ± 1, by its definition twice to four times as fast.
+		expect(usedHours.low).toBeCloseTo(4, 12);
+		expect(usedHours.value).toBeCloseTo(6, 12);
+		expect(usedHours.high).toBeCloseTo(8, 12);
+		expect(openingHours.low).toBeCloseTo(20, 12);
+		expect(openingHours.high).toBeCloseTo(40, 12);
+		expect(remainingHours.low).toBeCloseTo(336 - 48, 9);
+		expect(remainingHours.high).toBeCloseTo(336 - 24, 9);
+	});
 });

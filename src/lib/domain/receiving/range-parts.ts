@@ -13,7 +13,8 @@ export interface RangePart {
 
 /**
  * What the range includes, source by source: their sums are the distance from the figure to its low and its high.
- * `accuracy` is the logger's offset over the time observed; `gaps` what nobody watched, its offset included.
+ * `accuracy` is the logger's offset over the time observed, with the ± of the model's own figure where the spec has
+ * one, since each widens the other; `gaps` what nobody watched, its offset included.
  */
 export function rangeParts(
 	used: Range,
