@@ -42,16 +42,14 @@ export function engineLines(readings: number): string[] {
 export function whatIfLines(): string[] {
 	const trace = coldRoomTrace(whatIfReadings);
 	const input = inputOf(trace, { kind: 'constant-q10', q10: 3 });
-	const taken = Array.from({ length: whatIfRounds }, (_, round) => {
-		const from = performance.now();
-		assess({ ...input, accuracyCelsius: 0.1 + round / 100 });
-		return performance.now() - from;
-	}).sort((a, b) => a - b);
+	const taken = Array.from({ length: whatIfRounds }, (_, round) =>
+		processorTime(() => assess({ ...input, accuracyCelsius: 0.1 + round / 100 }))
+	).sort((a, b) => a - b);
 	const middle = taken[whatIfRounds / 2] ?? NaN;
 	const slow = taken[Math.floor(whatIfRounds * 0.9)] ?? NaN;
 	return [
 		`What-if on ${whatIfReadings.toLocaleString('en')} readings: ${middle.toFixed(1)} ms, ` +
-			`one in ten over ${slow.toFixed(1)} ms (target: under 16 ms)`
+			`one in ten over ${slow.toFixed(1)} ms of the processor (target: under 16 ms)`
 	];
 }
 
