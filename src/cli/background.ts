@@ -1,4 +1,5 @@
 /** What runs beside the server in one process: the job worker, and the local mailbox while no mail server is set. */
+import { watchCertificate } from '../lib/server/certificates/watch-certificate';
 import { closeDatabase, openDatabase } from '../lib/server/db/sequelize';
 import { env, readEnv } from '../lib/server/env';
 import { registerAllJobs } from '../lib/server/jobs/register-all';
@@ -20,9 +21,11 @@ export async function startBackground(
 		: null;
 	const schedule = startSchedule();
 	const worker = startWorker(`${process.pid}`);
+	const watch = watchCertificate();
 	return {
 		async stop() {
 			schedule.stop();
+			watch.stop();
 			await worker.stop();
 			await mailbox?.stop();
 			await closeDatabase();

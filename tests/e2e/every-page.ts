@@ -71,6 +71,7 @@ export const places: readonly Place[] = [
 	{ name: 'loggers', as: 'admin', path: '/settings/loggers' },
 	{ name: 'a logger', as: 'admin', path: ({ logger }) => logger },
 	{ name: 'a new logger', as: 'admin', path: '/settings/loggers/new' },
+	{ name: 'the certificate', as: 'admin', path: '/settings/certificate' },
 	{ name: 'users', as: 'admin', path: '/settings/users' },
 	{ name: 'a user', as: 'admin', path: ({ user }) => user },
 	{ name: 'inviting somebody', as: 'admin', path: '/settings/users/new' },

@@ -52,6 +52,10 @@ const pages: Record<
 		params: { site: id },
 		isAdminOnly: true
 	},
+	'settings/certificate': {
+		page: () => import('../../src/routes/(app)/settings/certificate/+page.server'),
+		isAdminOnly: true
+	},
 	'settings/loggers': { page: () => import('../../src/routes/(app)/settings/loggers/+page.server') },
 	'settings/loggers/new': {
 		page: () => import('../../src/routes/(app)/settings/loggers/new/+page.server'),

@@ -36,6 +36,7 @@ const acts = {
 	'catalogue.change': ['admin'],
 	'spec.sign': ['admin'],
 	'account.manage': ['admin'],
+	'certificate.manage': ['admin'],
 	'audit.view': ['qa', 'admin'],
 	'mailbox.view': staff
 } as const satisfies Record<string, readonly Role[]>;

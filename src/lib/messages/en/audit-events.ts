@@ -56,6 +56,8 @@ const sentences: Record<string, string> = {
 	'spec.signed': 'Spec signed',
 	'logger.saved': 'Logger saved',
 	'certificate.made': 'Certificate made',
+	'certificate.replaced': 'Certificate replaced',
+	'certificate.ending': 'Admins told that the certificate ends',
 	'settings.changed': 'Settings changed',
 	'act.refused': 'Act refused',
 	'record.exported': 'Record exported'

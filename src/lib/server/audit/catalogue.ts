@@ -116,6 +116,8 @@ export interface EventData {
 	'claim.changed': { claimId: string; before: Record<string, unknown>; after: Record<string, unknown> };
 	'evidence.taken': { claimId: string | null; shipmentId: string; files: number };
 	'certificate.made': { certificateId: string; sha256: string };
+	'certificate.replaced': { certificateId: string; sha256: string };
+	'certificate.ending': { certificateId: string; validUntil: string; told: number };
 	'settings.changed': { name: string; before?: unknown; after?: unknown };
 	'retention.held': { reason: string };
 	'retention.released': { holdId: string; reason: string };

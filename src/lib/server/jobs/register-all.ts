@@ -1,3 +1,4 @@
+import { mailCertificateEnd } from '../certificates/mail-end';
 import { mailLink } from '../accounts/mail-link';
 import { mailLock } from '../accounts/tell-admins-of-lock';
 import { makeCheckpoint } from '../audit/checkpoint';
@@ -14,5 +15,6 @@ export function registerAllJobs(): void {
 	registerJobKind('audit-checkpoint', async ({ now }) => void (await makeCheckpoint(now)));
 	registerJobKind('mail-link', mailLink);
 	registerJobKind('lock-mail', mailLock);
+	registerJobKind('certificate-ending', mailCertificateEnd);
 	registerJobKind('notice', (ctx, { noticeId }) => sendNotice(ctx, noticeId ?? ''));
 }

@@ -19,6 +19,8 @@ export class Certificate extends Model<InferAttributes<Certificate>, InferCreati
 	declare validUntil: Date;
 	declare createdAt: Date;
 	declare retiredAt: Date | null;
+	/** When the admins were told that it ends. */
+	declare warnedAt: Date | null;
 }
 
 export function defineCertificate(sequelize: Sequelize): void {
@@ -33,7 +35,8 @@ export function defineCertificate(sequelize: Sequelize): void {
 			validFrom: { type: DataTypes.DATE(3), allowNull: false },
 			validUntil: { type: DataTypes.DATE(3), allowNull: false },
 			createdAt: { type: DataTypes.DATE(3), allowNull: false },
-			retiredAt: { type: DataTypes.DATE(3), allowNull: true }
+			retiredAt: { type: DataTypes.DATE(3), allowNull: true },
+			warnedAt: { type: DataTypes.DATE(3), allowNull: true }
 		},
 		{ sequelize, modelName: 'Certificate', tableName: 'certificates' }
 	);

@@ -43,16 +43,25 @@ export async function createCertificate(wanted: NewCertificate): Promise<{
 	const privateKey = forge.pki.privateKeyFromPem(pair.privateKey);
 	const certificate = selfSigned(wanted, forge.pki.publicKeyFromPem(pair.publicKey));
 	certificate.sign(privateKey, forge.md.sha256.create());
-	const store = forge.pkcs12.toPkcs12Asn1(privateKey, [certificate], wanted.passphrase, {
+	return {
+		p12: storeBytes(privateKey, [certificate], wanted.passphrase),
+		certificatePem: forge.pki.certificateToPem(certificate),
+		certificateDer: derOf(certificate)
+	};
+}
+
+/** A key with its certificates as a PKCS#12 store under a passphrase. */
+export function storeBytes(
+	key: forge.pki.rsa.PrivateKey,
+	certificates: forge.pki.Certificate[],
+	passphrase: string
+): Uint8Array {
+	const store = forge.pkcs12.toPkcs12Asn1(key, certificates, passphrase, {
 		algorithm: 'aes256',
 		count: keyRounds,
 		friendlyName: 'report seal'
 	});
-	return {
-		p12: bytesOf(forge.asn1.toDer(store).getBytes()),
-		certificatePem: forge.pki.certificateToPem(certificate),
-		certificateDer: derOf(certificate)
-	};
+	return bytesOf(forge.asn1.toDer(store).getBytes());
 }
 
 function selfSigned(
