@@ -227,8 +227,10 @@ export function reportInput(overrides: Partial<ReportInput> = {}, lines = 3): Re
 			name: `SB-3041${ordinal}.csv`,
 			bytes: new TextEncoder().encode(rawExport(ordinal)),
 			mediaType: 'text/csv',
-			description: `Raw export of logger L${ordinal}, as uploaded`
+			description: `Raw export of logger L${ordinal}, as uploaded`,
+			relationship: 'Source' as const
 		})),
+		photos: [],
 		organisation: 'Pell Staithe Fresh',
 		pageSize: 'a4',
 		creationAt: '2026-04-03T07:44:20.000Z',

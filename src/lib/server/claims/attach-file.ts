@@ -3,7 +3,7 @@ import type { Context } from '../context';
 import { ClaimFile } from '../db/models/claim-file';
 import { inTransaction } from '../db/transaction';
 import { Refusal } from '../refusals';
-import { safeFileName } from '../reports/report-order';
+import { safeFileName } from '../reports/safe-file-name';
 import { keepBytes } from '../storage/store';
 import { getClaimFor } from './find-claim';
 

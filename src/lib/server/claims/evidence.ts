@@ -4,7 +4,7 @@ import { Photo } from '../db/models/photo';
 import { Report } from '../db/models/report';
 import type { Shipment } from '../db/models/shipment';
 import { StoredFile } from '../db/models/stored-file';
-import { safeFileName } from '../reports/report-order';
+import { safeFileName } from '../reports/safe-file-name';
 import { fileStore } from '../storage/store';
 
 /** A kept file that speaks for a docket, under the name it has in the bundle. */

@@ -5,6 +5,9 @@ import { ledger } from './ledger';
 import { palette, sizePoints } from './palette';
 import { label, sentence, words } from './type-styles';
 
+/** About a third of a page in its column. */
+const longWords = 1_000;
+
 /** Names are printed with the fact they speak of, never a picture of handwriting. */
 const caution =
 	'An estimate of quality from temperature alone. It says nothing about pathogens, toxins (histamine, botulinum), contamination, ' +
@@ -37,7 +40,8 @@ export function photosAndNotes(draft: Draft): Content[] {
 		ledger({
 			width: draft.sheet.mainWidth,
 			title: 'Seen at the door',
-			finding: photos.length === 0 ? null : 'photos are kept with the record and in the evidence bundle',
+			areRowsLong: rows.some(([, what]) => what.length > longWords),
+			finding: photos.length === 0 ? null : 'every photo is kept with the record and in the evidence bundle',
 			columns: [
 				{ head: '', width: 44 },
 				{ head: 'What', width: '*' },

@@ -56,7 +56,9 @@ export function laterCounterfoil(draft: Draft): Content[] {
 	const { sheet, input } = draft;
 	const { signature } = input;
 	const amended =
-		signature.amendmentReason === null ? [] : [sentence(signature.amendmentReason, { color: palette.ink })];
+		signature.amendmentReason === null
+			? []
+			: [sentence(shortened(signature.amendmentReason), { color: palette.ink })];
 	return [
 		...counterfoilTop(draft),
 		...overUse(draft),
@@ -70,6 +72,11 @@ export function laterCounterfoil(draft: Draft): Content[] {
 		}),
 		...amended
 	];
+}
+
+/** The counterfoil is narrow and one page high; the whole reason stands beside the signature. */
+function shortened(text: string): string {
+	return text.length <= 120 ? text : `${text.slice(0, 110).trimEnd()} …, whole at the end`;
 }
 
 function overUse(draft: Draft): Content[] {

@@ -13,15 +13,15 @@ export function dispositions(draft: Draft): Content[] {
 		ledger({
 			width: draft.sheet.mainWidth,
 			title: 'Dispositions',
-			finding: null,
+			finding: `${decimal(docket.lines.length, 0)} ${docket.lines.length === 1 ? 'line' : 'lines'}; cases as received, the papers’ count where it differs`,
 			columns: [
 				{ head: '', width: 15 },
 				{ head: 'Product and lot', width: '*' },
 				{ head: 'First pallet, SSCC; GTIN', width: 101 },
-				{ head: 'Cases', width: 28, align: 'right' },
+				{ head: 'Cases', width: 30, align: 'right' },
 				{ head: 'Life left, d\nlow to high', width: 50, align: 'right' },
 				{ head: 'Needed,\nd', width: 32, align: 'right' },
-				{ head: 'Disposition', width: 76 }
+				{ head: 'Disposition', width: 72 }
 			],
 			rows: docket.lines.map(dispositionRow)
 		}),
@@ -32,7 +32,8 @@ export function dispositions(draft: Draft): Content[] {
 function dispositionRow(line: DocketLineView): Content[] {
 	const life = line.remainingHours;
 	const range = life === null ? '' : span(days(life.low), days(life.high));
-	const pallets = `${line.pallets} ${line.pallets === 1 ? 'pallet' : 'pallets'}`;
+	const palletCount = line.outcome?.pallets ?? line.pallets;
+	const pallets = `${palletCount} ${palletCount === 1 ? 'pallet' : 'pallets'}`;
 	const name = line.variety === null ? line.product : `${line.product}, ${line.variety}`;
 	const outcome = line.outcome?.outcome ?? 'hold';
 	const cases = line.outcome?.cases ?? line.casesReceived ?? line.casesAdvised;
@@ -45,7 +46,7 @@ function dispositionRow(line: DocketLineView): Content[] {
 				sentence([line.gtin, pallets].filter(Boolean).join(', '))
 			]
 		},
-		figure(decimal(cases, 0)),
+		casesCell(line, cases),
 		life === null
 			? sentence('not known')
 			: { stack: [figure(days(life.value), { bold: true }), figure(range, { size: 8 })] },
@@ -57,6 +58,14 @@ function dispositionRow(line: DocketLineView): Content[] {
 			]
 		}
 	];
+}
+
+/** What was decided on, and beside it the papers' count where it differs. */
+function casesCell(line: DocketLineView, cases: number): Content {
+	const decided = figure(decimal(cases, 0));
+	return cases === line.casesAdvised
+		? decided
+		: { stack: [decided, sentence(`of ${decimal(line.casesAdvised, 0)}`, { size: 7.8 })] };
 }
 
 /** Extension digit, company prefix and serial, check digit: as printed under the bars of a pallet label. */

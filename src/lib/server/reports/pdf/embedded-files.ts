@@ -11,7 +11,7 @@ export function embeddedFiles({ attachments, creationAt }: ReportInput) {
 	const at = new Date(creationAt);
 	const names = namesOf(attachments);
 	return Object.fromEntries(
-		attachments.map(({ bytes, mediaType: told, description }, i) => {
+		attachments.map(({ bytes, mediaType: told, description, relationship }, i) => {
 			const type = mediaType.test(told) ? told : 'application/octet-stream';
 			const src = `data:${type};base64,${Buffer.from(bytes).toString('base64')}`;
 			const name = names[i] ?? `export-${i}`;
@@ -22,7 +22,7 @@ export function embeddedFiles({ attachments, creationAt }: ReportInput) {
 				description,
 				creationDate: at,
 				modifiedDate: at,
-				relationship: 'Source'
+				relationship
 			};
 			return [`file${i}`, file];
 		})

@@ -14,6 +14,8 @@ interface Ledger {
 	readonly columns: readonly Column[];
 	readonly rows: readonly (readonly Content[])[];
 	readonly width: number;
+	/** Rows of long prose may go on overleaf: kept whole they could be higher than a page, and would be cut. */
+	readonly areRowsLong?: boolean;
 }
 
 const titleRows = 1;
@@ -84,8 +86,8 @@ export function ledger(table: Ledger): ContentTable {
 	return {
 		table: {
 			headerRows: headRows,
-			keepWithHeaderRows: 1,
-			dontBreakRows: true,
+			keepWithHeaderRows: table.areRowsLong === true ? 0 : 1,
+			dontBreakRows: table.areRowsLong !== true,
 			widths: widthsOf(table),
 			body: [title, heads, ...rows]
 		},

@@ -69,7 +69,12 @@ function legRow(
 				)
 			]
 		},
-		figure(calendar.time(leg.fromMs)),
+		{
+			stack: [
+				figure(calendar.time(leg.fromMs)),
+				sentence(calendar.at(leg.fromMs).toFormat('d LLL'), { size: 7.8 })
+			]
+		},
 		figure(leg.plannedMinutes === null ? '–' : hoursMinutes(leg.plannedMinutes)),
 		figure(hoursMinutes(leg.tookMinutes)),
 		text(figures?.allowedTenths),

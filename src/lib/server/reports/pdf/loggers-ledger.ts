@@ -29,7 +29,7 @@ export function loggers(draft: Draft): Content[] {
 			finding: null,
 			columns: [
 				{ head: '', width: 19 },
-				{ head: 'Logger', width: 52 },
+				{ head: 'Logger', width: 66 },
 				{ head: 'Where', width: '*' },
 				{ head: 'Readings', width: 34, align: 'right' },
 				{ head: `±${sign}`, width: 20, align: 'right' },
@@ -42,7 +42,7 @@ export function loggers(draft: Draft): Content[] {
 }
 
 function loggerRow(
-	{ thermometer }: Draft,
+	{ thermometer, calendar }: Draft,
 	logger: DocketLoggerView,
 	inside: ReadonlyMap<string, string>
 ): Content[] {
@@ -50,7 +50,17 @@ function loggerRow(
 		figure(value === null ? '–' : text(value));
 	return [
 		words(logger.label, { bold: true }),
-		figure(logger.serial, { size: 8 }),
+		{
+			stack: [
+				figure(logger.serial, { size: 8 }),
+				sentence(
+					logger.calibrationDueOn === null
+						? 'no calibration known'
+						: `calibration due ${calendar.date(`${logger.calibrationDueOn}T12:00:00Z`)}`,
+					{ size: 7.8 }
+				)
+			]
+		},
 		words([logger.position ?? '', placements[logger.placement]].filter(Boolean).join(', ')),
 		number(logger.readings, (readings) => decimal(readings, 0)),
 		number(logger.accuracyCelsius, thermometer.difference),

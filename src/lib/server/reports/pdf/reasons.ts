@@ -8,9 +8,15 @@ import { figure, sentence, words } from './type-styles';
 export function reasons(draft: Draft): Content[] {
 	const { signature, reasonTexts } = draft.input;
 	const own = signature.reasons.trim();
-	const found = draft.docket.lines.flatMap((line) =>
-		(reasonTexts[line.id] ?? []).map((text) => ({ line: line.ordinal, text }))
-	);
+	const found = draft.docket.lines.flatMap((line) => {
+		const texts = reasonTexts[line.id] ?? [];
+		const recommended = line.recommendation?.recommended;
+		const word = recommended === undefined ? '' : `${recommended} recommended. `;
+		return texts.map((text, i) => ({
+			line: line.ordinal,
+			text: i === 0 ? upperFirst(`${word}${text}`) : text
+		}));
+	});
 	if (own === '' && found.length === 0) return [];
 	const items = found.map(({ line, text }, i): Content => ({
 		columns: [
@@ -29,7 +35,7 @@ export function reasons(draft: Draft): Content[] {
 		{
 			unbreakable: own.length < 600,
 			stack: [
-				sectionTitle('Reasons', null),
+				sectionTitle('Reasons', 'the signer’s words, then what the rules found'),
 				{
 					canvas: [
 						{
@@ -49,6 +55,10 @@ export function reasons(draft: Draft): Content[] {
 		},
 		...items
 	];
+}
+
+function upperFirst(text: string): string {
+	return text.charAt(0).toUpperCase() + text.slice(1);
 }
 
 function quoted(text: string, by: string): Content {

@@ -1,12 +1,10 @@
 import { createHash } from 'node:crypto';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { detached, said, textOf } from '../../../../../tests/helpers/pdf-tools';
+import { longReport } from '../../../../../tests/helpers/long-report';
 import { reportInput } from '../../../../../tests/helpers/report-fixture';
 import type { ReportInput } from './report-input';
 import { reportPdf } from './report-pdf';
-
-const drawnFrom = async (overrides: Partial<ReportInput>, lines?: number) =>
-	textOf(await reportPdf(reportInput(overrides, lines)));
 
 /** The input with a changed docket. */
 function withDocket(change: Partial<ReportInput['frozen']['docket']>, lines?: number): ReportInput {
@@ -32,6 +30,34 @@ describe('the receiving report on paper', () => {
 		expect(text).toContain('Approval');
 		expect(text).toContain('3 Apr 2026, 09:44:18');
 		expect(text).toContain('CEST, +02:00');
+	});
+
+	// Source: 21 CFR 11.50(b): the same on every human-readable form.
+	it('says at the foot of every page who signed, what for and when', () => {
+		const pages = text.split('\f').filter((page) => page.trim() !== '');
+		expect(pages.length).toBeGreaterThanOrEqual(2);
+		expect(pages.length).toBeLessThanOrEqual(4);
+		for (const page of pages)
+			expect(page).toContain('Signed by Ruth Calloway, approval, 3 Apr 2026, 09:44:18 CEST (+02:00).');
+	});
+
+	it('holds each pulp reading against the logger of its line at that moment', () => {
+		// 0.8 of the pulp, 0.9 of L1 at 08:10, both in the fixture.
+		expect(text).toMatch(/line 1, lot .*0\.8 0\.9 −0\.1 L1, in/u);
+		expect(text).toContain('return air of the unit 0.9 °C');
+	});
+
+	it('says until when each logger is calibrated', () => {
+		expect(text.match(/calibration due/gu)).toHaveLength(3);
+	});
+
+	it('prints the papers’ count beside what was decided on, where it differs', () => {
+		expect(text).toMatch(/\bof 960\b/u);
+	});
+
+	it('tells how to check it: is it current, whole, and do the figures stand', () => {
+		expect(text).toContain('How to verify this report');
+		expect(text).toContain('pellstaithe.example/verify and type 9D4020BE66864093');
 	});
 
 	it('prints every line with its life, low to high, and its outcome', () => {
@@ -72,7 +98,7 @@ describe('the receiving report on paper', () => {
 	it('prints the caution, site number, page count and the address to check', () => {
 		expect(text).toContain('never overrides a food-safety limit');
 		expect(text).toContain('GLN 9506000050010');
-		expect(text).toContain('page 1 of 4');
+		expect(text).toMatch(/page 1 of [234]\b/u);
 		expect(text.replace(/\s/gu, '')).toContain('9D4020BE66864093');
 	});
 
@@ -97,8 +123,11 @@ describe('the receiving report on paper', () => {
 	});
 
 	it('prints rows that add up to the printed totals', () => {
+		// Without the counterfoil, whose lines would run into the table's.
+		const crop = ['-layout', '-x', '0', '-y', '0', '-W', '468', '-H', '842'];
+		const mainColumn = said(pdf, 'pdftotext', (file) => [...crop, file, '-']).replace(/ +/gu, ' ');
 		const legs = [
-			...text.matchAll(/^ ?[A-F] .*? (\d+\.\d) (\d+\.\d) (\d+\.\d) (\d+\.\d) (\d+\.\d) ?$/gmu)
+			...mainColumn.matchAll(/^ ?[A-F] .*? (\d+\.\d) (\d+\.\d) (\d+\.\d) (\d+\.\d) (\d+\.\d)(?: .*)?$/gmu)
 		].slice(0, 6);
 		expect(legs).toHaveLength(6);
 		for (const [, allowed, used, over, warm, late] of legs) {
@@ -125,14 +154,6 @@ describe('other loads', () => {
 	it('stands on letter paper', async () => {
 		const pdf = await reportPdf(reportInput({ pageSize: 'letter' }));
 		expect(said(pdf, 'pdfinfo', (file) => [file])).toMatch(/612 x 792/u);
-	});
-
-	it('cuts nothing off a load of forty lines', async () => {
-		const text = await drawnFrom({}, 40);
-		for (let ordinal = 1; ordinal <= 40; ordinal++) {
-			expect(text).toContain(`OB-26089-${ordinal}`);
-			expect(text).toContain(`Excursions on L${ordinal}`);
-		}
 	});
 
 	it('says that life is not known where no logger rode', async () => {
@@ -174,7 +195,9 @@ describe('other loads', () => {
 		const [first, ...others] = reportInput().attachments;
 		if (first === undefined) throw new Error('the fixture has attachments');
 		const changed = others.map((other) => ({ ...other, bytes: new Uint8Array([1]) }));
-		const text = await drawnFrom({ attachments: [{ ...first, name: 'L1-renamed.csv' }, ...changed] });
+		const text = textOf(
+			await reportPdf(reportInput({ attachments: [{ ...first, name: 'L1-renamed.csv' }, ...changed] }))
+		);
 		expect(text).toContain('L1-renamed.csv, attached inside');
 		expect(text).toContain('SB-30412.csv, kept, not attached');
 	});
@@ -196,6 +219,116 @@ describe('other loads', () => {
 			product: 'Y'.repeat(90)
 		}));
 		const text = textOf(await reportPdf(withDocket({ lines }, 1))).replace(/\s/gu, '');
-		expect(text.match(/X/gu)?.length).toBe(120);
+		// The lot stands among the dispositions and beside its pulp reading.
+		expect(text.match(/X/gu)?.length).toBe(240);
+	});
+});
+
+describe('a very long load', () => {
+	let pdf: Uint8Array;
+	let pages: string[];
+	beforeAll(async () => {
+		pdf = await reportPdf(longReport());
+		pages = textOf(pdf)
+			.split('\f')
+			.filter((page) => page.trim() !== '');
+	});
+
+	it('is numbered and signed at the foot of each page', () => {
+		for (const [i, page] of pages.entries()) {
+			expect(page).toContain(`page ${i + 1} of ${pages.length}`);
+			expect(page).toContain('Signed by Ruth Calloway, approval');
+		}
+	});
+
+	it('repeats title and heads wherever a table goes on', () => {
+		for (const [title, head] of [
+			['Dispositions', 'Product and lot'],
+			['Excursions on other loggers', 'Severity'],
+			['Legs, other loggers', 'In whose hands'],
+			['Pulp at the door', 'Line and lot'],
+			['Seen at the door', 'What']
+		] as const) {
+			const bearing = pages.filter((page) => page.includes(title));
+			expect(bearing.length).toBeGreaterThan(1);
+			for (const page of bearing) expect(page).toContain(head);
+		}
+	});
+
+	it('cuts nothing off: forty lines, sixty excursions, twelve loggers’ legs, thirty pulp readings', () => {
+		const text = pages.join('');
+		for (let ordinal = 1; ordinal <= 40; ordinal++) {
+			expect(text).toContain(`OB-26089-${ordinal}`);
+			expect(text).toContain(`Life suffices on line ${ordinal}:`);
+		}
+		expect(text.match(/minor|major|critical/gu)?.length).toBeGreaterThanOrEqual(60);
+		expect(text.match(/All legs/gu)).toHaveLength(12);
+		expect(text.match(/in product/gu)?.length).toBeGreaterThanOrEqual(12);
+		expect(text).toContain('End of the reasons.');
+		for (let n = 1; n <= 9; n++) expect(text).toContain(`Note ${n}.`);
+	});
+
+	it('shows the photographs with the hash of each', () => {
+		const images = said(pdf, 'pdfimages', (file) => ['-list', file]);
+		expect(images.match(/jpeg/gu)?.length).toBeGreaterThan(0);
+		expect(pages.join('')).toContain('Row three, film torn');
+	});
+
+	it('lets a note that is longer than a page go on overleaf', async () => {
+		const notes = [
+			{
+				id: 'n',
+				by: 'D. Marsh',
+				at: '2026-04-03T06:20:00.000Z',
+				text: `Begin. ${'Film torn at row three. '.repeat(400)}The very end.`
+			}
+		];
+		const text = textOf(await reportPdf(withDocket({ notes }, 1)));
+		expect(text.match(/torn/gu)).toHaveLength(400);
+		expect(text.replace(/\s+/gu, ' ')).toContain('very end.');
+	});
+});
+
+describe('what a person did and what may not be', () => {
+	it('prints each trim with its reason, and each stop by itself', async () => {
+		const input = reportInput({}, 1);
+		const trims = [
+			{
+				id: 't',
+				logger: 'L1',
+				fromAt: '2026-04-03T04:00:00.000Z',
+				toAt: '2026-04-03T05:10:00.000Z',
+				reason: 'lay in the office',
+				by: 'R. Calloway'
+			}
+		];
+		const assessments = input.frozen.docket.assessments.map((assessment) => ({
+			...assessment,
+			stops: [
+				{
+					kind: 'freezing' as const,
+					stopCelsius: -1.3,
+					extremeCelsius: -2.1,
+					firstAtMs: Date.parse('2026-04-02T22:10:00Z'),
+					minutes: 40,
+					isInDoubt: false
+				}
+			]
+		}));
+		const text = textOf(await reportPdf(withDocket({ trims, assessments }, 1)));
+		expect(text).toMatch(/Left out on L1 1:10 h Fri 3 Apr 06:00 to Fri 3 Apr 07:10, by R\. Calloway/u);
+		expect(text).toMatch(
+			/Freezing stop on L1, line 1: −2\.1 °C against −1\.3 °C, first Fri 3 Apr 00:10, 0:40 in all/u
+		);
+	});
+
+	it('keeps a long reason of an amendment whole, and short on the counterfoil', async () => {
+		const input = reportInput({}, 1);
+		const amendmentReason = `${'The buyer takes the second line after all. '.repeat(30)}Done.`;
+		const text = textOf(
+			await reportPdf({ ...input, signature: { ...input.signature, version: 2, amendmentReason } })
+		);
+		expect(text).toMatch(/…, whole at/u);
+		expect(text.replace(/\s+/gu, ' ')).toMatch(/after all\. Done\./u);
 	});
 });

@@ -2,6 +2,11 @@ import pdfmake from 'pdfmake';
 import type { Content, TDocumentDefinitions } from 'pdfmake/interfaces';
 import { chapterContent } from './chapters';
 import { photosAndNotes, signatureStrip } from './closing';
+import { howToVerify } from './how-to-verify';
+import { otherExcursions } from './excursions-ledger';
+import { otherLegs } from './other-legs-ledger';
+import { photoPrints } from './photo-prints';
+import { pulpLedger } from './pulp-ledger';
 import { firstCounterfoil } from './counterfoil';
 import { firstCounterfoilFoot, laterCounterfoil, verticalNumber } from './counterfoil-foot';
 import { dispositions } from './dispositions';
@@ -56,15 +61,21 @@ function documentOf(draft: Draft): TDocumentDefinitions {
 }
 
 function body(draft: Draft): Content[] {
+	const charted = draft.chapters.filter(({ hasChart }) => hasChart);
+	const others = draft.chapters.filter(({ hasChart }) => !hasChart);
 	return [
 		...docketHead(draft),
 		...dispositions(draft),
-		...draft.chapters.flatMap((chapter) => chapterContent(draft, chapter)),
+		...charted.flatMap((chapter) => chapterContent(draft, chapter)),
+		...(others.length === 0 ? [] : [...otherExcursions(draft, others), ...otherLegs(draft, others)]),
 		...reasons(draft),
 		...restsOn(draft),
 		...loggers(draft),
+		...pulpLedger(draft),
 		...photosAndNotes(draft),
-		signatureStrip(draft)
+		...photoPrints(draft),
+		signatureStrip(draft),
+		howToVerify(draft)
 	];
 }
 

@@ -12,9 +12,9 @@ interface Ground {
 	readonly how: string;
 }
 
-/** Opening balance, gaps, the model's edges, trims and pulp: every assumption with its figure and its source. */
+/** Opening balance, gaps, the model's edges and trims: every assumption with its figure and its source. */
 export function restsOn(draft: Draft): Content[] {
-	const rows = [...shared(draft), ...pulpRows(draft)];
+	const rows = [...shared(draft), ...trimRows(draft)];
 	if (rows.length === 0) return [];
 	const specs = new Set(
 		draft.chapters.map(({ assessment }) => `${assessment.specName}, version ${assessment.specVersion}`)
@@ -92,16 +92,12 @@ function assumptions({ thermometer }: Draft, assessment: AssessmentView): Ground
 	];
 }
 
-function pulpRows({ docket, thermometer, calendar }: Draft): Ground[] {
-	return docket.pulp.map((pulp) => {
-		const line = docket.lines.find((candidate) => candidate.id === pulp.lineId);
-		const lot = pulp.lot === null ? '' : `, lot ${pulp.lot}`;
-		const where = [pulp.position, pulp.caseLabel, pulp.instrument].filter(Boolean).join(', ');
-		const when = `${calendar.day(pulp.takenAt)} ${calendar.time(pulp.takenAt)}`;
-		return {
-			name: `Pulp at the door${line === undefined ? lot : `, line ${line.ordinal}`}`,
-			figure: `${thermometer.reading(pulp.celsius)} ${thermometer.sign}`,
-			how: `${where}, ${when}, written “${pulp.text}”`
-		};
-	});
+/** Each stretch a person left out, with who did and why: they stay visible. */
+function trimRows({ docket, calendar }: Draft): Ground[] {
+	const when = (at: string) => `${calendar.day(at)} ${calendar.time(at)}`;
+	return docket.trims.map((trim) => ({
+		name: `Left out on ${trim.logger}`,
+		figure: `${hoursMinutes((Date.parse(trim.toAt) - Date.parse(trim.fromAt)) / 60_000)} h`,
+		how: `${when(trim.fromAt)} to ${when(trim.toAt)}, by ${trim.by}: ${trim.reason}`
+	}));
 }

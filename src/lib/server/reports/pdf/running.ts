@@ -1,4 +1,5 @@
 import type { Content } from 'pdfmake/interfaces';
+import { meaningWord } from './counterfoil-foot';
 import type { Draft } from './draft';
 import { houseMark } from './marks';
 import { palette } from './palette';
@@ -45,6 +46,9 @@ export function runningFoot(draft: Draft): Content {
 	const exports =
 		attached === 0 ? '' : `; ${attached === 1 ? 'one file is' : `${attached} files are`} attached inside`;
 	const place = [docket.site.name, docket.dock].filter(Boolean).join(', ');
+	const { signature } = input;
+	const meaning = meaningWord(signature.meaning).toLowerCase();
+	const signed = `Signed by ${signature.signedBy}, ${meaning}, ${calendar.date(at)}, ${calendar.timeToTheSecond(at)} ${name} (${calendar.offset(at)}). `;
 	const text =
 		`${place}${docket.site.gln === null ? '' : `, GLN ${docket.site.gln}`}. All times ${zone}, ${calendar.offset(at)} at signing. ` +
 		`Sealed with the certificate of ${input.organisation}${exports}.`;
@@ -56,7 +60,18 @@ export function runningFoot(draft: Draft): Content {
 					{ type: 'line', x1: 0, y1: 0, x2: sheet.mainWidth, y2: 0, lineWidth: 0.6, lineColor: palette.rule }
 				]
 			},
-			{ columns: [{ ...sentence(text, { size: 7.6, margin: [0, 5, 0, 0] }), width: sheet.mainWidth }] }
+			{
+				columns: [
+					{
+						// Name, time and meaning on every page: a copied sheet is a record too. Source: 21 CFR 11.50(b).
+						stack: [
+							sentence(signed, { size: 7.6, color: palette.ink, margin: [0, 4, 0, 0] }),
+							sentence(text, { size: 7.6 })
+						],
+						width: sheet.mainWidth
+					}
+				]
+			}
 		]
 	};
 }

@@ -45,7 +45,7 @@ export function sheetOf(pageSize: ReportInput['pageSize']): Sheet {
 		stubLeft,
 		stubWidth: width - 16 - stubLeft,
 		top: 56,
-		bottom: 50,
+		bottom: 56,
 		sealTop: qrTop - 14 - sealHeight,
 		sealHeight,
 		qrTop,

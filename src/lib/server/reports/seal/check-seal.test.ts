@@ -126,7 +126,8 @@ describe('the seal of a report, checked by ourselves', () => {
 				name: 'trap.csv',
 				bytes: new TextEncoder().encode('/ByteRange [0 1 2 3]\n/Contents <00>\n'.repeat(3)),
 				mediaType: 'text/csv',
-				description: '/ByteRange [0 1 2 3]'
+				description: '/ByteRange [0 1 2 3]',
+				relationship: 'Source' as const
 			}
 		];
 		expect(
