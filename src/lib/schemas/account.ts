@@ -73,6 +73,11 @@ const standing = {
 		.union([z.literal(''), z.uuid('Choose a firm from the list.')])
 		.default('')
 		.transform((id) => id || null),
+	/** May determine, in writing, what an absolute stop means for the goods. */
+	isQualifiedPerson: z
+		.string()
+		.optional()
+		.transform((value) => value === 'on' || value === 'true'),
 	revision: revisionField
 };
 

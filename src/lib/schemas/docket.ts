@@ -2,6 +2,7 @@ import type { Excursion, LegUse, Range, StopHit } from '../domain/receiving/asse
 import type { Outcome, Reason, Recommended } from '../domain/receiving/recommendation';
 import type { Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
+import type { CorrectionView, DeterminationView, ReviewView } from './signing';
 
 /** Where a docket stands; follows from its facts, never stored by itself. */
 export const stages = ['expected', 'at-the-door', 'on-hold', 'done'] as const;
@@ -254,6 +255,10 @@ export interface FrozenDocket {
 	evidenceSha256: string;
 	/** The signature is part of what is hashed, so that neither can be lifted off the other. */
 	signature: FrozenSignature;
+	/** What was signed before and belongs to it; absent in records from before these were kept. */
+	reviews?: ReviewView[];
+	determinations?: DeterminationView[];
+	corrections?: CorrectionView[];
 }
 
 export interface FrozenSignature {

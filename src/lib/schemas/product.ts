@@ -8,6 +8,11 @@ export const productForm = z.object({
 		family.toLowerCase()
 	),
 	countUnit: neededText(30, 'Enter what is counted, such as case or box.'),
+	/** Ticked: the dock accepts by itself what no finding holds. */
+	dockMayAccept: z
+		.string()
+		.optional()
+		.transform((value) => value === 'on' || value === 'true'),
 	revision: revisionField
 });
 export type ProductForm = z.output<typeof productForm>;

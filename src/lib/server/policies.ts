@@ -25,6 +25,9 @@ const acts = {
 	'hold.lift': ['qa'],
 	'trim.make': ['qa'],
 	'disposition.sign': ['qa'],
+	/** Accepting what no finding holds, where the product permits it; the authority table says the rest. */
+	'disposition.accept-at-dock': ['dock'],
+	'determination.write': staff,
 	'report.open': ['dock', 'qa', 'claims', 'admin', 'supplier'],
 	'raw-file.open': ['qa', 'claims', 'admin', 'supplier'],
 	'load.list': ['supplier'],

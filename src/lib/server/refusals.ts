@@ -16,6 +16,7 @@ const refusals = {
 		message: 'Somebody changed this docket while you were looking at it. Look again, then sign.'
 	},
 	'wrong-password': { status: 422, message: 'That is not your password. Nothing was signed.' },
+	'not-yet-yours': { status: 409, message: 'Something else is needed before you may sign this.' },
 	'code-needed': {
 		status: 422,
 		message: 'This account has a second factor. Enter the code your authenticator shows now.'

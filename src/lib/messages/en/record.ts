@@ -34,6 +34,8 @@ const sentences: Record<string, (data: Record<string, unknown>) => string> = {
 	'disposition.signed': ({ version, verdict }) =>
 		`Version ${version} signed, ${outcomeWords[String(verdict)] ?? verdict}`,
 	'disposition.refused': () => 'Signature refused',
+	'disposition.reviewed': () => 'Decision reviewed and signed; another person approves',
+	'determination.written': () => 'Determination written by a qualified person',
 	'report.sealed': () => 'Receiving report sealed',
 	'report.opened': () => 'Receiving report opened',
 	'notice.queued': ({ number }) => `Notice ${number} written`,

@@ -11,11 +11,12 @@ export interface AccountFields extends Record<string, unknown> {
 	roles: Role[];
 	siteIds: string[];
 	partnerId: string | null;
+	isQualifiedPerson: boolean;
 }
 
 export function accountFields(user: User, siteIds: readonly string[]): AccountFields {
-	const { name, title, partnerId } = user;
-	return { name, title, roles: rolesOf(user), siteIds: [...siteIds].sort(), partnerId };
+	const { name, title, partnerId, isQualifiedPerson } = user;
+	return { name, title, roles: rolesOf(user), siteIds: [...siteIds].sort(), partnerId, isQualifiedPerson };
 }
 
 export type AccountState = 'active' | 'invited' | 'locked' | 'off';

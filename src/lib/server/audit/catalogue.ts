@@ -98,6 +98,8 @@ export interface EventData {
 		outcomes: { lineId: string; outcome: Outcome; cases: number }[];
 		amendmentReason: string | null;
 	};
+	'disposition.reviewed': { reviewId: string; evidenceSha256: string; decisionSha256: string };
+	'determination.written': { determinationId: string; evidenceSha256: string; text: string };
 	'disposition.refused': { why: string };
 	'report.sealed': {
 		reportId: string;

@@ -1,5 +1,7 @@
 import type { DocketView } from '../../schemas/docket';
 import type { DispositionInput } from '../../schemas/disposition';
+import type { Need } from '../../domain/authority/authority';
+import { needText } from '../../messages/en/signing-needs';
 import { Refusal } from '../refusals';
 import { evidenceSha256 } from './freeze';
 
@@ -14,6 +16,11 @@ export function checkDecision(docket: DocketView, input: DispositionInput): void
 	if (!isComplete) throw new Refusal('invalid', 'Decide every line of the docket, each once.');
 	if (!input.reasons && departsFrom(docket, input))
 		throw new Refusal('invalid', 'You depart from the recommendation. Say why: it is printed on the report.');
+}
+
+/** Refuses a signature while something the authority table asks for is missing, all of it said. */
+export function refuseNeeds(needs: readonly Need[]): void {
+	if (needs.length > 0) throw new Refusal('not-yet-yours', needs.map(needText).join(' '));
 }
 
 /** Whether some line is decided otherwise than recommended; conditions are a mild accept. */

@@ -1,6 +1,8 @@
 import type { DocketView, FrozenDocket, FrozenSignature, SeriesView } from '../../schemas/docket';
 import { engineVersion } from '../../domain/receiving/engine-version';
 import { sha256Hex } from '../storage/sha256';
+import type { CorrectionView, DeterminationView, ReviewView, SigningStanding } from '../../schemas/signing';
+import { decisionSha256 } from '../authority/decision-text';
 import type { DispositionInput } from '../../schemas/disposition';
 
 type Facts = FrozenDocket['docket'];
@@ -30,10 +32,31 @@ interface Decision {
 	input: DispositionInput;
 	verdict: DocketView['verdict'];
 	signature: FrozenSignature;
+	before: SignedBefore;
+}
+
+/** What was signed before the decision and belongs to it. */
+export interface SignedBefore {
+	reviews: ReviewView[];
+	determinations: DeterminationView[];
+	corrections: CorrectionView[];
+}
+
+/** The reviews of this very decision, the determinations of this very evidence, and what moved the recommendation. */
+export function signedBefore(
+	{ reviews, determinations, corrections }: SigningStanding,
+	lines: DispositionInput['lines']
+): SignedBefore {
+	const decided = decisionSha256(lines);
+	return {
+		reviews: reviews.filter((review) => review.isOfThis && review.decisionSha256 === decided),
+		determinations: determinations.filter(({ isOfThis }) => isOfThis),
+		corrections
+	};
 }
 
 /** The record as it will be kept: facts, outcomes and signature in one text, whose hash the report prints. */
-export function freeze({ docket, series, input, verdict, signature }: Decision): {
+export function freeze({ docket, series, input, verdict, signature, before }: Decision): {
 	text: string;
 	sha256: string;
 } {
@@ -59,7 +82,8 @@ export function freeze({ docket, series, input, verdict, signature }: Decision):
 		engineVersion,
 		frozenAt: signature.signedAt,
 		evidenceSha256: evidenceSha256(docket),
-		signature
+		signature,
+		...before
 	};
 	const text = JSON.stringify(frozen);
 	return { text, sha256: sha256Hex(text) };

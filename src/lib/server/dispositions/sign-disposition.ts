@@ -12,10 +12,18 @@ import { inTransaction, type Writing } from '../db/transaction';
 import { docketView } from '../dockets/get-docket';
 import { verdictOf } from '../dockets/stage';
 import { queueNotice } from '../notices/queue-notice';
-import { authorizeShipment } from '../policies';
+import { authorizeShipment, may } from '../policies';
 import { frozenSeries } from './frozen-series';
-import { checkDecision } from './check-decision';
-import { freeze } from './freeze';
+import { signingNeeds } from '../../domain/authority/authority';
+import { signingFacts, signingStanding } from '../authority/signing-standing';
+import { checkDecision, refuseNeeds } from './check-decision';
+import { freeze, signedBefore, type SignedBefore } from './freeze';
+import { keepReview } from './keep-review';
+
+/** QA signs as QA; somebody of the dock alone signs by what the authority table leaves to the dock. */
+function signingAct({ actor }: Context): 'disposition.sign' | 'disposition.accept-at-dock' {
+	return may(actor, 'disposition.sign') ? 'disposition.sign' : 'disposition.accept-at-dock';
+}
 
 /** Locks the docket first, then reads it: what is read after the lock is what the signature falls on. */
 async function lockDocket(
@@ -24,7 +32,7 @@ async function lockDocket(
 	{ transaction }: Writing
 ): Promise<{ shipment: Shipment; docket: DocketView }> {
 	const shipment = await Shipment.findOne({ where: { number }, transaction, lock: transaction.LOCK.UPDATE });
-	authorizeShipment(ctx, 'disposition.sign', shipment);
+	authorizeShipment(ctx, signingAct(ctx), shipment);
 	const row = shipment as Shipment;
 	return { shipment: row, docket: await docketView(row, ctx.now, transaction) };
 }
@@ -34,12 +42,13 @@ interface Decided {
 	series: SeriesView[];
 	input: DispositionInput;
 	signature: FrozenSignature;
+	before: SignedBefore;
 }
 
-async function keepDecision(w: Writing, { docket, series, input, signature }: Decided) {
+async function keepDecision(w: Writing, { docket, series, input, signature, before }: Decided) {
 	const { transaction } = w;
 	const verdict = verdictOf(input.lines.map((line) => line.outcome));
-	const frozen = freeze({ docket, series, input, verdict, signature });
+	const frozen = freeze({ docket, series, input, verdict, signature, before });
 	await Disposition.create(
 		{
 			id: signature.dispositionId,
@@ -100,7 +109,7 @@ async function closeDocket(
 }
 
 /**
- * Signs what becomes of a load: freezes the docket with its figures, and writes report and notice as jobs, all in one
+ * Signs what becomes of a load, or, with the meaning review, that the decision was checked and another approves it. It freezes the docket with its figures, and writes report and notice as jobs, all in one
  * transaction. A later signature is a new version with a reason; the old one stays.
  * @throws Refusal `not-found`, `not-allowed`, `wrong-password`, `wrong-code`, `code-needed`, `locked`, `not-arrived`, `already-signed`,
  * `changed-meanwhile`, `invalid`
@@ -109,15 +118,19 @@ export async function signDisposition(
 	ctx: Context,
 	number: string,
 	input: DispositionInput
-): Promise<{ version: number }> {
+): Promise<{ version: number | null }> {
 	const seen = await Shipment.findOne({ where: { number } });
-	authorizeShipment(ctx, 'disposition.sign', seen);
+	authorizeShipment(ctx, signingAct(ctx), seen);
 	const signer = await checkSigningComponents(ctx, input);
-	const dispositionId = uuid();
+	const [dispositionId, reviewId] = [uuid(), uuid()];
 	const series = await frozenSeries(seen.id);
 	return inTransaction(ctx, async (w) => {
 		const { shipment, docket } = await lockDocket(ctx, number, w);
 		checkDecision(docket, input);
+		const standing = await signingStanding(ctx, docket, w.transaction);
+		if (input.meaning === 'review') return keepReview(w, ctx, { docket, input, signer, reviewId });
+		refuseNeeds(signingNeeds(signingFacts(ctx, standing, input.lines)));
+		const before = signedBefore(standing, input.lines);
 		const signature: FrozenSignature = {
 			dispositionId,
 			version: docket.signatures.length + 1,
@@ -130,7 +143,7 @@ export async function signDisposition(
 			reasons: input.reasons,
 			amendmentReason: input.amendmentReason
 		};
-		const { verdict, frozenSha256 } = await keepDecision(w, { docket, series, input, signature });
+		const { verdict, frozenSha256 } = await keepDecision(w, { docket, series, input, signature, before });
 		await closeDocket(w, ctx, shipment, verdict);
 		w.record(
 			'disposition.signed',

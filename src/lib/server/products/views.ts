@@ -3,8 +3,8 @@ import type { Variety } from '../db/models/variety';
 import { revisionOf } from '../catalogue/revision';
 
 /** What the form changes, and what the audit trail keeps of a change. */
-export function productFields({ name, family, countUnit }: Product) {
-	return { name, family, countUnit };
+export function productFields({ name, family, countUnit, dockMayAccept }: Product) {
+	return { name, family, countUnit, dockMayAccept };
 }
 
 export interface VarietyView {

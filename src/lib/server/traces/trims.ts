@@ -2,6 +2,7 @@ import { Op } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { TrimForm } from '../../schemas/trim';
 import { reassess } from '../assessments/reassess';
+import { movedText, standingOf } from '../authority/moved-recommendation';
 import type { Context } from '../context';
 import { TrimRow } from '../db/models/trim-row';
 import { inTransaction } from '../db/transaction';
@@ -20,12 +21,16 @@ export async function makeTrim(ctx: Context, form: TrimForm): Promise<string> {
 		const { transaction, record } = w;
 		await lockUnsigned(shipment.id, transaction);
 		await refuseOverlap(form.traceId, fromAt, toAt, w.transaction);
+		const before = await standingOf(shipment.id, transaction);
 		const made = { madeBy: ctx.actor.id, madeAt: ctx.now, undoneBy: null, undoneAt: null };
 		const { traceId, reason } = form;
 		await TrimRow.create({ id, traceId, fromAt, toAt, reason, ...made }, { transaction });
 		const instants = { fromAt: fromAt.toISOString(), toAt: toAt.toISOString() };
 		record('trim.made', { scope: 'shipment', id: shipment.id }, { traceId, ...instants, reason });
 		await reassess(w, ctx, shipment.id);
+		const movedRecommendation = movedText(before, await standingOf(shipment.id, transaction));
+		if (movedRecommendation !== null)
+			await TrimRow.update({ movedRecommendation }, { where: { id }, transaction });
 	});
 	return id;
 }

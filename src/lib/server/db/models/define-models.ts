@@ -37,6 +37,8 @@ import { defineExcursionRow } from './excursion-row';
 import { defineLegUseRow } from './leg-use-row';
 import { defineDisposition } from './disposition';
 import { defineDispositionLine } from './disposition-line';
+import { defineDispositionReview } from './disposition-review';
+import { defineDetermination } from './determination';
 import { defineCertificate } from './certificate';
 import { defineReport } from './report';
 import { defineNotice } from './notice';
@@ -98,6 +100,8 @@ export function defineModels(sequelize: Sequelize): void {
 	defineLegUseRow(sequelize);
 	defineDisposition(sequelize);
 	defineDispositionLine(sequelize);
+	defineDispositionReview(sequelize);
+	defineDetermination(sequelize);
 	defineCertificate(sequelize);
 	defineReport(sequelize);
 	defineNotice(sequelize);

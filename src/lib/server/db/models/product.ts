@@ -18,6 +18,8 @@ export class Product extends Model<InferAttributes<Product>, InferCreationAttrib
 	declare minimumDatedDays: number | null;
 	declare isNotOlderThanLast: CreationOptional<boolean>;
 	declare isLoggerRequired: CreationOptional<boolean>;
+	/** The dock itself may accept what no finding holds. */
+	declare dockMayAccept: CreationOptional<boolean>;
 	declare createdAt: Date;
 	declare switchedOffAt: Date | null;
 }
@@ -33,6 +35,7 @@ export function defineProduct(sequelize: Sequelize): void {
 			minimumDatedDays: { type: DataTypes.INTEGER, allowNull: true },
 			isNotOlderThanLast: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: false },
 			isLoggerRequired: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: false },
+			dockMayAccept: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: false },
 			createdAt: { type: DataTypes.DATE(3), allowNull: false },
 			switchedOffAt: { type: DataTypes.DATE(3), allowNull: true }
 		},

@@ -1,6 +1,7 @@
 import {
 	DataTypes,
 	Model,
+	type CreationOptional,
 	type InferAttributes,
 	type InferCreationAttributes,
 	type Sequelize
@@ -17,6 +18,8 @@ export class TrimRow extends Model<InferAttributes<TrimRow>, InferCreationAttrib
 	declare madeAt: Date;
 	declare undoneBy: string | null;
 	declare undoneAt: Date | null;
+	/** What was recommended before and after, as JSON, where the trim changed it. */
+	declare movedRecommendation: CreationOptional<string | null>;
 }
 
 export function defineTrimRow(sequelize: Sequelize): void {
@@ -30,7 +33,8 @@ export function defineTrimRow(sequelize: Sequelize): void {
 			madeBy: { type: DataTypes.UUID, allowNull: false },
 			madeAt: { type: DataTypes.DATE(3), allowNull: false },
 			undoneBy: { type: DataTypes.UUID, allowNull: true },
-			undoneAt: { type: DataTypes.DATE(3), allowNull: true }
+			undoneAt: { type: DataTypes.DATE(3), allowNull: true },
+			movedRecommendation: { type: DataTypes.TEXT, allowNull: true }
 		},
 		{ sequelize, modelName: 'TrimRow', tableName: 'trims' }
 	);

@@ -19,6 +19,8 @@ export class User extends Model<InferAttributes<User>, InferCreationAttributes<U
 	declare tokenVersion: CreationOptional<number>;
 	declare failedPasswords: CreationOptional<number>;
 	declare lockedAt: Date | null;
+	/** May determine, in writing, what a stop means for the goods. */
+	declare isQualifiedPerson: CreationOptional<boolean>;
 	declare temperatureUnit: 'celsius' | 'fahrenheit' | null;
 	declare createdAt: Date;
 	declare invitedAt: Date | null;
@@ -47,6 +49,7 @@ export function defineUser(sequelize: Sequelize): void {
 			tokenVersion: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
 			failedPasswords: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
 			lockedAt: { type: DataTypes.DATE(3), allowNull: true },
+			isQualifiedPerson: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: false },
 			temperatureUnit: { type: DataTypes.ENUM('celsius', 'fahrenheit'), allowNull: true },
 			createdAt: { type: DataTypes.DATE(3), allowNull: false },
 			invitedAt: { type: DataTypes.DATE(3), allowNull: true },

@@ -5,6 +5,7 @@ import { getDocket } from '$lib/server/dockets/get-docket';
 import { liftHold } from '$lib/server/holds/lift-hold';
 import { putHold } from '$lib/server/holds/put-hold';
 import { addNote } from '$lib/server/notes/add-note';
+import { mayAcceptAtDock } from '$lib/server/authority/dock-accept';
 import { findNextWaiting } from '$lib/server/queue/list-queue';
 import { may } from '$lib/server/policies';
 import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
@@ -29,7 +30,8 @@ export const load: PageServerLoad = async ({ locals, params, depends }) => {
 			lift: may(ctx.actor, 'hold.lift'),
 			upload: may(ctx.actor, 'read.upload'),
 			trim: may(ctx.actor, 'trim.make'),
-			claim: may(ctx.actor, 'claim.work')
+			claim: may(ctx.actor, 'claim.work'),
+			accept: await mayAcceptAtDock(ctx, docket)
 		},
 		back: { href: '/arrivals', word: docket.number.split('-').at(-1) ?? '', title: docket.title }
 	};

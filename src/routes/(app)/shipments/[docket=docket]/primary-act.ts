@@ -1,6 +1,9 @@
 import type { DocketView } from '$lib/schemas/docket';
 
-export type Permissions = Record<'sign' | 'log' | 'hold' | 'lift' | 'upload' | 'trim' | 'claim', boolean>;
+export type Permissions = Record<
+	'sign' | 'log' | 'hold' | 'lift' | 'upload' | 'trim' | 'claim' | 'accept',
+	boolean
+>;
 
 /** The one next act of a docket for whoever looks at it; null where somebody else is due. */
 export function primaryAct(
@@ -17,6 +20,7 @@ export function primaryAct(
 			: null;
 	}
 	if (may.sign) return { href: `${base}/sign`, word: 'Sign disposition' };
+	if (may.accept) return { href: `${base}/sign`, word: 'Accept at the dock' };
 	const hasRead = docket.loggers.some((logger) => logger.traceId !== null);
 	return may.upload
 		? { href: `${base}/reads`, word: hasRead ? 'Upload another read' : 'Upload a read' }
