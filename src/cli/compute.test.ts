@@ -37,6 +37,13 @@ describe('the compute program', () => {
 		expect([stderr, status]).toEqual(['', 0]);
 	});
 
+	it('finds a file named from the folder npm was called in', () => {
+		writeFileSync(join(folder, 'question.json'), JSON.stringify(question));
+		const env = { INIT_CWD: folder };
+		const { stdout } = spawnSync(process.execPath, [program, 'question.json'], { env, encoding: 'utf8' });
+		expect(JSON.parse(stdout)).toEqual(computeLifeOf(question));
+	});
+
 	it.each([
 		['a faulty figure', JSON.stringify({ ...question, accuracyCelsius: -1 }), ['accuracyCelsius']],
 		['no JSON', '{"model":', undefined]

@@ -1,9 +1,8 @@
 /** `npm run compute -- <json file>`: what the compute call of the API answers, on one line; no server, no database. */
 import { readFileSync } from 'node:fs';
-import { computeLifeOf } from '../lib/server/specs/compute-life';
-import { parseBoundedJson } from '../lib/server/specs/bounded-json';
+import { resolve } from 'node:path';
+import { answerCompute } from '../lib/server/specs/answer-compute';
 import { InvalidFields } from '../lib/server/shipments/invalid-fields';
-import { Refusal } from '../lib/server/refusals';
 
 /** The refusal as the API words it, on standard error, so that standard output holds an answer or nothing. */
 function refuse(refusal: { code: string; message: string; issues?: Record<string, string> }): void {
@@ -11,20 +10,27 @@ function refuse(refusal: { code: string; message: string; issues?: Record<string
 	process.exitCode = 1;
 }
 
+/** npm runs programs in the project's folder; the file is named from where it was called. */
+function textOf(path: string): string {
+	return readFileSync(path === '-' ? 0 : resolve(process.env.INIT_CWD ?? '', path), 'utf8');
+}
+
 function main(path: string | undefined): void {
-	if (path === undefined) {
+	if (path === undefined)
 		return refuse({ code: 'invalid', message: 'Name a JSON file: npm run compute -- question.json.' });
-	}
+	let text: string;
 	try {
-		const text = readFileSync(path === '-' ? 0 : path, 'utf8');
-		process.stdout.write(`${JSON.stringify(computeLifeOf(parseBoundedJson(text)))}\n`);
+		text = textOf(path);
 	} catch (error) {
-		if (error instanceof InvalidFields)
-			return refuse({ code: error.code, message: error.message, issues: error.issues });
-		if (error instanceof Refusal) return refuse({ code: error.code, message: error.message });
-		if (error instanceof Error && 'syscall' in error)
-			return refuse({ code: 'invalid', message: `${path} cannot be read: ${error.message}.` });
-		throw error;
+		const why = error instanceof Error ? error.message : String(error);
+		return refuse({ code: 'invalid', message: `${path} cannot be read: ${why}.` });
+	}
+	const outcome = answerCompute(text);
+	if ('json' in outcome) process.stdout.write(`${outcome.json}\n`);
+	else if ('refused' in outcome) refuse({ code: outcome.refused, message: outcome.message });
+	else {
+		const { code, message, issues } = new InvalidFields(outcome.issues);
+		refuse({ code, message, issues });
 	}
 }
 

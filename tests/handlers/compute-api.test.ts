@@ -1,5 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { computeLifeOf } from '../../src/lib/server/specs/compute-life';
+import { makeApiToken, newApiSecret } from '../../src/lib/server/accounts/api-tokens';
+import { systemContext } from '../../src/lib/server/context';
 import { AuditEntry } from '../../src/lib/server/db/models/audit-entry';
 import { startProduct, Visitor, type Product } from '../helpers/product';
 import { useTestDatabase } from '../helpers/test-database';
@@ -20,10 +22,12 @@ const question = {
 	accuracyCelsius: 0.5
 };
 let product: Product;
+let emailOfDock = '';
 let visitors: Record<'dock' | 'qa' | 'supplier' | 'nobody', Visitor>;
 
 beforeAll(async () => {
 	const { people } = await buildSeenLoad();
+	emailOfDock = people.dock.email;
 	product = await startProduct();
 	visitors = {
 		dock: await signInAs(product, people.dock),
@@ -61,6 +65,21 @@ describe('POST shelf-life/compute', () => {
 			expect(await answer.json()).toEqual(computeLifeOf(question));
 		}
 		expect(await AuditEntry.count()).toBe(before);
+	});
+
+	it('answers a program by its token, without cookie or origin', async () => {
+		const secret = newApiSecret();
+		await makeApiToken(systemContext(new Date()), emailOfDock, secret);
+		const send = (token: string) =>
+			fetch(new URL(path, product.address), {
+				method: 'POST',
+				headers: { authorization: `Bearer ${token}`, 'content-type': 'application/json' },
+				body: JSON.stringify(question)
+			});
+		const answer = await send(secret);
+		expect(answer.status).toBe(200);
+		expect(await answer.json()).toEqual(computeLifeOf(question));
+		expect((await send(`${secret}x`)).status).toBe(401);
 	});
 
 	it.each([

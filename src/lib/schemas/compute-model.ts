@@ -18,7 +18,7 @@ const q10 = number.min(1, 'A Q10 below 1 would let warm goods last longer. Send 
 const pair = 'Send a pair: [temperature in °C, figure].';
 const point = z.tuple([celsius, hours], { error: pair });
 const reference = { referenceCelsius: celsius, lifeHours: hours };
-const longestList = 1000;
+const longestList = 100;
 
 /** Each kind with its own figures; what it does not know is refused, lest a misspelt key pass for a default. */
 export const computeModel = z.discriminatedUnion(

@@ -5,6 +5,7 @@ import { Refusal } from '../refusals';
 import type { InspectAnswer } from '../../schemas/inspect';
 import { inspectFile, type InspectFileOrder } from './inspect-file';
 import { turnsOf } from './reading-turns';
+import { answerCompute, type ComputeOutcome } from '../specs/answer-compute';
 import { readBytes, type ReadOrder, type ReadResult } from './read-bytes';
 
 /** Where `vite build --mode node` leaves the workers, from the folder the server is started in. */
@@ -45,16 +46,26 @@ export async function runInspector(
 	return program === null ? inspectFile(order) : queued<InspectAnswer>(order, program);
 }
 
-type Order = ReadOrder | InspectFileOrder;
+/** Answers a large question about shelf life, as JSON text, in a thread likewise. */
+export async function runCompute(
+	body: string,
+	program = builtProgram('compute-worker.js')
+): Promise<ComputeOutcome> {
+	if (program === null) return answerCompute(body);
+	return inTurn(body.length > heavyBytes, () => inThread<ComputeOutcome>(body, program));
+}
 
-async function queued<Result>(order: Order, program: string): Promise<Result> {
+type FileOrder = ReadOrder | InspectFileOrder;
+type Order = FileOrder | string;
+
+async function queued<Result>(order: FileOrder, program: string): Promise<Result> {
 	const bytes = 'bytes' in order ? order.bytes.length : (await stat(order.path)).size;
 	return inTurn(bytes > heavyBytes, () => inThread<Result>(order, program));
 }
 
 /** Bytes with a buffer of their own are handed over, not copied: nobody reads them here any more. */
 function handedOver(order: Order): ArrayBuffer[] {
-	if (!('bytes' in order)) return [];
+	if (typeof order === 'string' || !('bytes' in order)) return [];
 	const { buffer, byteLength } = order.bytes;
 	return buffer instanceof ArrayBuffer && buffer.byteLength === byteLength ? [buffer] : [];
 }

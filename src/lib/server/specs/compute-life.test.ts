@@ -2,7 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { roles, systemContext, type Role } from '../context';
 import { Refusal } from '../refusals';
 import { parseBoundedJson } from './bounded-json';
-import { computeForCaller, computeLifeOf } from './compute-life';
+import { computeForCaller } from './compute-for-caller';
+import { computeLifeOf } from './compute-life';
 
 const model = { kind: 'squareRoot', minCelsius: -10, referenceCelsius: 0, lifeHours: 336 };
 const question = {
@@ -28,15 +29,22 @@ const codeOf = (work: () => unknown): string => {
 };
 
 describe('life computed for a caller', () => {
-	it.each(roles)('of role %s', (role) => {
-		const code = codeOf(() => computeForCaller(callerWith(role), JSON.stringify(question)));
-		expect(code).toBe(role === 'supplier' ? 'not-allowed' : 'none');
+	it.each(roles)('of role %s', async (role) => {
+		const asked = computeForCaller(callerWith(role), JSON.stringify(question));
+		if (role === 'supplier') await expect(asked).rejects.toMatchObject({ code: 'not-allowed' });
+		else expect(JSON.parse(await asked)).toEqual(computeLifeOf(question));
 	});
 
-	it('is what the file gives without one', () => {
-		const answer = computeForCaller(callerWith('qa'), JSON.stringify(question));
-		expect(answer).toEqual(computeLifeOf(question));
-		expect(answer.usedFraction).toBeCloseTo(24 / 336, 14);
+	it('names the faulty field, whether the question is short or long', async () => {
+		const faulty = [...question.readings, ['now', 4]];
+		for (const padding of ['', ' '.repeat(200_000)]) {
+			const asked = computeForCaller(callerWith('qa'), JSON.stringify({ model, readings: faulty }) + padding);
+			await expect(asked).rejects.toMatchObject({
+				code: 'invalid',
+				issues: { 'readings.2.0': expect.stringContaining('no time') }
+			});
+		}
+		await expect(computeForCaller(callerWith('qa'), '[')).rejects.toMatchObject({ code: 'invalid' });
 	});
 
 	it('takes a million readings, and not one more', () => {
