@@ -1,6 +1,9 @@
+import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { roles, systemContext, type Role } from '../context';
 import { Refusal } from '../refusals';
+import { runCompute } from '../reads/run-reader';
+import { answerCompute } from './answer-compute';
 import { parseBoundedJson } from './bounded-json';
 import { computeForCaller } from './compute-for-caller';
 import { computeLifeOf } from './compute-life';
@@ -45,6 +48,14 @@ describe('life computed for a caller', () => {
 			});
 		}
 		await expect(computeForCaller(callerWith('qa'), '[')).rejects.toMatchObject({ code: 'invalid' });
+	});
+
+	it('is the same from a thread of its own', async () => {
+		const program = join(process.cwd(), 'build/node/compute-worker.js');
+		const [short, faulty] = [JSON.stringify(question), JSON.stringify({ model, readings: [] })];
+		expect(await runCompute(short, program)).toEqual(answerCompute(short));
+		expect(await runCompute(faulty, program)).toEqual(answerCompute(faulty));
+		expect(await runCompute('[', program)).toEqual(answerCompute('['));
 	});
 
 	it('takes a million readings, and not one more', () => {
