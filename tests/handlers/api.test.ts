@@ -81,6 +81,12 @@ const readings: { route: string; path: () => string; opensTo: readonly Who[]; ty
 		type: 'application/zip'
 	},
 	{
+		route: 'shipments/{docket}/copy',
+		path: () => `/api/v1/shipments/${load.shipment.number}/copy`,
+		opensTo: ['qa', 'admin'],
+		type: 'application/zip'
+	},
+	{
 		route: 'reads/{read}',
 		path: () => `/api/v1/reads/${load.readId}`,
 		opensTo: ['dock', 'qa', 'claims', 'admin'],

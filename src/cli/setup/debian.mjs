@@ -51,7 +51,14 @@ export const databasePrograms = {
 	my_print_defaults: ['mariadb-client-core']
 };
 
+/** What backing up and restoring call. */
+export const backupPrograms = {
+	'mariadb-dump': ['mariadb-client'],
+	mariadb: ['mariadb-client']
+};
+
 export const testPrograms = {
+	...backupPrograms,
 	chromium: ['chromium'],
 	pdfsig: ['poppler-utils'],
 	pdftotext: ['poppler-utils'],

@@ -41,6 +41,9 @@ const acts = {
 	'account.manage': ['admin'],
 	'certificate.manage': ['admin'],
 	'audit.view': ['qa', 'admin'],
+	/** Everything about a docket as one file, for an inspector. */
+	'copy.take': ['qa', 'admin'],
+	'retention.manage': ['admin'],
 	'mailbox.view': staff
 } as const satisfies Record<string, readonly Role[]>;
 

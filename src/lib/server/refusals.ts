@@ -65,6 +65,10 @@ const refusals = {
 		status: 409,
 		message: 'This version has been signed and never changes. Save a new draft from it.'
 	},
+	'file-expired': {
+		status: 410,
+		message: 'The bytes of this file were taken out when its retention period ended. Its hash is on the record.'
+	},
 	'database-away': {
 		status: 503,
 		message: 'The database does not answer. Nothing was changed. Try again in a minute.'

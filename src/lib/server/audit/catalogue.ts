@@ -131,7 +131,7 @@ export interface EventData {
 		rule: string;
 		periodMonths: number;
 	};
-	'copy.taken': { shipmentId: string; files: number; entries: number };
+	'copy.taken': { shipmentId: string; files: number };
 	'record.exported': { as: 'csv' | 'pdf'; entries: number; filter: Record<string, string> };
 }
 

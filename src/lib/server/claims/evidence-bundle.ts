@@ -42,6 +42,11 @@ async function readingsFiles(shipment: Shipment): Promise<EvidenceFile[]> {
 	);
 }
 
+/** Every kept file of a docket: reports, exports, photographs, and the readings written out. */
+export async function docketFiles(shipment: Shipment): Promise<EvidenceFile[]> {
+	return [...(await evidenceFiles(shipment)), ...(await readingsFiles(shipment))];
+}
+
 interface Manifest {
 	docket: string;
 	claim: string | null;
@@ -109,7 +114,7 @@ export async function takeEvidenceBundle(
 	const shipment = await Shipment.findOne({ where: { number } });
 	authorizeShipment(ctx, 'bundle.take', shipment);
 	const docket = shipment as Shipment;
-	const files = [...(await evidenceFiles(docket)), ...(await readingsFiles(docket))];
+	const files = await docketFiles(docket);
 	if (!files.some((file) => file.fileName.endsWith('.pdf')))
 		throw new Refusal(
 			'not-signed',

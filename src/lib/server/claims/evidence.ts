@@ -16,8 +16,10 @@ export interface EvidenceFile {
 	open: () => Promise<Readable>;
 }
 
-async function stored(fileId: string, what: string, fileName: string): Promise<EvidenceFile> {
+async function stored(fileId: string, what: string, fileName: string): Promise<EvidenceFile | null> {
 	const file = await StoredFile.findByPk(fileId, { rejectOnEmpty: true });
+	// Retention took the bytes; the hash stays on the record.
+	if (file.deletedAt) return null;
 	return {
 		what,
 		fileName,
@@ -35,7 +37,7 @@ export async function evidenceFiles(shipment: Shipment): Promise<EvidenceFile[]>
 		LoggerRead.findAll({ where: { ...where, state: ['ok', 'withdrawn'] }, order: ['uploadedAt'] }),
 		Photo.findAll({ where, order: ['takenAt'] })
 	]);
-	return Promise.all([
+	const files = await Promise.all([
 		...reports.map((report) => stored(report.fileId, 'Receiving report, signed', report.fileName)),
 		...reads.map((read, index) =>
 			stored(
@@ -52,4 +54,5 @@ export async function evidenceFiles(shipment: Shipment): Promise<EvidenceFile[]>
 			)
 		)
 	]);
+	return files.filter((file) => file !== null);
 }

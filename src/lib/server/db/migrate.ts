@@ -37,7 +37,7 @@ const storage = {
 };
 
 /** The account behind the app's URL as the server names it, quoted for GRANT. */
-async function accountOf(appUrl: string): Promise<string> {
+export async function accountOf(appUrl: string): Promise<string> {
 	// Before the first grant the account may open no schema but this one.
 	const url = new URL(appUrl);
 	url.pathname = '/information_schema';

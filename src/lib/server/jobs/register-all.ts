@@ -4,6 +4,7 @@ import { mailLock } from '../accounts/tell-admins-of-lock';
 import { makeCheckpoint } from '../audit/checkpoint';
 import { sendNotice } from '../notices/send-notice';
 import { ensureReport } from '../reports/make-report';
+import { runRetention } from '../retention/run-retention';
 import { registerJobKind } from './job-kinds';
 
 /** Every kind of job and who does it. */
@@ -13,6 +14,7 @@ export function registerAllJobs(): void {
 		async (ctx, { dispositionId }) => void (await ensureReport(ctx, dispositionId ?? ''))
 	);
 	registerJobKind('audit-checkpoint', async ({ now }) => void (await makeCheckpoint(now)));
+	registerJobKind('retention', async (ctx) => void (await runRetention(ctx)));
 	registerJobKind('mail-link', mailLink);
 	registerJobKind('lock-mail', mailLock);
 	registerJobKind('certificate-ending', mailCertificateEnd);

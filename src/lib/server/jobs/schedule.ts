@@ -5,7 +5,10 @@ import { log } from '../log';
 const hourMs = 3_600_000;
 
 /** Work that comes round by itself, and how often. */
-const rounds = [{ kind: 'audit-checkpoint', everyMs: hourMs }] as const;
+const rounds = [
+	{ kind: 'audit-checkpoint', everyMs: hourMs },
+	{ kind: 'retention', everyMs: 24 * hourMs }
+] as const;
 
 /** Writes the jobs of the round that `now` falls in; a second server, or a second call, adds none. */
 export async function enqueueRounds(now: Date): Promise<void> {

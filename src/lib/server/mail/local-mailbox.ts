@@ -3,6 +3,7 @@ import { join } from 'node:path';
 import { simpleParser } from 'mailparser';
 import { SMTPServer } from 'smtp-server';
 import { v7 as uuid } from 'uuid';
+import { sha256Hex } from '../storage/sha256';
 
 /** A mail as the mailbox page shows it. */
 export interface MailboxEntry {
@@ -19,12 +20,28 @@ export interface MailboxMail extends MailboxEntry {
 	attachments: { fileName: string; bytes: number }[];
 }
 
+/** A mail that is sent again after its answer was lost has the same Message-ID; one of them is kept. */
+async function isFirst(folder: string, mail: Buffer): Promise<boolean> {
+	const head = mail.subarray(0, 16_384).toString('latin1');
+	const messageId = /^Message-ID:\s*(\S+)/im.exec(head)?.[1];
+	if (!messageId) return true;
+	try {
+		await writeFile(join(folder, `${sha256Hex(messageId)}.id`), '', { flag: 'wx' });
+		return true;
+	} catch (error) {
+		if (error instanceof Error && 'code' in error && error.code === 'EEXIST') return false;
+		throw error;
+	}
+}
+
 async function deliver(folder: string, stream: AsyncIterable<Buffer>): Promise<void> {
 	const chunks: Buffer[] = [];
 	for await (const chunk of stream) chunks.push(chunk);
 	await mkdir(folder, { recursive: true });
+	const bytes = Buffer.concat(chunks);
+	if (!(await isFirst(folder, bytes))) return;
 	const path = join(folder, `${uuid()}.eml`);
-	await writeFile(`${path}.part`, Buffer.concat(chunks));
+	await writeFile(`${path}.part`, bytes);
 	await rename(`${path}.part`, path);
 }
 

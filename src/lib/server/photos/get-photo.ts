@@ -18,5 +18,6 @@ export async function getPhoto(ctx: Context, photoId: string): Promise<PhotoFile
 	authorizeShipment(ctx, 'shipment.view', photo && (await Shipment.findByPk(photo.shipmentId)));
 	const file = photo && (await StoredFile.findByPk(photo.fileId));
 	if (!file) throw new Refusal('not-found');
+	if (file.deletedAt) throw new Refusal('file-expired');
 	return { bytes: await (await fileStore()).read(file.sha256), sha256: file.sha256 };
 }

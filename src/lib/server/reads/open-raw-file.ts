@@ -10,6 +10,7 @@ export async function openRawFile(ctx: Context, readId: string): Promise<Outgoin
 	const { read } = await getReadFor(ctx, readId, 'raw-file.open');
 	const file = await StoredFile.findByPk(read.fileId);
 	if (!file) throw new Refusal('not-found');
+	if (file.deletedAt) throw new Refusal('file-expired');
 	const store = await fileStore();
 	return {
 		fileName: read.fileName,

@@ -1,5 +1,5 @@
 import { createReadStream } from 'node:fs';
-import { copyFile, mkdir, open, readFile, rename, stat, unlink } from 'node:fs/promises';
+import { copyFile, mkdir, open, readFile, rename, rm, stat, unlink } from 'node:fs/promises';
 import { randomBytes } from 'node:crypto';
 import { dirname, join } from 'node:path';
 import type { Store } from './store';
@@ -42,6 +42,7 @@ export function folderStore(folder: string): Store {
 			const path = pathOf(sha256);
 			await stat(path);
 			return createReadStream(path);
-		}
+		},
+		remove: (sha256) => rm(pathOf(sha256), { force: true })
 	};
 }

@@ -1,6 +1,12 @@
 import { createReadStream } from 'node:fs';
 import { Readable } from 'node:stream';
-import { GetObjectCommand, HeadObjectCommand, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
+import {
+	DeleteObjectCommand,
+	GetObjectCommand,
+	HeadObjectCommand,
+	PutObjectCommand,
+	S3Client
+} from '@aws-sdk/client-s3';
 import { stat } from 'node:fs/promises';
 import type { Store } from './store';
 
@@ -53,6 +59,9 @@ export function s3Store({ bucket, endpoint, region }: Bucket): Store {
 			for await (const chunk of await openObject(sha256)) chunks.push(Buffer.from(chunk));
 			return Buffer.concat(chunks);
 		},
-		open: openObject
+		open: openObject,
+		async remove(sha256) {
+			await client.send(new DeleteObjectCommand({ Bucket: bucket, Key: key(sha256) }));
+		}
 	};
 }

@@ -2,7 +2,7 @@ import type { Readable } from 'node:stream';
 import { v7 as uuid } from 'uuid';
 import type { Transaction } from 'sequelize';
 import { StoredFile } from '../db/models/stored-file';
-import { env } from '../env';
+import { env, type Env } from '../env';
 import { folderStore } from './folder-store';
 import { sha256Hex } from './sha256';
 
@@ -13,17 +13,22 @@ export interface Store {
 	putFile(sha256: string, path: string): Promise<void>;
 	read(sha256: string): Promise<Buffer>;
 	open(sha256: string): Promise<Readable>;
+	/** Takes bytes away for good; harmless where they are gone already. */
+	remove(sha256: string): Promise<void>;
 }
 
 let store: Promise<Store> | null = null;
 
-/** The configured store: a folder, or a bucket. */
+/** A store of one kind: a folder, or a bucket. */
+export function storeOf(storage: Env['storage']): Promise<Store> {
+	return storage.kind === 'folder'
+		? Promise.resolve(folderStore(storage.folder))
+		: import('./s3-store').then(({ s3Store }) => s3Store(storage));
+}
+
+/** The configured store. */
 export function fileStore(): Promise<Store> {
-	const { storage } = env();
-	store ??=
-		storage.kind === 'folder'
-			? Promise.resolve(folderStore(storage.folder))
-			: import('./s3-store').then(({ s3Store }) => s3Store(storage));
+	store ??= storeOf(env().storage);
 	return store;
 }
 
@@ -47,7 +52,11 @@ export async function nameFile(
 	transaction?: Transaction
 ): Promise<{ id: string; sha256: string; bytes: number }> {
 	const known = await StoredFile.findOne({ where: { sha256 }, transaction });
-	if (known) return { id: known.id, sha256, bytes: known.bytes };
+	if (known) {
+		// Bytes that retention took away and somebody brought again are there again.
+		if (known.deletedAt) await known.update({ deletedAt: null }, { transaction });
+		return { id: known.id, sha256, bytes: known.bytes };
+	}
 	try {
 		const made = await StoredFile.create(
 			{ id: uuid(), sha256, bytes, mediaType, storedAt: now },

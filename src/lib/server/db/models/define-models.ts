@@ -41,6 +41,7 @@ import { defineDispositionReview } from './disposition-review';
 import { defineDetermination } from './determination';
 import { defineCertificate } from './certificate';
 import { defineReport } from './report';
+import { defineRetentionHold } from './retention-hold';
 import { defineNotice } from './notice';
 import { defineNoticeAnswer } from './notice-answer';
 import { defineClaim } from './claim';
@@ -104,6 +105,7 @@ export function defineModels(sequelize: Sequelize): void {
 	defineDetermination(sequelize);
 	defineCertificate(sequelize);
 	defineReport(sequelize);
+	defineRetentionHold(sequelize);
 	defineNotice(sequelize);
 	defineNoticeAnswer(sequelize);
 	defineClaim(sequelize);

@@ -13,6 +13,8 @@ export class StoredFile extends Model<InferAttributes<StoredFile>, InferCreation
 	declare bytes: number;
 	declare mediaType: string;
 	declare storedAt: Date;
+	/** When retention took the bytes away; the row and its hash stay. */
+	declare deletedAt: Date | null;
 }
 
 export function defineStoredFile(sequelize: Sequelize): void {
@@ -22,7 +24,8 @@ export function defineStoredFile(sequelize: Sequelize): void {
 			sha256: { type: DataTypes.CHAR(64), allowNull: false },
 			bytes: { type: DataTypes.BIGINT, allowNull: false },
 			mediaType: { type: DataTypes.STRING(100), allowNull: false },
-			storedAt: { type: DataTypes.DATE(3), allowNull: false }
+			storedAt: { type: DataTypes.DATE(3), allowNull: false },
+			deletedAt: { type: DataTypes.DATE(3), allowNull: true }
 		},
 		{ sequelize, modelName: 'StoredFile', tableName: 'files' }
 	);
