@@ -102,7 +102,7 @@ describe('the dock', () => {
 		const { shipment, dock, decide } = await atTheDoor(wanted);
 		expect(await mayAcceptAtDock(dock, await getDocket(dock, shipment.number))).toBe(false);
 		await expect(signDisposition(dock, shipment.number, await decide())).rejects.toMatchObject({
-			code: 'not-yet-yours'
+			code: 'not-allowed'
 		});
 		expect(await Disposition.count({ where: { shipmentId: shipment.id } })).toBe(0);
 	});

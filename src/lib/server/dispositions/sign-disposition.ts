@@ -12,9 +12,12 @@ import { inTransaction, type Writing } from '../db/transaction';
 import { docketView } from '../dockets/get-docket';
 import { verdictOf } from '../dockets/stage';
 import { queueNotice } from '../notices/queue-notice';
+import { needText } from '../../messages/en/signing-needs';
 import { authorizeShipment, may } from '../policies';
+import { Refusal } from '../refusals';
 import { frozenSeries } from './frozen-series';
 import { signingNeeds } from '../../domain/authority/authority';
+import { dockAcceptNeeds } from '../authority/dock-accept';
 import { signingFacts, signingStanding } from '../authority/signing-standing';
 import { checkDecision, refuseNeeds } from './check-decision';
 import { freeze, signedBefore, type SignedBefore } from './freeze';
@@ -23,6 +26,13 @@ import { keepReview } from './keep-review';
 /** QA signs as QA; somebody of the dock alone signs by what the authority table leaves to the dock. */
 function signingAct({ actor }: Context): 'disposition.sign' | 'disposition.accept-at-dock' {
 	return may(actor, 'disposition.sign') ? 'disposition.sign' : 'disposition.accept-at-dock';
+}
+
+/** Before any password is asked: a load that is not the dock's to accept is refused to it whatever it says. */
+async function refuseDock(ctx: Context, shipment: Shipment): Promise<void> {
+	if (may(ctx.actor, 'disposition.sign')) return;
+	const needs = await dockAcceptNeeds(ctx, await docketView(shipment, ctx.now));
+	if (needs.length > 0) throw new Refusal('not-allowed', needs.map(needText).join(' '));
 }
 
 /** Locks the docket first, then reads it: what is read after the lock is what the signature falls on. */
@@ -121,6 +131,7 @@ export async function signDisposition(
 ): Promise<{ version: number | null }> {
 	const seen = await Shipment.findOne({ where: { number } });
 	authorizeShipment(ctx, signingAct(ctx), seen);
+	await refuseDock(ctx, seen);
 	const signer = await checkSigningComponents(ctx, input);
 	const [dispositionId, reviewId] = [uuid(), uuid()];
 	const series = await frozenSeries(seen.id);
