@@ -52,6 +52,14 @@ function sharesMoments(table: Table, times: readonly number[], key: number): boo
 	return shared >= rows * 0.3;
 }
 
+/** "Probe 2", "Sensor 1 (°C)": a numbered or measured column holds what that sensor read, not which one it was. */
+function isReadingHead({ name, unit, share }: Column): boolean {
+	return share.text <= 0.5 && (unit !== null || /\d\s*(?:[([].*)?$/.test(name));
+}
+
+/** Sensors are numbered in whole numbers. */
+const isDecimal = (cell: string): boolean => /^[-+\u2212]?\d*[.,]\d+$/.test(cell);
+
 const isUnitHead = (name: string): boolean =>
 	/\b(unit|units|uom|einheit|unite|unidad|unita|eenheid)\b|单位/.test(foldWord(name).replace(/[_.]/g, ' '));
 
@@ -65,9 +73,10 @@ function keyedIn(table: Table): Keyed | null {
 		const isSensor = isKeyHead(column.name, sensorWords) && column.meaning.quantity === null;
 		const isQuantity = isKeyHead(column.name, quantityWords) && column.share.text > 0.5;
 		if ((!isSensor && !isQuantity) || isKeyHead(column.name, stateWords)) return false;
+		if (isReadingHead(column)) return false;
 		if (!isSensor && !sharesMoments(table, times, column.index)) return false;
-		const { size } = distinctIn(table, column.index);
-		return size >= 2 && size <= mostKeys;
+		const seen = distinctIn(table, column.index);
+		return seen.size >= 2 && seen.size <= mostKeys && ![...seen].some(isDecimal);
 	};
 	const keys = columns.filter(isKey).map(({ index }) => index);
 	const values = columns.filter(
@@ -237,7 +246,8 @@ export function withoutSensorRows(table: Table): Table | Sections | null {
 	if (keyed === null) return null;
 	const blocks = blocksIn(table, keyed);
 	if (blocks === null) return spreadTable(table, keyed);
-	if (blocks.names.length < 2) return null;
+	// A key that changes with every row tells no blocks.
+	if (blocks.names.length < 2 || blocks.names.length * 2 > table.rowCount) return null;
 	const tables = blocks.starts.map((from, i) =>
 		blockOf(table, i === 0 ? 0 : from, blocks.starts[i + 1] ?? table.rowCount)
 	);

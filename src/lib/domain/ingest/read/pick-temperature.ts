@@ -16,11 +16,16 @@ export interface Picked {
 const isNumeric = (column: Column): boolean =>
 	column.share.number > 0 && column.share.number + column.share.missing + column.share.blank > 0.5;
 
-function isMeasured(column: Column): boolean {
+/** A bound that never moves is a limit of the logger's; beside a mean it is what was measured. */
+function isStillBound({ meaning, constant }: Column, hasMean: boolean): boolean {
+	return meaning.isBound && constant !== null && !hasMean;
+}
+
+function isMeasured(column: Column, hasMean: boolean): boolean {
 	return (
 		isNumeric(column) &&
 		!column.meaning.isLimit &&
-		!(column.meaning.isBound && column.constant !== null) &&
+		!isStillBound(column, hasMean) &&
 		!(column.meaning.isIndex && (column.isCounter || column.meaning.quantity === null))
 	);
 }
@@ -89,8 +94,9 @@ export function pickTemperature(
 	stated: TemperatureUnit | null
 ): Picked {
 	const taken = new Set(columnsOf(timing));
+	const hasMean = columns.some(({ meaning }) => meaning.statistic === 'mean');
 	const measured = columns.filter(
-		(column) => !taken.has(column.index) && isMeasured(column) && column.epochUnit === null
+		(column) => !taken.has(column.index) && isMeasured(column, hasMean) && column.epochUnit === null
 	);
 	const besides = (chosen: readonly Column[]): readonly Column[] =>
 		measured.filter((column) => !chosen.includes(column) && (quantityOf(column) !== null || isOther(column)));
