@@ -9,6 +9,7 @@ import type {
 } from '../domain/ingest/ingestion';
 import { placements, type Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
+import type { LayoutView } from './layout';
 import { decimalField, neededText, optionalText, ticked } from './field';
 
 /** The largest export taken, in bytes: 50 MB as people count them. */
@@ -78,6 +79,9 @@ export interface ReadView extends ReadRowView {
 	/** What is filled in for the reader to confirm. */
 	proposed: LoggerChoice;
 	traceIds: string[];
+	supplierName: string;
+	/** The remembered answer it was read by, or, `isFromHere`, that was confirmed on it. */
+	remembered: (LayoutView & { isFromHere: boolean }) | null;
 }
 
 /** Answer of an upload: what became of each file, in the order they came. */

@@ -17,6 +17,10 @@ const acts = {
 	'arrival.log': ['dock', 'qa'],
 	'read.upload': ['dock', 'qa'],
 	'read.withdraw': ['qa'],
+	/** An answer holds for coming files only when somebody who answers for it says so. */
+	'layout.confirm': ['qa', 'admin'],
+	/** The rows of an export as text, for holding a figure against; the file itself is `raw-file.open`. */
+	'raw-line.view': staff,
 	/** A file is read for the caller and nothing is kept. */
 	'read.inspect': staff,
 	'note.write': staff,

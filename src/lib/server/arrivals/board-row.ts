@@ -47,7 +47,7 @@ function goodsOf(shipment: Shipment, facts: BoardFacts): BoardRow['goods'] {
 function readsOf(shipment: Shipment, facts: BoardFacts) {
 	const reads = facts.reads.get(shipment.id) ?? [];
 	const questions = reads.filter((read) => read.state === 'question');
-	const kept = reads.filter((read) => read.keptAt !== null).length;
+	const kept = reads.filter((read) => read.keptAt !== null && read.state === 'ok').length;
 	const trips = (facts.trips.get(shipment.id) ?? []).filter((trip) =>
 		['expected', 'found'].includes(trip.status)
 	);

@@ -70,6 +70,17 @@ export interface EventData {
 	'read.answered': { readId: string; answers: Record<string, unknown> };
 	'read.kept': { readId: string; traceIds: string[]; readings: number };
 	'read.asked-qa': { readId: string };
+	'read.asked-again': { readId: string; layoutId: string | null; answers: Record<string, unknown> };
+	'read.kept-unread': { readId: string; fileSha256: string; refusalCode: string | null };
+	'layout.remembered': {
+		layoutId: string;
+		readId: string;
+		partnerId: string | null;
+		fingerprint: string;
+		answers: Record<string, unknown>;
+	};
+	'layout.applied': { layoutId: string; readId: string };
+	'layout.forgotten': { layoutId: string; reason: string };
 	'read.withdrawn': { readId: string; reason: string };
 	'logger.assigned': { traceId: string; serial: string; lineId: string | null };
 	'trim.made': { traceId: string; fromAt: string; toAt: string; reason: string };

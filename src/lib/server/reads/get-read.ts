@@ -2,10 +2,13 @@ import type { LoggerChoice, ReadView } from '../../schemas/read';
 import type { Context } from '../context';
 import { Logger } from '../db/models/logger';
 import { LoggerTrip } from '../db/models/logger-trip';
+import { Partner } from '../db/models/partner';
 import { Product } from '../db/models/product';
+import { RememberedLayout } from '../db/models/remembered-layout';
 import { ShipmentLine } from '../db/models/shipment-line';
 import { Site } from '../db/models/site';
 import { TraceRow } from '../db/models/trace-row';
+import { layoutViews } from '../layouts/views';
 import { getReadFor, isSigned } from './find-read';
 import { parseUnderstanding } from './stored-understanding';
 import { alsoOnDockets, readRowView } from './views';
@@ -22,8 +25,12 @@ export async function getRead(ctx: Context, readId: string): Promise<ReadView> {
 	});
 	const expected = await expectedLoggers(shipment.id);
 	const tripId = traces.find((trace) => trace.tripId)?.tripId;
+	const layout = read.layoutId ? await RememberedLayout.findByPk(read.layoutId) : null;
+	const [remembered = null] = await layoutViews(layout ? [layout] : []);
 	return {
 		...row,
+		supplierName: (await Partner.findByPk(shipment.supplierId))?.name ?? '',
+		remembered: remembered && { ...remembered, isFromHere: layout?.sourceReadId === readId },
 		docket: { number: shipment.number, title: shipment.title, isSigned: await isSigned(shipment.id) },
 		zone: site?.zone ?? 'UTC',
 		ingestion: parseUnderstanding(read.understanding),

@@ -15,7 +15,9 @@ import { TraceRow } from '../db/models/trace-row';
 import { answerQuestion, askQa } from './answer-question';
 import { getRead } from './get-read';
 import { keepRead } from './keep-read';
+import { keepUnread } from './keep-unread';
 import { listReads } from './list-reads';
+import { openRawFile } from './open-raw-file';
 import { receiveUpload } from './receive-upload';
 import { withdrawRead } from './withdraw-read';
 
@@ -25,7 +27,8 @@ async function scene() {
 	const site = await buildSite();
 	const dock = await contextFor(await buildUser(['dock'], { sites: [site] }));
 	const qa = await contextFor(await buildUser(['qa'], { sites: [site] }));
-	return { dock, qa, ...(await buildShipment({ site })) };
+	const claims = await contextFor(await buildUser(['claims'], { sites: [site] }));
+	return { dock, qa, claims, ...(await buildShipment({ site })) };
 }
 
 async function upload(ctx: Context, number: string, content: string): Promise<string> {
@@ -158,6 +161,32 @@ describe('keeping a read', () => {
 	});
 });
 
+describe('a file that cannot be read', () => {
+	it('can be kept as evidence: its bytes stay, nothing is assessed, and it is written down once', async () => {
+		const { dock, claims, shipment } = await scene();
+		const readId = await upload(dock, shipment.number, '%PDF-1.7 a report');
+		expect(await getRead(dock, readId)).toMatchObject({ state: 'refused', keptAt: null });
+		await expect(keepUnread(claims, readId)).rejects.toMatchObject({ code: 'not-allowed' });
+		await keepUnread(dock, readId);
+		await keepUnread(dock, readId);
+		const view = await getRead(dock, readId);
+		expect(view.state).toBe('refused');
+		expect(view.keptAt).not.toBeNull();
+		expect(await AuditEntry.count({ where: { chainId: shipment.id, type: 'read.kept-unread' } })).toBe(1);
+		expect(await TraceRow.count({ where: { readId } })).toBe(0);
+		const chunks: Buffer[] = [];
+		for await (const chunk of await (await openRawFile(claims, readId)).open())
+			chunks.push(Buffer.from(chunk));
+		expect(Buffer.concat(chunks).toString()).toBe('%PDF-1.7 a report');
+	});
+
+	it('is the only kind of file kept without being read', async () => {
+		const { dock, shipment } = await scene();
+		const readId = await upload(dock, shipment.number, exportText({ celsius: 3 }));
+		await expect(keepUnread(dock, readId)).rejects.toMatchObject({ code: 'invalid' });
+	});
+});
+
 describe('a question about a file', () => {
 	it('is answered with one of its choices, and then understood', async () => {
 		const { dock, shipment } = await scene();
@@ -172,25 +201,6 @@ describe('a question about a file', () => {
 		expect(view).toMatchObject({ state: 'understood', firstAt: '2025-04-05T00:10:00.000Z' });
 		expect((await LoggerRead.findByPk(readId))?.answers).toEqual({ dateOrder: 'dmy' });
 		expect(await AuditEntry.count({ where: { chainId: shipment.id, type: 'read.answered' } })).toBe(1);
-	});
-
-	it('is not asked again for files of that make from that supplier, where that was wished', async () => {
-		const { dock, shipment, site, supplier } = await scene();
-		const first = await upload(dock, shipment.number, ambiguous('1,5'));
-		const asked = (await getRead(dock, first)).ingestion;
-		if (asked?.kind !== 'question') throw new Error('The file asked nothing.');
-		const choice = asked.question.choices.findIndex(({ answer }) => answer.dateOrder === 'mdy');
-		await answerQuestion(dock, first, { choice, remember: true });
-		const next = await upload(dock, shipment.number, ambiguous('1,6'));
-		expect(await getRead(dock, next)).toMatchObject({
-			state: 'understood',
-			firstAt: '2025-05-04T00:10:00.000Z'
-		});
-		expect((await LoggerRead.findByPk(next))?.layoutId).not.toBeNull();
-		const others = await buildShipment({ site });
-		expect(others.supplier.id).not.toBe(supplier.id);
-		const foreign = await upload(dock, others.shipment.number, ambiguous('1,7'));
-		expect((await getRead(dock, foreign)).state).toBe('question');
 	});
 
 	it('can be left to QA, once', async () => {

@@ -5,6 +5,7 @@ import { maxUploadBytes, maxUploadFiles, type UploadAnswer } from '../../schemas
 import type { Context } from '../context';
 import type { Shipment } from '../db/models/shipment';
 import { env } from '../env';
+import { applyRemembered } from '../layouts/apply-layout';
 import { Refusal, type RefusalCode } from '../refusals';
 import { fileStore, nameFile } from '../storage/store';
 import { getShipmentFor, isSigned } from './find-read';
@@ -12,7 +13,6 @@ import { readContextOf } from './read-context';
 import { writeReceived } from './write-received';
 import { runReader } from './run-reader';
 import { spoolUpload, type SpooledFile } from './spool-upload';
-import { rememberedReading } from './remembered-layouts';
 import { alsoOnDockets, readRowView } from './views';
 
 /** An upload as it comes off the wire. */
@@ -83,7 +83,7 @@ async function receiveOne(
 	const named = await nameFile(file.sha256, file.bytes, file.mediaType.slice(0, 100), ctx.now);
 	const context = await readContextOf(shipment, ctx.now, {});
 	const first = await runReader({ path: file.path, context, withTraces: false });
-	const remembered = await rememberedReading(first.summary, shipment.supplierId, (answers) =>
+	const remembered = await applyRemembered(first.summary, shipment.supplierId, (answers) =>
 		runReader({ path: file.path, context: { ...context, answers }, withTraces: false })
 	);
 	const { read, isDuplicate } = await writeReceived(ctx, shipment.id, {

@@ -46,6 +46,12 @@ export async function writeReceived(
 		if (known && known.state !== 'withdrawn') return { read: known, isDuplicate: true };
 		const read = known ? await revive(known, ctx, received, w) : await create(shipmentId, ctx, received, w);
 		w.record('read.received', { scope: 'shipment', id: shipmentId }, entryOf(read, received));
+		if (received.layoutId)
+			w.record(
+				'layout.applied',
+				{ scope: 'shipment', id: shipmentId },
+				{ layoutId: received.layoutId, readId: read.id }
+			);
 		return { read, isDuplicate: false };
 	});
 }

@@ -46,6 +46,7 @@ export function tableOfRecords(
 		delimiter: null,
 		header: [timeHead, ...channels.keys()],
 		headerLine: null,
+		makeHeader: [timeHead],
 		units: ['', ...[...channels.values()].map(({ unit }) => unit)],
 		entries,
 		freeText: '',

@@ -223,6 +223,7 @@ function spreadTable(table: Table, keyed: Keyed): Table {
 		...table,
 		rowText: null,
 		header: [...times.map((at) => table.header[at] ?? ''), ...heads],
+		makeHeader: table.header,
 		units: [...times.map(() => ''), ...units],
 		rowCount: starts.length - 1,
 		cells: cellsOf,

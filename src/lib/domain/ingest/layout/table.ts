@@ -23,6 +23,8 @@ export interface Table {
 	/** Column heads; JSON keys; empty when the file has none. */
 	readonly header: readonly string[];
 	readonly headerLine: number | null;
+	/** The heads as the file has them, where those above were made of what stands in its rows (names of sensors). */
+	readonly makeHeader?: readonly string[];
 	/** Units by column, from a row of their own. */
 	readonly units: readonly string[];
 	readonly entries: readonly Entry[];

@@ -38,7 +38,7 @@ function layoutOf({ table, encoding, axis, values, gathered }: Readable): Layout
 		dateOrderBy: axis.orderBy,
 		zone: axis.zone.zone,
 		zoneBy: axis.zone.by,
-		fingerprint: layoutFingerprint(table.kind, table.delimiter, table.header)
+		fingerprint: layoutFingerprint(table.kind, table.delimiter, table.makeHeader ?? table.header)
 	};
 }
 

@@ -18,7 +18,12 @@ export class RememberedLayout extends Model<
 	declare answers: unknown;
 	declare confirmedBy: string;
 	declare confirmedAt: Date;
+	/** The read it was confirmed on, and that file's name. */
+	declare sourceReadId: string | null;
+	declare sourceName: string | null;
 	declare withdrawnAt: Date | null;
+	declare withdrawnBy: string | null;
+	declare withdrawnReason: string | null;
 }
 
 export function defineRememberedLayout(sequelize: Sequelize): void {
@@ -31,7 +36,11 @@ export function defineRememberedLayout(sequelize: Sequelize): void {
 			answers: { type: DataTypes.JSON, allowNull: false },
 			confirmedBy: { type: DataTypes.UUID, allowNull: false },
 			confirmedAt: { type: DataTypes.DATE(3), allowNull: false },
-			withdrawnAt: { type: DataTypes.DATE(3), allowNull: true }
+			sourceReadId: { type: DataTypes.UUID, allowNull: true },
+			sourceName: { type: DataTypes.STRING(180), allowNull: true },
+			withdrawnAt: { type: DataTypes.DATE(3), allowNull: true },
+			withdrawnBy: { type: DataTypes.UUID, allowNull: true },
+			withdrawnReason: { type: DataTypes.STRING(300), allowNull: true }
 		},
 		{ sequelize, modelName: 'RememberedLayout', tableName: 'layouts' }
 	);
