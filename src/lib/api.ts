@@ -1,4 +1,5 @@
 import type { SeriesView } from './schemas/docket';
+import type { LineView } from './schemas/file-lines';
 
 /** An answer of our own API that is not the data asked for: its sentence is fit to be shown. */
 export class ApiRefusal extends Error {
@@ -34,4 +35,10 @@ export async function fetchSeries(
 		query.set('to', new Date(view.toMs).toISOString());
 	}
 	return answerOf(await fetch(`/api/v1/traces/${traceId}/series?${query}`));
+}
+
+/** The line of the export that one reading of a trace was made of, as it stands there. */
+export async function fetchReadingLine(traceId: string, atMs: number): Promise<LineView> {
+	const query = new URLSearchParams({ at: new Date(atMs).toISOString() });
+	return answerOf(await fetch(`/api/v1/traces/${traceId}/line?${query}`));
 }

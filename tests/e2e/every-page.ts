@@ -69,6 +69,7 @@ export const places: readonly Place[] = [
 	{ name: 'a site', as: 'admin', path: ({ site }) => site },
 	{ name: 'a new site', as: 'admin', path: '/settings/sites/new' },
 	{ name: 'loggers', as: 'admin', path: '/settings/loggers' },
+	{ name: 'remembered layouts', as: 'qa', path: '/settings/layouts' },
 	{ name: 'a logger', as: 'admin', path: ({ logger }) => logger },
 	{ name: 'a new logger', as: 'admin', path: '/settings/loggers/new' },
 	{ name: 'the certificate', as: 'admin', path: '/settings/certificate' },

@@ -27,6 +27,8 @@ export const words = {
 	of: 'of',
 	to: 'to',
 	trace: 'Trace',
+	originalLine: 'Show it in the file',
+	line: 'line',
 	atTheLine: 'At the line',
 	leg: 'Leg',
 	legs: 'legs',

@@ -6,6 +6,7 @@ import { usualIntervalMs } from '../../domain/trace/interval';
 import { packTrace } from '../../domain/trace/pack';
 import type { StoredIngestion } from '../../schemas/read';
 import { sha256Hex } from '../storage/sha256';
+import { linesOfFile, type LinesFound, type LinesWish } from './lines-of-file';
 import { summaryOf } from './stored-understanding';
 
 /** The reader whose understanding is stored; a change of what it understands takes a new version. */
@@ -18,6 +19,8 @@ interface ReadWish {
 	context: ReadContext;
 	/** Traces are packed only for a read that is being kept. */
 	withTraces: boolean;
+	/** Some lines of the file instead. */
+	lines?: LinesWish;
 }
 
 /** A channel's readings in one blob, with what the row says of them. */
@@ -43,6 +46,7 @@ export interface PackedTrace {
 export interface ReadResult {
 	summary: StoredIngestion;
 	traces: PackedTrace[];
+	lines?: LinesFound | null;
 }
 
 /** Reads an export, and packs its temperatures where they are wanted. */
@@ -51,6 +55,7 @@ export function readBytes(order: ReadOrder): ReadResult {
 	const bytes = 'bytes' in order ? order.bytes : readFileSync(order.path);
 	const ingestion = readExport(bytes, context);
 	const summary = summaryOf(ingestion, context);
+	if (order.lines) return { summary, traces: [], lines: linesOfFile(bytes, ingestion, order.lines) };
 	if (ingestion.kind !== 'ok' || !withTraces) return { summary, traces: [] };
 	const { channels, temperature } = ingestion.understanding;
 	const traces = channels.flatMap(({ trace, name, minCelsius, maxCelsius, meanCelsius }, ordinal) => {

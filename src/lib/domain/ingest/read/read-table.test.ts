@@ -221,4 +221,18 @@ describe('a layout', () => {
 		expect(two).toBe(one);
 		expect(other).not.toBe(one);
 	});
+
+	it('is known by its heads, not by the sensors that its rows name', () => {
+		const rows = (a: string, b: string) =>
+			['time;sensor;temperature °C']
+				.concat([0, 1, 2].flatMap((i) => [`2026-04-03T10:${i}0:00Z;${a};4.${i}`, `2026-04-03T10:${i}0:00Z;${b};9.${i}`]))
+				.join('\n');
+		const print = (text: string) => {
+			const first = read(text);
+			if (first.kind !== 'question') return understood(first).layout.fingerprint;
+			const { answer } = first.question.choices[0] ?? { answer: {} };
+			return understood(read(text, { answers: answer })).layout.fingerprint;
+		};
+		expect(print(rows('Probe A', 'Probe B'))).toBe(print(rows('17-004', '17-009')));
+	});
 });

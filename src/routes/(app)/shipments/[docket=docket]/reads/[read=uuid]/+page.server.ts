@@ -1,9 +1,13 @@
 import { fail, redirect } from '@sveltejs/kit';
+import { rememberForm } from '$lib/schemas/layout';
 import { answerForm, keepForm, withdrawForm } from '$lib/schemas/read';
+import { rememberLayout } from '$lib/server/layouts/remember-layout';
 import { may } from '$lib/server/policies';
 import { answerQuestion, askQa } from '$lib/server/reads/answer-question';
+import { askAgain } from '$lib/server/reads/ask-again';
 import { getRead } from '$lib/server/reads/get-read';
 import { keepRead } from '$lib/server/reads/keep-read';
+import { keepUnread } from '$lib/server/reads/keep-unread';
 import { withdrawRead } from '$lib/server/reads/withdraw-read';
 import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
 import type { Actions, PageServerLoad } from './$types';
@@ -16,6 +20,7 @@ export const load: PageServerLoad = async ({ locals, params }) => {
 	return {
 		read,
 		may: {
+			confirm: may(ctx.actor, 'layout.confirm'),
 			keep: may(ctx.actor, 'read.upload'),
 			withdraw: may(ctx.actor, 'read.withdraw'),
 			openRaw: may(ctx.actor, 'raw-file.open')
@@ -39,6 +44,45 @@ export const actions = {
 			await answerQuestion(ctx, params.read, form.data);
 		} catch (e) {
 			return orFail(e, { ...form.data });
+		}
+
+		redirect(303, `/shipments/${params.docket}/reads/${params.read}`);
+	},
+
+	reopen: async ({ locals, params }) => {
+		const ctx = contextOf(locals);
+
+		try {
+			await askAgain(ctx, params.read);
+		} catch (e) {
+			return orFail(e);
+		}
+
+		redirect(303, `/shipments/${params.docket}/reads/${params.read}`);
+	},
+
+	remember: async ({ locals, params, request }) => {
+		const ctx = contextOf(locals);
+
+		const form = await parseForm(request, rememberForm);
+		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'invalid' });
+
+		try {
+			await rememberLayout(ctx, params.read, form.data.scope);
+		} catch (e) {
+			return orFail(e, { ...form.data });
+		}
+
+		redirect(303, `/shipments/${params.docket}/reads/${params.read}`);
+	},
+
+	keepUnread: async ({ locals, params }) => {
+		const ctx = contextOf(locals);
+
+		try {
+			await keepUnread(ctx, params.read);
+		} catch (e) {
+			return orFail(e);
 		}
 
 		redirect(303, `/shipments/${params.docket}/reads/${params.read}`);

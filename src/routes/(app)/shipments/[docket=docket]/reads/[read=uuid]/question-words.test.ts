@@ -1,7 +1,8 @@
 // @vitest-environment node
 import { describe, expect, it } from 'vitest';
 import type { Choice, Question } from '$lib/domain/ingest/ingestion';
-import { answerNote, outsideJourney, rememberLabel, useWords } from './question-words';
+import { answersText } from '$lib/messages/en/ingest-decisions';
+import { answerNote, lastingOf, outsideJourney, rememberLabel, useWords } from './question-words';
 
 const zone = 'Europe/Amsterdam';
 const at = (text: string) => Date.parse(text);
@@ -40,12 +41,24 @@ describe('the words of a question', () => {
 		expect(rememberLabel({ ...question, code: 'start' }, choice())).toBeNull();
 	});
 
-	it('say the day once where all is on one day, and the zone once', () => {
-		expect(answerNote(choice(), zone)).toBe('Fits this journey. Fri 3 Apr 02:40 to 08:10 CEST');
-		expect(answerNote(choice({ lastMs: at('2026-04-04T06:10:00Z') }), zone)).toBe(
-			'Fits this journey. Fri 3 Apr 02:40 to Sat 4 Apr 08:10 CEST'
+	it('show the first and last row as the choice would read them, with what speaks for it', () => {
+		expect(answerNote(choice(), zone, 'celsius')).toBe(
+			'Fits this journey. First row Fri 3 Apr 2026 02:40 CEST, 1.4 °C; last row Fri 3 Apr 2026 08:10 CEST, 1.6 °C'
 		);
-		expect(answerNote(choice({ firstMs: null, lastMs: null }), zone)).toBe('Fits this journey');
+		expect(answerNote(choice({ evidence: [] }), zone, 'fahrenheit')).toContain('34.5 °F; last row');
+		const seconds = choice({ firstMs: at('2026-01-03T00:40:20Z'), firstCelsius: null });
+		expect(answerNote(seconds, zone, 'celsius')).toContain('First row Sat 3 Jan 2026 01:40:20 CET; last');
+		const timeless = { firstMs: null, lastMs: null };
+		expect(answerNote(choice(timeless), zone, 'celsius')).toBe(
+			'Fits this journey. First row 1.4 °C; last row 1.6 °C'
+		);
+		const nothing = { ...timeless, firstCelsius: null, lastCelsius: null };
+		expect(answerNote(choice(nothing), zone, 'celsius')).toBe('Fits this journey');
+	});
+
+	it('keep for other files only what holds for them', () => {
+		const answers = { dateOrder: 'dmy', startMs: 1, part: 'first', intervalSeconds: 60 } as const;
+		expect(answersText(lastingOf(answers))).toBe('day first');
 	});
 });
 

@@ -1,6 +1,7 @@
-import type { Choice, Question, ReadContext } from '$lib/domain/ingest/ingestion';
-import { duration } from '$lib/format';
-import { dayTime, isoDay, time, zoneName } from '$lib/format-time';
+import type { Answers, Choice, Question, ReadContext } from '$lib/domain/ingest/ingestion';
+import type { TemperatureUnit } from '$lib/domain/units';
+import { duration, temperature, temperatureSign } from '$lib/format';
+import { calendarDay, isoDay, time, timeWithSeconds, zoneName } from '$lib/format-time';
 import { evidenceText } from '$lib/messages/en/ingest';
 import { choiceLabel } from '$lib/messages/en/ingest-questions';
 
@@ -9,18 +10,31 @@ export function answerLabel(question: Question, choice: Choice): string {
 	return choiceLabel(question, choice);
 }
 
-/** What speaks for it, and the journey it would make of the file. */
-export function answerNote(choice: Choice, zone: string): string {
-	const { firstMs, lastMs } = choice;
-	const span = firstMs === null || lastMs === null ? '' : spanWords(firstMs, lastMs, zone);
-	return [evidenceText(choice), span].filter(Boolean).join('. ');
+/** What speaks for it, and the file's own first and last rows as it would read them. */
+export function answerNote(choice: Choice, zone: string, unit: TemperatureUnit): string {
+	const { firstMs, lastMs, firstCelsius, lastCelsius } = choice;
+	const first = rowWords(firstMs, firstCelsius, zone, unit);
+	const last = rowWords(lastMs, lastCelsius, zone, unit);
+	const rows = first === '' ? '' : `First row ${first}; last row ${last}`;
+	return [evidenceText(choice), rows].filter(Boolean).join('. ');
 }
 
-/** From the first reading to the last; the day once where it is one day. */
-export function spanWords(firstMs: number, lastMs: number, zone: string): string {
-	const isOneDay = isoDay(firstMs, zone) === isoDay(lastMs, zone);
-	const last = isOneDay ? time(lastMs, zone) : dayTime(lastMs, zone, 'en');
-	return `${dayTime(firstMs, zone, 'en')} to ${last} ${zoneName(lastMs, zone)}`;
+/** A row as a choice would read it: `Fri 3 Apr 2026 02:40 CEST, 1.4 °C`. */
+function rowWords(ms: number | null, celsius: number | null, zone: string, unit: TemperatureUnit): string {
+	const at =
+		ms === null ? '' : `${calendarDay(isoDay(ms, zone), 'en')} ${timeWords(ms, zone)} ${zoneName(ms, zone)}`;
+	const degrees = celsius === null ? '' : `${temperature(celsius, unit, 'en')} ${temperatureSign(unit)}`;
+	return [at, degrees].filter(Boolean).join(', ');
+}
+
+/** Seconds only where a row has them. */
+function timeWords(ms: number, zone: string): string {
+	return ms % 60_000 === 0 ? time(ms, zone) : timeWithSeconds(ms, zone);
+}
+
+/** Answers that hold for other files too: a start, an interval or a section is one file's own. */
+export function lastingOf({ dateOrder, unit, zone, temperatureColumn }: Answers): Answers {
+	return { dateOrder, unit, zone, temperatureColumn };
 }
 
 /** The one button: "Use the 3rd of April". */
