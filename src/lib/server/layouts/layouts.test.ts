@@ -22,7 +22,7 @@ async function scene() {
 	const at = async (role: 'dock' | 'qa' | 'admin' | 'claims') =>
 		contextFor(await buildUser([role], { sites: [site] }));
 	const people = { dock: await at('dock'), qa: await at('qa'), admin: await at('admin') };
-	return { site, claims: await at('claims'), ...people, ...(await buildShipment({ site })) };
+	return { claims: await at('claims'), ...people, ...(await buildShipment({ site })) };
 }
 
 async function upload(ctx: Context, number: string, content: string): Promise<string> {
