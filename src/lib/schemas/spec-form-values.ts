@@ -8,16 +8,19 @@ export type SpecFormValues = Record<string, string>;
 export const leastRows = { point: 3, band: 3, source: 3 } as const;
 export type RowKind = keyof typeof leastRows;
 
-const rowFields: Record<RowKind, readonly string[]> = {
+export const rowFields: Record<RowKind, readonly string[]> = {
 	point: ['Degrees', 'Life'],
 	band: ['From', 'To', 'Q10'],
 	source: ['Text', 'Degrees', 'Life', 'High']
 };
 
+/** As many rows of a kind as a form is read for: more points than any published table has. */
+const mostRows = 120;
+
 /** How many rows of a kind hold something. */
 export function filledRows(values: SpecFormValues, kind: RowKind): number {
 	let filled = 0;
-	for (let at = 0; at < 40; at++) {
+	for (let at = 0; at < mostRows; at++) {
 		if (rowFields[kind].some((field) => (values[`${kind}${at}${field}`] ?? '').trim() !== ''))
 			filled = at + 1;
 	}
@@ -35,7 +38,7 @@ function clock(minutes: number): string {
 }
 
 /** Writers of one spec's figures in the reader's unit. */
-function writer(unit: TemperatureUnit) {
+export function writer(unit: TemperatureUnit) {
 	const degrees = (celsius: number) =>
 		unit === 'fahrenheit' ? plain((celsius * 9) / 5 + 32, 4) : plain(celsius);
 	return {
@@ -46,7 +49,7 @@ function writer(unit: TemperatureUnit) {
 			value === null || value === undefined ? '' : write(value)
 	};
 }
-type Writer = ReturnType<typeof writer>;
+export type Writer = ReturnType<typeof writer>;
 
 /** The fields of a spec as its editor shows them first. */
 export function specFormValues(spec: Spec, unit: TemperatureUnit): SpecFormValues {
@@ -66,7 +69,11 @@ export function specFormValues(spec: Spec, unit: TemperatureUnit): SpecFormValue
 		ceiling: orEmpty(spec.ceilingCelsius, degrees),
 		...limitValues('upper', spec.upper, write),
 		...limitValues('lower', spec.lower, write),
-		needed: days(spec.neededHours),
+		sensitivity: orEmpty(
+			spec.sensitivityPlusMinus,
+			spec.model.kind === 'square-root' ? write.span : (value) => plain(value)
+		),
+		...needValues(spec, write),
 		openingDefault: days(spec.openingDefaultHours),
 		mktEnergy: orEmpty(spec.mkt.activationEnergyKilojoulesPerMole),
 		mktWindow: orEmpty(spec.mkt.windowHours),
@@ -76,7 +83,24 @@ export function specFormValues(spec: Spec, unit: TemperatureUnit): SpecFormValue
 	};
 }
 
-function modelValues({ model, referenceCelsius }: Spec, { degrees, days }: Writer): SpecFormValues {
+/** Needs as they were stated; a need without a temperature of its own is one at the reference. */
+function needValues(
+	{ neededHours, neededAtDock, neededAtCustomer }: Spec,
+	{ degrees, days, orEmpty }: Writer
+): SpecFormValues {
+	return {
+		needed: days(neededAtDock?.hours ?? neededHours),
+		neededDegrees: orEmpty(neededAtDock?.celsius, degrees),
+		customerNeeded: orEmpty(neededAtCustomer?.hours, days),
+		customerDegrees: orEmpty(neededAtCustomer?.celsius, degrees)
+	};
+}
+
+/** The fields of a model's own figures. */
+export function modelValues(
+	{ model, referenceCelsius }: Pick<Spec, 'model' | 'referenceCelsius'>,
+	{ degrees, days }: Writer
+): SpecFormValues {
 	switch (model.kind) {
 		case 'constant-q10':
 			return { q10: plain(model.q10) };

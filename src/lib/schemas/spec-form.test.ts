@@ -118,6 +118,55 @@ describe('the spec editor’s fields', () => {
 		);
 		expect(spec?.model).toEqual(broccoli.model);
 		expect(filledRows(filled({ point4Life: '1' }), 'point')).toBe(5);
+		expect(filledRows(filled({ point99Life: '1' }), 'point')).toBe(100);
+	});
+});
+
+describe('needs and the model’s own ±', () => {
+	const stated: Spec = {
+		...broccoli,
+		model: { kind: 'constant-q10', q10: 3 },
+		sensitivityPlusMinus: 0.4,
+		// 4 d at 5 °C at a Q10 of 3: 96 × 3^0.5 h at the reference of 0 °C.
+		neededHours: 96 * Math.sqrt(3),
+		neededAtDock: { hours: 96, celsius: 5 },
+		neededAtCustomer: { hours: 48, celsius: 4 }
+	};
+
+	it('come back as they were stated, in both units, for every model that has a figure', () => {
+		for (const unit of ['celsius', 'fahrenheit'] as const) {
+			const { spec, faults } = readSpecForm(specFormValues(stated, unit));
+			expect(faults).toEqual([]);
+			expect(spec).toEqual({ ...stated, neededHours: expect.closeTo(stated.neededHours, 9) as number });
+		}
+		const fish: Spec = {
+			...broccoli,
+			model: { kind: 'square-root', minCelsius: -10 },
+			sensitivityPlusMinus: 2
+		};
+		expect(specFormValues(fish, 'fahrenheit').sensitivity).toBe('3.6');
+		expect(readSpecForm(specFormValues(fish, 'fahrenheit')).spec).toEqual(fish);
+	});
+
+	it('are left out where nothing is entered, so that older versions keep their text and hash', () => {
+		const { spec } = readSpecForm(filled());
+		expect(Object.keys(spec ?? {}).filter((key) => /neededAt|sensitivity/.test(key))).toEqual([]);
+	});
+
+	it('a table has no figure of its own: what was typed for another model does not follow it', () => {
+		expect(readSpecForm(filled({ sensitivity: '0.4' })).spec?.sensitivityPlusMinus).toBeUndefined();
+	});
+
+	it.each([
+		[{ customerNeeded: '2', customerDegrees: '' }, 'customerDegrees', 'missing'],
+		[{ customerNeeded: '', customerDegrees: '4' }, 'customerNeeded', 'missing'],
+		[{ customerNeeded: '6', customerDegrees: '10' }, 'customerNeeded', 'more-than-full-life'],
+		[{ needed: '6', neededDegrees: '10' }, 'needed', 'more-than-full-life'],
+		[{ needed: '5', neededDegrees: 'warm' }, 'neededDegrees', 'not-a-number'],
+		[{ model: 'constant-q10', q10: '3', sensitivity: '-1' }, 'sensitivity', 'negative'],
+		[{ model: 'square-root', tmin: '-10', sensitivity: '11' }, 'sensitivity', 'sensitivity-too-wide']
+	])('of %j are faulty at their field', (changes, field, code) => {
+		expect(faultsOf(changes as SpecFormValues)).toContainEqual({ field, code });
 	});
 });
 

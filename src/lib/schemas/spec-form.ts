@@ -2,6 +2,7 @@ import type { Limit, Spec, SpecSource } from '../domain/shelf-life/spec';
 import { validateSpec } from '../domain/shelf-life/validate';
 import { readModel } from './spec-form-model';
 import { FieldReader, type FormFault } from './spec-form-reader';
+import { needFields, readNeeds, readSensitivity, withWorth } from './spec-form-needs';
 import { filledRows, type SpecFormValues } from './spec-form-values';
 import { specSchema } from './spec';
 
@@ -31,7 +32,8 @@ const fieldOfPath: Record<string, string> = {
 	chillingCelsius: 'chilling',
 	freezingCelsius: 'freezing',
 	ceilingCelsius: 'ceiling',
-	neededHours: 'needed',
+	sensitivityPlusMinus: 'sensitivity',
+	...needFields,
 	openingDefaultHours: 'openingDefault',
 	'mkt.activationEnergyKilojoulesPerMole': 'mktEnergy',
 	'mkt.windowHours': 'mktWindow',
@@ -52,7 +54,7 @@ export function readSpecForm(values: SpecFormValues): ReadSpec {
 	const { spec, fieldOf } = figuresOf(reader, values);
 	for (const name of ['upper', 'lower'] as const) checkGrace(reader, spec[name], name);
 	if (reader.faults.length > 0 || !spec.model) return { spec: null, faults: reader.faults };
-	const whole = specSchema.parse(spec);
+	const whole = specSchema.parse(withWorth({ ...spec, model: spec.model }));
 	const faults = validateSpec(whole).map(({ code, field }) => ({
 		code,
 		field: fieldOf[field] ?? fieldOfPath[field] ?? field
@@ -82,7 +84,7 @@ function figuresOf(reader: FieldReader, values: SpecFormValues) {
 		ceilingCelsius: reader.optional('ceiling', reader.degrees),
 		upper: readLimit(reader, 'upper'),
 		lower: readLimit(reader, 'lower'),
-		neededHours: reader.hoursOfDays('needed'),
+		...readNeeds(reader),
 		openingDefaultHours: reader.hoursOfDays('openingDefault'),
 		mkt: {
 			activationEnergyKilojoulesPerMole: reader.optional('mktEnergy', reader.number),
@@ -90,7 +92,8 @@ function figuresOf(reader: FieldReader, values: SpecFormValues) {
 			limitCelsius: reader.optional('mktLimit', reader.degrees)
 		},
 		sources: readSources(reader, values),
-		caution: reader.text('caution') || null
+		caution: reader.text('caution') || null,
+		...readSensitivity(reader, model)
 	};
 	return { spec, fieldOf };
 }

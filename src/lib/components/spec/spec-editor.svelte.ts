@@ -3,7 +3,13 @@ import type { Spec } from '../../domain/shelf-life/spec';
 import type { TemperatureUnit } from '../../domain/units';
 import { specIssues } from '../../messages/en/spec-faults';
 import { readSpecForm } from '../../schemas/spec-form';
-import { filledRows, leastRows, type RowKind, type SpecFormValues } from '../../schemas/spec-form-values';
+import {
+	filledRows,
+	leastRows,
+	rowFields,
+	type RowKind,
+	type SpecFormValues
+} from '../../schemas/spec-form-values';
 
 export interface SpecEditorStart {
 	values: SpecFormValues;
@@ -63,7 +69,7 @@ export class SpecEditor {
 	/** Takes the published points over as the points of a storage-life table, but for the reference's own. */
 	useLifeTable = (): void => {
 		const points = this.publishedPoints();
-		for (const name of Object.keys(this.values)) if (/^point\d/.test(name)) this.values[name] = '';
+		this.clearRows(/^point\d/);
 		points.forEach(([degrees, life], at) => {
 			this.values[`point${at}Degrees`] = degrees;
 			this.values[`point${at}Life`] = life;
@@ -71,6 +77,31 @@ export class SpecEditor {
 		this.values.model = 'life-table';
 		this.touch();
 	};
+
+	/** Takes a fitted model over: its own figures, the reference and the range it was fitted on. */
+	take = (fitted: SpecFormValues): void => {
+		this.clearRows(/^(point|band)\d/);
+		Object.assign(this.values, fitted);
+		this.touch();
+	};
+
+	/** Takes one row out; those below it move up. */
+	removeRow = (kind: RowKind, at: number): void => {
+		const filled = filledRows(this.values, kind);
+		for (let row = at; row < filled; row++)
+			for (const field of rowFields[kind])
+				this.values[`${kind}${row}${field}`] = this.values[`${kind}${row + 1}${field}`] ?? '';
+		this.touch();
+	};
+
+	/** Whether a row holds anything that could be taken out. */
+	isFilled(kind: RowKind, at: number): boolean {
+		return rowFields[kind].some((field) => (this.values[`${kind}${at}${field}`] ?? '').trim() !== '');
+	}
+
+	private clearRows(names: RegExp): void {
+		for (const name of Object.keys(this.values)) if (names.test(name)) this.values[name] = '';
+	}
 
 	private publishedPoints(): [string, string][] {
 		const points: [string, string][] = [];
@@ -86,12 +117,13 @@ export class SpecEditor {
 	}
 }
 
-const key = Symbol('spec editor');
+/** Under which the editor stands in the context of a form's parts. */
+export const specEditorKey = Symbol('spec editor');
 
 export function provideSpecEditor(editor: SpecEditor): SpecEditor {
-	return setContext(key, editor);
+	return setContext(specEditorKey, editor);
 }
 
 export function specEditor(): SpecEditor {
-	return getContext<SpecEditor>(key);
+	return getContext<SpecEditor>(specEditorKey);
 }

@@ -20,8 +20,9 @@ const names: Record<string, string> = {
 	needed: 'Life needed',
 	openingDefault: 'Opening balance',
 	sensitivity: 'Model, give or take',
-	neededAtDock: 'Life needed at the dock',
-	neededAtCustomer: 'Life needed at the customer',
+	neededDegrees: 'Life needed, temperature',
+	customerNeeded: 'Life needed at the customer',
+	customerDegrees: 'Life needed at the customer, temperature',
 	mktEnergy: 'Mean kinetic temperature, ΔH',
 	mktWindow: 'Mean kinetic temperature, window',
 	mktLimit: 'Mean kinetic temperature, limit',
@@ -70,8 +71,13 @@ const sentences: Record<FormFaultCode, Sentence> = {
 		`${value} is not below the ceiling of ${ceiling}. Enter a colder one.`,
 	'severity-upside-down': (value, values, field) =>
 		`critical from ${value} comes before major from ${values[field.replace('Critical', 'Major')] ?? ''}. Enter that or later.`,
-	'more-than-full-life': (value, { fullLife = '' }) =>
-		`${value} days is more than the full life of ${fullLife}. Enter ${fullLife} or fewer.`,
+	'more-than-full-life': (value, values, field) => {
+		const degrees = values[field === 'needed' ? 'neededDegrees' : 'customerDegrees'];
+		const { fullLife = '' } = values;
+		return degrees
+			? `${value} days at ${degrees} is more than even fresh goods last there. Enter fewer days, or look at the temperature.`
+			: `${value} days is more than the full life of ${fullLife}. Enter ${fullLife} or fewer.`;
+	},
 	'sensitivity-without-figure': () =>
 		'a table has no figure of its own to be off. Leave it empty, or choose another model.',
 	'sensitivity-too-wide': (value) =>
