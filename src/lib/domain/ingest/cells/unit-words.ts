@@ -60,7 +60,7 @@ export function unitWithin(text: string): TemperatureUnit | null {
 }
 
 const otherUnits =
-	/^[[(]?\s*(%|%\s?r\.?\s?[hf]\.?|rh|p1|lux|lx|g|v|mv|hpa|kpa|mbar|bar|ppm|s|sec|min|h|m\/s|a93)\s*[\])]?$/i;
+	/^[[(]?\s*(%|%\s?r\.?\s?[hfv]\.?|%\s?[hu]\.?\s?r\.?|rh|p1|lux|lx|g|v|mv|hpa|kpa|mbar|bar|ppm|s|sec|min|h|m\/s|a93)\s*[\])]?$/i;
 
 /** True for a cell that holds a unit of anything: what a row of units is made of. */
 export function isUnitCell(text: string): boolean {

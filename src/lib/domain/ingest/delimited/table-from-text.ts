@@ -83,7 +83,8 @@ export function tableFromText(original: string): TableOrRefusal {
 			line: tooLong + 1,
 			found: String((lines.ends[tooLong] ?? 0) - (lines.starts[tooLong] ?? 0))
 		};
-	if (lines.count > maxReadings + mostLinesBeside) return { code: 'too-many-readings', line: null, found: String(lines.count) };
+	if (lines.count > maxReadings + mostLinesBeside)
+		return { code: 'too-many-readings', line: null, found: String(lines.count) };
 	const sampled = (from: string): string[] =>
 		sampleIndexes(lines.count, sampledLines)
 			.map((i) => from.slice(lines.starts[i], lines.ends[i]))

@@ -1,8 +1,10 @@
 import type { Oddity } from '../ingestion';
+import { cellKindOf } from '../cells/cell-kind';
 import { entryOf } from '../layout/entries';
 import { statedIn } from '../layout/preamble';
 import { reshaped } from '../layout/reshape';
 import type { Entry, RowText, Sections, Table } from '../layout/table';
+import { meaningOf } from '../layout/words';
 import type { Body } from './body';
 import { shapeOf } from './delimiter';
 import { isRecording, overlaps, segmentsOf, type Segment } from './segments';
@@ -55,6 +57,15 @@ function footerStart(rows: Rows, { body, to }: Segment): number {
 	return to - row < statedBelow ? row : to;
 }
 
+/** "Date" and "Time" above one cell that holds both are one head; else every head after them names its neighbour. */
+function alignedHeads(heads: readonly string[], cells: readonly string[]): readonly string[] {
+	if (heads.length !== cells.length + 1) return heads;
+	const at = cells.findIndex((cell) => cellKindOf(cell) === 'moment');
+	const [date, time] = [heads[at] ?? '', heads[at + 1] ?? ''];
+	if (at < 0 || !meaningOf(date).isTime || !meaningOf(time).isTime) return heads;
+	return [...heads.slice(0, at), `${date} ${time}`, ...heads.slice(at + 2)];
+}
+
 function tableOf(rows: Rows, segment: Segment, above: Outside, oddities: readonly Oddity[]): Table {
 	const { body, to } = segment;
 	const trimmed = (row: number | null): string[] =>
@@ -63,7 +74,7 @@ function tableOf(rows: Rows, segment: Segment, above: Outside, oddities: readonl
 	return {
 		kind: 'delimited',
 		delimiter: rows.delimiter,
-		header: trimmed(body.header),
+		header: alignedHeads(trimmed(body.header), rows.cells(body.first)),
 		headerLine: body.header === null ? null : lineOf(rows, body.header),
 		units: trimmed(body.units),
 		entries: [...above.entries, ...below.entries],

@@ -3,6 +3,7 @@ import { sampleIndexes } from '../delimited/delimiter';
 import { foldWord } from '../times/month-names';
 import { profileColumns, type Column } from './columns';
 import type { Sections, Table } from './table';
+import { meaningOf } from './words';
 import { columnsOf, findTiming } from './timing';
 
 const sensorWords =
@@ -126,6 +127,12 @@ function blocksIn(table: Table, keyed: Keyed): Runs | null {
 		names.push(key);
 	}
 	return { starts, names };
+}
+
+/** Blocks named by what they measure: of a humidity's nobody need be asked. A name that says nothing may be anything. */
+function isTemperatureBlock(name: string): boolean {
+	const { quantity } = meaningOf(name);
+	return quantity === null || quantity === 'temperature';
 }
 
 function blockOf(table: Table, from: number, to: number): Table {
@@ -256,5 +263,20 @@ export function withoutSensorRows(table: Table): Table | Sections | null {
 		...block,
 		entries: [{ key: 'serial number', value: blocks.names[i] ?? '', line: block.lineOf(0) }, ...block.entries]
 	}));
+	const ofTemperature = serials.filter((_, i) => isTemperatureBlock(blocks.names[i] ?? ''));
+	const [only] = ofTemperature;
+	if (only !== undefined && ofTemperature.length === 1 && serials.length > 1)
+		return {
+			...only,
+			decisions: [
+				...(only.decisions ?? []),
+				{
+					field: 'layout',
+					value: 'row-a-sensor',
+					because: 'found',
+					detail: blocks.names.join(', ').slice(0, 200)
+				}
+			]
+		};
 	return { tables: serials, names: blocks.names };
 }

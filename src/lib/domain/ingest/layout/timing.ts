@@ -91,6 +91,13 @@ function digitsForm(column: Column): ClockForm | null {
 	return high > 59 && high <= 235_959 ? 'clock' : null;
 }
 
+/** `06.00.00` under a head that speaks of the clock, not of the day: written like a date, and none. */
+function isDottedClock({ name, meaning, share, texts }: Column): boolean {
+	if (!meaning.isTime || share.date <= mostly || /dat|fech|day|tag|jour|dia|giorno|日/i.test(name))
+		return false;
+	return texts.every((text) => text === '' || /^([01]?\d|2[0-4])\.[0-5]\d\.[0-5]\d$/.test(text));
+}
+
 /** Columns that hold a date and a clock apart from each other. */
 function apart(columns: readonly Column[], zone: number | null): Timing | null {
 	const dated = (c: Column): boolean =>
@@ -99,13 +106,17 @@ function apart(columns: readonly Column[], zone: number | null): Timing | null {
 		(c.share.date > 0 && c.share.date + c.share.blank > mainly);
 	const timed = (c: Column): boolean =>
 		c.share.time > mostly || (c.share.moment > mostly && c.isIdleDate && !c.isIdleClock);
-	const date = preferred(columns.filter((c) => dated(c) && !c.isIdleDate));
+	const dates = columns.filter((c) => dated(c) && !c.isIdleDate);
+	const dotted = dates.find(isDottedClock);
+	const date = preferred(dates.length > 1 ? dates.filter((c) => c !== dotted) : dates);
 	if (date === undefined) return null;
 	const rest = columns.filter((c) => c.index !== date.index && !c.meaning.isElapsed);
 	const half = rest.find(isHalfColumn)?.index ?? null;
 	const time = preferred(rest.filter(timed));
 	const parts = { date: date.index, zone, half };
 	if (time !== undefined) return { kind: 'date-and-time', ...parts, time: time.index, form: null };
+	if (dotted !== undefined && dotted !== date)
+		return { kind: 'date-and-time', ...parts, time: dotted.index, form: 'clock' };
 	for (const column of rest) {
 		const form = digitsForm(column);
 		if (form !== null) return { kind: 'date-and-time', ...parts, time: column.index, form };

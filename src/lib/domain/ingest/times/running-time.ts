@@ -45,9 +45,9 @@ export function clockOfDigits(text: string, form: 'clock' | 'hour' | 'fraction')
 		const part = Number(bare.replace(',', '.'));
 		return bare !== '' && part >= 0 && part <= 1 ? Math.round(part * 86_400) * 1000 : NaN;
 	}
-	const dotted = /^(\d{1,2})\.([0-5]\d)$/.exec(bare);
+	const dotted = /^(\d{1,2})\.([0-5]\d)(?:\.([0-5]\d))?$/.exec(bare);
 	if (dotted !== null && form === 'clock') {
-		const ms = (Number(dotted[1]) * 60 + Number(dotted[2])) * 60_000;
+		const ms = ((Number(dotted[1]) * 60 + Number(dotted[2])) * 60 + Number(dotted[3] ?? 0)) * 1000;
 		return ms <= msPerDay ? ms : NaN;
 	}
 	if (!/^\d{1,6}(?:\.0+)?$/.test(bare)) return NaN;
