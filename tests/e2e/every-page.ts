@@ -60,6 +60,8 @@ export const places: readonly Place[] = [
 	{ name: 'specs', as: 'admin', path: '/specs' },
 	{ name: 'a spec', as: 'admin', path: ({ product }) => product },
 	{ name: 'a new product', as: 'admin', path: '/specs/new' },
+	{ name: 'the library of starting specs', as: 'admin', path: '/specs/library' },
+	{ name: 'a starting spec', as: 'admin', path: '/specs/library/broccoli-frozen' },
 	{ name: 'partners', as: 'admin', path: '/partners' },
 	{ name: 'a partner', as: 'admin', path: ({ partner }) => partner },
 	{ name: 'a new partner', as: 'admin', path: '/partners/new' },

@@ -7,7 +7,13 @@ const noneOr = <Schema extends z.ZodType>(schema: Schema) => z.union([z.literal(
 /** What the editor's form says beside the figures: whose spec it is, and which draft it was drawn from. */
 export const draftRef = z.object({
 	varietyId: noneOr(z.uuid()).transform((id) => id || null),
-	seenSha256: noneOr(sha256)
+	seenSha256: noneOr(sha256),
+	/** Key of the starting spec the figures came from. */
+	copiedFrom: z
+		.string()
+		.max(80)
+		.default('')
+		.transform((key) => key || null)
 });
 
 export const specSignForm = z.object({
@@ -26,5 +32,7 @@ export const specDiscardForm = z.object({ specVersionId: z.uuid() });
 /** Which of a product's specs, and which version of it, an address asks for. */
 export const specSheetQuery = z.object({
 	variety: z.uuid().nullable().catch(null).default(null),
+	/** A starting spec to draw the editor from. */
+	from: z.string().trim().max(80).nullable().catch(null).default(null),
 	version: z.coerce.number().int().min(1).nullable().catch(null).default(null)
 });

@@ -2,6 +2,8 @@ import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { Spec } from '../../domain/shelf-life/spec';
 import { validateSpec } from '../../domain/shelf-life/validate';
+import { findStartingSpec } from '../../domain/starting-specs/list-starting-specs';
+import { copiedFromText } from '../../schemas/spec-form-starting';
 import { organisationChain } from '../catalogue/organisation-chain';
 import type { Context } from '../context';
 import { Product } from '../db/models/product';
@@ -18,6 +20,8 @@ export interface DraftInput {
 	figures: Spec;
 	/** Hash of the draft the form was drawn from; empty where there was none. */
 	seenSha256: string;
+	/** Key of the starting spec the figures were copied from. */
+	copiedFrom?: string | null | undefined;
 }
 
 /** The product's row is what writers of its specs queue at. @throws Refusal `not-found` */
@@ -38,7 +42,9 @@ export const savedMeanwhile =
 export async function saveDraft(ctx: Context, input: DraftInput): Promise<{ id: string; number: number }> {
 	authorize(ctx, 'catalogue.change');
 	if (validateSpec(input.figures).length > 0) throw new Refusal('invalid');
-	const { productId, varietyId } = input;
+	const { productId, varietyId, copiedFrom = null } = input;
+	const starting = copiedFrom === null ? null : findStartingSpec(copiedFrom);
+	if (copiedFrom !== null && !starting) throw new Refusal('not-found');
 	const stored = storedFigures(input.figures);
 	const id = uuid();
 	return inTransaction(ctx, async ({ transaction, record }) => {
@@ -51,10 +57,12 @@ export async function saveDraft(ctx: Context, input: DraftInput): Promise<{ id: 
 		});
 		if ((draft?.figuresSha256 ?? '') !== input.seenSha256)
 			throw new Refusal('changed-meanwhile', savedMeanwhile);
-		if (draft && draft.figuresSha256 === stored.sha256) return { id: draft.id, number: draft.number };
+		const reason = starting ? copiedFromText(starting) : (draft?.reason ?? '');
+		if (draft && draft.figuresSha256 === stored.sha256 && draft.reason === reason)
+			return { id: draft.id, number: draft.number };
 		const number = draft?.number ?? (await nextNumber(productId, varietyId, transaction));
 		await draft?.destroy({ transaction });
-		await createDraft(ctx, { id, productId, varietyId, number }, stored, transaction);
+		await createDraft(ctx, { id, productId, varietyId, number, reason }, stored, transaction);
 		record('spec.drafted', await organisationChain(transaction), {
 			specVersionId: id,
 			productId,
@@ -67,7 +75,7 @@ export async function saveDraft(ctx: Context, input: DraftInput): Promise<{ id: 
 
 function createDraft(
 	ctx: Context,
-	row: { id: string; productId: string; varietyId: string | null; number: number },
+	row: Pick<SpecVersion, 'id' | 'productId' | 'varietyId' | 'number' | 'reason'>,
 	stored: StoredFigures,
 	transaction: Transaction
 ): Promise<SpecVersion> {

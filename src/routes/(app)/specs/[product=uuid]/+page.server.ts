@@ -1,8 +1,12 @@
 import { fail, redirect } from '@sveltejs/kit';
+import type { Spec } from '$lib/domain/shelf-life/spec';
+import type { StartingSpec } from '$lib/domain/starting-specs/starting-spec';
+import type { TemperatureUnit } from '$lib/domain/units';
 import { specIssues } from '$lib/messages/en/spec-faults';
 import { queryOf } from '$lib/schemas/list';
 import { productForm, varietyForm } from '$lib/schemas/product';
 import { readSpecForm } from '$lib/schemas/spec-form';
+import { startingValues } from '$lib/schemas/spec-form-starting';
 import { specFormValues, type SpecFormValues } from '$lib/schemas/spec-form-values';
 import { draftRef, specDiscardForm, specSheetQuery, specSignForm } from '$lib/schemas/spec-signing';
 import { componentsAsked } from '$lib/server/accounts/check-signing-components';
@@ -13,6 +17,7 @@ import { contextOf, issuesOf, orError, orFail, parseForm } from '$lib/server/req
 import { getCurrentSite, siteCookie } from '$lib/server/sites/current-site';
 import { discardDraft } from '$lib/server/specs/discard-draft';
 import { getSpecSheet } from '$lib/server/specs/get-spec-sheet';
+import { getStarting } from '$lib/server/specs/list-starting';
 import { saveDraft } from '$lib/server/specs/save-draft';
 import { signSpec } from '$lib/server/specs/sign-spec';
 import { startOfDay } from '$lib/server/specs/start-of-day';
@@ -29,18 +34,30 @@ export const load: PageServerLoad = async ({ locals, params, url, parent }) => {
 
 	const { temperatureUnit } = await parent();
 	const mayChange = may(ctx.actor, 'catalogue.change');
+	const starting = mayChange && query.from ? await orError(getStarting(ctx, query.from)) : null;
 	return {
 		...sheet,
 		shown,
-		isEditable: mayChange && (asked === null || asked.standing === 'draft'),
+		starting,
+		isEditable: mayChange && (starting !== null || asked === null || asked.standing === 'draft'),
 		mayChange,
 		maySign: may(ctx.actor, 'spec.sign'),
 		asks: await componentsAsked(ctx),
-		values: shown ? specFormValues(shown.figures, temperatureUnit) : { unit: temperatureUnit },
+		values: valuesOf(starting, shown, temperatureUnit),
 		families: mayChange ? await listFamilies(ctx) : [],
 		back: { href: '/specs', word: 'Specs', title: sheet.product.name }
 	};
 };
+
+/** A starting spec's figures where one is to be copied, else those of the version in view. */
+function valuesOf(
+	starting: StartingSpec | null,
+	shown: { figures: Spec } | null,
+	unit: TemperatureUnit
+): SpecFormValues {
+	if (starting) return startingValues(starting, unit);
+	return shown ? specFormValues(shown.figures, unit) : { unit };
+}
 
 /** The form's own page again, the variety kept. */
 function sheetOf(url: URL): string {

@@ -1,21 +1,28 @@
 import { fail, redirect } from '@sveltejs/kit';
+import { queryOf } from '$lib/schemas/list';
 import { productForm } from '$lib/schemas/product';
+import { startingQuery } from '$lib/schemas/spec-library';
 import { authorize } from '$lib/server/policies';
 import { listFamilies } from '$lib/server/products/list-products';
 import { saveProduct } from '$lib/server/products/save-product';
 import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
+import { getStarting } from '$lib/server/specs/list-starting';
 import type { Actions, PageServerLoad } from './$types';
 
-export const load: PageServerLoad = async ({ locals }) => {
+export const load: PageServerLoad = async ({ locals, url }) => {
 	const ctx = contextOf(locals);
+
+	const { from } = startingQuery.parse(queryOf(url.searchParams));
 
 	await orError(Promise.resolve().then(() => authorize(ctx, 'catalogue.change')));
 
-	return { families: await orError(listFamilies(ctx)), back: { href: '/specs', word: 'Specs' } };
+	const starting = from ? await orError(getStarting(ctx, from)) : null;
+
+	return { starting, families: await orError(listFamilies(ctx)), back: { href: '/specs', word: 'Specs' } };
 };
 
 export const actions = {
-	save: async ({ locals, request }) => {
+	save: async ({ locals, request, url }) => {
 		const ctx = contextOf(locals);
 
 		const form = await parseForm(request, productForm);
@@ -28,6 +35,7 @@ export const actions = {
 			return orFail(e, form.data);
 		}
 
-		redirect(303, `/specs/${productId}`);
+		const { from } = startingQuery.parse(queryOf(url.searchParams));
+		redirect(303, `/specs/${productId}${from ? `?from=${encodeURIComponent(from)}` : ''}`);
 	}
 } satisfies Actions;
