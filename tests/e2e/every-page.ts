@@ -75,6 +75,8 @@ export const places: readonly Place[] = [
 	{ name: 'a logger', as: 'admin', path: ({ logger }) => logger },
 	{ name: 'a new logger', as: 'admin', path: '/settings/loggers/new' },
 	{ name: 'the certificate', as: 'admin', path: '/settings/certificate' },
+	{ name: 'retention', as: 'admin', path: '/settings/retention' },
+	{ name: 'rules of signing', as: 'admin', path: '/settings/signing' },
 	{ name: 'users', as: 'admin', path: '/settings/users' },
 	{ name: 'a user', as: 'admin', path: ({ user }) => user },
 	{ name: 'inviting somebody', as: 'admin', path: '/settings/users/new' },

@@ -27,6 +27,15 @@ interface Row extends Omit<AuditEntryView, 'occurredAt'> {
 	occurredAt: Date | string;
 }
 
+const columns = `
+	SELECT e.id, e.seq, e.type, e.occurred_at AS occurredAt, COALESCE(u.name, k.name) AS actorName,
+		e.actor_kind AS actorKind, c.scope, COALESCE(s.number, w.name, a.name) AS about, p.text AS payload,
+		e.sha256, e.address`;
+
+function entryView(row: Row): AuditEntryView {
+	return { ...row, occurredAt: new Date(row.occurredAt).toISOString() };
+}
+
 const from = `
 	FROM audit_entries e
 	JOIN audit_chains c ON c.id = e.chain_id
@@ -89,17 +98,50 @@ export async function listAuditEntries(
 		{ replacements: values, type: QueryTypes.SELECT }
 	);
 	const rows = await database().query<Row>(
-		`SELECT e.id, e.seq, e.type, e.occurred_at AS occurredAt, COALESCE(u.name, k.name) AS actorName,
-			e.actor_kind AS actorKind, c.scope, COALESCE(s.number, w.name, a.name) AS about, p.text AS payload,
-			e.sha256, e.address
-		${from} WHERE ${sql} ORDER BY e.occurred_at DESC, e.id DESC LIMIT :limit OFFSET :offset`,
+		`${columns} ${from} WHERE ${sql} ORDER BY e.occurred_at DESC, e.id DESC LIMIT :limit OFFSET :offset`,
 		{
 			replacements: { ...values, limit: rowsPerPage, offset: (query.page - 1) * rowsPerPage },
 			type: QueryTypes.SELECT
 		}
 	);
-	const items = rows.map((row) => ({ ...row, occurredAt: new Date(row.occurredAt).toISOString() }));
-	return { items, total: Number(counted?.total ?? 0) };
+	return { items: rows.map(entryView), total: Number(counted?.total ?? 0) };
+}
+
+/** Entries fetched at once for an export. */
+const exportedAtOnce = 500;
+
+/**
+ * The same entries a batch at a time, newest first, up to those of `ctx.now`: what is written meanwhile does not shift
+ * them. @throws Refusal `not-allowed`
+ */
+export async function* eachAuditEntry(
+	ctx: Context,
+	query: AuditQuery,
+	zone: string
+): AsyncGenerator<AuditEntryView[]> {
+	authorize(ctx, 'audit.view');
+	const { sql, values } = conditions(ctx, query, zone);
+	let last: { occurredAt: Date | string; id: string } | null = null;
+	for (;;) {
+		const rows: Row[] = await database().query<Row>(
+			`${columns} ${from} WHERE ${sql} AND e.occurred_at <= :now
+				${last === null ? '' : 'AND (e.occurred_at, e.id) < (:lastAt, :lastId)'}
+				ORDER BY e.occurred_at DESC, e.id DESC LIMIT :limit`,
+			{
+				replacements: {
+					...values,
+					now: ctx.now,
+					lastAt: last?.occurredAt ?? null,
+					lastId: last?.id ?? null,
+					limit: exportedAtOnce
+				},
+				type: QueryTypes.SELECT
+			}
+		);
+		if (rows.length > 0) yield rows.map(entryView);
+		last = rows.at(-1) ?? null;
+		if (rows.length < exportedAtOnce) return;
+	}
 }
 
 /** Everybody who has written into the trail, for its filter. @throws Refusal `not-allowed` */
