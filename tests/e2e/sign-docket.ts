@@ -8,7 +8,9 @@ export async function rejectAndSign(page: Page, docket: string): Promise<void> {
 	await page.getByRole('link', { name: 'Sign disposition' }).click();
 	const line = page.getByRole('group', { name: 'Disposition of line 1' });
 	await line.getByRole('radio', { name: 'Reject' }).check();
-	await page.getByLabel('Reason, printed on the report').fill('Warm from the first reading on.');
+	const reason = page.getByLabel('Reason, printed on the report').filter({ visible: true });
+	await reason.fill('Warm from the first reading on.');
+	await page.getByLabel('Where the goods go').selectOption({ label: 'Returned' });
 	await page.getByLabel('Your reasons, printed on the report').fill('Probe B rode in the product.');
 	await page.getByRole('radio', { name: /^Approval/ }).check();
 	await expect(page.getByRole('checkbox', { name: /^Notice to/ })).toBeChecked();
@@ -20,9 +22,7 @@ export async function rejectAndSign(page: Page, docket: string): Promise<void> {
 	await expect(
 		page.getByText('That is not your password. Nothing was signed.', { exact: true })
 	).toBeVisible();
-	await expect(page.getByLabel('Reason, printed on the report')).toHaveValue(
-		'Warm from the first reading on.'
-	);
+	await expect(reason).toHaveValue('Warm from the first reading on.');
 
 	await page.getByLabel('Password').fill(demoPassword);
 	await page.getByRole('button', { name: 'Sign as Ruth Calloway' }).click();

@@ -1,4 +1,5 @@
 import type { Excursion, LegUse, Range, StopHit } from '../domain/receiving/assessment';
+import type { ConditionKind, Whereabouts } from '../domain/receiving/line-groups';
 import type { Outcome, Reason, Recommended } from '../domain/receiving/recommendation';
 import type { Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
@@ -51,14 +52,25 @@ export interface DocketLineView {
 	loggers: string[];
 	remainingHours: Range | null;
 	recommendation: { recommended: Recommended; reasons: Reason[] } | null;
-	/** Signed outcome, when there is one. */
-	outcome: {
-		outcome: Outcome;
-		condition: string | null;
-		reason: string | null;
-		cases: number;
-		pallets: number;
-	} | null;
+	/** Signed outcome, when there is one; of a split line the gravest of its groups, with the whole line's counts. */
+	outcome: LineOutcomeView | null;
+	/** The groups a split line was decided by; absent where the line is whole. */
+	groups?: LineOutcomeView[];
+}
+
+/** What was signed of a line or of one group of it. Records from before groups lack what is optional. */
+export interface LineOutcomeView {
+	outcome: Outcome;
+	condition: string | null;
+	reason: string | null;
+	cases: number;
+	pallets: number;
+	name?: string;
+	conditionKind?: ConditionKind | null;
+	awaited?: string | null;
+	untilAt?: string | null;
+	whereabouts?: Whereabouts | null;
+	place?: string | null;
 }
 
 export interface DocketLoggerView {
@@ -202,7 +214,13 @@ export interface DocketView {
 	purchaseOrder: string | null;
 	billOfLading: string | null;
 	dueAt: string | null;
-	hold: { sinceAt: string; by: string; reason: string } | null;
+	hold: {
+		sinceAt: string;
+		by: string;
+		reason: string;
+		awaited?: string | null;
+		untilAt?: string | null;
+	} | null;
 	arrival: ArrivalView | null;
 	lines: DocketLineView[];
 	loggers: DocketLoggerView[];

@@ -18,9 +18,9 @@ export const queueQuery = z.object({
 });
 export type QueueQuery = z.output<typeof queueQuery>;
 
-/** The clock of a docket that runs out first: to refuse, to give notice, or until the low falls under the need. */
+/** The clock of a docket that runs out first: to refuse, to give notice, until the low falls under the need, or of a hold. */
 export interface QueueClock {
-	kind: 'reject' | 'notice' | 'life';
+	kind: 'reject' | 'notice' | 'life' | 'hold';
 	startsAt: string;
 	deadlineAt: string;
 	basis: string;

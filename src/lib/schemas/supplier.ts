@@ -2,7 +2,7 @@ import { z } from 'zod';
 import type { Range } from '../domain/receiving/assessment';
 import type { Outcome } from '../domain/receiving/recommendation';
 import type { TemperatureUnit } from '../domain/units';
-import type { AssessmentView, SeriesView, Verdict } from './docket';
+import type { AssessmentView, LineOutcomeView, SeriesView, Verdict } from './docket';
 
 /** What a supplier is told of one of its lines. */
 export interface SupplierLineView {
@@ -16,6 +16,10 @@ export interface SupplierLineView {
 	outcome: Outcome | null;
 	condition: string | null;
 	reason: string | null;
+	/** Of a line that was split: each group with its counts; the place inside the receiver’s house is not the supplier’s. */
+	groups?: LineOutcomeView[];
+	/** What was signed, in words. */
+	details?: string;
 }
 
 /** An excursion as readings: no other holder is named, only whether it fell while the supplier held the goods. */

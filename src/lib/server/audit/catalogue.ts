@@ -96,7 +96,7 @@ export interface EventData {
 		}[];
 		recommended: Record<string, string>;
 	};
-	'hold.put': { reason: string };
+	'hold.put': { reason: string; awaited?: string | null; untilAt?: string | null };
 	'hold.lifted': { holdId: string };
 	'docket.taken': { from: string | null };
 	'docket.handed-back': Record<string, never>;
@@ -106,7 +106,15 @@ export interface EventData {
 		verdict: string;
 		meaning: string;
 		frozenSha256: string;
-		outcomes: { lineId: string; outcome: Outcome; cases: number }[];
+		/** One a group; `pallets`, `name` and `whereabouts` since lines are decided by groups. */
+		outcomes: {
+			lineId: string;
+			outcome: Outcome;
+			cases: number;
+			pallets?: number;
+			name?: string;
+			whereabouts?: string | null;
+		}[];
 		amendmentReason: string | null;
 	};
 	'disposition.reviewed': { reviewId: string; evidenceSha256: string; decisionSha256: string };

@@ -116,10 +116,12 @@ export function signingFacts(
 			mayDecide: may(actor, 'disposition.sign'),
 			mayAcceptAtDock: may(actor, 'disposition.accept-at-dock')
 		},
-		lines: standing.lineFacts.map(({ lineId, ...line }) => ({
-			...line,
-			outcome: lines.find((row) => row.lineId === lineId)?.outcome ?? 'hold'
-		})),
+		lines: standing.lineFacts.flatMap(({ lineId, ...line }) =>
+			lines
+				.filter((row) => row.lineId === lineId)
+				// The value is the line's: counted once, however many groups it has.
+				.map(({ outcome }, index) => ({ ...line, outcome, valueMinor: index === 0 ? line.valueMinor : null }))
+		),
 		corrections: standing.corrections,
 		rules: standing.rules,
 		reviewerIds: standing.reviews

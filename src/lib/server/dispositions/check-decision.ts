@@ -26,9 +26,11 @@ export function refuseNeeds(needs: readonly Need[]): void {
 /** Whether some line is decided otherwise than recommended; conditions are a mild accept. */
 export function departsFrom(docket: DocketView, input: Pick<DispositionInput, 'lines'>): boolean {
 	return docket.lines.some((line) => {
-		const outcome = input.lines.find((row) => row.lineId === line.id)?.outcome;
 		const recommended = line.recommendation?.recommended;
-		if (!recommended || !outcome) return false;
-		return recommended === 'accept' ? outcome === 'reject' : outcome !== recommended;
+		const outcomes = input.lines.filter((row) => row.lineId === line.id).map(({ outcome }) => outcome);
+		if (!recommended) return false;
+		return outcomes.some((outcome) =>
+			recommended === 'accept' ? outcome === 'reject' || outcome === 'hold' : outcome !== recommended
+		);
 	});
 }

@@ -4,6 +4,7 @@ import { sha256Hex } from '../storage/sha256';
 import type { CorrectionView, DeterminationView, ReviewView, SigningStanding } from '../../schemas/signing';
 import { decisionSha256 } from '../authority/decision-text';
 import type { DispositionInput } from '../../schemas/disposition';
+import { outcomeOf, type DecidedLine } from './decide-groups';
 
 type Facts = FrozenDocket['docket'];
 
@@ -18,7 +19,7 @@ function factsOf(docket: DocketView): Facts {
  */
 export function evidenceText(docket: DocketView): string {
 	const facts = factsOf(docket);
-	const lines = facts.lines.map(({ outcome: _o, ...line }) => line);
+	const lines = facts.lines.map(({ outcome: _o, groups: _p, ...line }) => line);
 	return JSON.stringify({ ...facts, lines, verdict: null, hold: null, engineVersion });
 }
 
@@ -29,7 +30,7 @@ export function evidenceSha256(docket: DocketView): string {
 interface Decision {
 	docket: DocketView;
 	series: SeriesView[];
-	input: DispositionInput;
+	decided: readonly DecidedLine[];
 	verdict: DocketView['verdict'];
 	signature: FrozenSignature;
 	before: SignedBefore;
@@ -56,26 +57,15 @@ export function signedBefore(
 }
 
 /** The record as it will be kept: facts, outcomes and signature in one text, whose hash the report prints. */
-export function freeze({ docket, series, input, verdict, signature, before }: Decision): {
+export function freeze({ docket, series, decided, verdict, signature, before }: Decision): {
 	text: string;
 	sha256: string;
 } {
 	const facts = factsOf(docket);
-	const lines = facts.lines.map((line) => {
-		const chosen = input.lines.find((row) => row.lineId === line.id);
-		if (!chosen) return line;
-		const { outcome, condition, reason } = chosen;
-		return {
-			...line,
-			outcome: {
-				outcome,
-				condition,
-				reason,
-				cases: line.casesReceived ?? line.casesAdvised,
-				pallets: line.pallets
-			}
-		};
-	});
+	const lines = facts.lines.map((line) => ({
+		...line,
+		...outcomeOf(decided.find((one) => one.line.id === line.id)?.groups ?? [])
+	}));
 	const frozen: FrozenDocket = {
 		docket: { ...facts, lines, verdict },
 		series,

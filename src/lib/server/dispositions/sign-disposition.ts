@@ -5,8 +5,6 @@ import { checkSigningComponents } from '../accounts/check-signing-components';
 import type { Context } from '../context';
 import { Clock } from '../db/models/clock';
 import { Disposition } from '../db/models/disposition';
-import { DispositionLine } from '../db/models/disposition-line';
-import { Hold } from '../db/models/hold';
 import { Shipment } from '../db/models/shipment';
 import { inTransaction, type Writing } from '../db/transaction';
 import { docketView } from '../dockets/get-docket';
@@ -20,6 +18,8 @@ import { signingNeeds } from '../../domain/authority/authority';
 import { dockAcceptNeeds } from '../authority/dock-accept';
 import { signingFacts, signingStanding } from '../authority/signing-standing';
 import { checkDecision, refuseNeeds } from './check-decision';
+import { decideGroups, type DecidedLine } from './decide-groups';
+import { keepGroups, renewHold } from './keep-groups';
 import { freeze, signedBefore, type SignedBefore } from './freeze';
 import { keepReview } from './keep-review';
 
@@ -49,16 +49,17 @@ async function lockDocket(
 
 interface Decided {
 	docket: DocketView;
+	decided: DecidedLine[];
 	series: SeriesView[];
 	input: DispositionInput;
 	signature: FrozenSignature;
 	before: SignedBefore;
 }
 
-async function keepDecision(w: Writing, { docket, series, input, signature, before }: Decided) {
+async function keepDecision(w: Writing, { docket, decided, series, input, signature, before }: Decided) {
 	const { transaction } = w;
 	const verdict = verdictOf(input.lines.map((line) => line.outcome));
-	const frozen = freeze({ docket, series, input, verdict, signature, before });
+	const frozen = freeze({ docket, series, decided, verdict, signature, before });
 	await Disposition.create(
 		{
 			id: signature.dispositionId,
@@ -78,28 +79,11 @@ async function keepDecision(w: Writing, { docket, series, input, signature, befo
 		},
 		{ transaction }
 	);
-	for (const line of docket.lines) {
-		const chosen = input.lines.find((row) => row.lineId === line.id);
-		if (!chosen) continue;
-		await DispositionLine.create(
-			{
-				id: uuid(),
-				dispositionId: signature.dispositionId,
-				lineId: line.id,
-				outcome: chosen.outcome,
-				cases: line.casesReceived ?? line.casesAdvised,
-				pallets: line.pallets,
-				conditionText: chosen.condition,
-				reason: chosen.reason,
-				assessmentId: docket.assessments.find((a) => a.lineId === line.id && a.isGoverning)?.id ?? null
-			},
-			{ transaction }
-		);
-	}
+	await keepGroups(w, docket, signature.dispositionId, decided);
 	return { verdict, frozenSha256: frozen.sha256 };
 }
 
-/** What a signature changes on the docket itself: it is decided, no longer held, and no rejection clock runs for goods taken. */
+/** What a signature changes on the docket itself: it is decided, and no rejection clock runs for goods taken. */
 async function closeDocket(
 	{ transaction }: Writing,
 	ctx: Context,
@@ -107,10 +91,6 @@ async function closeDocket(
 	verdict: Shipment['verdict']
 ): Promise<void> {
 	await shipment.update({ decidedAt: ctx.now, verdict, version: shipment.version + 1 }, { transaction });
-	await Hold.update(
-		{ liftedAt: ctx.now, liftedBy: ctx.actor.id },
-		{ where: { shipmentId: shipment.id, liftedAt: null }, transaction }
-	);
 	if (verdict === 'accepted' || verdict === 'conditions')
 		await Clock.update(
 			{ metAt: ctx.now, metBy: 'nothing was refused' },
@@ -118,9 +98,32 @@ async function closeDocket(
 		);
 }
 
+/** Where nothing is decided yet the docket stays open: the hold says what is awaited, and nothing is frozen. */
+async function holdAll(
+	w: Writing,
+	ctx: Context,
+	shipmentId: string,
+	decided: readonly DecidedLine[],
+	holdId: string
+): Promise<{ version: null }> {
+	await renewHold(w, ctx, shipmentId, decided, holdId);
+	return { version: null };
+}
+
+function groupsRecorded(decided: readonly DecidedLine[]) {
+	return decided.flatMap(({ line, groups }) =>
+		groups.map(({ outcome, cases, pallets, name, whereabouts }) => ({
+			...{ lineId: line.id, outcome, cases, pallets },
+			...(name ? { name } : {}),
+			whereabouts
+		}))
+	);
+}
+
 /**
- * Signs what becomes of a load, or, with the meaning review, that the decision was checked and another approves it. It freezes the docket with its figures, and writes report and notice as jobs, all in one
- * transaction. A later signature is a new version with a reason; the old one stays.
+ * Signs what becomes of a load, or, with the meaning review, that the decision was checked and another approves it. It
+ * freezes the docket with its figures, and writes report and notice as jobs, all in one transaction. Held groups open a
+ * hold with what is awaited; where all is held, that hold is all there is, and nothing is frozen. A later signature is a new version with a reason; the old one stays.
  * @throws Refusal `not-found`, `not-allowed`, `wrong-password`, `wrong-code`, `code-needed`, `locked`, `not-arrived`, `already-signed`,
  * `changed-meanwhile`, `invalid`
  */
@@ -133,14 +136,17 @@ export async function signDisposition(
 	authorizeShipment(ctx, signingAct(ctx), seen);
 	await refuseDock(ctx, seen);
 	const signer = await checkSigningComponents(ctx, input);
-	const [dispositionId, reviewId] = [uuid(), uuid()];
+	const [dispositionId, reviewId, holdId] = [uuid(), uuid(), uuid()];
 	const series = await frozenSeries(seen.id);
 	return inTransaction(ctx, async (w) => {
 		const { shipment, docket } = await lockDocket(ctx, number, w);
 		checkDecision(docket, input);
+		const decided = decideGroups(docket, input.lines, ctx.now);
 		const standing = await signingStanding(ctx, docket, w.transaction);
 		if (input.meaning === 'review') return keepReview(w, ctx, { docket, input, signer, reviewId });
 		refuseNeeds(signingNeeds(signingFacts(ctx, standing, input.lines)));
+		if (!input.amendmentReason && input.lines.every(({ outcome }) => outcome === 'hold'))
+			return holdAll(w, ctx, shipment.id, decided, holdId);
 		const before = signedBefore(standing, input.lines);
 		const signature: FrozenSignature = {
 			dispositionId,
@@ -154,8 +160,16 @@ export async function signDisposition(
 			reasons: input.reasons,
 			amendmentReason: input.amendmentReason
 		};
-		const { verdict, frozenSha256 } = await keepDecision(w, { docket, series, input, signature, before });
+		const { verdict, frozenSha256 } = await keepDecision(w, {
+			docket,
+			decided,
+			series,
+			input,
+			signature,
+			before
+		});
 		await closeDocket(w, ctx, shipment, verdict);
+		await renewHold(w, ctx, shipment.id, decided, holdId);
 		w.record(
 			'disposition.signed',
 			{ scope: 'shipment', id: shipment.id },
@@ -165,11 +179,7 @@ export async function signDisposition(
 				verdict,
 				meaning: input.meaning,
 				frozenSha256,
-				outcomes: docket.lines.map((line) => ({
-					lineId: line.id,
-					outcome: input.lines.find((row) => row.lineId === line.id)?.outcome ?? 'hold',
-					cases: line.casesReceived ?? line.casesAdvised
-				})),
+				outcomes: groupsRecorded(decided),
 				amendmentReason: input.amendmentReason
 			}
 		);

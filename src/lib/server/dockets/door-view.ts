@@ -97,6 +97,12 @@ export function trimViews(rows: DocketRows): DocketView['trims'] {
 export function holdView(rows: DocketRows): DocketView['hold'] {
 	const hold = rows.holds.find((row) => row.liftedAt === null);
 	return hold
-		? { sinceAt: hold.putAt.toISOString(), by: nameOf(rows, hold.putBy), reason: hold.reason }
+		? {
+				sinceAt: hold.putAt.toISOString(),
+				by: nameOf(rows, hold.putBy),
+				reason: hold.reason,
+				awaited: hold.awaited,
+				untilAt: hold.untilAt?.toISOString() ?? null
+			}
 		: null;
 }

@@ -2,8 +2,9 @@ import { z } from 'zod';
 import type { Range } from '../../domain/receiving/assessment';
 import type { Reason } from '../../domain/receiving/recommendation';
 import type { Spec } from '../../domain/shelf-life/spec';
-import type { DocketLineView } from '../../schemas/docket';
+import type { DocketLineView, LineOutcomeView } from '../../schemas/docket';
 import type { ShipmentLine } from '../db/models/shipment-line';
+import { outcomeOf } from '../dispositions/decide-groups';
 import type { DocketRows } from './load-rows';
 import { labelsOf } from './loggers-view';
 
@@ -16,19 +17,17 @@ function reasonsOf(text: string): Reason[] {
 	return reasons as Reason[];
 }
 
-function outcomeOf(rows: DocketRows, line: ShipmentLine): DocketLineView['outcome'] {
+function groupViews(rows: DocketRows, line: ShipmentLine): LineOutcomeView[] {
 	const current = rows.dispositions.at(-1);
-	const row = rows.outcomes.find(
-		(candidate) => candidate.dispositionId === current?.id && candidate.lineId === line.id
-	);
-	if (!row) return null;
-	return {
-		outcome: row.outcome,
-		condition: row.conditionText,
-		reason: row.reason,
-		cases: row.cases,
-		pallets: row.pallets
-	};
+	return rows.outcomes
+		.filter((row) => row.dispositionId === current?.id && row.lineId === line.id)
+		.sort((a, b) => a.ordinal - b.ordinal)
+		.map((row) => ({
+			...{ outcome: row.outcome, condition: row.conditionText, reason: row.reason },
+			...{ cases: row.cases, pallets: row.pallets, name: row.name },
+			...{ conditionKind: row.conditionKind, awaited: row.awaited },
+			...{ untilAt: row.untilAt?.toISOString() ?? null, whereabouts: row.whereabouts, place: row.place }
+		}));
 }
 
 export function lineView(rows: DocketRows, line: ShipmentLine, findSpec: SpecFinder): DocketLineView {
@@ -71,6 +70,6 @@ export function lineView(rows: DocketRows, line: ShipmentLine, findSpec: SpecFin
 		recommendation: recommendation
 			? { recommended: recommendation.recommended, reasons: reasonsOf(recommendation.reasons) }
 			: null,
-		outcome: outcomeOf(rows, line)
+		...outcomeOf(groupViews(rows, line))
 	};
 }

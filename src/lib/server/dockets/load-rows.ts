@@ -119,7 +119,10 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 					])
 				)
 			),
-			DispositionLine.findAll(byId('dispositionId', ids(dispositions.map((row) => row.id)))),
+			DispositionLine.findAll({
+				...byId('dispositionId', ids(dispositions.map((row) => row.id))),
+				order: ['ordinal']
+			}),
 			User.findAll({ ...byId('id', userIds), attributes: ['id', 'name'] })
 		]);
 	const calibrations = await Calibration.findAll({

@@ -14,10 +14,10 @@ export function stageOf({ arrivedAt, decidedAt, isHeld }: Facts): Stage {
 	return isHeld ? 'on-hold' : 'at-the-door';
 }
 
-/** How a signed docket ended: goods that go in part make a `part`, whatever the conditions on the rest. */
+/** How a signed docket ended: goods that go in part, or wait in part, make a `part`, whatever the conditions on the rest. */
 export function verdictOf(outcomes: readonly Outcome[]): Verdict {
 	const refused = outcomes.filter((outcome) => outcome === 'reject').length;
 	if (refused === outcomes.length) return 'rejected';
-	if (refused > 0) return 'part';
+	if (refused > 0 || outcomes.includes('hold')) return 'part';
 	return outcomes.every((outcome) => outcome === 'accept') ? 'accepted' : 'conditions';
 }

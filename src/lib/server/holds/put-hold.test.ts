@@ -51,6 +51,17 @@ describe('a hold', () => {
 		await expect(liftHold(qa, number)).rejects.toMatchObject({ code: 'not-on-hold' });
 	});
 
+	it('says what it awaits and until when, by the clock of the site', async () => {
+		const { number, dock, shipment } = await setUp();
+		const late = holdInput.parse({ reason: 'warm', awaited: 'a count', until: '2026-04-02T12:00' });
+		await expect(putHold(dock, number, late)).rejects.toMatchObject({ code: 'invalid' });
+		await putHold(dock, number, { ...late, until: '2026-04-05T12:00' });
+		expect(await Hold.findOne({ where: { shipmentId: shipment.id } })).toMatchObject({
+			awaited: 'a count',
+			untilAt: new Date('2026-04-05T10:00:00Z')
+		});
+	});
+
 	it('needs the load to be here and not decided on', async () => {
 		const expected = await setUp({});
 		await expect(putHold(expected.dock, expected.number, input)).rejects.toMatchObject({

@@ -1,5 +1,7 @@
 import { count, duration, lifeDays, temperature, temperatureSign } from '../../format';
 import { dayTime, dayOfYear, time, zoneName } from '../../format-time';
+import { groupDetails } from '../../messages/en/line-groups';
+import type { LineOutcomeView } from '../../schemas/docket';
 import type { SupplierDocketView, SupplierExcursionView } from '../../schemas/supplier';
 import { renderMail, type MailContent, type MailMark } from '../mail/layout';
 
@@ -23,15 +25,25 @@ const outcomeWords: Record<string, { mark: MailMark; words: string }> = {
 	reject: { mark: 'reject', words: 'refused' }
 };
 
+type Line = NoticeFacts['docket']['lines'][number];
+
+/** The line's groups, or the whole line as the only one. */
+function groupsOf(line: Line): Pick<LineOutcomeView, 'outcome' | 'cases'>[] {
+	return line.groups ?? [{ outcome: line.outcome ?? 'hold', cases: line.cases }];
+}
+
 function quantities({ lines }: NoticeFacts['docket']): string {
-	const total = lines.reduce((sum, line) => sum + line.cases, 0);
-	const refused = lines
-		.filter((line) => line.outcome === 'reject')
-		.reduce((sum, line) => sum + line.cases, 0);
-	if (refused === 0) return `${count(total, locale)} cases taken in, readings outside the limits`;
+	const groups = lines.flatMap(groupsOf);
+	const sum = (counted: typeof groups) => counted.reduce((total, group) => total + group.cases, 0);
+	const total = sum(groups);
+	const refused = sum(groups.filter(({ outcome }) => outcome === 'reject'));
+	const held = sum(groups.filter(({ outcome }) => outcome === 'hold'));
+	const waiting = held > 0 ? `, ${count(held, locale)} on hold` : '';
+	if (refused === 0)
+		return `${count(total - held, locale)} cases taken in${waiting}, readings outside the limits`;
 	return refused === total
 		? `all ${count(total, locale)} cases refused`
-		: `${count(refused, locale)} of ${count(total, locale)} cases refused`;
+		: `${count(refused, locale)} of ${count(total, locale)} cases refused${waiting}`;
 }
 
 function byInstant(at: string, zone: string): string {
@@ -65,6 +77,22 @@ function lifeFact({ lines }: NoticeFacts['docket']): string {
 	return `${known.join(', ')} d; needed ${[...new Set(lines.map((line) => lifeDays(line.neededHours, locale)))].join(', ')} d`;
 }
 
+/** A line as one row, or a row a group: what becomes of how many cases, and with what. */
+function outcomesOf(line: Line, zone: string): MailContent['outcomes'] {
+	const { ordinal, lot, cases } = line;
+	const row = (outcome: string, counted: number, detail: string, name?: string) => {
+		const { mark, words } = outcomeWords[outcome] ?? { mark: 'hold' as const, words: 'held' };
+		return {
+			mark,
+			name: `Line ${ordinal}, lot ${lot}${name ? `, ${name}` : ''}`,
+			words: `${words}, ${count(counted, locale)} cases${detail ? `: ${detail}` : ''}`
+		};
+	};
+	if (!line.groups)
+		return [row(line.outcome ?? 'hold', cases, line.details ?? line.condition ?? line.reason ?? '')];
+	return line.groups.map((group) => row(group.outcome, group.cases, groupDetails(group, zone), group.name));
+}
+
 function contentOf(facts: NoticeFacts): MailContent {
 	const { docket, noticeNumber, answerByAt, contactName, link, hasReport } = facts;
 	const times = docket.excursions.length === 1 ? 'once' : `${docket.excursions.length} times`;
@@ -72,7 +100,7 @@ function contentOf(facts: NoticeFacts): MailContent {
 		docket.excursions.length === 0
 			? 'The readings stayed within the limits.'
 			: `The logger that decided was outside the limits ${times}.`;
-	const refused = docket.lines.some((line) => line.outcome === 'reject');
+	const refused = docket.lines.flatMap(groupsOf).some(({ outcome }) => outcome === 'reject');
 	return {
 		kicker: `${docket.siteName} · notice ${noticeNumber}`,
 		title: refused ? 'Goods of your load were refused' : 'Excursions on your load',
@@ -98,18 +126,7 @@ function contentOf(facts: NoticeFacts): MailContent {
 			{ label: 'Lowest', value: extremeFact(docket, 'too-cold'), isFigure: true },
 			{ label: 'Life left', value: lifeFact(docket), isFigure: true }
 		],
-		outcomes: docket.lines.map((line) => {
-			const { mark, words } = outcomeWords[line.outcome ?? 'hold'] ?? {
-				mark: 'hold' as const,
-				words: 'held'
-			};
-			const detail = line.condition ?? line.reason;
-			return {
-				mark,
-				name: `Line ${line.ordinal}, lot ${line.lot}`,
-				words: `${words}, ${count(line.cases, locale)} cases${detail ? `: ${detail}` : ''}`
-			};
-		}),
+		outcomes: docket.lines.flatMap((line) => outcomesOf(line, docket.zone)),
 		button: { word: 'See the evidence and answer', href: link },
 		after: [
 			...(answerByAt ? [`Please answer by ${byInstant(answerByAt, docket.zone)}.`] : []),

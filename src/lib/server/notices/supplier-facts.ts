@@ -1,4 +1,5 @@
-import type { FrozenDocket, AssessmentView } from '../../schemas/docket';
+import { groupDetails } from '../../messages/en/line-groups';
+import type { FrozenDocket, AssessmentView, LineOutcomeView } from '../../schemas/docket';
 import type { SupplierDocketView, SupplierExcursionView } from '../../schemas/supplier';
 
 type Docket = FrozenDocket['docket'];
@@ -46,6 +47,11 @@ function withoutNames(assessment: AssessmentView): AssessmentView {
 	return { ...assessment, legs };
 }
 
+/** Refused goods are the supplier's to fetch, so it hears where they are; of the rest the place is the house's own. */
+function toldGroup(group: LineOutcomeView): LineOutcomeView {
+	return group.outcome === 'reject' ? group : { ...group, whereabouts: null, place: null };
+}
+
 /** What a supplier may know of a signed docket, from the frozen record alone. */
 export function supplierFacts(frozen: FrozenDocket): Omit<SupplierDocketView, 'report' | 'notice'> {
 	const { docket, signature } = frozen;
@@ -74,7 +80,9 @@ export function supplierFacts(frozen: FrozenDocket): Omit<SupplierDocketView, 'r
 			fullLifeHours: line.fullLifeHours,
 			outcome: line.outcome?.outcome ?? null,
 			condition: line.outcome?.condition ?? null,
-			reason: line.outcome?.reason ?? null
+			reason: line.outcome?.reason ?? null,
+			...(line.groups ? { groups: line.groups.map(toldGroup) } : {}),
+			...(line.outcome ? { details: groupDetails(toldGroup(line.outcome), docket.site.zone) } : {})
 		})),
 		logger: logger ? { label: logger.label, placement: logger.placement } : null,
 		excursions: excursionViews(docket, assessment),

@@ -89,6 +89,25 @@ describe('what waits for QA', () => {
 		expect(free.rows.map((row) => row.number)).toEqual([unread.number]);
 	});
 
+	it('keeps a load that is signed in part and held for the rest, by the clock of the hold', async () => {
+		const { site, make, qa } = await makers();
+		const part = await make({ arrivedAt: hour('05:00'), decidedAt: testNow, verdict: 'part' });
+		await Hold.create({
+			...{ id: uuid(), shipmentId: part.id, putBy: qa.actor.id, putAt: testNow, reason: '2 pallets' },
+			...{ awaited: 'a count', untilAt: hour('12:00') }
+		});
+		const { rows } = await listQueue(qa, site.id, asked());
+		expect(rows).toMatchObject([
+			{
+				number: part.number,
+				clock: { kind: 'hold', deadlineAt: '2026-04-03T12:00:00.000Z' },
+				next: { href: `/shipments/${part.number}/sign?amend`, isMine: true }
+			}
+		]);
+		await takeDocket(qa, part.number);
+		expect((await listQueue(qa, site.id, asked({ taken: 'me' }))).rows).toHaveLength(1);
+	});
+
 	it('names what comes next, but not what a colleague has taken on', async () => {
 		const { site, make, qa } = await makers();
 		const colleague = await contextAt(site);

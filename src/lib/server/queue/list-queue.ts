@@ -4,18 +4,36 @@ import { findBoardFacts, type BoardFacts } from '../arrivals/board-facts';
 import { boardRow } from '../arrivals/board-row';
 import type { Context } from '../context';
 import { Clock } from '../db/models/clock';
+import { Hold } from '../db/models/hold';
 import { Shipment } from '../db/models/shipment';
 import { User } from '../db/models/user';
 import { authorize } from '../policies';
 import { getOwnSite } from '../shipments/own-site';
 import { runningClock } from './running-clock';
 
-/** Every load that came in and is not decided, of one site. */
+/** Every load of one site that came in and is not decided, or of which a part is still held. */
 async function findWaiting(siteId: string): Promise<Shipment[]> {
+	const here = { siteId, cancelledAt: null };
+	const [undecided, held] = await Promise.all([
+		Shipment.findAll({ where: { ...here, decidedAt: null, arrivedAt: { [Op.not]: null } } }),
+		findPartlyHeld(here)
+	]);
+	return [...undecided, ...held].sort(
+		(a, b) => (a.arrivedAt?.getTime() ?? 0) - (b.arrivedAt?.getTime() ?? 0)
+	);
+}
+
+async function findPartlyHeld(here: { siteId: string; cancelledAt: null }): Promise<Shipment[]> {
+	const open = await Hold.findAll({ where: { liftedAt: null }, attributes: ['shipmentId'] });
 	return Shipment.findAll({
-		where: { siteId, cancelledAt: null, decidedAt: null, arrivedAt: { [Op.not]: null } },
-		order: [['arrivedAt', 'ASC']]
+		where: { ...here, id: open.map((hold) => hold.shipmentId), decidedAt: { [Op.not]: null } }
 	});
+}
+
+/** What is left to do with a load signed in part: to decide what is held, which is an amendment. */
+function nextOf(row: QueueRow['next'], shipment: Shipment): QueueRow['next'] {
+	if (shipment.decidedAt === null) return row;
+	return { ...row, act: 'review', href: `/shipments/${shipment.number}/sign?amend`, isMine: true };
 }
 
 async function findTakers(waiting: readonly Shipment[]): Promise<Map<string, string>> {
@@ -38,7 +56,13 @@ async function queueRows(ctx: Context, waiting: readonly Shipment[], facts: Boar
 			...row,
 			takenBy:
 				shipment.takenBy === null ? null : { id: shipment.takenBy, name: takers.get(shipment.takenBy) ?? '' },
-			clock: runningClock(own, row.life, shipment.arrivedAt)
+			next: nextOf(row.next, shipment),
+			clock: runningClock(
+				own,
+				shipment.decidedAt === null ? row.life : null,
+				shipment.arrivedAt,
+				facts.holds.get(shipment.id) ?? []
+			)
 		};
 	});
 }

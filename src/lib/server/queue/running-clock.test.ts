@@ -36,4 +36,16 @@ describe('the clock of a waiting docket', () => {
 		expect(runningClock([], null, at('04:00'))).toBeNull();
 		expect(runningClock([], life, null)).toBeNull();
 	});
+
+	it('is the hold where what is awaited is due before any other runs out', () => {
+		const hold = { putAt: at('05:00'), untilAt: at('08:00'), awaited: 'a count' };
+		expect(runningClock([refuse], null, at('04:00'), [hold])).toMatchObject({
+			kind: 'hold',
+			startsAt: '2026-04-03T05:00:00.000Z',
+			deadlineAt: '2026-04-03T08:00:00.000Z',
+			basis: 'awaits a count'
+		});
+		const open = { ...hold, untilAt: null };
+		expect(runningClock([refuse], null, at('04:00'), [open])?.kind).toBe('reject');
+	});
 });

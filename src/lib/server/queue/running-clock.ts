@@ -11,6 +11,25 @@ interface OpenClock {
 	deadlineAt: Date;
 }
 
+interface OpenHold {
+	putAt: Date;
+	untilAt: Date | null;
+	awaited: string | null;
+}
+
+/** Until when goods are held for what is awaited. */
+function holdClock({ putAt, untilAt, awaited }: OpenHold): QueueClock[] {
+	if (untilAt === null) return [];
+	return [
+		{
+			kind: 'hold',
+			startsAt: putAt.toISOString(),
+			deadlineAt: untilAt.toISOString(),
+			basis: awaited ? `awaits ${awaited}` : 'held'
+		}
+	];
+}
+
 /** When the low falls under what is needed, if the goods stay at the spec's own temperature from the door on. */
 function lifeClock(life: BoardLife | null, arrivedAt: Date | null): QueueClock | null {
 	if (life === null || arrivedAt === null || life.lowHours < life.neededHours) return null;
@@ -27,7 +46,8 @@ function lifeClock(life: BoardLife | null, arrivedAt: Date | null): QueueClock |
 export function runningClock(
 	open: readonly OpenClock[],
 	life: BoardLife | null,
-	arrivedAt: Date | null
+	arrivedAt: Date | null,
+	holds: readonly OpenHold[] = []
 ): QueueClock | null {
 	const running = open.map(({ basis, noticeId, startsAt, deadlineAt }): QueueClock => ({
 		kind: noticeId === null ? 'reject' : 'notice',
@@ -36,7 +56,7 @@ export function runningClock(
 		basis
 	}));
 	const ofLife = lifeClock(life, arrivedAt);
-	return [...running, ...(ofLife ? [ofLife] : [])].reduce<QueueClock | null>(
+	return [...running, ...(ofLife ? [ofLife] : []), ...holds.flatMap(holdClock)].reduce<QueueClock | null>(
 		(first, clock) => (first === null || clock.deadlineAt < first.deadlineAt ? clock : first),
 		null
 	);

@@ -1,5 +1,6 @@
 import type { Context } from '../context';
 import { inTransaction } from '../db/transaction';
+import { Hold } from '../db/models/hold';
 import { User } from '../db/models/user';
 import { Refusal } from '../refusals';
 import { lockDocket, refuseClosed } from '../shipments/lock-docket';
@@ -11,7 +12,10 @@ import { lockDocket, refuseClosed } from '../shipments/lock-docket';
 export async function takeDocket(ctx: Context, number: string): Promise<void> {
 	await inTransaction(ctx, async ({ transaction, record }) => {
 		const shipment = await lockDocket(ctx, 'disposition.sign', number, transaction);
-		refuseClosed(shipment);
+		// A load signed in part is still reviewed for what is held.
+		const where = { shipmentId: shipment.id, liftedAt: null };
+		if ((await Hold.count({ where, transaction })) === 0) refuseClosed(shipment);
+		if (shipment.cancelledAt) throw new Refusal('cancelled');
 		if (!shipment.arrivedAt) throw new Refusal('not-arrived');
 		if (shipment.takenBy === ctx.actor.id) return;
 		const before = shipment.takenBy === null ? null : await User.findByPk(shipment.takenBy, { transaction });

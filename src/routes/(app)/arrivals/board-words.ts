@@ -1,3 +1,4 @@
+import { partText } from '$lib/messages/en/line-groups';
 import type { MarkKind } from '$lib/components/ui/mark';
 import type { TemperatureUnit } from '$lib/domain/units';
 import { count, duration, lifeDays, temperature, temperatureSign } from '$lib/format';
@@ -26,7 +27,7 @@ export function verdictOf(row: BoardRow): { word: string; mark: MarkKind | null 
 	// Some in, some refused: no tick over a part, its quantities say it.
 	if (row.part)
 		return {
-			word: `${count(row.part.taken, 'en')} in, ${count(row.part.refused, 'en')} refused`,
+			word: partText(row.part).replace(` ${row.part.unit}`, ''),
 			mark: null
 		};
 	return verdicts[row.verdict ?? 'accepted'] ?? { word: 'Done', mark: null };

@@ -1,12 +1,19 @@
 import {
+	conditionKinds,
+	whereaboutsKinds,
+	type ConditionKind,
+	type Whereabouts
+} from '../../../domain/receiving/line-groups';
+import {
 	DataTypes,
 	Model,
+	type CreationOptional,
 	type InferAttributes,
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
 
-/** The outcome of one line in a signed decision. */
+/** The outcome of one line, or of one group of it, in a signed decision. */
 export class DispositionLine extends Model<
 	InferAttributes<DispositionLine>,
 	InferCreationAttributes<DispositionLine>
@@ -14,11 +21,18 @@ export class DispositionLine extends Model<
 	declare id: string;
 	declare dispositionId: string;
 	declare lineId: string;
+	declare ordinal: CreationOptional<number>;
+	declare name: CreationOptional<string>;
 	declare outcome: 'accept' | 'conditions' | 'hold' | 'reject';
 	declare cases: number;
 	declare pallets: number;
 	declare conditionText: string | null;
 	declare reason: string | null;
+	declare conditionKind: ConditionKind | null;
+	declare whereabouts: Whereabouts | null;
+	declare place: string | null;
+	declare awaited: string | null;
+	declare untilAt: Date | null;
 	declare assessmentId: string | null;
 }
 
@@ -33,6 +47,13 @@ export function defineDispositionLine(sequelize: Sequelize): void {
 			pallets: { type: DataTypes.INTEGER, allowNull: false },
 			conditionText: { type: DataTypes.STRING(400), allowNull: true },
 			reason: { type: DataTypes.STRING(400), allowNull: true },
+			ordinal: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 1 },
+			name: { type: DataTypes.STRING(80), allowNull: false, defaultValue: '' },
+			conditionKind: { type: DataTypes.ENUM(...conditionKinds), allowNull: true },
+			whereabouts: { type: DataTypes.ENUM(...whereaboutsKinds), allowNull: true },
+			place: { type: DataTypes.STRING(80), allowNull: true },
+			awaited: { type: DataTypes.STRING(400), allowNull: true },
+			untilAt: { type: DataTypes.DATE(3), allowNull: true },
 			assessmentId: { type: DataTypes.UUID, allowNull: true }
 		},
 		{ sequelize, modelName: 'DispositionLine', tableName: 'disposition_lines' }

@@ -14,6 +14,8 @@ export class Hold extends Model<InferAttributes<Hold>, InferCreationAttributes<H
 	declare putBy: string;
 	declare putAt: Date;
 	declare reason: CreationOptional<string>;
+	declare awaited: string | null;
+	declare untilAt: Date | null;
 	declare liftedBy: string | null;
 	declare liftedAt: Date | null;
 }
@@ -26,6 +28,8 @@ export function defineHold(sequelize: Sequelize): void {
 			putBy: { type: DataTypes.UUID, allowNull: false },
 			putAt: { type: DataTypes.DATE(3), allowNull: false },
 			reason: { type: DataTypes.TEXT, allowNull: false, defaultValue: '' },
+			awaited: { type: DataTypes.STRING(400), allowNull: true },
+			untilAt: { type: DataTypes.DATE(3), allowNull: true },
 			liftedBy: { type: DataTypes.UUID, allowNull: true },
 			liftedAt: { type: DataTypes.DATE(3), allowNull: true }
 		},

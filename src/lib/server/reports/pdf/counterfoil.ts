@@ -1,4 +1,5 @@
 import type { Content } from 'pdfmake/interfaces';
+import { decidedGroups } from '../../../domain/receiving/line-groups';
 import type { DocketLineView } from '../../../schemas/docket';
 import { counterfoilTop, hairline, linesShown, pair } from './counterfoil-parts';
 import type { Draft } from './draft';
@@ -28,19 +29,21 @@ export function firstCounterfoil(draft: Draft): Content[] {
 }
 
 function outcomes(lines: readonly DocketLineView[]): Content[] {
-	const rows = lines.slice(0, linesShown).map((line): Content => {
-		const outcome = line.outcome?.outcome ?? 'hold';
+	const groups = lines.flatMap((line) =>
+		decidedGroups(line).map(({ outcome, cases }) => ({ line, outcome, cases }))
+	);
+	const rows = groups.slice(0, linesShown).map(({ line, outcome, cases }): Content => {
 		const word = outcome === 'conditions' ? 'With conditions' : outcomeWord(outcome);
 		return {
 			columns: [
 				{ ...sentence(String(line.ordinal), { size: sizePoints.table }), width: 11 },
 				{ ...outcomeMark(outcome, 8), width: 14, margin: [0, 1.6, 0, 0] },
-				{ ...words(word, { size: sizePoints.table }), width: '*' }
+				{ ...words(line.groups ? `${word}, ${cases}` : word, { size: sizePoints.table }), width: '*' }
 			],
 			margin: [0, 0.8, 0, 0.8]
 		};
 	});
-	const more = lines.length - linesShown;
+	const more = groups.length - linesShown;
 	return more > 0 ? [...rows, sentence(`and ${more} more, see Dispositions`)] : rows;
 }
 

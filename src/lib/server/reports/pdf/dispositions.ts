@@ -1,5 +1,7 @@
 import type { Content } from 'pdfmake/interfaces';
-import type { DocketLineView } from '../../../schemas/docket';
+import { decidedGroups } from '../../../domain/receiving/line-groups';
+import { conditionWords, groupDetails, placeText } from '../../../messages/en/line-groups';
+import type { DocketLineView, LineOutcomeView } from '../../../schemas/docket';
 import type { Draft } from './draft';
 import { ledger, noteBelow } from './ledger';
 import { outcomeMark, outcomeWord } from './marks';
@@ -25,7 +27,7 @@ export function dispositions(draft: Draft): Content[] {
 			],
 			rows: docket.lines.map(dispositionRow)
 		}),
-		...docket.lines.flatMap(decisionNotes)
+		...docket.lines.flatMap((line) => decisionNotes(line, docket.site.zone))
 	];
 }
 
@@ -35,7 +37,6 @@ function dispositionRow(line: DocketLineView): Content[] {
 	const palletCount = line.outcome?.pallets ?? line.pallets;
 	const pallets = `${palletCount} ${palletCount === 1 ? 'pallet' : 'pallets'}`;
 	const name = line.variety === null ? line.product : `${line.product}, ${line.variety}`;
-	const outcome = line.outcome?.outcome ?? 'hold';
 	const cases = line.outcome?.cases ?? line.casesReceived ?? line.casesAdvised;
 	return [
 		figure(String(line.ordinal)),
@@ -51,13 +52,23 @@ function dispositionRow(line: DocketLineView): Content[] {
 			? sentence('not known')
 			: { stack: [figure(days(life.value), { bold: true }), figure(range, { size: 8 })] },
 		figure(days(line.neededHours)),
-		{
-			columns: [
-				{ ...outcomeMark(outcome, 8.5), width: 14, margin: [0, 1.4, 0, 0] },
-				{ ...words(outcomeWord(outcome), { bold: true }), width: '*' }
-			]
-		}
+		{ stack: outcomesOf(line) }
 	];
+}
+
+/** The outcome of the whole line, or of each group with its cases. */
+function outcomesOf(line: DocketLineView): Content[] {
+	return decidedGroups(line).map(({ outcome, cases }): Content => ({
+		columns: [
+			{ ...outcomeMark(outcome, 8.5), width: 14, margin: [0, 1.4, 0, 0] },
+			{
+				...words(line.groups ? `${outcomeWord(outcome)}, ${decimal(cases, 0)}` : outcomeWord(outcome), {
+					bold: true
+				}),
+				width: '*'
+			}
+		]
+	}));
 }
 
 /** What was decided on, and beside it the papers' count where it differs. */
@@ -75,11 +86,23 @@ function sscc(digits: string): string {
 		: digits;
 }
 
-function decisionNotes(line: DocketLineView): Content[] {
+function decisionNotes(line: DocketLineView, zone: string): Content[] {
+	if (line.groups) return line.groups.map((group) => noteBelow(groupNote(line, group, zone)));
 	if (line.outcome === null) return [];
-	const { condition, reason } = line.outcome;
+	const { condition, conditionKind, reason } = line.outcome;
+	const kind = conditionKind ? conditionWords[conditionKind] : null;
+	const said = [kind, condition].filter(Boolean).join(': ');
+	const where = line.outcome.outcome === 'reject' ? placeText(line.outcome) : '';
 	return [
-		...(condition === null ? [] : [noteBelow(`Condition, line ${line.ordinal}: ${condition}`)]),
-		...(reason === null ? [] : [noteBelow(`Reason, line ${line.ordinal}: ${reason}`)])
+		...(said ? [noteBelow(`Condition, line ${line.ordinal}: ${said}`)] : []),
+		...(reason === null ? [] : [noteBelow(`Reason, line ${line.ordinal}: ${reason}`)]),
+		...(where ? [noteBelow(`Goods of line ${line.ordinal}: ${where}`)] : [])
 	];
+}
+
+/** "Line 1, by the doors: 24 cases, 2 pallets, reject; too warm; returned". */
+function groupNote(line: DocketLineView, group: LineOutcomeView, zone: string): string {
+	const counts = `${decimal(group.cases, 0)} cases, ${decimal(group.pallets, 0)} ${group.pallets === 1 ? 'pallet' : 'pallets'}`;
+	const details = groupDetails(group, zone);
+	return `Line ${line.ordinal}, ${group.name}: ${counts}, ${outcomeWord(group.outcome).toLowerCase()}${details ? `; ${details}` : ''}`;
 }

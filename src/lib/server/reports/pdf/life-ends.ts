@@ -1,5 +1,6 @@
 import type { Content } from 'pdfmake/interfaces';
 import { msPerHour } from '../../../domain/units';
+import { decidedGroups } from '../../../domain/receiving/line-groups';
 import type { DocketLineView } from '../../../schemas/docket';
 import { hairline, linesShown, pair } from './counterfoil-parts';
 import type { Draft } from './draft';
@@ -13,7 +14,9 @@ import { label, sentence } from './type-styles';
  */
 export function lifeEnds(draft: Draft): Content[] {
 	const { docket, thermometer, sheet } = draft;
-	const taken = docket.lines.filter((line) => line.outcome !== null && line.outcome.outcome !== 'reject');
+	const taken = docket.lines.filter((line) =>
+		decidedGroups(line).some(({ outcome }) => outcome !== 'reject')
+	);
 	const rows = taken.flatMap((line) => endOf(draft, line));
 	if (rows.length === 0) return [];
 	const temperatures = [...new Set(taken.map((line) => thermometer.reading(line.referenceCelsius)))];

@@ -2,7 +2,7 @@ import type { ContentSvg } from 'pdfmake/interfaces';
 import type { Outcome } from '../../../domain/receiving/recommendation';
 import type { DocketView, Verdict } from '../../../schemas/docket';
 import { partQuantities } from '../../../domain/receiving/quantities';
-import { count } from '../../../format';
+import { partText } from '../../../messages/en/line-groups';
 import { palette } from './palette';
 
 const tick = '<path d="M5 10.4L8.6 14L15 6.6" fill="none"';
@@ -52,8 +52,7 @@ export function outcomeWord(outcome: Outcome): string {
 export function verdictOf({ verdict, lines }: Pick<DocketView, 'verdict' | 'lines'>): VerdictPrint {
 	if (verdict === null) return { mark: 'hold', word: 'On hold' };
 	if (verdict !== 'part') return verdicts[verdict];
-	const { unit, taken, refused } = partQuantities(lines);
-	return { mark: null, word: `${count(taken, 'en')} ${unit} in, ${count(refused, 'en')} refused` };
+	return { mark: null, word: partText(partQuantities(lines)) };
 }
 
 /** Bollard parted by an indented cut. */

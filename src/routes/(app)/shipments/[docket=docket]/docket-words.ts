@@ -2,7 +2,8 @@ import type { MarkKind } from '$lib/components/ui/mark';
 import type { AssessmentView, DocketView, Verdict } from '$lib/schemas/docket';
 import { partQuantities } from '$lib/domain/receiving/quantities';
 import type { Outcome } from '$lib/domain/receiving/recommendation';
-import { addUp, count, lifeHours } from '$lib/format';
+import { addUp, lifeHours } from '$lib/format';
+import { partText } from '$lib/messages/en/line-groups';
 
 /** Each outcome with its mark and word. */
 export const outcomeWords: Record<Outcome, { mark: MarkKind; word: string }> = {
@@ -27,9 +28,8 @@ const doneVerdicts: Record<Verdict, { mark: MarkKind | null; word: string }> = {
 };
 
 /** "12 pallets in, 4 refused": what a partly taken load comes to, in its own units. */
-export function quantitiesOf(docket: Pick<DocketView, 'lines'>, locale = 'en'): string {
-	const { unit, taken, refused } = partQuantities(docket.lines);
-	return `${count(taken, locale)} ${unit} in, ${count(refused, locale)} refused`;
+export function quantitiesOf(docket: Pick<DocketView, 'lines'>): string {
+	return partText(partQuantities(docket.lines));
 }
 
 export function verdictOf(docket: DocketView): { mark: MarkKind | null; word: string } {

@@ -14,6 +14,7 @@ export function primaryAct(
 	if (docket.stage === 'expected')
 		return may.log ? { href: `${base}/arrival`, word: 'Log the arrival' } : null;
 	if (docket.stage === 'done') {
+		if (docket.hold && may.sign) return { href: `${base}/sign?amend`, word: 'Decide what is held' };
 		const report = docket.signatures.at(-1)?.report;
 		return report
 			? { href: `/api/v1/reports/${report.id}`, word: 'Open the report', isDownload: true }

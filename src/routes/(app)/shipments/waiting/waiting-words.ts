@@ -28,7 +28,8 @@ export function takerOptions({ counts }: QueueView) {
 const acts: Record<QueueClock['kind'], string> = {
 	reject: 'to refuse it',
 	notice: 'to give notice',
-	life: 'of life to spare'
+	life: 'of life to spare',
+	hold: 'of the hold'
 };
 
 /** How long the clock still runs: "4 h 17 min", "2 h 5 min late". */

@@ -9,6 +9,7 @@ import { getDocket } from '$lib/server/dockets/get-docket';
 import { authorize, may } from '$lib/server/policies';
 import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
 import type { Actions, PageServerLoad } from './$types';
+import { askedGroups } from './groups';
 
 export const load: PageServerLoad = async ({ locals, params, url }) => {
 	const ctx = contextOf(locals);
@@ -25,6 +26,7 @@ export const load: PageServerLoad = async ({ locals, params, url }) => {
 		standing,
 		isDock: !may(ctx.actor, 'disposition.sign'),
 		isAmendment,
+		asked: Object.fromEntries(askedGroups(url.searchParams.get('split'))),
 		evidenceSha256: evidenceSha256(docket),
 		signer: { name: ctx.actor.name, title: ctx.actor.title, email: ctx.actor.email },
 		asks: await componentsAsked(ctx),
@@ -53,7 +55,9 @@ export const actions = {
 
 		redirect(
 			303,
-			version === null ? `/shipments/${params.docket}/sign` : `/shipments/${params.docket}#signature`
+			version === null && form.data.meaning === 'review'
+				? `/shipments/${params.docket}/sign`
+				: `/shipments/${params.docket}#signature`
 		);
 	}
 } satisfies Actions;
