@@ -36,56 +36,7 @@ const samples = readdirSync(folder, { withFileTypes: true })
 	.filter((entry) => entry.isFile() && entry.name !== 'README.md')
 	.map((entry) => readFileSync(join(folder, entry.name)));
 
-/** A small seeded generator (mulberry32): a failing case can be run again. */
-function seeded(seed: number): () => number {
-	let a = seed;
-	return () => {
-		a = (a + 0x6d2b79f5) | 0;
-		let t = Math.imul(a ^ (a >>> 15), 1 | a);
-		t = (t + Math.imul(t ^ (t >>> 7), 61 | t)) ^ t;
-		return ((t ^ (t >>> 14)) >>> 0) / 4_294_967_296;
-	};
-}
-
-/** Bytes flipped, cut out, repeated or spliced from another sample. */
-function mutated(random: () => number): Uint8Array {
-	const pick = (): Buffer => samples[Math.floor(random() * samples.length)] ?? Buffer.alloc(0);
-	const at = (bytes: Uint8Array): number => Math.floor(random() * (bytes.length + 1));
-	const source = pick();
-	// Parts of the samples, so that thousands of cases stay quick.
-	let bytes: Uint8Array = source.subarray(0, 200 + Math.floor(random() * 1200));
-	for (let change = 0; change <= random() * 3; change++) {
-		const [p, q] = [at(bytes), at(bytes)].sort((a, b) => a - b);
-		const kind = Math.floor(random() * 5);
-		if (kind === 0) bytes = bytes.slice(0, q);
-		else if (kind === 1) bytes = Buffer.concat([bytes.subarray(0, p), bytes.subarray(q)]);
-		else if (kind === 2) bytes = Buffer.concat([bytes.subarray(0, q), bytes.subarray(p)]);
-		else if (kind === 3) bytes = Buffer.concat([bytes.subarray(0, p), pick().subarray(0, 400)]);
-		else {
-			bytes = Uint8Array.from(bytes);
-			for (let n = 0; n < 4; n++) bytes[at(bytes)] = Math.floor(random() * 256);
-		}
-	}
-	return bytes;
-}
-
 describe('damaged files', () => {
-	it('never throw and never hang: 5,000 mutations end as ok, question or refusal', () => {
-		const random = seeded(20_260_420);
-		const ends: Record<string, number> = { ok: 0, question: 0, refused: 0 };
-		let slowestMs = 0;
-		for (let n = 0; n < 5000; n++) {
-			const bytes = mutated(random);
-			const started = performance.now();
-			const { kind } = readExport(bytes, context);
-			slowestMs = Math.max(slowestMs, performance.now() - started);
-			ends[kind] = (ends[kind] ?? 0) + 1;
-		}
-		expect((ends.ok ?? 0) + (ends.question ?? 0) + (ends.refused ?? 0)).toBe(5000);
-		expect(slowestMs).toBeLessThan(2000);
-		expect(Math.min(ends.ok ?? 0, ends.question ?? 0, ends.refused ?? 0)).toBeGreaterThan(100);
-	}, 60_000);
-
 	it('of random bytes are refused', () => {
 		fc.assert(
 			fc.property(fc.uint8Array({ minLength: 0, maxLength: 2000 }), (bytes) => {
