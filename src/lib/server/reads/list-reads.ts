@@ -1,8 +1,10 @@
+import type { ReadContext } from '../../domain/ingest/ingestion';
 import type { ReadRowView } from '../../schemas/read';
 import type { Context } from '../context';
 import { LoggerRead } from '../db/models/logger-read';
 import { Site } from '../db/models/site';
 import { getShipmentFor, isSigned } from './find-read';
+import { readContextOf } from './read-context';
 import { readRowView } from './views';
 
 /** A docket's reads for the page where more are uploaded. */
@@ -10,6 +12,8 @@ export interface DocketReads {
 	docket: { number: string; title: string; isSigned: boolean };
 	zone: string;
 	reads: ReadRowView[];
+	/** What a file uploaded now is read by. */
+	context: ReadContext;
 }
 
 /** The reads of a docket, newest first; those withdrawn stay visible. */
@@ -28,6 +32,7 @@ export async function listReads(ctx: Context, number: string): Promise<DocketRea
 	return {
 		docket: { number, title: shipment.title, isSigned: await isSigned(shipment.id) },
 		zone: site?.zone ?? 'UTC',
-		reads
+		reads,
+		context: await readContextOf(shipment, ctx.now, {})
 	};
 }

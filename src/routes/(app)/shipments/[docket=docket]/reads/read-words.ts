@@ -1,5 +1,6 @@
 import type { MarkKind } from '$lib/components/ui/mark';
 import { duration } from '$lib/format';
+import { dayTime, isoDay, time, zoneName } from '$lib/format-time';
 import type { ReadState } from '$lib/schemas/read';
 
 /** Each state's mark and word; kept is present, not accepted. */
@@ -40,3 +41,10 @@ export const quantityWords = {
 	shock: 'shock',
 	other: 'other'
 } as const;
+
+/** From the first reading to the last; the day once where it is one day. */
+export function spanWords(firstMs: number, lastMs: number, zone: string): string {
+	const isOneDay = isoDay(firstMs, zone) === isoDay(lastMs, zone);
+	const last = isOneDay ? time(lastMs, zone) : dayTime(lastMs, zone, 'en');
+	return `${dayTime(firstMs, zone, 'en')} to ${last} ${zoneName(lastMs, zone)}`;
+}

@@ -1,4 +1,3 @@
-import { v7 as uuid } from 'uuid';
 import type { UploadAnswer } from '$lib/schemas/read';
 
 /** A file on its way: how far it is, and what came back. */
@@ -7,38 +6,50 @@ export interface Sending {
 	stop: () => void;
 }
 
+/** Why a file did not arrive: the network may come back, a refusal stays, a person stopped it. */
+export type NotSentReason = 'network' | 'refused' | 'stopped';
+
 /** What the server refused, or the network. */
 export class NotSent extends Error {
 	override readonly name = 'NotSent';
+	constructor(
+		message: string,
+		readonly reason: NotSentReason
+	) {
+		super(message);
+	}
 }
 
+/** Sends one export. */
+export type Send = (file: File, id: string, onprogress: (fraction: number) => void) => Sending;
+
+/** A server that restarts, or a proxy before it, answers so; the file can go again. */
+const passing = new Set([0, 408, 502, 503, 504]);
+
 /**
- * Sends one export with the progress that `fetch` does not report. Its id is made here, so that sending it again after
- * the network failed in the answer is harmless.
+ * Sends exports to one address, with the progress that `fetch` does not report. The id is the sender's, so that
+ * sending a file again after the network failed in the answer is harmless.
  */
-export function sendFile(
-	url: string,
-	file: File,
-	onprogress: (fraction: number) => void,
-	id: string = uuid()
-): Sending {
-	const request = new XMLHttpRequest();
-	const form = new FormData();
-	form.append('id', id);
-	form.append('files', file);
-	const answer = new Promise<UploadAnswer>((resolve, reject) => {
-		request.upload.onprogress = ({ loaded, total }) => onprogress(total > 0 ? loaded / total : 0);
-		request.onload = () => {
-			if (request.status === 200) resolve(JSON.parse(request.responseText) as UploadAnswer);
-			else reject(new NotSent(sentenceOf(request.responseText)));
-		};
-		request.onerror = () =>
-			reject(new NotSent('The network broke off. Nothing is lost; send the file again.'));
-		request.onabort = () => reject(new NotSent('Stopped. Nothing was kept.'));
-		request.open('POST', url);
-		request.send(form);
-	});
-	return { answer, stop: () => request.abort() };
+export function sender(url: string): Send {
+	return (file, id, onprogress) => {
+		const request = new XMLHttpRequest();
+		const form = new FormData();
+		form.append('id', id);
+		form.append('files', file);
+		const answer = new Promise<UploadAnswer>((resolve, reject) => {
+			const fail = (text: string, reason: NotSentReason) => reject(new NotSent(text, reason));
+			request.upload.onprogress = ({ loaded, total }) => onprogress(total > 0 ? loaded / total : 0);
+			request.onload = () => {
+				if (request.status === 200) resolve(JSON.parse(request.responseText) as UploadAnswer);
+				else fail(sentenceOf(request.responseText), passing.has(request.status) ? 'network' : 'refused');
+			};
+			request.onerror = () => fail('The network broke off. Nothing is lost.', 'network');
+			request.onabort = () => fail('Stopped. Nothing was kept.', 'stopped');
+			request.open('POST', url);
+			request.send(form);
+		});
+		return { answer, stop: () => request.abort() };
+	};
 }
 
 function sentenceOf(text: string): string {
