@@ -7,6 +7,7 @@ import type {
 	RefusalCode,
 	Understanding
 } from '../domain/ingest/ingestion';
+import type { AssessInput } from '../domain/receiving/assessment';
 import { placements, type Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
 import type { LayoutView } from './layout';
@@ -127,3 +128,27 @@ export const accuracyNeeded =
 export const withdrawForm = z.object({
 	reason: neededText(300, 'Say why the read is withdrawn.')
 });
+
+/** A line of the docket with what its life is worked out by. */
+export interface DeviceLine extends Pick<AssessInput, 'spec' | 'opening' | 'handovers'> {
+	id: string;
+	name: string;
+	compartmentId: string | null;
+	neededHours: number;
+}
+
+/** A logger that is still expected on the load. */
+export interface DeviceLogger {
+	serial: string;
+	accuracyCelsius: number;
+	placement: Placement;
+	/** Null: it rode for all lines of its compartment. */
+	lineId: string | null;
+	compartmentId: string | null;
+}
+
+/** What the dock's device assesses a file by, before it is sent. */
+export interface DeviceInputs {
+	lines: DeviceLine[];
+	loggers: DeviceLogger[];
+}

@@ -99,7 +99,8 @@ export function openingOf(line: ShipmentLine): OpeningBalance {
 	return { kind: 'undeclared' };
 }
 
-function domainHandover(row: HandoverRow): Handover {
+/** A handover as the engine takes it. */
+export function domainHandover(row: HandoverRow): Handover {
 	return {
 		id: row.id,
 		holder: row.holder,

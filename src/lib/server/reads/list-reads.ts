@@ -1,8 +1,9 @@
 import type { ReadContext } from '../../domain/ingest/ingestion';
-import type { ReadRowView } from '../../schemas/read';
+import type { DeviceInputs, ReadRowView } from '../../schemas/read';
 import type { Context } from '../context';
 import { LoggerRead } from '../db/models/logger-read';
 import { Site } from '../db/models/site';
+import { deviceInputs } from './device-inputs';
 import { getShipmentFor, isSigned } from './find-read';
 import { readContextOf } from './read-context';
 import { readRowView } from './views';
@@ -14,6 +15,8 @@ export interface DocketReads {
 	reads: ReadRowView[];
 	/** What a file uploaded now is read by. */
 	context: ReadContext;
+	/** What it is assessed by, on the device that holds it. */
+	inputs: DeviceInputs;
 }
 
 /** The reads of a docket, newest first; those withdrawn stay visible. */
@@ -33,6 +36,7 @@ export async function listReads(ctx: Context, number: string): Promise<DocketRea
 		docket: { number, title: shipment.title, isSigned: await isSigned(shipment.id) },
 		zone: site?.zone ?? 'UTC',
 		reads,
-		context: await readContextOf(shipment, ctx.now, {})
+		context: await readContextOf(shipment, ctx.now, {}),
+		inputs: await deviceInputs(ctx, shipment)
 	};
 }

@@ -1,5 +1,7 @@
 import type { Ingestion, Oddity, Question, ReadContext, RefusalCode } from '$lib/domain/ingest/ingestion';
 import type { Quantity } from '$lib/domain/trace/trace';
+import type { DeviceInputs } from '$lib/schemas/read';
+import { assessHere, type LifeHere } from './assess-here';
 
 /** What this device made of a file before it was sent: the same as the server will, without the readings. */
 export type Glance =
@@ -11,6 +13,8 @@ export type Glance =
 			usualIntervalMs: number;
 			channels: readonly GlanceChannel[];
 			oddities: readonly Oddity[];
+			/** Life left of the lines its logger rode with; none where that is not known yet. */
+			lives: readonly LifeHere[];
 	  }
 	| { kind: 'question'; question: Question }
 	| { kind: 'refused'; code: RefusalCode; line: number | null; found: string | null };
@@ -30,6 +34,7 @@ export interface GlanceOrder {
 	id: string;
 	file: File;
 	context: ReadContext;
+	inputs: DeviceInputs;
 }
 export interface GlanceAnswer {
 	id: string;
@@ -38,7 +43,7 @@ export interface GlanceAnswer {
 }
 
 /** What is worth showing of a reading at once; its readings stay behind. */
-export function glanceOf(ingestion: Ingestion): Glance {
+export function glanceOf(ingestion: Ingestion, inputs: DeviceInputs): Glance {
 	if (ingestion.kind === 'question') return { kind: 'question', question: ingestion.question };
 	if (ingestion.kind === 'refused') return ingestion;
 	const { readings, firstMs, lastMs, usualIntervalMs, oddities, channels, temperature } =
@@ -50,6 +55,7 @@ export function glanceOf(ingestion: Ingestion): Glance {
 		lastMs,
 		usualIntervalMs,
 		oddities,
+		lives: assessHere(ingestion.understanding, inputs),
 		channels: channels.map((channel, at) => ({
 			name: channel.name,
 			quantity: channel.quantity,

@@ -1,9 +1,10 @@
 import { readExport } from '$lib/domain/ingest/read-export';
 import { glanceOf, type GlanceAnswer, type GlanceOrder } from './file-glance';
 
-async function answerTo({ id, file, context }: GlanceOrder): Promise<GlanceAnswer> {
+async function answerTo({ id, file, context, inputs }: GlanceOrder): Promise<GlanceAnswer> {
 	try {
-		return { id, glance: glanceOf(readExport(new Uint8Array(await file.arrayBuffer()), context)) };
+		const bytes = new Uint8Array(await file.arrayBuffer());
+		return { id, glance: glanceOf(readExport(bytes, context), inputs) };
 	} catch {
 		// The server reads it anyway, and says what there is to say.
 		return { id, glance: null };

@@ -1,4 +1,5 @@
 import type { ReadContext } from '$lib/domain/ingest/ingestion';
+import type { DeviceInputs } from '$lib/schemas/read';
 import type { Glance, GlanceAnswer, GlanceOrder } from './file-glance';
 
 /** Reads files on this device, beside the page. */
@@ -12,7 +13,7 @@ export interface DeviceReader {
 const longestMs = 20_000;
 
 /** The reader, in a thread of its own; an old browser without one reads nothing beforehand. */
-export function deviceReader(contextNow: () => ReadContext): DeviceReader {
+export function deviceReader(inputs: DeviceInputs, contextNow: () => ReadContext): DeviceReader {
 	const waiting = new Map<string, (glance: Glance | null) => void>();
 	const worker = startWorker();
 	const giveUp = () => {
@@ -31,7 +32,7 @@ export function deviceReader(contextNow: () => ReadContext): DeviceReader {
 				waiting.set(id, resolve);
 				setTimeout(() => resolve(null), longestMs);
 			});
-			worker.postMessage({ id, file, context: contextNow() } satisfies GlanceOrder);
+			worker.postMessage({ id, file, inputs, context: contextNow() } satisfies GlanceOrder);
 			return answer;
 		},
 		end: () => {

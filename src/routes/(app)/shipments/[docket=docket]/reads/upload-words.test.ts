@@ -14,7 +14,10 @@ const context = {
 	answers: {}
 };
 const lines = (text: string) =>
-	glanceLines(glanceOf(readExport(new TextEncoder().encode(text), context)), eyes);
+	glanceLines(
+		glanceOf(readExport(new TextEncoder().encode(text), context), { lines: [], loggers: [] }),
+		eyes
+	);
 type Standing = Pick<UploadItem, 'step' | 'read'>;
 const read = (state: string, isDuplicate = false) =>
 	({ state, isDuplicate }) as NonNullable<UploadItem['read']>;
@@ -30,6 +33,21 @@ describe('what this device says of a file before it is sent', () => {
 			'RH %: humidity, 5 values',
 			expect.stringMatching(/^1 gap of 1 h/)
 		]);
+	});
+
+	it('is the life that would be left, with its range and what is needed', () => {
+		const life = {
+			serial: 'WH-1',
+			line: 'Line 1',
+			remainingHours: { value: 130, low: 120, high: 139 },
+			neededHours: 144,
+			excursions: 1,
+			hasStop: false
+		};
+		const found = { kind: 'ok', readings: 2, firstMs: 0, lastMs: 0, usualIntervalMs: 60_000 } as const;
+		expect(glanceLines({ ...found, channels: [], oddities: [], lives: [life] }, eyes)[1]).toBe(
+			'Line 1, by logger WH-1: life left 5.4 d (5.0–5.8), short of the 6.0 d needed, 1 excursion'
+		);
 	});
 
 	it('is its question, or why it cannot be read', () => {

@@ -1,7 +1,8 @@
 import type { MarkKind } from '$lib/components/ui/mark';
 import type { TemperatureUnit } from '$lib/domain/units';
-import { count, counted, temperature, temperatureSign } from '$lib/format';
+import { count, counted, lifeDays, range, temperature, temperatureSign } from '$lib/format';
 import { questionText, refusalText, oddityText } from '$lib/messages/en/ingest';
+import type { LifeHere } from './assess-here';
 import type { Glance } from './file-glance';
 import { everyWords, quantityWords, readStateWords, spanWords } from './read-words';
 import type { UploadItem } from './upload-queue.svelte';
@@ -29,7 +30,7 @@ export function standingOf({ step, read }: Pick<UploadItem, 'step' | 'read'>): {
 export function glanceLines(glance: Glance, { zone, unit }: Eyes): string[] {
 	if (glance.kind === 'refused') return [refusalText(glance.code, glance)];
 	if (glance.kind === 'question') return [`Will ask: ${questionText(glance.question).title}`];
-	const { readings, firstMs, lastMs, usualIntervalMs, channels, oddities } = glance;
+	const { readings, firstMs, lastMs, usualIntervalMs, channels, oddities, lives } = glance;
 	const degrees = (celsius: number | null) => (celsius === null ? '–' : temperature(celsius, unit, 'en'));
 	const inWords = channels.map(({ name, quantity, minCelsius, maxCelsius, isAssessed, readings: all }) =>
 		quantity === 'temperature'
@@ -38,9 +39,21 @@ export function glanceLines(glance: Glance, { zone, unit }: Eyes): string[] {
 	);
 	return [
 		`${counted(readings, 'reading')}, every ${everyWords(usualIntervalMs)}, ${spanWords(firstMs, lastMs, zone)}`,
+		...lives.map(lifeWords),
 		...inWords,
 		...oddities.map(oddityText)
 	];
+}
+
+/** Life left as this device works it out; the server says the same once the read is kept. */
+function lifeWords({ serial, line, remainingHours, neededHours, excursions, hasStop }: LifeHere): string {
+	const { value, low, high } = remainingHours;
+	const isShort = low < neededHours;
+	const need = `${isShort ? 'short of' : 'meets'} the ${lifeDays(neededHours, 'en')} d needed`;
+	const found = excursions === 0 ? '' : `, ${counted(excursions, 'excursion')}`;
+	const stop = hasStop ? ', a stop was passed' : '';
+	const figures = `${lifeDays(value, 'en')} d (${range(lifeDays(low, 'en'), lifeDays(high, 'en'))})`;
+	return `${line}, by logger ${serial}: life left ${figures}, ${need}${found}${stop}`;
 }
 
 /** What has become of all of them: "8 of 10 sent. 1 asks a question. 1 cannot be read." */
