@@ -106,7 +106,6 @@ test('a broken network keeps a file back and loses nothing', async ({ pageOf }) 
 		{ name: 'second.csv', mimeType: 'text/csv', buffer: Buffer.concat([buffer, Buffer.from('\n')]) }
 	]);
 	await expect(page.getByText('2 wait for the network.')).toBeVisible();
-	await expect(page.getByText(/4 readings, every 10 min/).first()).toBeVisible();
 	await page.context().setOffline(false);
 	await expect(page.getByText(/^2 of 2 files sent\./)).toBeVisible();
 });
