@@ -1,5 +1,12 @@
 import { describe, expect, it } from 'vitest';
-import { buildContact, testNow, testPassword } from '../../../../tests/helpers/factories';
+import {
+	buildContact,
+	buildSite,
+	buildUser,
+	contextFor,
+	testNow,
+	testPassword
+} from '../../../../tests/helpers/factories';
 import { arrivedDocket, signed } from '../../../../tests/helpers/sealed-docket';
 import { useTestDatabase } from '../../../../tests/helpers/test-database';
 import { dispositionSchema } from '../../schemas/disposition';
@@ -9,12 +16,14 @@ import { verifyChain } from '../audit/verify';
 import { Disposition } from '../db/models/disposition';
 import { Hold } from '../db/models/hold';
 import { LineGroup } from '../db/models/line-group';
+import { Notice } from '../db/models/notice';
 import { Shipment } from '../db/models/shipment';
 import { getDocket } from '../dockets/get-docket';
 import { supplierFacts } from '../notices/supplier-facts';
 import { noticeMail } from '../notices/notice-mail';
 import { frozenDocketOf } from '../reports/frozen-docket';
 import { evidenceSha256 } from './freeze';
+import { getVersion } from './get-version';
 import { signDisposition } from './sign-disposition';
 
 useTestDatabase();
@@ -127,6 +136,24 @@ describe('a line decided by groups', () => {
 		await expect(signing).rejects.toMatchObject({ code: 'invalid', message: expect.stringContaining(words) });
 		expect(await Disposition.count({ where: { shipmentId: shipment.id } })).toBe(0);
 		expect(await LineGroup.count({ where: { lineId: lines.map(({ id }) => id) } })).toBe(0);
+	});
+
+	it('tells whoever was notified of the amendment, and keeps the old version to be seen', async () => {
+		const { ctx, number, shipment, decide } = await splitLoad();
+		await signDisposition(ctx, number, await decide([inStore, refused, held], { notify: 'on' }));
+		await signDisposition(
+			ctx,
+			number,
+			await decide([{ outcome: 'accept' }], { amendmentReason: 'The count is in' })
+		);
+		expect(await Notice.count({ where: { shipmentId: shipment.id } })).toBe(2);
+		const first = await getVersion(ctx, number, 1);
+		expect(first.lines[0]?.groups).toHaveLength(3);
+		expect(first.signatures.map(({ version }) => version)).toEqual([1]);
+		expect((await getVersion(ctx, number, 2)).lines[0]?.outcome).toMatchObject({ outcome: 'accept' });
+		await expect(getVersion(ctx, number, 3)).rejects.toMatchObject({ code: 'not-found' });
+		const stranger = await contextFor(await buildUser(['qa'], { sites: [await buildSite()] }));
+		await expect(getVersion(stranger, number, 1)).rejects.toMatchObject({ code: 'not-found' });
 	});
 
 	it('is decided later by an amendment, which ends the hold', async () => {

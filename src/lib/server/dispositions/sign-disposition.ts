@@ -184,7 +184,8 @@ export async function signDisposition(
 			}
 		);
 		w.enqueue('report', { dispositionId }, `report ${dispositionId}`);
-		if (input.notify) await queueNotice(w, ctx, shipment, dispositionId);
+		// Whoever was told of an earlier version hears of the new one.
+		if (input.notify || docket.notices.length > 0) await queueNotice(w, ctx, shipment, dispositionId);
 		return { version: signature.version };
 	});
 }

@@ -13,6 +13,8 @@ export interface NoticeFacts {
 	contactName: string;
 	link: string;
 	hasReport: boolean;
+	/** Of a new version: what it changes and why. */
+	amended?: { version: number; reason: string; changes: readonly string[] } | null;
 }
 
 const locale = 'en';
@@ -51,9 +53,14 @@ function byInstant(at: string, zone: string): string {
 }
 
 /** The outcome in quantities, and by when an answer is asked for. */
-export function noticeSubject({ docket, answerByAt }: Pick<NoticeFacts, 'docket' | 'answerByAt'>): string {
+export function noticeSubject({
+	docket,
+	answerByAt,
+	amended
+}: Pick<NoticeFacts, 'docket' | 'answerByAt' | 'amended'>): string {
 	const answer = answerByAt ? `; answer by ${dayTime(answerByAt, docket.zone, locale)}` : '';
-	return `Your load ${docket.number}: ${quantities(docket)}${answer}`;
+	const kind = amended ? `Amended, version ${amended.version}: your load` : 'Your load';
+	return `${kind} ${docket.number}: ${quantities(docket)}${answer}`;
 }
 
 function extremeFact(
@@ -93,6 +100,16 @@ function outcomesOf(line: Line, zone: string): MailContent['outcomes'] {
 	return line.groups.map((group) => row(group.outcome, group.cases, groupDetails(group, zone), group.name));
 }
 
+/** That an earlier notice no longer holds, and in what. */
+function amendmentParagraphs({ amended }: NoticeFacts): string[] {
+	if (!amended) return [];
+	const { version, reason, changes } = amended;
+	const what = changes.length > 0 ? changes.join(' ') : 'The outcomes stay as they were.';
+	return [
+		`the decision on this load has been amended: version ${version} replaces the one you were told of. ${what}${reason ? ` Reason: ${reason}` : ''}`
+	];
+}
+
 function contentOf(facts: NoticeFacts): MailContent {
 	const { docket, noticeNumber, answerByAt, contactName, link, hasReport } = facts;
 	const times = docket.excursions.length === 1 ? 'once' : `${docket.excursions.length} times`;
@@ -106,6 +123,7 @@ function contentOf(facts: NoticeFacts): MailContent {
 		title: refused ? 'Goods of your load were refused' : 'Excursions on your load',
 		greeting: `Dear ${contactName},`,
 		paragraphs: [
+			...amendmentParagraphs(facts),
 			...(refused
 				? ['Please tell us today what becomes of the refused goods: collection, release to us, or disposal.']
 				: []),

@@ -11,7 +11,9 @@ import { sendMail } from '../mail/send-mail';
 import { frozenDocketOf } from '../reports/frozen-docket';
 import { ensureReport } from '../reports/make-report';
 import { fileStore } from '../storage/store';
-import { noticeMail } from './notice-mail';
+import type { FrozenDocket } from '../../schemas/docket';
+import { amendedLines } from './amended-lines';
+import { noticeMail, type NoticeFacts } from './notice-mail';
 import { supplierFacts } from './supplier-facts';
 
 const linkValidMs = 30 * 24 * 3_600_000;
@@ -24,6 +26,15 @@ async function attachmentOf(ctx: Context, dispositionId: string) {
 		content: await (await fileStore()).read(file.sha256),
 		contentType: file.mediaType
 	};
+}
+
+/** What a new version changes against the one before, and why; null for a first version. */
+async function amendmentOf(disposition: Disposition, frozen: FrozenDocket): Promise<NoticeFacts['amended']> {
+	const { shipmentId, version, amendmentReason } = disposition;
+	const before = await Disposition.findOne({ where: { shipmentId, version: version - 1 } });
+	if (!before) return null;
+	const changes = amendedLines(frozenDocketOf(before).docket.lines, frozen.docket.lines);
+	return { version, reason: amendmentReason ?? '', changes };
 }
 
 /** Mails a notice with a fresh link and the sealed report. Done once it is sent; a crash before that sends it again. */
@@ -40,14 +51,16 @@ export async function sendNotice(ctx: Context, noticeId: string): Promise<void> 
 		{ kind: 'notice', contactId: contact.id, shipmentId: notice.shipmentId, noticeId, validMs: linkValidMs },
 		ctx.now
 	);
-	const docket = supplierFacts(frozenDocketOf(disposition));
+	const frozen = frozenDocketOf(disposition);
+	const docket = supplierFacts(frozen);
 	const { subject, html, text } = noticeMail({
 		docket,
 		noticeNumber: notice.number,
 		answerByAt: notice.answerByAt?.toISOString() ?? null,
 		contactName: contact.name,
 		link: `${env().origin}/link/${secret}`,
-		hasReport: true
+		hasReport: true,
+		amended: await amendmentOf(disposition, frozen)
 	});
 	const messageId = `<${noticeId}@${new URL(env().origin).hostname}>`;
 	await sendMail({

@@ -16,6 +16,7 @@ import { Clock } from '../db/models/clock';
 import { Hold } from '../db/models/hold';
 import { Shipment } from '../db/models/shipment';
 import type { Site } from '../db/models/site';
+import { findTaker } from './find-taker';
 import { findNextWaiting, listQueue } from './list-queue';
 import { handBackDocket, takeDocket } from './take-docket';
 
@@ -131,6 +132,8 @@ describe('taking a docket on', () => {
 		await takeDocket(qa, docket.number);
 		await takeDocket(qa, docket.number);
 		await takeDocket(colleague, docket.number);
+		expect(await findTaker(qa, docket.number)).toMatchObject({ name: colleague.actor.name, isOwn: false });
+		expect(await findTaker(colleague, docket.number)).toMatchObject({ isOwn: true });
 		await handBackDocket(qa, docket.number);
 		expect((await Shipment.findByPk(docket.id))?.takenBy).toBe(colleague.actor.id);
 		await handBackDocket(colleague, docket.number);
