@@ -85,6 +85,15 @@ function isWritten(ms: number, groups: ReadonlySet<number>, hasWords: boolean): 
 const isEpoch = (ms: number, values: readonly number[]): boolean =>
 	values.some((value) => [1000, 1, 0.001].some((factor) => Math.abs(value * factor - ms) <= 1));
 
+const blankFirst = /^[\s"]*[,;\t|]/;
+
+/** A date may be written once and left blank below: what stands on the last line above that has one. */
+function dateAbove(rows: readonly string[], line: number): Set<number> {
+	let at = line - 1;
+	while (at > 0 && blankFirst.test(rows[at] ?? '')) at--;
+	return at === line - 1 ? new Set() : groupsIn(rows[at] ?? '');
+}
+
 /** What a reading lacks in its file; null when it stands there. */
 export function lacking(bytes: Buffer, understanding: Understanding): string | null {
 	const { layout, channels, temperature, declared } = understanding;
@@ -108,7 +117,7 @@ export function lacking(bytes: Buffer, understanding: Understanding): string | n
 		if (!isSummed && !values.some((written) => Math.abs(written - value) <= 0.000_051))
 			return `line ${line}: no ${value} in ${JSON.stringify(row.slice(0, 200))}`;
 		const ms = trace.times[i] ?? NaN;
-		const groups = whole?.groups ?? groupsIn(row);
+		const groups = whole?.groups ?? new Set([...groupsIn(row), ...dateAbove(rows, line)]);
 		if (!isRunning && !isEpoch(ms, values) && !isWritten(ms, groups, /\p{L}/u.test(row)))
 			return `line ${line}: no ${new Date(ms).toISOString()} in ${JSON.stringify(row.slice(0, 200))}`;
 	}

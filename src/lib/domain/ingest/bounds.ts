@@ -6,5 +6,9 @@ export const maxLineChars = 64 * 1024;
 export const maxJsonDepth = 64;
 /** Brackets, commas and colons of a JSON text: two to three for each cell of a reading. */
 export const maxJsonValues = 20_000_000;
+/** Cells of a row, or sensors of a file: a column for each minute of a day is the widest table there is. */
+export const maxColumns = 2048;
+/** Rows times columns: 50 MB of text hold a quarter of it where each cell stands in the file. */
+export const maxCells = 100_000_000;
 /** Values with more decimals are rounded to these: no logger resolves 0.0001 °C. */
 export const maxDecimals = 4;

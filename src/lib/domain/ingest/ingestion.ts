@@ -272,6 +272,7 @@ export type RefusalCode =
 	| 'implausible-dates'
 	| 'too-deep'
 	| 'line-too-long'
+	| 'too-many-columns'
 	| 'too-many-readings';
 
 /** What a read can be: nothing else. */

@@ -129,6 +129,7 @@ describe('a refusal', () => {
 		'unclosed-quote',
 		'too-deep',
 		'line-too-long',
+		'too-many-columns',
 		'too-many-readings'
 	];
 

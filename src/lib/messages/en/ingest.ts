@@ -54,6 +54,8 @@ const refusals: Readonly<Record<RefusalCode, (facts: RefusalFacts) => string>> =
 		`The dates cannot be right${found === null ? '' : `: the first reads ${found}`}${at({ line, found })}. Set the logger’s clock and export again.`,
 	'too-deep': (facts) => `The JSON is nested too deeply${at(facts)} to hold readings.`,
 	'line-too-long': (facts) => `A single line is longer than 64 KB${at(facts)}. This is no table of readings.`,
+	'too-many-columns': (facts) =>
+		`There are more than 2,048 columns or sensors${at(facts)}. Export fewer at a time and upload that.`,
 	'too-many-readings': () =>
 		'The file holds more than 5,000,000 readings. Export a shorter period and upload that.'
 };

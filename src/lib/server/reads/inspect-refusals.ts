@@ -26,7 +26,8 @@ const codes: Readonly<Record<RefusalCode, InspectRefusalCode>> = {
 	'two-recordings': 'two-recordings',
 	'implausible-dates': 'implausible-dates',
 	'too-deep': 'too-deep',
-	'line-too-long': 'line-too-long'
+	'line-too-long': 'line-too-long',
+	'too-many-columns': 'line-too-long'
 };
 
 /** The published code of a refusal. */

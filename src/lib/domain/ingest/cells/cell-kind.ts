@@ -4,6 +4,8 @@ import { emptyNumber, scanNumber } from './number-text';
 
 export type CellKind = 'blank' | 'missing' | 'number' | 'moment' | 'date' | 'time' | 'text';
 
+/** No figure and no moment is written this long. */
+const longestKnown = 200;
 const stamp = emptyStamp();
 const number = emptyNumber();
 
@@ -11,6 +13,7 @@ const number = emptyNumber();
 export function cellKindOf(cell: string): CellKind {
 	const bare = cell.trim();
 	if (bare === '') return 'blank';
+	if (bare.length > longestKnown) return 'text';
 	const state = scanNumber(bare, number);
 	// 20240301103000 and 20240301 are numbers too; whether they are dates only a column can tell.
 	if (state === 'number')

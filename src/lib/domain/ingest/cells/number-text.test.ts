@@ -68,6 +68,10 @@ describe('a cell read as a number', () => {
 		'2026-04-01',
 		'4.5 apples',
 		'1,23,4',
+		// A raised digit is a footnote's, and no decimal.
+		'1.³',
+		'4.5²',
+		'½',
 		'12345678901234567890'
 	])('%j is text, not a number', (text) => {
 		expect(scanned(text)).toBe('text');

@@ -107,8 +107,12 @@ const flagged = new RegExp(
 	'i'
 );
 
+/** A raised, lowered or circled digit that no letter stands before (m²) is a footnote, not a figure. */
+const footnote = /(?<!\p{L})\p{No}/u;
+
 /** The figure of a cell that is written in an unusual way, as others would write it; null when it holds none. */
 function plainFigure(text: string): string | null {
+	if (footnote.test(text)) return null;
 	const bare = text
 		.normalize('NFKC')
 		.trim()

@@ -8,6 +8,9 @@ export interface RowShape {
 	readonly texts: number;
 }
 
+/** Cells that tell what a row is made of; those behind them are more of the same. */
+const mostCellsForShape = 512;
+
 /** What kinds of cells a row is made of. */
 export function shapeOf(cells: readonly string[]): RowShape {
 	let width = cells.length;
@@ -15,7 +18,7 @@ export function shapeOf(cells: readonly string[]): RowShape {
 	let values = 0;
 	let texts = 0;
 	let hasMoment = false;
-	for (const cell of cells) {
+	for (const cell of cells.length > mostCellsForShape ? cells.slice(0, mostCellsForShape) : cells) {
 		const kind: CellKind = cellKindOf(cell);
 		const isEpoch = kind === 'number' && epochUnitOf(Number(cell)) !== null;
 		if (kind === 'moment' || kind === 'date' || kind === 'time' || isEpoch) hasMoment = true;

@@ -1,4 +1,4 @@
-import { maxLineChars, maxReadings } from '../bounds';
+import { maxColumns, maxLineChars, maxReadings } from '../bounds';
 import type { RefusalCode } from '../ingestion';
 import { reshaped } from '../layout/reshape';
 import type { Sections, Table } from '../layout/table';
@@ -32,6 +32,9 @@ export interface Rows {
 }
 
 const sampledLines = 300;
+/** Of long lines fewer are sampled; they hold more cells each. */
+const sampledChars = 400_000;
+const fewestSampled = 24;
 /** Preamble, heads and footer stand beside as many readings as are taken. */
 const mostLinesBeside = 1000;
 /** A quoted cell that runs over more lines than this was never closed. */
@@ -67,6 +70,16 @@ function joinQuoted(text: string, lines: Lines, delimiter: Delimiter): Spans | {
 	return { count, starts: starts.subarray(0, count), ends: ends.subarray(0, count), lines: first };
 }
 
+function sampleSize(text: string, lines: Lines): number {
+	const usualChars = Math.max(1, text.length / Math.max(1, lines.count));
+	return Math.round(Math.min(sampledLines, Math.max(fewestSampled, sampledChars / usualChars)));
+}
+
+/** The first of a few rows that is wider than any table; −1 where none is. */
+function wideRow({ count }: Spans, split: (row: number) => readonly string[]): number {
+	return sampleIndexes(count, fewestSampled).find((row) => split(row).length > maxColumns) ?? -1;
+}
+
 /** Some programs quote with apostrophes: for splitting they are read as quotes. */
 function withPlainQuotes(text: string, sample: readonly string[]): string {
 	const quoted = sample.filter((line) => /^'[^']*'\s*[,;|\t]/.test(line)).length;
@@ -85,8 +98,9 @@ export function tableFromText(original: string): TableOrRefusal {
 		};
 	if (lines.count > maxReadings + mostLinesBeside)
 		return { code: 'too-many-readings', line: null, found: String(lines.count) };
+	const wanted = sampleSize(original, lines);
 	const sampled = (from: string): string[] =>
-		sampleIndexes(lines.count, sampledLines)
+		sampleIndexes(lines.count, wanted)
 			.map((i) => from.slice(lines.starts[i], lines.ends[i]))
 			.filter((line) => line.trim() !== '');
 	const text = withPlainQuotes(original, sampled(original));
@@ -101,6 +115,8 @@ export function tableFromText(original: string): TableOrRefusal {
 	const spanOf = (from: string, row: number): string => from.slice(starts[row], ends[row]);
 	const split = (row: number): string[] =>
 		delimiter === null ? [spanOf(text, row)] : splitRow(spanOf(text, row), delimiter);
+	const wide = wideRow(spans, split);
+	if (wide >= 0) return { code: 'too-many-columns', line: (spans.lines?.[wide] ?? wide) + 1, found: null };
 	const body = findBody({ count: spans.count, cells: split });
 	if (body === null) return withoutBody(filled);
 	const merged = mergeDecimalCommas({ count: spans.count, cells: split }, body, delimiter);

@@ -2,7 +2,7 @@ import type { RefusalCode } from '../ingestion';
 import type { Entry, Table } from '../layout/table';
 import { isArray, isObject, memberOf, textOfScalar, type JsonNode, type JsonObject } from './json-node';
 import { lineFinder } from './line-finder';
-import { tableOfRecords, type SensorRecord } from './pivot';
+import { recordsOf, tableOfRecords, type SensorRecord } from './pivot';
 
 const textIn = (object: JsonObject | undefined, key: string): string | null =>
 	object === undefined ? null : textOfScalar(memberOf(object, key));
@@ -107,7 +107,7 @@ function reportsIn(root: JsonNode): Reports {
 	return reports;
 }
 
-type Refused = { readonly code: RefusalCode; readonly line: number | null; readonly found: string };
+type Refused = { readonly code: RefusalCode; readonly line: number | null; readonly found: string | null };
 
 /** Sensor reports of every event of a GS1 EPCIS 2.0 document, in the order of the file; null when it holds none. */
 export function tableFromEpcis(root: JsonNode, text: string): Table | Refused | null {
@@ -127,5 +127,5 @@ export function tableFromEpcis(root: JsonNode, text: string): Table | Refused | 
 	const records = found.map(({ subject, ...record }) =>
 		subjects.size === 1 || subject === '' ? record : { ...record, channel: `${record.channel} ${subject}` }
 	);
-	return tableOfRecords('epcis', 'time', records, entries, text);
+	return tableOfRecords('epcis', 'time', recordsOf(records), entries, text);
 }

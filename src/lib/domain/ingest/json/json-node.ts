@@ -52,6 +52,9 @@ class Reader {
 	/** By depth, the keys of the object read last. */
 	readonly lastKeys: (readonly string[])[] = [];
 	readonly numbers: (JsonNumber | undefined)[] = [];
+	/** Values of what is open, innermost last: a list grown by itself would keep room for seventeen. */
+	readonly open: JsonNode[] = [];
+	top = 0;
 	constructor(
 		readonly text: string,
 		from: number
@@ -87,29 +90,30 @@ class Reader {
 	object(depth: number): JsonObject {
 		const at = this.i++;
 		const known = this.lastKeys[depth] ?? [];
-		const values: JsonNode[] = [];
+		const base = this.top;
 		let own: string[] | null = null;
 		if (this.space() === 125) {
 			this.i++;
-			return { type: 'object', at, keys: [], values };
+			return { type: 'object', at, keys: [], values: [] };
 		}
 		for (;;) {
 			if (this.space() !== 34) this.fail();
-			const expected = known[values.length];
+			const expected = known[this.top - base];
 			if (own === null && expected !== undefined && this.startsWithKey(expected)) {
 				this.i += expected.length + 2;
 			} else {
-				own ??= known.slice(0, values.length);
+				own ??= known.slice(0, this.top - base);
 				own.push(this.string());
 			}
 			if (this.space() !== 58) this.fail();
 			this.i++;
-			values.push(this.value(depth + 1));
+			this.open[this.top++] = this.value(depth + 1);
 			const next = this.space();
 			if (next !== 44 && next !== 125) this.fail();
 			this.i++;
 			if (next === 125) break;
 		}
+		const values = this.closed(base);
 		const keys = own ?? (values.length === known.length ? known : known.slice(0, values.length));
 		if (keys.length <= mostSharedKeys) this.lastKeys[depth] = keys;
 		return { type: 'object', at, keys, values };
@@ -127,18 +131,26 @@ class Reader {
 	}
 
 	array(depth: number): JsonArray {
-		const node: JsonArray = { type: 'array', at: this.i++, items: [] };
+		const at = this.i++;
+		const base = this.top;
 		if (this.space() === 93) {
 			this.i++;
-			return node;
+			return { type: 'array', at, items: [] };
 		}
 		for (;;) {
-			node.items.push(this.value(depth + 1));
+			this.open[this.top++] = this.value(depth + 1);
 			const next = this.space();
 			if (next !== 44 && next !== 93) this.fail();
 			this.i++;
-			if (next === 93) return node;
+			if (next === 93) return { type: 'array', at, items: this.closed(base) };
 		}
+	}
+
+	/** What was opened last, in a list of just its length. */
+	closed(base: number): JsonNode[] {
+		const items = this.open.slice(base, this.top);
+		this.top = base;
+		return items;
 	}
 
 	string(): string {

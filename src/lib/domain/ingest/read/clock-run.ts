@@ -27,7 +27,9 @@ function runOf({ ms }: TimeAxis, gathered: Gathered): Run {
 		rows.push(i);
 	}
 	if (down > up) rows.reverse();
-	return { rows, times: Float64Array.from(rows, (row) => ms[row] ?? NaN), usualMs: NaN };
+	const times = new Float64Array(rows.length);
+	for (let k = 0; k < times.length; k++) times[k] = ms[rows[k] ?? 0] ?? NaN;
+	return { rows, times, usualMs: NaN };
 }
 
 function usualStep(times: Float64Array): number {

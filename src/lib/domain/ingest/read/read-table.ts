@@ -1,4 +1,5 @@
 import type { TemperatureUnit } from '../../units';
+import { maxCells } from '../bounds';
 import type { Ingestion, ReadContext } from '../ingestion';
 import { profileColumns, unitColumnOf, type Column } from '../layout/columns';
 import { statedIn, type Stated } from '../layout/preamble';
@@ -43,6 +44,11 @@ function refusalOf(table: Table, { timing, picked, stated }: Plan, context: Read
 	return isUntimed && isStartless ? refused('no-time', table.lineOf(0), table.textOf(0).slice(0, 80)) : null;
 }
 
+/** A few readings of each of very many sensors: no table holds them side by side. */
+function isTooSparse(table: Table, { candidates, twins, others }: Picked): boolean {
+	return table.rowCount * (candidates.length + twins.length + others.length) > maxCells;
+}
+
 /** The unit of a column: the dock's answer, what stands beside the values, its head, then the preamble. */
 export function unitFor(
 	column: Column,
@@ -70,6 +76,7 @@ export function readTable(table: Table, encoding: string, context: ReadContext):
 	const { timing, picked, stated } = plan;
 	const refusal = refusalOf(table, plan, context);
 	if (refusal !== null) return refusal;
+	if (isTooSparse(table, picked)) return refused('too-many-columns');
 	const gathered = withoutCutRow(table, gatherAll(table, plan));
 	if (gathered.count === 0)
 		return refused(
