@@ -10,7 +10,7 @@ export async function findLastBestBefore(
 	line: ShipmentLine,
 	{ id, siteId, arrivedAt }: Shipment,
 	now: Date,
-	transaction: Transaction
+	transaction?: Transaction
 ): Promise<string | null> {
 	const sequelize = Shipment.sequelize;
 	if (!sequelize) throw new Error('The models are not defined.');
@@ -23,7 +23,7 @@ export async function findLastBestBefore(
 		{
 			type: QueryTypes.SELECT,
 			replacements: { productId: line.productId, siteId, id, before: arrivedAt ?? now },
-			transaction
+			...(transaction ? { transaction } : {})
 		}
 	);
 	return row?.latest ?? null;

@@ -52,8 +52,8 @@ export interface DocketEvidence {
 	pulp: PulpReading[];
 }
 
-/** Loads a docket's evidence within the transaction that will write what follows from it. */
-export async function loadEvidence(shipment: Shipment, transaction: Transaction): Promise<DocketEvidence> {
+/** Loads a docket's evidence, within the transaction that will write what follows from it if any will. */
+export async function loadEvidence(shipment: Shipment, transaction?: Transaction): Promise<DocketEvidence> {
 	const where = { shipmentId: shipment.id };
 	const site = await Site.findByPk(shipment.siteId, { transaction });
 	if (!site) throw new Error(`The site of docket ${shipment.number} is missing.`);
@@ -75,19 +75,19 @@ export async function loadEvidence(shipment: Shipment, transaction: Transaction)
 async function loadCompartments(
 	{ compartmentId }: Shipment,
 	lines: readonly ShipmentLine[],
-	transaction: Transaction
+	transaction?: Transaction
 ): Promise<Compartment[]> {
 	const ids = [compartmentId, ...lines.map((line) => line.compartmentId)].filter((id) => id !== null);
 	return ids.length === 0 ? [] : Compartment.findAll({ where: { id: ids }, transaction });
 }
 
-async function lineOfTrip(trip: LoggerTrip, transaction: Transaction): Promise<string | null> {
+async function lineOfTrip(trip: LoggerTrip, transaction?: Transaction): Promise<string | null> {
 	const pallet = trip.palletId ? await Pallet.findByPk(trip.palletId, { transaction }) : null;
 	return pallet?.lineId ?? trip.lineId;
 }
 
 /** The assessed traces whose instrument and accuracy are known; without an accuracy there is no range, so no figure. */
-async function loadTraces(shipmentId: string, transaction: Transaction): Promise<LoadedTrace[]> {
+async function loadTraces(shipmentId: string, transaction?: Transaction): Promise<LoadedTrace[]> {
 	const rows = await TraceRow.findAll({
 		where: { shipmentId, isAssessed: true },
 		order: ['id'],
@@ -116,21 +116,21 @@ async function loadTraces(shipmentId: string, transaction: Transaction): Promise
 }
 
 /** The register's entry of a trip's instrument. */
-async function findLogger(trip: LoggerTrip, transaction: Transaction): Promise<Logger | null> {
+async function findLogger(trip: LoggerTrip, transaction?: Transaction): Promise<Logger | null> {
 	return Logger.findOne({
 		where: trip.loggerId ? { id: trip.loggerId } : { serial: trip.serial },
 		transaction
 	});
 }
 
-async function originOf(readId: string, transaction: Transaction) {
+async function originOf(readId: string, transaction?: Transaction) {
 	const read = await LoggerRead.findByPk(readId, { transaction });
 	const file = read ? await StoredFile.findByPk(read.fileId, { transaction }) : null;
 	if (!read || !file) throw new Error(`The file of read ${readId} is missing.`);
 	return { fileSha256: file.sha256, layoutFingerprint: layoutFingerprintOf(read.understanding) };
 }
 
-async function trimsOf(traceId: string, transaction: Transaction): Promise<Trim[]> {
+async function trimsOf(traceId: string, transaction?: Transaction): Promise<Trim[]> {
 	const rows = await TrimRow.findAll({ where: { traceId, undoneAt: null }, order: ['fromAt'], transaction });
 	return rows.map((row) => ({ fromMs: row.fromAt.getTime(), toMs: row.toAt.getTime() }));
 }
