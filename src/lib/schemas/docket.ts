@@ -1,5 +1,8 @@
+import type { Incident } from '../domain/excursions/find-incidents';
+import type { LimitTime } from '../domain/excursions/limit-times';
 import type { Excursion, LegUse, Range, StopHit } from '../domain/receiving/assessment';
 import type { ConditionKind, Whereabouts } from '../domain/receiving/line-groups';
+import type { RangePart } from '../domain/receiving/range-parts';
 import type { Outcome, Reason, Recommended } from '../domain/receiving/recommendation';
 import type { Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
@@ -135,6 +138,14 @@ export interface AssessmentView {
 	excursions: Excursion[];
 	stops: StopHit[];
 	legs: LegUse[];
+	// Left out in records that an older engine made.
+	/** The worst over a rolling window, and how long the window is. */
+	worstWindowMktCelsius?: number | null;
+	mktWindowHours?: number | null;
+	mktLimitCelsius?: number | null;
+	rangeParts?: RangePart[];
+	limitTimes?: LimitTime[];
+	incidents?: Incident[];
 }
 
 export interface PulpView {

@@ -1,6 +1,6 @@
 import type { Spec } from '../../domain/shelf-life/spec';
 import type { AssessmentView } from '../../schemas/docket';
-import { parseFigures } from '../assessments/stored-figures';
+import { parseFigures, type StoredFigures } from '../assessments/stored-figures';
 import type { AssessmentRow } from '../db/models/assessment-row';
 import type { DocketRows } from './load-rows';
 import { labelsOf } from './loggers-view';
@@ -12,6 +12,21 @@ function specOf(rows: DocketRows, specVersionId: string): { version: number; nam
 	const variety = rows.varieties.find((candidate) => candidate.id === version.varietyId);
 	const name = [product?.name, variety?.name].filter(Boolean).join(', ');
 	return { version: version.number, name, figures: JSON.parse(version.figures) as Spec };
+}
+
+/** Figures that assessments of older engines do not have. */
+function olderMayLack(
+	{ worstWindowMktCelsius, rangeParts, limitTimes, incidents }: Partial<StoredFigures>,
+	{ mkt }: Spec
+): Partial<AssessmentView> {
+	return {
+		...(worstWindowMktCelsius === undefined ? {} : { worstWindowMktCelsius }),
+		mktWindowHours: mkt.windowHours,
+		mktLimitCelsius: mkt.limitCelsius,
+		...(rangeParts ? { rangeParts: [...rangeParts] } : {}),
+		...(limitTimes ? { limitTimes: [...limitTimes] } : {}),
+		...(incidents ? { incidents: [...incidents] } : {})
+	};
 }
 
 const iso = (ms: number) => new Date(ms).toISOString();
@@ -71,6 +86,7 @@ function assessmentView(rows: DocketRows, row: AssessmentRow, labels: Map<string
 		trimmedHours: figures.trimmedHours,
 		excursions: [...figures.excursions],
 		stops: [...figures.stops],
-		legs: [...figures.legs]
+		legs: [...figures.legs],
+		...olderMayLack(figures, spec.figures)
 	};
 }

@@ -1,8 +1,10 @@
 import { fail } from '@sveltejs/kit';
 import { pulpInput } from '$lib/schemas/arrival';
 import type { DocketView } from '$lib/schemas/docket';
+import { queryOf } from '$lib/schemas/list';
 import { photoInput } from '$lib/schemas/photo';
 import { holdInput, noteInput } from '$lib/schemas/note';
+import { shareBasisQuery } from '$lib/schemas/share-basis';
 import { trimUndoing, typedTrim } from '$lib/schemas/trim';
 import { airAtPulp } from '$lib/server/arrivals/air-at-pulp';
 import { recordPulp } from '$lib/server/arrivals/record-pulp';
@@ -13,6 +15,7 @@ import { photoOf } from '$lib/server/photos/photo-upload';
 import { findTaker } from '$lib/server/queue/find-taker';
 import { handBackDocket, takeDocket } from '$lib/server/queue/take-docket';
 import { getDocket } from '$lib/server/dockets/get-docket';
+import { listForecastBases } from '$lib/server/dockets/list-forecast-bases';
 import { liftHold } from '$lib/server/holds/lift-hold';
 import { putHold } from '$lib/server/holds/put-hold';
 import { addNote } from '$lib/server/notes/add-note';
@@ -57,11 +60,14 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 	const docket = await orError(
 		version === null ? getDocket(ctx, params.docket) : getVersion(ctx, params.docket, version)
 	);
+	const { basis } = shareBasisQuery.parse(queryOf(url.searchParams));
 	const isDecidedHere = version === null && docket.stage === 'done' && may(ctx.actor, 'disposition.sign');
 
 	return {
 		docket,
 		version,
+		shareBasis: version === null ? basis : undefined,
+		forecasts: version === null ? await orError(listForecastBases(ctx, docket.id)) : [],
 		taker: docket.arrival && version === null ? await orError(findTaker(ctx, docket.number)) : null,
 		airCelsius: await airAtPulp(docket),
 		nextWaiting: isDecidedHere ? await orError(findNextWaiting(ctx, docket.site.id, docket.number)) : null,
