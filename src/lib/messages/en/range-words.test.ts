@@ -10,7 +10,7 @@ describe('what a range includes', () => {
 			{ source: 'full-life', lowerHours: 0, raiseHours: 0 }
 		] as const;
 		expect(rangeIncludes(parts, 'en')).toBe(
-			'Low to high includes the logger’s ± and the model’s (−0.5 +0.4 d), the opening balance’s ± (−0.0 +2.0 d).'
+			'Low to high includes the logger’s ± and the model’s (−0.5 +0.4 d), the opening balance’s ± (+2.0 d).'
 		);
 	});
 

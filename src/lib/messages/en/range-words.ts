@@ -15,11 +15,15 @@ export function rangeIncludes(parts: readonly RangePart[] | undefined, locale: s
 	if (!parts) return null;
 	const days = (hours: number) => decimal(hours / hoursPerDay, 1, locale);
 	const said = parts
-		.filter(({ lowerHours, raiseHours }) => lowerHours > 0 || raiseHours > 0)
-		.map(
-			({ source, lowerHours, raiseHours }) =>
-				`${sources[source]} (−${days(lowerHours)} +${days(raiseHours)} d)`
-		);
+		.map(({ source, lowerHours, raiseHours }) => ({
+			source,
+			ways: [
+				lowerHours > 0 ? `−${days(lowerHours)}` : '',
+				raiseHours > 0 ? `+${days(raiseHours)}` : ''
+			].filter(Boolean)
+		}))
+		.filter(({ ways }) => ways.length > 0)
+		.map(({ source, ways }) => `${sources[source]} (${ways.join(' ')} d)`);
 	return said.length === 0
 		? 'Low and high are the figure itself: nothing is known to be off.'
 		: `Low to high includes ${said.join(', ')}.`;
