@@ -1,11 +1,9 @@
-import type { Incident } from '../domain/excursions/find-incidents';
-import type { LimitTime } from '../domain/excursions/limit-times';
 import type { Excursion, LegUse, Range, StopHit } from '../domain/receiving/assessment';
 import type { ConditionKind, Whereabouts } from '../domain/receiving/line-groups';
-import type { RangePart } from '../domain/receiving/range-parts';
 import type { Outcome, Reason, Recommended } from '../domain/receiving/recommendation';
 import type { Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
+import type { LaterFigures } from './later-figures';
 import type { CorrectionView, DeterminationView, ReviewView } from './signing';
 
 /** Where a docket stands; follows from its facts, never stored by itself. */
@@ -100,7 +98,7 @@ export interface DocketLoggerView {
 }
 
 /** The assessment of one line by its governing trace, without the series (that is fetched at the zoom in view). */
-export interface AssessmentView {
+export interface AssessmentView extends LaterFigures {
 	id: string;
 	lineId: string;
 	traceId: string;
@@ -138,14 +136,6 @@ export interface AssessmentView {
 	excursions: Excursion[];
 	stops: StopHit[];
 	legs: LegUse[];
-	// Left out in records that an older engine made.
-	/** The worst over a rolling window, and how long the window is. */
-	worstWindowMktCelsius?: number | null;
-	mktWindowHours?: number | null;
-	mktLimitCelsius?: number | null;
-	rangeParts?: RangePart[];
-	limitTimes?: LimitTime[];
-	incidents?: Incident[];
 }
 
 export interface PulpView {
