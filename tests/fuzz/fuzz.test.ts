@@ -23,7 +23,7 @@ describe('5,000 damaged files', () => {
 
 describe('the criterion', () => {
 	const text =
-		'time,temperature °C\n2026-04-01T10:00:00Z,4.5\n2026-04-01T10:10:00Z,4.6\n2026-04-01T10:20:00Z,-4.7\n';
+		'time,temperature °C\n2026-04-01T08:00:00Z,4.5\n2026-04-01T08:10:00Z,4.6\n2026-04-01T08:20:00Z,-4.7\n';
 	const bytes = Buffer.from(text);
 	const understood = (): Understanding => {
 		const ingestion = readExport(bytes, {
@@ -43,9 +43,10 @@ describe('the criterion', () => {
 
 	it.each([
 		['a value', { from: '4.6', to: '4.8' }, /no 4.6/],
-		['a minute', { from: '10:10', to: '10:11' }, /no 2026-04-01T10:10/],
-		['a day', { from: '04-01T10:20', to: '04-02T10:20' }, /no 2026-04-01T10:20/],
-		['a year', { from: '2026-04-01T10:00', to: '2025-04-01T10:00' }, /no 2026/],
+		['a minute', { from: '08:10', to: '08:11' }, /no 2026-04-01T08:10/],
+		// Offsets reach a day either way, so that only a day further off is missed for certain.
+		['a day', { from: '04-01T08:20', to: '04-05T08:20' }, /no 2026-04-01T08:20/],
+		['a year', { from: '2026-04-01T08:00', to: '2025-04-01T08:00' }, /no 2026/],
 		['a line', { from: 'time,', to: 'time,\n' }, /line 2/]
 	])('misses %s that the file does not hold', (_, { from, to }, lack) => {
 		expect(lacking(Buffer.from(text.replace(from, to)), understood())).toMatch(lack);

@@ -85,7 +85,7 @@ function lifeFact({ lines }: NoticeFacts['docket']): string {
 }
 
 /** A line as one row, or a row a group: what becomes of how many cases, and with what. */
-function outcomesOf(line: Line, zone: string): MailContent['outcomes'] {
+function outcomesOf(line: Line, zone: string): NonNullable<MailContent['outcomes']> {
 	const { ordinal, lot, cases } = line;
 	const row = (outcome: string, counted: number, detail: string, name?: string) => {
 		const { mark, words } = outcomeWords[outcome] ?? { mark: 'hold' as const, words: 'held' };

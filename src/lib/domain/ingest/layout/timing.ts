@@ -9,7 +9,13 @@ export type ClockForm = 'clock' | 'hour' | 'fraction';
 
 /** Which columns hold the time of a row, and in what form. */
 export type Timing =
-	| { readonly kind: 'moment'; readonly column: number; readonly zone: number | null }
+	| {
+			readonly kind: 'moment';
+			readonly column: number;
+			readonly zone: number | null;
+			/** Its dates are a year and the day in it; a single such date among others is a damaged one. */
+			readonly isOrdinal: boolean;
+	  }
 	| {
 			readonly kind: 'date-and-time';
 			readonly date: number;
@@ -32,6 +38,11 @@ export type Timing =
 
 const mostly = 0.5;
 const mainly = 0.9;
+
+/** `2024-061` of ISO 8601, before anything else. */
+const isOrdinalText = (text: string): boolean => /^\d{4}-?\d{3}(?!\d)/.test(text);
+const areOrdinal = (texts: readonly string[]): boolean =>
+	texts.filter(isOrdinalText).length * 2 > texts.filter((text) => text !== '').length;
 
 /** A second clock (received, exported) yields to the one that says when it was measured; UTC yields to nothing. */
 function preferred(columns: readonly Column[]): Column | undefined {
@@ -162,7 +173,8 @@ export function findTiming(all: readonly Column[]): Timing {
 	const separate = apart(columns, zone);
 	const isIdle = moment !== undefined && (moment.isIdleClock || moment.isIdleDate);
 	if (separate !== null && isIdle) return separate;
-	if (moment !== undefined && !moment.isIdleDate) return { kind: 'moment', column: moment.index, zone };
+	if (moment !== undefined && !moment.isIdleDate)
+		return { kind: 'moment', column: moment.index, zone, isOrdinal: areOrdinal(moment.texts) };
 	const epoch = preferred(
 		columns.filter(
 			(c) =>

@@ -225,7 +225,12 @@ describe('a layout', () => {
 	it('is known by its heads, not by the sensors that its rows name', () => {
 		const rows = (a: string, b: string) =>
 			['time;sensor;temperature °C']
-				.concat([0, 1, 2].flatMap((i) => [`2026-04-03T10:${i}0:00Z;${a};4.${i}`, `2026-04-03T10:${i}0:00Z;${b};9.${i}`]))
+				.concat(
+					[0, 1, 2].flatMap((i) => [
+						`2026-04-03T10:${i}0:00Z;${a};4.${i}`,
+						`2026-04-03T10:${i}0:00Z;${b};9.${i}`
+					])
+				)
 				.join('\n');
 		const print = (text: string) => {
 			const first = read(text);

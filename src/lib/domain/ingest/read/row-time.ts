@@ -156,6 +156,7 @@ function readOf(
 		case 'moment':
 			return (cells) => {
 				if (!scan(cells, timing.column) || stamp.shape === 'none' || stamp.msOfDay === noTime) return false;
+				if (stamp.isOrdinal && !timing.isOrdinal) return false;
 				if (timing.zone !== null) readZone(stamp, cells[timing.zone]);
 				return true;
 			};

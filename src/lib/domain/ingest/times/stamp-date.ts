@@ -58,6 +58,7 @@ function readOrdinalDay(into: Stamp, year: number, dayOfYear: number): boolean {
 	if (year < 1900 || year > 2200 || dayOfYear < 1) return false;
 	const start = dayNumber(year, 1, 1) + dayOfYear - 1;
 	into.shape = 'year-first';
+	into.isOrdinal = true;
 	into.a = year;
 	for (let month = 12; month >= 1; month--) {
 		const first = dayNumber(year, month, 1);

@@ -21,11 +21,22 @@ export interface Stamp {
 	offsetMinutes: number;
 	/** A zone named by letters that give no offset of their own (`CST`). */
 	zoneWord: string | null;
+	/** The date was a year and the day in it. */
+	isOrdinal: boolean;
 }
 
 /** A stamp to be filled by each scan. */
 export function emptyStamp(): Stamp {
-	return { shape: 'none', a: 0, b: 0, c: 0, msOfDay: noTime, offsetMinutes: noOffset, zoneWord: null };
+	return {
+		shape: 'none',
+		a: 0,
+		b: 0,
+		c: 0,
+		msOfDay: noTime,
+		offsetMinutes: noOffset,
+		zoneWord: null,
+		isOrdinal: false
+	};
 }
 
 /** The numbers and words of the text that is being read: one buffer, so that no row allocates. */

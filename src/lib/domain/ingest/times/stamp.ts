@@ -57,6 +57,7 @@ function scanPlain(text: string, into: Stamp): boolean {
 	into.msOfDay = noTime;
 	into.offsetMinutes = noOffset;
 	into.zoneWord = null;
+	into.isOrdinal = false;
 	if (!tokenise(text, tokens)) return false;
 	// One bare number is a count or a temperature unless it is a compact date.
 	if (tokens.count === 1 && tokens.words.length === 0 && digitsOf(0) < 8) return false;

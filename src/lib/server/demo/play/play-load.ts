@@ -97,7 +97,13 @@ function wordsSteps({ world, staged, docket, after }: Play): Step[] {
 	const reason = { id: null, reason: hold.reason };
 	return [
 		...steps,
-		{ atMs, act: async () => void (await putHold(contextOf(world, 'dock', atMs), docket().number, reason)) }
+		{
+			atMs,
+			act: async () => {
+				const input = { awaited: null, until: null, ...reason };
+				await putHold(contextOf(world, 'dock', atMs), docket().number, input);
+			}
+		}
 	];
 }
 
