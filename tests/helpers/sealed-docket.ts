@@ -44,7 +44,10 @@ export async function signed({ ctx, shipment, lines }: ArrivedDocket): Promise<D
 		amendmentReason: isAmended ? 'Counted again' : null,
 		notify: false
 	});
-	return Disposition.findOne({ where: { shipmentId: shipment.id, version: version ?? 0 }, rejectOnEmpty: true });
+	return Disposition.findOne({
+		where: { shipmentId: shipment.id, version: version ?? 0 },
+		rejectOnEmpty: true
+	});
 }
 
 /** The report of a signed version, sealed in this process as the worker does it. */

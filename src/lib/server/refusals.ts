@@ -67,7 +67,8 @@ const refusals = {
 	},
 	'file-expired': {
 		status: 410,
-		message: 'The bytes of this file were taken out when its retention period ended. Its hash is on the record.'
+		message:
+			'The bytes of this file were taken out when its retention period ended. Its hash is on the record.'
 	},
 	'database-away': {
 		status: 503,

@@ -37,7 +37,11 @@ describe('what a docket looks ahead from', () => {
 		const { shipment, lines, qa } = await scene();
 		const [basis, ...more] = await listForecastBases(qa, shipment.id);
 		expect(more).toEqual([]);
-		expect(basis).toMatchObject({ lineId: lines[0]?.id, line: 1, neededAtCustomer: { hours: 72, celsius: 5 } });
+		expect(basis).toMatchObject({
+			lineId: lines[0]?.id,
+			line: 1,
+			neededAtCustomer: { hours: 72, celsius: 5 }
+		});
 		if (!basis) return;
 		expect(new Date(basis.fromMs).toISOString()).toBe(new Date(to).toISOString());
 		// By hand: 432 − 20 − 93 h 20 min at 0 °C are 318.67 h left; Q10 of 3, so at 10 °C a third as long.

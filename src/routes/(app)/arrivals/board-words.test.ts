@@ -48,7 +48,9 @@ describe('the words of the board', () => {
 
 	it('put no tick over a part', () => {
 		expect(
-			verdictOf(row({ stage: 'done', verdict: 'part', part: { unit: 'pallets', taken: 12, refused: 4, held: 0 } }))
+			verdictOf(
+				row({ stage: 'done', verdict: 'part', part: { unit: 'pallets', taken: 12, refused: 4, held: 0 } })
+			)
 		).toEqual({ word: '12 in, 4 refused', mark: null });
 		expect(verdictOf(row({ stage: 'done', verdict: 'rejected' })).mark).toBe('reject');
 	});

@@ -1,3 +1,4 @@
+import { SvelteMap } from 'svelte/reactivity';
 import type { UploadAnswer } from '$lib/schemas/read';
 import type { Glance } from './file-glance';
 import type { DeviceReader } from './read-on-device';
@@ -36,7 +37,7 @@ interface Tools {
 export class UploadQueue {
 	items = $state<UploadItem[]>([]);
 	#running: Promise<void> | null = null;
-	#stops = new Map<string, () => void>();
+	#stops = new SvelteMap<string, () => void>();
 	readonly #tools: Tools;
 
 	constructor(tools: Tools) {
