@@ -25,6 +25,8 @@ async function sign(qa: Visitor, number: string): Promise<void> {
 		'lines.0.reason': 'crushed',
 		reasons: 'Half the cases are crushed.',
 		meaning: 'approval',
+		// The first signature of a session shows every component.
+		email: load.people.qa.email,
 		password: testPassword
 	});
 	expect(signed.status).toBe(303);
@@ -85,6 +87,12 @@ const readings: { route: string; path: () => string; opensTo: readonly Who[]; ty
 		path: () => `/api/v1/shipments/${load.shipment.number}/copy`,
 		opensTo: ['qa', 'admin'],
 		type: 'application/zip'
+	},
+	{
+		route: 'record',
+		path: () => `/api/v1/record?docket=${load.shipment.number}`,
+		opensTo: ['qa', 'admin'],
+		type: 'text/csv; charset=utf-8; header=present'
 	},
 	{
 		route: 'reads/{read}',

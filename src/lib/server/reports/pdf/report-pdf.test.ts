@@ -41,6 +41,24 @@ describe('the receiving report on paper', () => {
 			expect(page).toContain('Signed by Ruth Calloway, approval, 3 Apr 2026, 09:44:18 CEST (+02:00).');
 	});
 
+	it('prints the reviews and determinations it rests on, each with name, meaning and time', async () => {
+		const input = reportInput();
+		const signed = { at: '2026-04-03T07:20:05.000Z', zone: 'Europe/Amsterdam', isOfThis: true };
+		const reviews = [
+			{ id: 'r', by: 'Ivo Sander', byId: 'u', title: 'QA', reasons: 'Trace checked.', ...signed }
+		].map((review) => ({ ...review, decisionSha256: 'a'.repeat(64), decision: '[]' }));
+		const determinations = [
+			{ id: 'd', by: 'Hanneke Pryce', title: '', text: 'Core stayed under the limit.', ...signed }
+		];
+		const printed = textOf(
+			await reportPdf({ ...input, frozen: { ...input.frozen, reviews, determinations } })
+		);
+		expect(printed).toContain('Signed before');
+		expect(printed).toMatch(/Ivo Sander, QA\s+review\s+Trace checked\./u);
+		expect(printed).toMatch(/Hanneke Pryce\s+determination\s+Core stayed under the/u);
+		expect(printed).toContain('3 Apr 2026, 09:20:05');
+	});
+
 	it('holds each pulp reading against the logger of its line at that moment', () => {
 		// 0.8 of the pulp, 0.9 of L1 at 08:10, both in the fixture.
 		expect(text).toMatch(/line 1, lot .*0\.8 0\.9 −0\.1 L1, in/u);

@@ -19,6 +19,7 @@ import { reasons } from './reasons';
 import { embeddedFiles } from './embedded-files';
 import type { ReportInput } from './report-input';
 import { restsOn } from './rests-on';
+import { signedBefore } from './signed-before';
 import { cutLine, runningFoot, runningHead } from './running';
 
 const ownFonts = new Set(Object.values(fontFiles).flatMap((files) => [files.normal, files.bold]));
@@ -74,6 +75,7 @@ function body(draft: Draft): Content[] {
 		...pulpLedger(draft),
 		...photosAndNotes(draft),
 		...photoPrints(draft),
+		...signedBefore(draft),
 		signatureStrip(draft),
 		howToVerify(draft)
 	];
