@@ -89,12 +89,6 @@ const readings: { route: string; path: () => string; opensTo: readonly Who[]; ty
 		type: 'application/zip'
 	},
 	{
-		route: 'record',
-		path: () => `/api/v1/record?docket=${load.shipment.number}`,
-		opensTo: ['qa', 'admin'],
-		type: 'text/csv; charset=utf-8; header=present'
-	},
-	{
 		route: 'reads/{read}',
 		path: () => `/api/v1/reads/${load.readId}`,
 		opensTo: ['dock', 'qa', 'claims', 'admin'],
