@@ -12,8 +12,24 @@ export interface Product {
 
 const root = join(import.meta.dirname, '../..');
 
-/** Starts the product as it is served, so that a request passes the real hooks. Needs a build. */
+const portTaken = 'EADDRINUSE';
+const mostTries = 3;
+
+/**
+ * Starts the product as it is served, so that a request passes the real hooks. Needs a build. A port that was free may
+ * be taken before the product opens it; another is tried then.
+ */
 export async function startProduct(more: Record<string, string> = {}): Promise<Product> {
+	for (let attempt = 1; ; attempt++) {
+		try {
+			return await startOnce(more);
+		} catch (error) {
+			if (attempt >= mostTries || !String(error).includes(portTaken)) throw error;
+		}
+	}
+}
+
+async function startOnce(more: Record<string, string>): Promise<Product> {
 	const port = await freePort();
 	const address = `http://localhost:${port}`;
 	const child = spawn(process.execPath, [join(root, 'src/cli/serve.mjs')], {
