@@ -62,7 +62,9 @@ function type(selector: string, text: string): void {
 }
 
 const button = (name: string) =>
-	[...document.querySelectorAll('button')].find((one) => (one.getAttribute('aria-label') ?? one.textContent).includes(name));
+	[...document.querySelectorAll('button')].find((one) =>
+		(one.getAttribute('aria-label') ?? one.textContent).includes(name)
+	);
 const words = () => document.body.textContent.replace(/\s+/g, ' ');
 
 describe('the model’s form', () => {

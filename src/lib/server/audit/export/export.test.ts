@@ -22,7 +22,10 @@ async function written(notes: number) {
 	const person = async (role: Role) => contextFor(await buildUser([role], { sites: [site] }));
 	const qa = await person('qa');
 	for (let i = 0; i < notes; i++)
-		await addNote(qa, shipment.number, { id: null, text: i === 0 ? '=1+1, "quoted"\nand −4.5' : `note ${i}` });
+		await addNote(qa, shipment.number, {
+			id: null,
+			text: i === 0 ? '=1+1, "quoted"\nand −4.5' : `note ${i}`
+		});
 	return { shipment, qa, person, query: auditQuery.parse({ docket: shipment.number }) };
 }
 

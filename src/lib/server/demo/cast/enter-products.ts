@@ -10,7 +10,13 @@ import { demoPassword } from './people';
 export async function enterProducts(ctx: Context): Promise<Map<string, string>> {
 	const ids = new Map<string, string>();
 	for (const { name, family, countUnit, spec, reason } of demoProducts) {
-		const productId = await saveProduct(ctx, null, { name, family, countUnit, dockMayAccept: false, revision: '' });
+		const productId = await saveProduct(ctx, null, {
+			name,
+			family,
+			countUnit,
+			dockMayAccept: false,
+			revision: ''
+		});
 		const draft = await saveDraft(ctx, { productId, varietyId: null, figures: spec, seenSha256: '' });
 		await signSpec(ctx, {
 			specVersionId: draft.id,
