@@ -1,5 +1,5 @@
 import { flushSync, mount, unmount } from 'svelte';
-import { afterEach, describe, expect, it } from 'vitest';
+import { afterEach, describe, expect, it, vi } from 'vitest';
 import LayoutRow from '../../../settings/layouts/LayoutRow.svelte';
 import OriginalLine from '$lib/components/chart/OriginalLine.svelte';
 import type { LayoutView } from '$lib/schemas/layout';
@@ -190,8 +190,9 @@ describe('the line of a reading', () => {
 		shown = mount(OriginalLine, { target: document.body, props: { atMs: 5, onask } });
 		flushSync();
 		button(/Show it/)?.click();
-		await new Promise((resolve) => setTimeout(resolve));
-		flushSync();
-		expect(text()).toContain('no reading at that moment');
+		await vi.waitFor(() => {
+			flushSync();
+			expect(text()).toContain('no reading at that moment');
+		});
 	});
 });
