@@ -137,6 +137,18 @@ describe('life computed from bare readings', () => {
 		expect(ask(log, { deltaHKilojoulesPerMole: 60 }).mktCelsius).toBeCloseTo(7.9568, 4);
 	});
 
+	it('takes for the usual step what fractions of a second make of it', () => {
+		// Source: the formula in mpmath at 30 digits, ΔH/R 10 000 K. Thirds of a second come out apart in the last digit;
+		// they are four of six steps all the same, so the last reading stands for one: 15.66 °C were it for 2 s.
+		const seconds = [0, 1, 2, 3, 4].map((thirds) => 1e6 + thirds / 3);
+		const times = [...seconds, 1e6 + 4 / 3 + 2, 1e6 + 4 / 3 + 4].map((at) => at - 1e6);
+		const log = times.map((at, i) => [at / 3600, i === 6 ? 25 : 5] as const);
+		expect(new Set(log.slice(1, 5).map(([hours], i) => hours - (log[i]?.[0] ?? NaN))).size).toBeGreaterThan(
+			1
+		);
+		expect(ask(log).mktCelsius).toBeCloseTo(8.670571, 6);
+	});
+
 	it('knows when no number holds the figure', () => {
 		const wild = ask(
 			[

@@ -86,12 +86,24 @@ function secondsBeyond(
 
 /** Each reading stands for the interval that follows it, the last for the usual one; without time all alike. */
 function mktOf(timesMs: Float64Array, celsius: Float64Array, deltaH: number | null): number {
-	const usualMs = usualIntervalMs(timesMs.filter((ms, i) => i === 0 || ms !== timesMs[i - 1]));
+	const usualMs = usualStepMs(timesMs);
 	const weights = timesMs.map((ms, i) =>
 		i + 1 < timesMs.length ? (timesMs[i + 1] as number) - ms : usualMs
 	);
 	const timed = meanKineticCelsius(celsius, weights, deltaH);
 	return timed ?? (meanKineticCelsius(celsius, weights.fill(1), deltaH) as number);
+}
+
+/** Steps are told apart by this much: times sent as fractions of a second do not come out alike to the last digit. */
+const stepGrainMs = 0.01;
+
+/** The most frequent step that takes time, the shorter one where two are equally frequent; 0 without one. */
+function usualStepMs(timesMs: Float64Array): number {
+	const steps = timesMs.subarray(1).map((ms, i) => ms - (timesMs[i] as number));
+	const taking = steps.filter((stepMs) => stepMs > 0).map((stepMs) => Math.round(stepMs / stepGrainMs));
+	let grains = 0;
+	const usual = usualIntervalMs([0, ...taking].map((step) => (grains += step)));
+	return steps.find((stepMs) => stepMs > 0 && Math.round(stepMs / stepGrainMs) === usual) ?? 0;
 }
 
 /** Whether every figure is one: a model may run so fast that no number holds what it uses. */
