@@ -291,6 +291,7 @@ function frozenDocket(lines: DocketLineView[]): FrozenDocket {
 				.map((line) => assessmentOf(line.ordinal, line)),
 			handovers: [],
 			trims: [],
+			clockCorrections: [],
 			pulp: [
 				{
 					id: 'u1',

@@ -20,6 +20,7 @@ export const auditSubjects = [
 	'note',
 	'read',
 	'trim',
+	'clock',
 	'assessment',
 	'hold',
 	'disposition',

@@ -3,6 +3,7 @@ import type { ConditionKind, Whereabouts } from '../domain/receiving/line-groups
 import type { Outcome, Reason, Recommended } from '../domain/receiving/recommendation';
 import type { Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
+import type { ClockCorrectionView } from './clock-correction';
 import type { LaterFigures } from './later-figures';
 import type { CorrectionView, DeterminationView, ReviewView } from './signing';
 
@@ -229,6 +230,8 @@ export interface DocketView {
 	handovers: HandoverView[];
 	pulp: PulpView[];
 	/** Stretches a person left out, and why. */
+	/** Clocks of loggers that a person has put right. */
+	clockCorrections: (ClockCorrectionView & { logger: string })[];
 	trims: { id: string; logger: string; fromAt: string; toAt: string; reason: string; by: string }[];
 	photos: { id: string; caption: string; kind: string; by: string; at: string; bytes: number }[];
 	notes: { id: string; text: string; by: string; at: string }[];

@@ -10,6 +10,7 @@ import type {
 import type { AssessInput } from '../domain/receiving/assessment';
 import { placements, type Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
+import type { ClockCorrectionView } from './clock-correction';
 import type { LayoutView } from './layout';
 import { decimalField, neededText, optionalText, ticked } from './field';
 
@@ -80,6 +81,8 @@ export interface ReadView extends ReadRowView {
 	/** What is filled in for the reader to confirm. */
 	proposed: LoggerChoice;
 	traceIds: string[];
+	/** What a person has put right about its clock; null where nothing. */
+	clockCorrection: ClockCorrectionView | null;
 	supplierName: string;
 	/** The remembered answer it was read by, or, `isFromHere`, that was confirmed on it. */
 	remembered: (LayoutView & { isFromHere: boolean }) | null;

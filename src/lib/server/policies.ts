@@ -28,6 +28,7 @@ const acts = {
 	'hold.put': ['dock', 'qa'],
 	'hold.lift': ['qa'],
 	'trim.make': ['qa'],
+	'clock.correct': ['qa'],
 	'disposition.sign': ['qa'],
 	/** Accepting what no finding holds, where the product permits it; the authority table says the rest. */
 	'disposition.accept-at-dock': ['dock'],

@@ -19,6 +19,7 @@ export const auditSubjectWords: Record<string, string> = {
 	note: 'Notes',
 	read: 'Reads',
 	trim: 'Trims',
+	clock: 'Clocks of loggers',
 	assessment: 'Assessments',
 	hold: 'Holds',
 	disposition: 'Dispositions',

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { clockProposalText } from './clock-proposal';
+import { clockMovedText, clockProposalText } from './clock-proposal';
 
 describe('a proposed correction of the clock', () => {
 	it('names the whole hours of another zone, and says that nothing was changed', () => {
@@ -22,5 +22,14 @@ describe('a proposed correction of the clock', () => {
 			evidence: 'before-arrival'
 		});
 		expect(text).toMatch(/^The last reading lies 23 min before the arrival\. .* 23 min behind\./);
+	});
+});
+
+describe('a correction that was made', () => {
+	it.each([
+		[-7_200_000, 'Every reading moved 2 h earlier'],
+		[1_500_000, 'Every reading moved 25 min later']
+	])('says how far and which way: %i', (shiftMs, text) => {
+		expect(clockMovedText(shiftMs)).toBe(text);
 	});
 });

@@ -7,6 +7,11 @@ const against: Readonly<Record<ClockProposal['evidence'], string>> = {
 	'before-arrival': 'before the arrival'
 };
 
+/** What a correction did, without who did it: `Every reading moved 2 h earlier`. */
+export function clockMovedText(shiftMs: number): string {
+	return `Every reading moved ${duration(Math.abs(shiftMs))} ${shiftMs < 0 ? 'earlier' : 'later'}`;
+}
+
 /** What the clock of a logger may have wrong, and by how much; a person decides. */
 export function clockProposalText({ kind, shiftMs, evidence }: ClockProposal): string {
 	const apart = duration(Math.abs(shiftMs));

@@ -29,6 +29,8 @@ const sentences: Record<string, (data: Record<string, unknown>) => string> = {
 	'logger.assigned': ({ serial }) => `Logger ${serial} assigned`,
 	'trim.made': () => 'Trim made',
 	'trim.undone': () => 'Trim undone',
+	'clock.corrected': () => 'Logger’s clock corrected',
+	'clock.restored': () => 'Correction of a logger’s clock undone',
 	'assessment.made': () => 'Life recomputed',
 	'hold.put': () => 'Put on hold',
 	'hold.lifted': () => 'Hold lifted',

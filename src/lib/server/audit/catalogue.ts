@@ -85,6 +85,8 @@ export interface EventData {
 	'logger.assigned': { traceId: string; serial: string; lineId: string | null };
 	'trim.made': { traceId: string; fromAt: string; toAt: string; reason: string };
 	'trim.undone': { trimId: string };
+	'clock.corrected': { readId: string; shiftMs: number; reason: string };
+	'clock.restored': { readId: string; correctionId: string };
 	'assessment.made': {
 		engineVersion: string;
 		assessments: {

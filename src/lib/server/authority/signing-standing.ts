@@ -13,6 +13,7 @@ import { TrimRow } from '../db/models/trim-row';
 import { User } from '../db/models/user';
 import { evidenceSha256 } from '../dispositions/freeze';
 import { may } from '../policies';
+import { clockMovesOf } from './clock-moves';
 import { decisionSha256 } from './decision-text';
 import { parseMoved } from './moved-recommendation';
 import { getSigningRules } from './signing-rules';
@@ -28,12 +29,14 @@ async function findCorrections(shipmentId: string, transaction?: Transaction) {
 	});
 	const moving = trims.filter((trim) => trim.movedRecommendation !== null);
 	const users = await User.findAll({ where: { id: moving.map((trim) => trim.madeBy) }, transaction });
-	return moving.map((trim): CorrectionView => ({
+	const byClocks = await clockMovesOf(shipmentId, transaction);
+	const byTrims = moving.map((trim): CorrectionView => ({
 		kind: 'trim',
 		madeById: trim.madeBy,
 		madeBy: users.find(({ id }) => id === trim.madeBy)?.name ?? '',
 		...parseMoved(trim.movedRecommendation ?? '{}')
 	}));
+	return [...byTrims, ...byClocks];
 }
 
 async function lineFactsOf(docket: DocketView, transaction?: Transaction): Promise<LineFacts[]> {

@@ -94,6 +94,14 @@ export function trimViews(rows: DocketRows): DocketView['trims'] {
 	}));
 }
 
+export function clockCorrectionViews(rows: DocketRows): DocketView['clockCorrections'] {
+	const labels = labelsOf(rows);
+	return rows.clockCorrections.map((correction) => {
+		const trace = rows.traces.find(({ readId, isAssessed }) => readId === correction.readId && isAssessed);
+		return { ...correction, logger: labels.get(trace?.id ?? '') ?? '?' };
+	});
+}
+
 export function holdView(rows: DocketRows): DocketView['hold'] {
 	const hold = rows.holds.find((row) => row.liftedAt === null);
 	return hold

@@ -14,7 +14,8 @@ import {
 	partyView,
 	photoViews,
 	pulpViews,
-	trimViews
+	trimViews,
+	clockCorrectionViews
 } from './door-view';
 import { lineView } from './lines-view';
 import { loadDocketRows, type DocketRows } from './load-rows';
@@ -70,6 +71,7 @@ export async function docketView(
 		handovers: handoverViews(rows),
 		pulp: pulpViews(rows),
 		trims: trimViews(rows),
+		clockCorrections: clockCorrectionViews(rows),
 		photos: photoViews(rows),
 		notes: noteViews(rows),
 		clocks: clockViews(rows),

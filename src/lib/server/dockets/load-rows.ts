@@ -29,6 +29,7 @@ import { TraceRow } from '../db/models/trace-row';
 import { TrimRow } from '../db/models/trim-row';
 import { User } from '../db/models/user';
 import { Variety } from '../db/models/variety';
+import { clockCorrectionsOf } from '../traces/clock-views';
 
 /** Every row a docket is drawn from. Packed readings stay in the database. */
 export type DocketRows = Awaited<ReturnType<typeof loadDocketRows>>;
@@ -91,6 +92,10 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 		order: ['fromAt'],
 		transaction
 	});
+	const clockCorrections = await clockCorrectionsOf(
+		reads.map((row) => row.id),
+		transaction
+	);
 	const userIds = ids([
 		...trims.map((row) => row.madeBy),
 		arrival?.loggedBy,
@@ -145,6 +150,7 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 		reads,
 		traces,
 		trims,
+		clockCorrections,
 		assessments,
 		specs,
 		recommendations,

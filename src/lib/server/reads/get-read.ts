@@ -9,6 +9,7 @@ import { ShipmentLine } from '../db/models/shipment-line';
 import { Site } from '../db/models/site';
 import { TraceRow } from '../db/models/trace-row';
 import { layoutViews } from '../layouts/views';
+import { clockCorrectionsOf } from '../traces/clock-views';
 import { getReadFor, isSigned } from './find-read';
 import { parseUnderstanding } from './stored-understanding';
 import { alsoOnDockets, readRowView } from './views';
@@ -27,6 +28,7 @@ export async function getRead(ctx: Context, readId: string): Promise<ReadView> {
 	const tripId = traces.find((trace) => trace.tripId)?.tripId;
 	const layout = read.layoutId ? await RememberedLayout.findByPk(read.layoutId) : null;
 	const [remembered = null] = await layoutViews(layout ? [layout] : []);
+	const [clockCorrection = null] = await clockCorrectionsOf([readId]);
 	return {
 		...row,
 		supplierName: (await Partner.findByPk(shipment.supplierId))?.name ?? '',
@@ -38,7 +40,8 @@ export async function getRead(ctx: Context, readId: string): Promise<ReadView> {
 		lines: await linesOf(shipment.id),
 		expected: expected.map(({ choice }) => choice),
 		proposed: await proposedLogger(row.serial, tripId ?? null, expected),
-		traceIds: traces.map(({ id }) => id)
+		traceIds: traces.map(({ id }) => id),
+		clockCorrection
 	};
 }
 

@@ -14,7 +14,11 @@ import { getTraceFor } from './find-trace';
 export async function makeTrim(ctx: Context, form: TrimForm): Promise<string> {
 	const { trace, shipment } = await getTraceFor(ctx, form.traceId, 'trim.make');
 	const [fromAt, toAt] = [new Date(form.fromAt), new Date(form.toAt)];
-	if (toAt < trace.firstAt || fromAt > trace.lastAt)
+	const shiftMs = Number(trace.clockShiftMs);
+	if (
+		toAt.getTime() < trace.firstAt.getTime() + shiftMs ||
+		fromAt.getTime() > trace.lastAt.getTime() + shiftMs
+	)
 		throw new Refusal('invalid', 'The trace has no readings in that time.');
 	const id = uuid();
 	await inTransaction(ctx, async (w) => {

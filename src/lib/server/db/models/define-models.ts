@@ -31,6 +31,7 @@ import { defineRememberedLayout } from './remembered-layout';
 import { defineLoggerRead } from './logger-read';
 import { defineTraceRow } from './trace-row';
 import { defineTrimRow } from './trim-row';
+import { defineClockCorrection } from './clock-correction';
 import { defineAssessmentRow } from './assessment-row';
 import { defineLineRecommendation } from './line-recommendation';
 import { defineExcursionRow } from './excursion-row';
@@ -95,6 +96,7 @@ export function defineModels(sequelize: Sequelize): void {
 	defineLoggerRead(sequelize);
 	defineTraceRow(sequelize);
 	defineTrimRow(sequelize);
+	defineClockCorrection(sequelize);
 	defineAssessmentRow(sequelize);
 	defineLineRecommendation(sequelize);
 	defineExcursionRow(sequelize);

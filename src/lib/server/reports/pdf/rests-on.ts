@@ -1,5 +1,6 @@
 import type { Content } from 'pdfmake/interfaces';
 import type { AssessmentView, DocketLineView } from '../../../schemas/docket';
+import { amountText } from '../../../schemas/clock-correction';
 import { lineNames, type Draft } from './draft';
 import { ledger, noteBelow } from './ledger';
 import { palette, sizePoints } from './palette';
@@ -14,7 +15,7 @@ interface Ground {
 
 /** Opening balance, gaps, the model's edges and trims: every assumption with its figure and its source. */
 export function restsOn(draft: Draft): Content[] {
-	const rows = [...shared(draft), ...trimRows(draft)];
+	const rows = [...shared(draft), ...clockRows(draft), ...trimRows(draft)];
 	if (rows.length === 0) return [];
 	const specs = new Set(
 		draft.chapters.map(({ assessment }) => `${assessment.specName}, version ${assessment.specVersion}`)
@@ -90,6 +91,15 @@ function assumptions({ thermometer }: Draft, assessment: AssessmentView): Ground
 			value > 0 ? [{ name, figure: `${hoursMinutes(value * 60)} h`, how }] : []
 		)
 	];
+}
+
+/** Each clock a person put right: the readings stand as exported, the shift beside them. */
+function clockRows({ docket }: Draft): Ground[] {
+	return docket.clockCorrections.map(({ logger, shiftMs, by, reason }) => ({
+		name: `Clock of ${logger}`,
+		figure: `${shiftMs < 0 ? '−' : '+'}${amountText(shiftMs)} h`,
+		how: `every reading moved, by ${by}: ${reason}`
+	}));
 }
 
 /** Each stretch a person left out, with who did and why: they stay visible. */

@@ -1,4 +1,5 @@
 import { fail, redirect } from '@sveltejs/kit';
+import { clockCorrectionForm, clockRestoring } from '$lib/schemas/clock-correction';
 import { rememberForm } from '$lib/schemas/layout';
 import { answerForm, keepForm, withdrawForm } from '$lib/schemas/read';
 import { rememberLayout } from '$lib/server/layouts/remember-layout';
@@ -10,6 +11,7 @@ import { keepRead } from '$lib/server/reads/keep-read';
 import { keepUnread } from '$lib/server/reads/keep-unread';
 import { withdrawRead } from '$lib/server/reads/withdraw-read';
 import { contextOf, orError, orFail, parseForm } from '$lib/server/request';
+import { correctClock, restoreClock } from '$lib/server/traces/correct-clock';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, params }) => {
@@ -23,6 +25,7 @@ export const load: PageServerLoad = async ({ locals, params }) => {
 			confirm: may(ctx.actor, 'layout.confirm'),
 			keep: may(ctx.actor, 'read.upload'),
 			withdraw: may(ctx.actor, 'read.withdraw'),
+			correctClock: may(ctx.actor, 'clock.correct'),
 			openRaw: may(ctx.actor, 'raw-file.open')
 		},
 		back: {
@@ -113,6 +116,36 @@ export const actions = {
 		}
 
 		redirect(303, `/shipments/${params.docket}`);
+	},
+
+	correctClock: async ({ locals, params, request }) => {
+		const ctx = contextOf(locals);
+
+		const form = await parseForm(request, clockCorrectionForm);
+		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'clock' });
+
+		try {
+			await correctClock(ctx, params.read, form.data);
+		} catch (e) {
+			return orFail(e, { reason: form.data.reason });
+		}
+
+		redirect(303, `/shipments/${params.docket}/reads/${params.read}#clock`);
+	},
+
+	restoreClock: async ({ locals, params, request }) => {
+		const ctx = contextOf(locals);
+
+		const form = await parseForm(request, clockRestoring);
+		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'clock' });
+
+		try {
+			await restoreClock(ctx, params.read, form.data.correctionId);
+		} catch (e) {
+			return orFail(e);
+		}
+
+		redirect(303, `/shipments/${params.docket}/reads/${params.read}#clock`);
 	},
 
 	withdraw: async ({ locals, params, request }) => {
