@@ -119,6 +119,12 @@ const readings: { route: string; path: () => string; opensTo: readonly Who[]; ty
 		type: 'image/jpeg'
 	},
 	{
+		route: 'notes/files/{file}',
+		path: () => `/api/v1/notes/files/${load.noteFileId}`,
+		opensTo: ['dock', 'qa', 'claims', 'admin'],
+		type: 'application/octet-stream'
+	},
+	{
 		route: 'reports/{report}',
 		path: () => `/api/v1/reports/${reportId}`,
 		opensTo: ['dock', 'qa', 'claims', 'admin', 'supplier'],
@@ -156,6 +162,18 @@ describe.each(readings)('GET $route', ({ path, opensTo, type }) => {
 		expect([403, 404]).toContain(answer.status);
 		const { message } = refusal.parse(await answer.json());
 		expect(message).not.toContain(load.shipment.title);
+	});
+});
+
+describe('notes', () => {
+	it('are on the docket of the house, and on no page of its supplier', async () => {
+		const house = await (await visitors.qa.request(`/shipments/${load.shipment.number}`)).text();
+		const supplied = await (await visitors.supplier.request(`/loads/${load.shipment.id}`)).text();
+		expect(supplied).toContain(load.shipment.number);
+		for (const part of ['Carrier was told at 06:40.', 'letter.pdf', load.noteFileId]) {
+			expect(house).toContain(part);
+			expect(supplied).not.toContain(part);
+		}
 	});
 });
 
@@ -213,6 +231,7 @@ describe('what changes something by the API', () => {
 			['/api/v1/shipments', JSON.stringify({}), 'application/json'],
 			[`/api/v1/shipments/${load.shipment.number}/reads`, upload(), null],
 			[`/api/v1/shipments/${load.shipment.number}/photos`, upload(), null],
+			[`/api/v1/shipments/${load.shipment.number}/notes`, upload(), null],
 			[`/api/v1/reads/${load.readId}/answers`, JSON.stringify({ choice: 0 }), 'application/json'],
 			[`/api/v1/reads/${load.readId}/keep`, JSON.stringify({}), 'application/json']
 		] as const;

@@ -5,6 +5,7 @@ import type { Placement } from '../domain/trace/trace';
 import type { TemperatureUnit } from '../domain/units';
 import type { ClockCorrectionView } from './clock-correction';
 import type { LaterFigures } from './later-figures';
+import type { NoteView } from './note';
 import type { CorrectionView, DeterminationView, ReviewView } from './signing';
 
 /** Where a docket stands; follows from its facts, never stored by itself. */
@@ -234,7 +235,7 @@ export interface DocketView {
 	clockCorrections: (ClockCorrectionView & { logger: string })[];
 	trims: { id: string; logger: string; fromAt: string; toAt: string; reason: string; by: string }[];
 	photos: { id: string; caption: string; kind: string; by: string; at: string; bytes: number }[];
-	notes: { id: string; text: string; by: string; at: string }[];
+	notes: NoteView[];
 	clocks: ClockView[];
 	signatures: SignatureView[];
 	notices: {

@@ -18,6 +18,8 @@ const sentences: Record<string, (data: Record<string, unknown>) => string> = {
 	'pulp.recorded': ({ position }) => `Pulp reading, ${position}`,
 	'photo.added': ({ kind }) => `Photo added, ${kind}`,
 	'note.written': () => 'Note written',
+	'note.file-attached': ({ fileSha256 }) =>
+		`File attached to a note, SHA-256 ${String(fileSha256 ?? '').slice(0, 12)}`,
 	'read.received': ({ fileName }) => `Export received, ${fileName}`,
 	'read.answered': () => 'Question about a file answered',
 	'read.kept': ({ readings }) => `Read kept, ${readings} readings`,

@@ -66,6 +66,8 @@ export interface EventData {
 	'pulp.recorded': { lineId: string | null; position: string; degrees: number; unit: string };
 	'photo.added': { photoId: string; fileSha256: string; kind: string };
 	'note.written': { noteId: string; text: string };
+	/** An entry of its own, so that the hash stays where retention blanks the note's words. */
+	'note.file-attached': { noteId: string; fileSha256: string; fileBytes: number; mediaType: string };
 	'read.received': { readId: string; fileName: string; fileSha256: string; fileBytes: number; state: string };
 	'read.answered': { readId: string; answers: Record<string, unknown> };
 	'read.kept': { readId: string; traceIds: string[]; readings: number };

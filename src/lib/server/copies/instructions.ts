@@ -11,6 +11,8 @@ decisions/*.json      each signed decision as it was frozen at its signature, by
 exports/              logger exports as they were uploaded, byte for byte
 readings/*.csv        the readings taken from them
 photographs/          photographs taken at the door
+notes/                files attached to notes, byte for byte
+files/                every other file the records name, under its SHA-256: papers of a claim, a driver's signature
 audit/entries.jsonl   the docket's audit trail, an entry a line, oldest first; audit/entries.csv is the same
 audit/head.json       where that trail ends, and the checkpoints over all trails that took note of it
 manifest.json         each file with its size and SHA-256

@@ -10,11 +10,13 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { buildSeenLoad } from '../../../../tests/handlers/signed-load';
 import { buildUser, contextFor, testNow } from '../../../../tests/helpers/factories';
 import { useTestDatabase } from '../../../../tests/helpers/test-database';
+import { multipart } from '../../../../tests/helpers/upload';
 import { makeCheckpoint } from '../audit/checkpoint';
 import { AuditEntry } from '../db/models/audit-entry';
 import { Disposition } from '../db/models/disposition';
 import { inTransaction } from '../db/transaction';
 import { addNote } from '../notes/add-note';
+import { receiveNote } from '../notes/receive-note';
 import { sha256Hex } from '../storage/sha256';
 import { recordsCsv } from './records-csv';
 import { takeDocketCopy } from './take-docket-copy';
@@ -25,12 +27,15 @@ let load: Awaited<ReturnType<typeof buildSeenLoad>>;
 let files: Record<string, Uint8Array>;
 const folders: string[] = [];
 
+const letter = '%PDF-1.4 a letter';
 const frozen = '{"docket":{"number":"x"},"signature":{"meaning":"approval"}}';
 
 beforeAll(async () => {
 	load = await buildSeenLoad();
 	const qa = await contextFor(load.people.qa);
 	await addNote(qa, load.shipment.number, { id: uuid(), text: '=HYPERLINK("http://a.example")' });
+	const sent = await multipart([{ name: 'letter (1).pdf', content: letter }], { text: 'The letter' });
+	await receiveNote(qa, load.shipment.number, sent);
 	await Disposition.create({
 		id: uuid(),
 		shipmentId: load.shipment.id,
@@ -132,6 +137,20 @@ describe('a copy of a docket', () => {
 			expect(files[file]?.byteLength).toBe(bytes);
 		}
 		expect(textOf('decisions/version-1.json')).toBe(frozen);
+	});
+
+	it('holds the files of notes byte for byte, named in its records and in the trail by hash', () => {
+		expect(textOf('notes/1-letter_1_.pdf')).toBe(letter);
+		expect(JSON.parse(textOf('records.json')).note_files).toMatchObject([{ file_name: 'letter (1).pdf' }]);
+		expect(textOf('audit/entries.jsonl')).toContain(sha256Hex(letter));
+	});
+
+	it('holds every file its records name, also those of no other kind', () => {
+		const { files: rows } = JSON.parse(textOf('records.json'));
+		const held = Object.values(files).map((bytes) => sha256Hex(bytes));
+		expect(
+			rows.map(({ sha256 }: { sha256: string }) => sha256).filter((one: string) => !held.includes(one))
+		).toEqual([]);
 	});
 
 	it('holds no password, session or token, and people by name and duty only', () => {

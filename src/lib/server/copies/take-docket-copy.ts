@@ -12,6 +12,7 @@ import { log } from '../log';
 import { authorizeShipment } from '../policies';
 import { chainCopy, type ChainCopy } from './chain-copy';
 import { docketRecords, type Row } from './docket-records';
+import { otherFiles } from './other-files';
 import { instructions } from './instructions';
 import { recordsCsv } from './records-csv';
 import verifyScript from './verify-copy.mjs?raw';
@@ -110,13 +111,20 @@ export async function takeDocketCopy(
 	const shipment = await Shipment.findOne({ where: { number } });
 	authorizeShipment(ctx, 'copy.take', shipment);
 	const docket = shipment as Shipment;
-	const files = await docketFiles(docket);
+	const evidence = await docketFiles(docket);
+	// Written before the snapshot, so that the copy's own trail says that it was taken.
 	await inTransaction(ctx, async ({ record }) =>
-		record('copy.taken', { scope: 'shipment', id: docket.id }, { shipmentId: docket.id, files: files.length })
+		record(
+			'copy.taken',
+			{ scope: 'shipment', id: docket.id },
+			{ shipmentId: docket.id, files: evidence.length }
+		)
 	);
+	const snapshot = await snapshotOf(docket.id);
+	const others = otherFiles(snapshot.records, new Set(evidence.map(({ sha256 }) => sha256)));
 	const pieces = [
-		...textPieces(ctx, docket, await snapshotOf(docket.id)),
-		...files.map(({ fileName, open }) => ({ name: fileName, open }))
+		...textPieces(ctx, docket, snapshot),
+		...[...evidence, ...others].map(({ fileName, open }) => ({ name: fileName, open }))
 	];
 	const archive = new ZipArchive({ zlib: { level: 6 } });
 	const out = new PassThrough();

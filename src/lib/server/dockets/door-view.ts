@@ -78,7 +78,13 @@ export function noteViews(rows: DocketRows): DocketView['notes'] {
 		id: row.id,
 		text: row.text,
 		by: nameOf(rows, row.writtenBy),
-		at: row.writtenAt.toISOString()
+		at: row.writtenAt.toISOString(),
+		files: rows.noteFiles
+			.filter(({ noteId }) => noteId === row.id)
+			.map(({ id, fileId, fileName }) => {
+				const file = rows.files.find((candidate) => candidate.id === fileId);
+				return { id, fileName, bytes: Number(file?.bytes ?? 0), sha256: file?.sha256 ?? '' };
+			})
 	}));
 }
 

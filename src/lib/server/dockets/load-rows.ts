@@ -13,6 +13,7 @@ import { Logger } from '../db/models/logger';
 import { LoggerRead } from '../db/models/logger-read';
 import { LoggerTrip } from '../db/models/logger-trip';
 import { Note } from '../db/models/note';
+import { NoteFile } from '../db/models/note-file';
 import { Notice } from '../db/models/notice';
 import { Pallet } from '../db/models/pallet';
 import { Partner } from '../db/models/partner';
@@ -96,6 +97,11 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 		reads.map((row) => row.id),
 		transaction
 	);
+	const noteFiles = await NoteFile.findAll({
+		where: { noteId: notes.map((row) => row.id) },
+		order: ['ordinal'],
+		transaction
+	});
 	const userIds = ids([
 		...trims.map((row) => row.madeBy),
 		arrival?.loggedBy,
@@ -120,7 +126,8 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 					ids([
 						...reads.map((row) => row.fileId),
 						...reports.map((row) => row.fileId),
-						...photos.map((row) => row.fileId)
+						...photos.map((row) => row.fileId),
+						...noteFiles.map((row) => row.fileId)
 					])
 				)
 			),
@@ -158,6 +165,7 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 		pulp,
 		photos,
 		notes,
+		noteFiles,
 		holds,
 		clocks,
 		dispositions,

@@ -2,13 +2,24 @@ import { v7 as uuid } from 'uuid';
 import type { NoteInput } from '../../schemas/note';
 import type { Context } from '../context';
 import { Note } from '../db/models/note';
+import { NoteFile } from '../db/models/note-file';
 import { inTransaction } from '../db/transaction';
 import { Refusal } from '../refusals';
 import { lockDocket } from '../shipments/lock-docket';
+import type { KeptFile } from './attached-files';
 
-/** Writes a note on a docket, also on a signed one: a note is no part of what was signed. */
-export async function addNote(ctx: Context, number: string, input: NoteInput): Promise<{ id: string }> {
+/**
+ * Writes a note on a docket with the files that hang on it, also on a signed one: a note is no part of what was signed.
+ * The same id again answers the one it made. @throws Refusal `not-found`, `not-allowed`, `cancelled`, `duplicate`
+ */
+export async function addNote(
+	ctx: Context,
+	number: string,
+	input: NoteInput,
+	files: readonly KeptFile[] = []
+): Promise<{ id: string }> {
 	const id = input.id ?? uuid();
+	const rows = files.map((file, at) => ({ id: uuid(), noteId: id, ordinal: at + 1, ...file }));
 	return inTransaction(ctx, async ({ transaction, record }) => {
 		const shipment = await lockDocket(ctx, 'note.write', number, transaction);
 		if (shipment.cancelledAt) throw new Refusal('cancelled');
@@ -19,7 +30,12 @@ export async function addNote(ctx: Context, number: string, input: NoteInput): P
 			{ id, shipmentId: shipment.id, text: input.text, writtenBy: ctx.actor.id, writtenAt: ctx.now },
 			{ transaction }
 		);
-		record('note.written', { scope: 'shipment', id: shipment.id }, { noteId: id, text: input.text });
+		const chain = { scope: 'shipment', id: shipment.id } as const;
+		record('note.written', chain, { noteId: id, text: input.text });
+		for (const { sha256, bytes, mediaType, ...row } of rows) {
+			await NoteFile.create(row, { transaction });
+			record('note.file-attached', chain, { noteId: id, fileSha256: sha256, fileBytes: bytes, mediaType });
+		}
 		return { id };
 	});
 }

@@ -31,6 +31,8 @@ interface SpoolLimits {
 	folder: string;
 	maxBytes: number;
 	maxFiles: number;
+	/** What one field may hold; the rest is cut off. */
+	maxFieldBytes?: number;
 }
 
 /**
@@ -40,15 +42,16 @@ interface SpoolLimits {
 export async function spoolUpload(
 	body: Readable,
 	contentType: string | null,
-	{ folder, maxBytes, maxFiles }: SpoolLimits
+	limits: SpoolLimits
 ): Promise<Spooled> {
+	const { folder, maxBytes } = limits;
 	const place = join(folder, randomBytes(8).toString('hex'));
 	await mkdir(place, { recursive: true });
 	const clear = () => rm(place, { recursive: true, force: true });
 	const fields = new Map<string, string[]>();
 	const writes: Promise<SpooledFile | null>[] = [];
 	try {
-		const parser = parserFor(contentType, maxBytes, maxFiles);
+		const parser = parserFor(contentType, limits);
 		parser.on('field', (name, value) => void fields.set(name, [...(fields.get(name) ?? []), value]));
 		parser.on('file', (field, stream, info) => {
 			const written = writeOne(stream, { ...info, field }, join(place, String(writes.length)), maxBytes);
@@ -66,14 +69,14 @@ export async function spoolUpload(
 	}
 }
 
-function parserFor(contentType: string | null, maxBytes: number, maxFiles: number) {
+function parserFor(contentType: string | null, { maxBytes, maxFiles, maxFieldBytes = 4096 }: SpoolLimits) {
 	if (!contentType?.startsWith('multipart/form-data')) throw new Refusal('not-multipart');
 	try {
 		return busboy({
 			headers: { 'content-type': contentType },
 			defParamCharset: 'utf8',
 			// One byte more than is taken: a file of just the limit is whole.
-			limits: { fileSize: maxBytes + 1, files: maxFiles, fields: 100, fieldSize: 4096, parts: 200 }
+			limits: { fileSize: maxBytes + 1, files: maxFiles, fields: 100, fieldSize: maxFieldBytes, parts: 200 }
 		});
 	} catch {
 		throw new Refusal('not-multipart');

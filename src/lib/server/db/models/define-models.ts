@@ -26,6 +26,7 @@ import { defineLoggerTrip } from './logger-trip';
 import { defineArrival } from './arrival';
 import { definePulpReading } from './pulp-reading';
 import { defineNote } from './note';
+import { defineNoteFile } from './note-file';
 import { definePhoto } from './photo';
 import { defineRememberedLayout } from './remembered-layout';
 import { defineLoggerRead } from './logger-read';
@@ -91,6 +92,7 @@ export function defineModels(sequelize: Sequelize): void {
 	defineArrival(sequelize);
 	definePulpReading(sequelize);
 	defineNote(sequelize);
+	defineNoteFile(sequelize);
 	definePhoto(sequelize);
 	defineRememberedLayout(sequelize);
 	defineLoggerRead(sequelize);

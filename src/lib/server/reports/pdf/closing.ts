@@ -15,7 +15,10 @@ const caution =
 	'stability data, or the decision of the responsible person or the authority. Claims deadlines are aids, not legal advice: ' +
 	'contract and local law govern.';
 
-/** What was photographed and noted at the door; the pictures themselves stay with the record. */
+/**
+ * What was photographed and noted at the door; the pictures themselves stay with the record. Notes are the house's own,
+ * and the report goes to the supplier: it says how many there are, and their words stay in the frozen record.
+ */
 export function photosAndNotes(draft: Draft): Content[] {
 	const { docket, calendar } = draft;
 	const when = (at: string) => `${calendar.day(at)} ${calendar.time(at)}`;
@@ -28,14 +31,14 @@ export function photosAndNotes(draft: Draft): Content[] {
 				when(photo.at)
 			] as const
 	);
-	const notes = docket.notes.map((note) => ['note', note.text, note.by, when(note.at)] as const);
 	const condition = docket.arrival?.conditionNote ?? null;
 	const atTheDoor =
 		docket.arrival === null || condition === null
 			? []
 			: [['condition', condition, docket.arrival.loggedBy, when(docket.arrival.arrivedAt)] as const];
-	const rows = [...atTheDoor, ...photos, ...notes];
-	if (rows.length === 0) return [];
+	const rows = [...atTheDoor, ...photos];
+	const noted = notesKept(docket.notes.length);
+	if (rows.length === 0) return noted;
 	return [
 		ledger({
 			width: draft.sheet.mainWidth,
@@ -54,8 +57,15 @@ export function photosAndNotes(draft: Draft): Content[] {
 				words(by),
 				sentence(at, { size: sizePoints.table, color: palette.ink })
 			])
-		})
+		}),
+		...noted
 	];
+}
+
+function notesKept(notes: number): Content[] {
+	if (notes === 0) return [];
+	const said = notes === 1 ? 'One internal note is' : `${notes} internal notes are`;
+	return [sentence(`${said} kept with the record and not printed here.`, { margin: [0, 6, 0, 0] })];
 }
 
 /** Printed name, meaning, date and time with zone: the three things a signature must show. Source: 21 CFR 11.50(a). */

@@ -283,7 +283,6 @@ describe('a very long load', () => {
 		expect(text.match(/All legs/gu)).toHaveLength(12);
 		expect(text.match(/in product/gu)?.length).toBeGreaterThanOrEqual(12);
 		expect(text).toContain('End of the reasons.');
-		for (let n = 1; n <= 9; n++) expect(text).toContain(`Note ${n}.`);
 	});
 
 	it('shows the photographs with the hash of each', () => {
@@ -292,16 +291,17 @@ describe('a very long load', () => {
 		expect(pages.join('')).toContain('Row three, film torn');
 	});
 
-	it('lets a note that is longer than a page go on overleaf', async () => {
-		const notes = [
-			{
-				id: 'n',
-				by: 'D. Marsh',
-				at: '2026-04-03T06:20:00.000Z',
-				text: `Begin. ${'Film torn at row three. '.repeat(400)}The very end.`
-			}
-		];
-		const text = textOf(await reportPdf(withDocket({ notes }, 1)));
+	it('says how many notes the house keeps, and not a word of them: the report goes to the supplier', () => {
+		const text = pages.join('').replace(/\s+/gu, ' ');
+		expect(text).toContain('9 internal notes are kept with the record and not printed here.');
+		expect(text).not.toMatch(/Note \d\./u);
+	});
+
+	it('lets a remark from the door that is longer than a page go on overleaf', async () => {
+		const { arrival } = reportInput({}, 1).frozen.docket;
+		if (!arrival) throw new Error('The sample load has no arrival.');
+		const conditionNote = `Begin. ${'Film torn at row three. '.repeat(400)}The very end.`;
+		const text = textOf(await reportPdf(withDocket({ arrival: { ...arrival, conditionNote } }, 1)));
 		expect(text.match(/torn/gu)).toHaveLength(400);
 		expect(text.replace(/\s+/gu, ' ')).toContain('very end.');
 	});

@@ -1,11 +1,13 @@
 import { fail } from '@sveltejs/kit';
+import { v7 as uuid } from 'uuid';
 import { pulpInput } from '$lib/schemas/arrival';
 import type { DocketView } from '$lib/schemas/docket';
 import { queryOf } from '$lib/schemas/list';
 import { photoInput } from '$lib/schemas/photo';
-import { holdInput, noteInput } from '$lib/schemas/note';
+import { holdInput } from '$lib/schemas/note';
 import { shareBasisQuery } from '$lib/schemas/share-basis';
 import { trimUndoing, typedTrim } from '$lib/schemas/trim';
+import { uploadOf } from '$lib/server/reads/upload-of';
 import { airAtPulp } from '$lib/server/arrivals/air-at-pulp';
 import { recordPulp } from '$lib/server/arrivals/record-pulp';
 import type { Context } from '$lib/server/context';
@@ -18,7 +20,7 @@ import { getDocket } from '$lib/server/dockets/get-docket';
 import { listForecastBases } from '$lib/server/dockets/list-forecast-bases';
 import { liftHold } from '$lib/server/holds/lift-hold';
 import { putHold } from '$lib/server/holds/put-hold';
-import { addNote } from '$lib/server/notes/add-note';
+import { NoteNotTaken, receiveNote } from '$lib/server/notes/receive-note';
 import { mayAcceptAtDock } from '$lib/server/authority/dock-accept';
 import { findNextWaiting } from '$lib/server/queue/list-queue';
 import { may } from '$lib/server/policies';
@@ -66,6 +68,8 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 	return {
 		docket,
 		version,
+		/** Sent along with the next note: pressed twice, it writes one. */
+		newNoteId: version === null ? uuid() : null,
 		shareBasis: version === null ? basis : undefined,
 		forecasts: version === null ? await orError(listForecastBases(ctx, docket.id)) : [],
 		taker: docket.arrival && version === null ? await orError(findTaker(ctx, docket.number)) : null,
@@ -80,13 +84,12 @@ export const actions = {
 	note: async ({ locals, params, request }) => {
 		const ctx = contextOf(locals);
 
-		const form = await parseForm(request, noteInput);
-		if (!form.ok) return fail(422, { values: form.values, issues: form.issues, code: 'invalid' });
-
 		try {
-			await addNote(ctx, params.docket, form.data);
+			await receiveNote(ctx, params.docket, uploadOf(request));
 		} catch (e) {
-			return orFail(e, form.data);
+			if (!(e instanceof NoteNotTaken)) return orFail(e);
+			const issues: Record<string, string> = { [e.fault.field]: e.fault.sentence };
+			return fail(e.status, { values: { text: e.text }, issues, code: 'note' });
 		}
 	},
 
