@@ -97,7 +97,7 @@ async function expectNoWayIn(page: Page, target: Target): Promise<void> {
 		const headers = { origin, accept: 'text/html' };
 		await refuses(await page.request.post(path, { form, headers }), target, [403, 404, 422]);
 	}
-	const posts = [`/api/v1/shipments/${target.number}/reads`, `/api/v1/shipments/${target.number}/photos`];
+	const posts = ['reads', 'photos', 'notes'].map((kind) => `/api/v1/shipments/${target.number}/${kind}`);
 	for (const path of posts) {
 		const file = { name: 'a.csv', mimeType: 'text/csv', buffer: Buffer.from('Time;°C\n') };
 		const answer = await page.request.post(path, { multipart: { files: file }, headers: { origin } });
