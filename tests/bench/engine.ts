@@ -2,6 +2,7 @@ import { assess } from '../../src/lib/domain/receiving/assess';
 import type { RateModel } from '../../src/lib/domain/shelf-life/spec';
 import { lifeSides } from '../../src/lib/domain/receiving/life-sides';
 import { courseOf } from '../../src/lib/domain/shelf-life/course';
+import { passagesOf } from '../../src/lib/domain/shelf-life/passages';
 import { rateCurve } from '../../src/lib/domain/shelf-life/rate-curve';
 import { packTrace } from '../../src/lib/domain/trace/pack';
 import { SharedRoom } from '../../src/lib/domain/trace/room';
@@ -120,7 +121,8 @@ function exponentials({ scaled }: Trace): number {
 /** Cumulative life used at every reading and nothing else. */
 function lifeAlone(trace: Trace, room: SharedRoom): number {
 	const curve = rateCurve(buildSpec({ model: { kind: 'constant-q10', q10: 3 } }));
-	const { value } = lifeSides(courseOf(trace, null, [], room), curve, 0.5, room);
+	const course = courseOf(trace, null, [], room);
+	const { value } = lifeSides(course, passagesOf(course, room), { curve, accuracyCelsius: 0.5 }, room);
 	return value.usedHours[value.usedHours.length - 1] as number;
 }
 

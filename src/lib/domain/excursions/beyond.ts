@@ -120,7 +120,7 @@ class BeyondWalk {
 
 	/** Takes a run of readings beyond the limit and closes its stretch; the index of the first reading after it. */
 	#run(first: number): number {
-		const { times, celsius, steps, levelOf } = this.#course;
+		const { times, levels, steps, levelOf } = this.#course;
 		const isCut = first > 0 && steps[first - 1] === trimmed;
 		if (isCut) this.#settle();
 		if (this.#unsettled !== null) this.#found.push(this.#unsettled);
@@ -142,7 +142,7 @@ class BeyondWalk {
 			fromMs: this.#crossingBefore(first, isCut),
 			toMs: leaving.toMs,
 			degreeMs: degreeMs + leaving.degreeMs,
-			extremeCelsius: celsius[extremeAt] as number,
+			extremeCelsius: levels[levelOf[extremeAt] as number] as number,
 			extremeAtMs: times[extremeAt] as number,
 			isSettled: false,
 			isOpen: at + 1 >= levelOf.length

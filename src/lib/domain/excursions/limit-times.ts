@@ -1,5 +1,4 @@
 import type { Course } from '../shelf-life/course';
-import { trimmed } from '../shelf-life/course';
 import type { Spec } from '../shelf-life/spec';
 import { msPerMinute } from '../units';
 import { stretchesBeyond } from './beyond';
@@ -22,6 +21,8 @@ export interface CourseTotals {
 	readonly meanCelsius: number;
 	/** Time that counts: trims are left out. */
 	readonly totalMs: number;
+	/** By level, time between two readings that both stand on it. */
+	readonly restingMs: Float64Array;
 }
 
 /** How long, and by how much, a course ran above and below each limit and stop of the spec. No grace is given here. */
@@ -46,12 +47,13 @@ export function limitTimes(
  * The rarer side is walked along; the other follows, since the degrees above less those below are the mean's distance
  * from the limit times the whole time, and what is neither above nor below is on the limit.
  */
-function timesBeyond(course: Course, celsius: number, { meanCelsius, totalMs }: CourseTotals) {
+function timesBeyond(course: Course, celsius: number, { meanCelsius, totalMs, restingMs }: CourseTotals) {
+	const onLimitMs = restingMs[course.levels.indexOf(celsius)] ?? 0;
 	const isMostlyBelow = meanCelsius <= celsius;
 	const walked = sumOf(course, celsius, isMostlyBelow ? 'above' : 'below');
 	const sign = isMostlyBelow ? 1 : -1;
 	const other = {
-		ms: Math.max(0, totalMs - walked.ms - msOnLimit(course, celsius)),
+		ms: Math.max(0, totalMs - walked.ms - onLimitMs),
 		degreeMs: Math.max(0, walked.degreeMs - sign * (meanCelsius - celsius) * totalMs)
 	};
 	const [above, below] = isMostlyBelow ? [walked, other] : [other, walked];
@@ -71,16 +73,4 @@ function sumOf(course: Course, celsius: number, side: 'above' | 'below') {
 		degreeMs += stretch.degreeMs;
 	}
 	return { ms, degreeMs };
-}
-
-/** Time between two readings that both stand on the limit. */
-function msOnLimit({ times, steps, levels, levelOf }: Course, celsius: number): number {
-	const level = levels.indexOf(celsius);
-	if (level < 0) return 0;
-	let ms = 0;
-	for (let i = 0; i < steps.length; i++) {
-		if (levelOf[i] !== level || levelOf[i + 1] !== level || steps[i] === trimmed) continue;
-		ms += (times[i + 1] as number) - (times[i] as number);
-	}
-	return ms;
 }

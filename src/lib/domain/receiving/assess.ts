@@ -7,6 +7,7 @@ import { findStops } from '../excursions/find-stops';
 import { limitTimes } from '../excursions/limit-times';
 import { courseOf, type Course } from '../shelf-life/course';
 import { hoursAbove, hoursBelow, type LifeUsed } from '../shelf-life/life-used';
+import { passagesOf } from '../shelf-life/passages';
 import { rateBounds } from '../shelf-life/rate-bounds';
 import { rateCurve, type RateCurve } from '../shelf-life/rate-curve';
 import type { SpecFault } from '../shelf-life/spec-fault';
@@ -55,12 +56,13 @@ export function assess(input: AssessInput, room: Room = ownRoom): Assessment {
 	if (course.times.length === 1) throw new AssessmentRefusal('one-reading-in-window');
 	const curve = rateCurve(spec);
 	const bounds = rateBounds(spec);
-	const sides = lifeSides(course, curve, accuracyCelsius, room, bounds);
+	const passages = passagesOf(course, room);
+	const sides = lifeSides(course, passages, { curve, bounds, accuracyCelsius }, room);
 	const opening = openingHours(input.opening, spec, curve, course.times[0] as number, bounds);
 	const used = totalOf(sides);
 	const remaining = remainingOf(spec.fullLifeHours, spec.fullLifeUncertaintyHours, opening, used);
-	const unobserved = unobservedFigures(gapsOf(course, sides));
-	const held = levelTimes(course);
+	const unobserved = unobservedFigures(gapsOf(course, passages, sides));
+	const held = levelTimes(course, passages);
 	const journey = journeyFigures(course, spec.mkt, held);
 	const totalMs = held.besideMs.reduce((sum, ms) => sum + ms, 0) / 2;
 	return {
@@ -74,11 +76,20 @@ export function assess(input: AssessInput, room: Room = ownRoom): Assessment {
 		openingHours: opening,
 		usedHours: used,
 		remainingHours: remaining,
-		rangeParts: rangeParts(used, unobserved.unobservedUsedHours, opening, spec.fullLifeUncertaintyHours),
+		rangeParts: rangeParts(
+			sides.watchedHours,
+			unobserved.unobservedUsedHours,
+			opening,
+			spec.fullLifeUncertaintyHours
+		),
 		...journey,
 		...unobserved,
 		...modelFigures(course, curve, spec.chillingCelsius),
-		limitTimes: limitTimes(spec, course, { meanCelsius: journey.meanCelsius, totalMs }),
+		limitTimes: limitTimes(spec, course, {
+			meanCelsius: journey.meanCelsius,
+			totalMs,
+			restingMs: held.restingMs
+		}),
 		incidents: findIncidents(course, input.placement, held.standsForMs),
 		...custodyFigures(input, course, curve, sides.value, remaining.value, lastReadingMs),
 		series: seriesOf(course, sides)
@@ -141,13 +152,15 @@ function custodyFigures(
 	};
 }
 
-/** The low and the high are worked out when they are asked for: only the chart draws them. */
+/** All but what was used is worked out when it is asked for: only the chart draws them. */
 function seriesOf(course: Course, sides: LifeSides): Assessment['series'] {
 	let low: Float64Array | null = null;
 	let high: Float64Array | null = null;
 	return {
 		times: course.times,
-		celsius: course.celsius,
+		get celsius() {
+			return course.celsius;
+		},
 		usedHours: sides.value.usedHours,
 		get usedLowHours() {
 			return (low ??= sides.seriesOf('low'));

@@ -1,2 +1,2 @@
 /** Names the digits: any change to a stored figure, however small, takes a new version. */
-export const engineVersion = '1.1.0';
+export const engineVersion = '1.2.0';

@@ -1,5 +1,6 @@
-import { unobserved, type Course } from '../shelf-life/course';
+import type { Course } from '../shelf-life/course';
 import { meanKineticCelsius } from '../shelf-life/mean-kinetic';
+import type { Passages } from '../shelf-life/passages';
 import type { MktRule } from '../shelf-life/spec';
 import { msPerHour } from '../units';
 import type { Gap } from './assessment';
@@ -23,11 +24,10 @@ export function journeyFigures(course: Course, rule: MktRule, times: LevelTimes)
 }
 
 /** Every gap with what it used: bridged linearly, and bracketed by its neighbours. */
-export function gapsOf({ times, steps, isEven = false }: Course, sides: LifeSides): Gap[] {
-	const gaps: Gap[] = [];
-	if (isEven) return gaps;
-	for (let i = steps.indexOf(unobserved); i >= 0; i = steps.indexOf(unobserved, i + 1)) {
-		gaps.push({ fromMs: times[i] as number, toMs: times[i + 1] as number, usedHours: sides.acrossGap(i) });
-	}
-	return gaps;
+export function gapsOf({ times }: Course, { silent }: Passages, sides: LifeSides): Gap[] {
+	return silent.map((at) => ({
+		fromMs: times[at] as number,
+		toMs: times[at + 1] as number,
+		usedHours: sides.acrossGap(at)
+	}));
 }

@@ -1,5 +1,6 @@
 import { RunningSum } from '../math/sum';
 import { trimmed, type Course } from '../shelf-life/course';
+import { eachPassage, type Passages } from '../shelf-life/passages';
 
 /** Whole milliseconds by level, so that sums of them are exact. */
 export interface LevelTimes {
@@ -7,6 +8,8 @@ export interface LevelTimes {
 	readonly standsForMs: Float64Array;
 	/** Time of the steps that count on both sides of each reading: twice its weight in a mean along straight lines. */
 	readonly besideMs: Float64Array;
+	/** Time between two readings that both stand on the level. */
+	readonly restingMs: Float64Array;
 }
 
 /**
@@ -16,50 +19,43 @@ export interface LevelTimes {
  * gives the textbook figure over its readings. Before a trim it stands for the usual interval too: what was cut out
  * is not the journey.
  */
-export function levelTimes(course: Course): LevelTimes {
-	return course.isEven ? evenTimes(course) : unevenTimes(course);
-}
-
-function evenTimes({ levels, levelOf, usualIntervalMs }: Course): LevelTimes {
-	// Two counters take turns: a logger repeats itself, and one would wait for its own last write.
-	const even = new Float64Array(levels.length);
-	const odd = new Float64Array(levels.length);
-	let i = 0;
-	for (; i + 1 < levelOf.length; i += 2) {
-		const a = levelOf[i] as number;
-		const b = levelOf[i + 1] as number;
-		even[a] = (even[a] as number) + 1;
-		odd[b] = (odd[b] as number) + 1;
-	}
-	if (i < levelOf.length) {
-		const last = levelOf[i] as number;
-		even[last] = (even[last] as number) + 1;
-	}
-	const standsForMs = even.map((count, level) => (count + (odd[level] as number)) * usualIntervalMs);
-	const besideMs = standsForMs.map((ms) => 2 * ms);
-	for (const end of [levelOf[0] as number, levelOf[levelOf.length - 1] as number]) {
-		besideMs[end] = (besideMs[end] as number) - usualIntervalMs;
-	}
-	return { standsForMs, besideMs };
-}
-
-function unevenTimes({ times, steps, levels, levelOf, usualIntervalMs }: Course): LevelTimes {
-	const standsForMs = new Float64Array(levels.length);
-	const besideMs = new Float64Array(levels.length);
-	const add = (sums: Float64Array, reading: number, ms: number) => {
-		const level = levelOf[reading] as number;
-		sums[level] = (sums[level] as number) + ms;
+export function levelTimes(course: Course, passages: Passages): LevelTimes {
+	const { times, levels, levelOf, usualIntervalMs } = course;
+	const held = {
+		standsForMs: new Float64Array(levels.length),
+		besideMs: new Float64Array(levels.length),
+		restingMs: new Float64Array(levels.length)
 	};
-	for (let i = 0; i < steps.length; i++) {
-		const ms = (times[i + 1] as number) - (times[i] as number);
-		const counts = steps[i] !== trimmed;
-		add(standsForMs, i, counts ? ms : Math.min(ms, usualIntervalMs));
-		if (!counts) continue;
-		add(besideMs, i, ms);
-		add(besideMs, i + 1, ms);
+	eachPassage(passages, (_, from, to, ms) => addPassage(held, from, to, ms));
+	for (const at of [...passages.far, ...passages.silent]) {
+		const ms = (times[at + 1] as number) - (times[at] as number);
+		addPassage(held, levelOf[at] as number, levelOf[at + 1] as number, ms);
 	}
-	add(standsForMs, levelOf.length - 1, usualIntervalMs);
-	return { standsForMs, besideMs };
+	addTrimmed(held.standsForMs, course);
+	add(held.standsForMs, levelOf[levelOf.length - 1] as number, usualIntervalMs);
+	return held;
+}
+
+function addPassage(held: LevelTimes, from: number, to: number, ms: number): void {
+	add(held.standsForMs, from, ms);
+	add(held.besideMs, from, ms);
+	add(held.besideMs, to, ms);
+	if (from === to) add(held.restingMs, from, ms);
+}
+
+function addTrimmed(
+	standsForMs: Float64Array,
+	{ times, steps, levelOf, usualIntervalMs, isEven }: Course
+): void {
+	if (isEven) return;
+	for (let i = steps.indexOf(trimmed); i >= 0; i = steps.indexOf(trimmed, i + 1)) {
+		const ms = (times[i + 1] as number) - (times[i] as number);
+		add(standsForMs, levelOf[i] as number, Math.min(ms, usualIntervalMs));
+	}
+}
+
+function add(sums: Float64Array, level: number, ms: number): void {
+	sums[level] = (sums[level] as number) + ms;
 }
 
 /** Mean over time, linear between readings; where no time passes that counts, over what the readings stand for. */

@@ -1,152 +1,134 @@
 import { RunningSum } from '../math/sum';
-import { observed, trimmed, type Course } from '../shelf-life/course';
+import { observed, trimmed, unobserved, type Course } from '../shelf-life/course';
 import type { LifeUsed } from '../shelf-life/life-used';
-import type { RateBounds } from '../shelf-life/rate-bounds';
-import { curveRateAt, meanRate, type RateCurve } from '../shelf-life/rate-curve';
+import { passageAt, type Passages } from '../shelf-life/passages';
 import { ownRoom, type Room } from '../trace/room';
 import { msPerHour } from '../units';
 import type { Range } from './assessment';
+import { LevelRates, type RateGiven, type SideIndex } from './level-rates';
 
 /** Life used by the readings as they are at every reading, and with them moved by the accuracy to either side. */
 export interface LifeSides {
 	readonly value: LifeUsed;
 	readonly lowHours: number;
 	readonly highHours: number;
+	/** How far the two are from the value by what was watched alone, gaps left out: below nothing, and above it. */
+	readonly watchedHours: { readonly low: number; readonly high: number };
 	/** The low or the high at every reading: for whoever draws it, since it takes as long again. */
 	seriesOf(side: 'low' | 'high'): Float64Array;
 	/** What a gap after a reading used: bridged linearly, and held at the colder or warmer neighbour. */
 	acrossGap(reading: number): Range;
 }
 
-/** Neighbouring readings are seldom further apart than this many levels: their mean rates are kept in a table. */
-const reach = 8;
-const width = 2 * reach + 1;
-const sides = 3;
 /** Plain sums of this few terms lose under a tenth of 1e-13; the sums of the blocks are compensated. */
 const blockSteps = 256;
 
-/** The rate at each level on the three sides, and the mean between two levels, worked out once. */
-class LevelRates {
-	readonly #curves: readonly [RateCurve, RateCurve, RateCurve];
-	readonly shifts: readonly [number, number, number];
-	readonly rates: readonly [Float64Array, Float64Array, Float64Array];
-	/** Mean rates value, low, high for level a to a + d at ((a × width) + d + reach) × 3; NaN until asked for. */
-	readonly means: Float64Array;
-	readonly #levels: Float64Array;
-
-	constructor(levels: Float64Array, curve: RateCurve, accuracyCelsius: number, bounds: RateBounds) {
-		this.#curves = [curve, bounds.low, bounds.high];
-		this.#levels = levels;
-		this.shifts = [0, -accuracyCelsius, accuracyCelsius];
-		const ratesOf = (side: 0 | 1 | 2) =>
-			levels.map((celsius) => curveRateAt(this.#curves[side], celsius + this.shifts[side]));
-		this.rates = [ratesOf(0), ratesOf(1), ratesOf(2)];
-		this.means = new Float64Array(levels.length * width * sides).fill(NaN);
-	}
-
-	mean(side: 0 | 1 | 2, a: number, b: number): number {
-		const shift = this.shifts[side];
-		const rates = this.rates[side];
-		const from = (this.#levels[a] as number) + shift;
-		const to = (this.#levels[b] as number) + shift;
-		return meanRate(this.#curves[side], from, to, rates[a] as number, rates[b] as number);
-	}
-
-	fill(at: number, a: number, b: number): void {
-		this.means[at] = this.mean(0, a, b);
-		this.means[at + 1] = this.mean(1, a, b);
-		this.means[at + 2] = this.mean(2, a, b);
-	}
-
-	across(a: number, b: number): readonly [number, number, number] {
-		return [this.mean(0, a, b), this.mean(1, a, b), this.mean(2, a, b)];
-	}
-
-	/** Across a gap the low holds the colder neighbour all through and the high the warmer. */
-	bracket(a: number, b: number): readonly [number, number, number] {
-		const [, low, high] = this.rates;
-		return [
-			this.mean(0, a, b),
-			Math.min(low[a] as number, low[b] as number),
-			Math.max(high[a] as number, high[b] as number)
-		];
-	}
+/** What the loop over a million readings goes through. */
+interface Integrand {
+	readonly course: Course;
+	readonly passages: Passages;
+	readonly rates: LevelRates;
+	/** By place among the passages: the hours used by each where all steps are alike, else the mean rate. */
+	readonly table: Float64Array;
+	readonly usedHours: Float64Array;
 }
 
 /**
- * Integrates the rate over the course on all three sides at once, exactly for temperature in a straight line between
- * readings, and keeps the total at every reading. Trimmed steps use nothing.
+ * Integrates the rate over the course on all three sides, exactly for temperature in a straight line between readings,
+ * and keeps the total of the readings as they are at every one. Trimmed steps use nothing.
  *
  * Low and high move every reading by the instrument's accuracy: an offset that lasts is the worst a calibrated logger
  * can do, so nothing averages out. What nobody watched may have been as cold, or as warm, as either neighbour all
- * through, moved likewise. `bounds` are the slowest and the fastest the model can be by its own ±: the low runs on
- * the one, the high on the other.
+ * through, moved likewise. The bounds given are the slowest and the fastest the model can be by its own ±: the low
+ * runs on the one, the high on the other. How far they are from the value is added up by passage: nothing where nothing
+ * is in doubt, and no matter in which order the readings came.
  */
 export function lifeSides(
 	course: Course,
-	curve: RateCurve,
-	accuracyCelsius: number,
-	room: Room = ownRoom,
-	bounds: RateBounds = { low: curve, high: curve }
+	passages: Passages,
+	given: RateGiven,
+	room: Room = ownRoom
 ): LifeSides {
-	const rates = new LevelRates(course.levels, curve, accuracyCelsius, bounds);
+	const rates = new LevelRates(course.levels, given);
+	const table = room.floats('means', passages.ms.length);
+	const [below, above] = [new RunningSum(), new RunningSum()];
+	rates.fill(table, passages, course.isEven ? course.usualIntervalMs / msPerHour : 1, below, above);
+	const apartHours = (sum: RunningSum, side: 1 | 2, readings: readonly number[], isSilent: boolean) => {
+		for (const at of readings) sum.add(acrossHours(course, rates, side, at, isSilent));
+		for (const at of readings) sum.add(-acrossHours(course, rates, 0, at, isSilent));
+		return sum.total;
+	};
+	const watchedHours = {
+		low: apartHours(below, 1, passages.far, false),
+		high: apartHours(above, 2, passages.far, false)
+	};
 	const usedHours = room.floats('used', course.times.length).fill(0, 0, 1);
-	const [value, low, high] = [new RunningSum(), new RunningSum(), new RunningSum()];
-	const block = new Float64Array(sides);
-	for (let from = 0; from < course.steps.length; from += blockSteps) {
-		usedHours[from] = value.total;
-		addBlock(course, rates, usedHours, from, Math.min(from + blockSteps, course.steps.length), block);
-		value.add(block[0] as number);
-		low.add(block[1] as number);
-		high.add(block[2] as number);
-	}
+	addValue({ course, passages, rates, table, usedHours });
+	const totalHours = usedHours[usedHours.length - 1] ?? 0;
 	return {
-		value: { usedHours, levelRates: rates.rates[0], shiftCelsius: 0 },
-		lowHours: low.total,
-		highHours: high.total,
+		value: { usedHours, levelRates: rates.of[0], shiftCelsius: 0 },
+		lowHours: totalHours + apartHours(below, 1, passages.silent, true),
+		highHours: totalHours + apartHours(above, 2, passages.silent, true),
+		watchedHours,
 		seriesOf: (side) => sideSeries(course, rates, side === 'low' ? 1 : 2),
 		acrossGap: (reading) => gapRange(course, rates, reading)
 	};
 }
 
-/** Adds the steps of one block; `block` gets what they used. The loop a million readings go through. */
-function addBlock(
-	{ times, steps, levelOf, isEven = false, usualIntervalMs }: Course,
-	rates: LevelRates,
-	usedHours: Float64Array,
-	from: number,
-	to: number,
-	block: Float64Array
-): void {
-	const { means } = rates;
+function addValue(integrand: Integrand): void {
+	const { course, usedHours } = integrand;
+	const sum = new RunningSum();
+	const addBlock = course.isEven ? addEvenBlock : addUnevenBlock;
+	for (let from = 0; from < course.steps.length; from += blockSteps) {
+		usedHours[from] = sum.total;
+		sum.add(addBlock(integrand, from, Math.min(from + blockSteps, course.steps.length)));
+	}
+}
+
+/** Adds the steps of one block and gives what they used. */
+function addEvenBlock(integrand: Integrand, from: number, to: number): number {
+	const { course, passages, rates, table, usedHours } = integrand;
+	const { levelOf, usualIntervalMs } = course;
+	const { reach } = passages;
+	const width = 2 * reach + 1;
 	const baseHours = usedHours[from] as number;
-	let hours = usualIntervalMs / msPerHour;
-	let value = 0;
-	let low = 0;
-	let high = 0;
+	let hours = 0;
 	let a = levelOf[from] as number;
 	for (let i = from + 1; i <= to; i++) {
 		const b = levelOf[i] as number;
-		if (!isEven) hours = hoursOf(times, steps, i - 1);
 		const apart = b - a + reach;
-		if (apart >= 0 && apart < width && (isEven || steps[i - 1] === observed)) {
-			const at = (a * width + apart) * sides;
-			if (Number.isNaN(means[at])) rates.fill(at, a, b);
-			value += hours * (means[at] as number);
-			low += hours * (means[at + 1] as number);
-			high += hours * (means[at + 2] as number);
-		} else {
-			const means = isEven || steps[i - 1] === observed ? rates.across(a, b) : rates.bracket(a, b);
-			value += hours * means[0];
-			low += hours * means[1];
-			high += hours * means[2];
-		}
-		usedHours[i] = baseHours + value;
+		if (apart >= 0 && apart < width) hours += table[a * width + apart] as number;
+		else hours += (usualIntervalMs / msPerHour) * rates.mean(0, a, b);
+		usedHours[i] = baseHours + hours;
 		a = b;
 	}
-	block[0] = value;
-	block[1] = low;
-	block[2] = high;
+	return hours;
+}
+
+/** The same of steps of any length, some of them gaps or trims. */
+function addUnevenBlock(integrand: Integrand, from: number, to: number): number {
+	const { course, passages, rates, table, usedHours } = integrand;
+	const { levelOf, times, steps } = course;
+	const baseHours = usedHours[from] as number;
+	let hours = 0;
+	for (let i = from + 1; i <= to; i++) {
+		const [a, b] = [levelOf[i - 1] as number, levelOf[i] as number];
+		const at = steps[i - 1] === observed ? passageAt(passages, a, b) : -1;
+		hours += hoursOf(times, steps, i - 1) * (at < 0 ? rates.mean(0, a, b) : (table[at] as number));
+		usedHours[i] = baseHours + hours;
+	}
+	return hours;
+}
+
+function acrossHours(
+	{ times, steps, levelOf }: Course,
+	rates: LevelRates,
+	side: SideIndex,
+	at: number,
+	isSilent: boolean
+): number {
+	const rate = rates.across(side, levelOf[at] as number, levelOf[at + 1] as number, isSilent);
+	return hoursOf(times, steps, at) * rate;
 }
 
 /** Hours of the step after a reading; none where it was trimmed. */
@@ -154,16 +136,13 @@ function hoursOf(times: Float64Array, steps: Uint8Array, at: number): number {
 	return steps[at] === trimmed ? 0 : ((times[at + 1] as number) - (times[at] as number)) / msPerHour;
 }
 
-/** One side at every reading, added up as `addBlock` does, to the same digits. */
+/** One side at every reading, in blocks as the value is. */
 function sideSeries(course: Course, rates: LevelRates, side: 1 | 2): Float64Array {
-	const { times, steps, levelOf } = course;
-	const series = new Float64Array(times.length);
+	const series = new Float64Array(course.times.length);
 	const sum = new RunningSum();
 	let inBlock = 0;
 	for (let i = 1; i < series.length; i++) {
-		const [a, b] = [levelOf[i - 1] as number, levelOf[i] as number];
-		const rate = steps[i - 1] === observed ? rates.mean(side, a, b) : rates.bracket(a, b)[side];
-		inBlock += hoursOf(times, steps, i - 1) * rate;
+		inBlock += acrossHours(course, rates, side, i - 1, course.steps[i - 1] === unobserved);
 		series[i] = sum.total + inBlock;
 		if (i % blockSteps !== 0) continue;
 		sum.add(inBlock);
@@ -172,8 +151,7 @@ function sideSeries(course: Course, rates: LevelRates, side: 1 | 2): Float64Arra
 	return series;
 }
 
-function gapRange({ times, steps, levelOf }: Course, rates: LevelRates, reading: number): Range {
-	const hours = hoursOf(times, steps, reading);
-	const [value, low, high] = rates.bracket(levelOf[reading] as number, levelOf[reading + 1] as number);
-	return { value: hours * value, low: hours * low, high: hours * high };
+function gapRange(course: Course, rates: LevelRates, reading: number): Range {
+	const used = (side: SideIndex) => acrossHours(course, rates, side, reading, true);
+	return { value: used(0), low: used(1), high: used(2) };
 }

@@ -17,7 +17,7 @@ export interface RangePart {
  * one, since each widens the other; `gaps` what nobody watched, its offset included.
  */
 export function rangeParts(
-	used: Range,
+	watched: { readonly low: number; readonly high: number },
 	unobservedUsed: Range,
 	opening: Range,
 	fullLifeUncertaintyHours: number
@@ -29,8 +29,9 @@ export function rangeParts(
 	return [
 		{
 			source: 'accuracy',
-			lowerHours: Math.max(0, used.high - used.value - gaps.lowerHours),
-			raiseHours: Math.max(0, used.value - used.low - gaps.raiseHours)
+			lowerHours: watched.high,
+			// Not −0, which a stored figure would not give back.
+			raiseHours: 0 - watched.low
 		},
 		{ source: 'gaps', ...gaps },
 		{

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { buildTrace, hourMs, minuteMs, startMs, traceAt } from '../../../../tests/accuracy/build';
 import { courseOf } from '../shelf-life/course';
+import { passagesOf } from '../shelf-life/passages';
 import { meanKineticCelsius, worstWindowMeanKinetic } from '../shelf-life/mean-kinetic';
 import { timeWeightedMean } from '../trace/statistics';
 import { levelTimes, meanOverTime } from './level-times';
@@ -75,7 +76,7 @@ describe('how long each level was held', () => {
 						rows.map(([, tenths]) => tenths / 10)
 					);
 					const course = courseOf(trace, null, []);
-					const held = levelTimes(course);
+					const held = levelTimes(course, passagesOf(course));
 					const mean = timeWeightedMean(course.times, course.celsius) ?? NaN;
 					expect(meanOverTime(course.levels, held)).toBeCloseTo(mean, 10);
 					const lengthMs = (times[times.length - 1] as number) - (times[0] as number);
@@ -89,7 +90,7 @@ describe('how long each level was held', () => {
 	it('counts no trimmed time, and before a trim the usual interval', () => {
 		const trims = [{ fromMs: startMs + 15 * minuteMs, toMs: startMs + 35 * minuteMs }];
 		const course = courseOf(buildTrace([1, 1, 9, 9, 3, 3]), null, trims);
-		const held = levelTimes(course);
+		const held = levelTimes(course, passagesOf(course));
 		expect([...course.levels]).toEqual([1, 3]);
 		expect([...held.standsForMs].map((ms) => ms / minuteMs)).toEqual([20, 20]);
 		expect([...held.besideMs].map((ms) => ms / minuteMs)).toEqual([20, 20]);

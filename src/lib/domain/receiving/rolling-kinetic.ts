@@ -10,18 +10,23 @@ const wholeBits = 52;
  * reading is weighed with the time it stands for.
  */
 export function worstWindowOf(course: Course, windowMs: number, energy: number | null): number | null {
-	const { celsius, usualIntervalMs } = course;
+	const { levels, levelOf, usualIntervalMs } = course;
 	const readings = windowMs / usualIntervalMs;
 	if (!Number.isInteger(readings) || !course.isEven) {
-		return worstWindowMeanKinetic(celsius, standsForMs(course), windowMs, energy);
+		return worstWindowMeanKinetic(course.celsius, standsForMs(course), windowMs, energy);
 	}
-	const to = celsius.length <= readings ? celsius.length : worstEnd(course, readings, energy);
-	const worst = celsius.subarray(Math.max(0, to - readings), to);
+	const to = levelOf.length <= readings ? levelOf.length : worstEnd(course, readings, energy);
+	const worst = Float64Array.from(
+		levelOf.subarray(Math.max(0, to - readings), to),
+		(level) => levels[level] as number
+	);
 	return meanKineticCelsius(worst, new Float64Array(worst.length).fill(1), energy);
 }
 
 /** Where the window of so many readings with the largest sum of shares ends, its last reading excluded. */
-function worstEnd({ levels, levelOf }: Course, readings: number, energy: number | null): number {
+function worstEnd({ levels, levelOf }: Course, windowReadings: number, energy: number | null): number {
+	// A quotient of doubles: as a whole number it makes the loop three times as fast.
+	const readings = windowReadings | 0;
 	const shares = boltzmannShares(levels, energy);
 	const parts = 2 ** wholeBits / (readings + 1);
 	const wholes = Float64Array.from(levels, (_, level) => Math.round(shares.at(level) * parts));

@@ -22,7 +22,8 @@ export interface Course {
 	readonly times: Float64Array;
 	readonly celsius: Float64Array;
 	readonly steps: Uint8Array;
-	/** Each distinct temperature once, coldest first, and which each reading is: rates are worked out per level. */
+	/** Each distinct temperature once, coldest first, and which each reading is: rates are worked out per level. Between
+	 * the coldest and the warmest there may be some that no reading had. */
 	readonly levels: Float64Array;
 	readonly levelOf: Int32Array;
 	readonly blocks?: LevelBlocks;
@@ -47,14 +48,16 @@ export function courseOf(
 	const { times, scaled } = counted(trace, window, trims);
 	const { values, levelOf, blocks } = levelsOf(scaled, room);
 	const levels = Float64Array.from(values, (value) => celsiusFromScaled(value, trace.decimals, trace.unit));
-	const celsius = room.floats('celsius', levelOf.length);
-	for (let i = 0; i < celsius.length; i++) celsius[i] = levels[levelOf[i] as number] as number;
+	let celsius: Float64Array | null = null;
 	const steps = room.bytes('steps', Math.max(0, times.length - 1)).fill(observed);
 	// Of evenly spaced readings none can be missing but those trimmed away.
 	if (!isEven || trims.length > 0) markSteps(steps, times, trims, usualMs);
 	return {
 		times,
-		celsius,
+		// Few ask for it: levels say the same.
+		get celsius() {
+			return (celsius ??= celsiusByLevel(levels, levelOf, room));
+		},
 		steps,
 		levels,
 		levelOf,
@@ -62,6 +65,12 @@ export function courseOf(
 		usualIntervalMs: usualMs,
 		isEven: isEven && trims.length === 0
 	};
+}
+
+function celsiusByLevel(levels: Float64Array, levelOf: Int32Array, room: Room): Float64Array {
+	const celsius = room.floats('celsius', levelOf.length);
+	for (let i = 0; i < celsius.length; i++) celsius[i] = levels[levelOf[i] as number] as number;
+	return celsius;
 }
 
 function firstStepMs(times: Float64Array): number {

@@ -73,9 +73,10 @@ export function usedUntil(course: Course, curve: RateCurve, used: LifeUsed, ms: 
 	const before = used.usedHours[at] as number;
 	if (at >= course.steps.length || course.steps[at] === trimmed || course.times[at] === ms) return before;
 	const fromMs = course.times[at] as number;
-	const from = course.celsius[at] as number;
+	const { levels, levelOf } = course;
+	const from = levels[levelOf[at] as number] as number;
 	const fraction = (ms - fromMs) / ((course.times[at + 1] as number) - fromMs);
-	const celsius = from + fraction * ((course.celsius[at + 1] as number) - from);
+	const celsius = from + fraction * ((levels[levelOf[at + 1] as number] as number) - from);
 	const rates = [curveRateAt(curve, from), curveRateAt(curve, celsius)] as const;
 	return before + ((ms - fromMs) / msPerHour) * meanRate(curve, from, celsius, ...rates);
 }

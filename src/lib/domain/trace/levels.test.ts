@@ -42,6 +42,17 @@ describe('the levels of a trace', () => {
 		}
 	});
 
+	it('of a long trace are every value between its ends, read or not', () => {
+		const scaled = Int32Array.from({ length: 500 }, (_, i) => [-20, -18, -17, 10][i % 4] as number);
+		const { values, levelOf, blocks } = levelsOf(scaled);
+		expect([...values]).toEqual(Array.from({ length: 31 }, (_, i) => i - 20));
+		expect([...levelOf].map((level) => values[level])).toEqual([...scaled]);
+		expect(blocksOf(levelOf)).toEqual(blocks);
+		// Eight readings for each value of the span, or only what was read.
+		expect(levelsOf(scaled.subarray(0, 240)).values).toHaveLength(4);
+		expect(levelsOf(scaled.subarray(0, 241)).values).toHaveLength(31);
+	});
+
 	it('have the coldest and the warmest of each block of 64', () => {
 		const scaled = Int32Array.from({ length: 130 }, (_, i) => (i === 70 ? 90 : i === 71 ? -5 : 20));
 		const { blocks, levelOf } = levelsOf(scaled);
