@@ -1,12 +1,12 @@
 import { z } from 'zod';
-import type { SecondSignatureRules } from '../domain/authority/authority';
+import type { Correction, SecondSignatureRules } from '../domain/authority/authority';
 import { optionalNumber } from './shipment-parts';
 
 type Standing = Record<string, { recommended: string; lowHours: number | null }>;
 
 /** A correction that moved the recommendation, with both figures. */
 export interface CorrectionView {
-	kind: 'trim' | 'clock' | 'handover';
+	kind: Correction['kind'];
 	madeById: string;
 	madeBy: string;
 	before: Standing;

@@ -26,7 +26,7 @@ export interface DecidedLine {
 
 /** A change of the evidence that moved what is recommended, and who made it. */
 export interface Correction {
-	readonly kind: 'trim' | 'clock' | 'handover';
+	readonly kind: 'trim' | 'clock' | 'handover' | 'papers' | 'pulp' | 'read';
 	readonly madeById: string;
 	readonly madeBy: string;
 }

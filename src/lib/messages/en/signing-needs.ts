@@ -1,4 +1,4 @@
-import type { Need } from '../../domain/authority/authority';
+import type { Correction, Need } from '../../domain/authority/authority';
 
 const dockWhy = {
 	role: 'Your role does not decide dockets; QA does.',
@@ -8,7 +8,14 @@ const dockWhy = {
 	finding: 'A finding speaks against this line, so QA decides.'
 } as const;
 
-const corrections = { trim: 'trim', clock: 'clock correction', handover: 'handover' } as const;
+const corrections: Record<Correction['kind'], string> = {
+	trim: 'trim',
+	clock: 'clock correction',
+	handover: 'change of the handovers',
+	papers: 'change of the papers',
+	pulp: 'further pulp reading',
+	read: 'withdrawal of a read'
+};
 
 /** What is still missing before somebody may sign, said to them. */
 export function needText(need: Need): string {

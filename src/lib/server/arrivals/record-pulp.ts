@@ -1,6 +1,9 @@
 import type { PulpInput } from '../../schemas/arrival';
+import { v7 as uuid } from 'uuid';
 import { reassess } from '../assessments/reassess';
+import { keepMove } from '../authority/keep-move';
 import type { Context } from '../context';
+import { PulpReading } from '../db/models/pulp-reading';
 import { Shipment } from '../db/models/shipment';
 import { ShipmentLine } from '../db/models/shipment-line';
 import { inTransaction } from '../db/transaction';
@@ -27,13 +30,20 @@ export async function recordPulp(
 		)
 	);
 	const rows = pulpRows(ctx, load.id, pulp, ctx.now);
+	const moveId = uuid();
 
 	return inTransaction(ctx, async (w) => {
 		const shipment = await lockDocket(ctx, 'arrival.log', number, w.transaction);
 		refuseClosed(shipment);
 		if (!shipment.arrivedAt) throw new Refusal('not-arrived');
-		await writePulp(rows, w);
-		await reassess(w, ctx, shipment.id);
+		// A first probing is evidence; one that follows another corrects it.
+		const { transaction } = w;
+		const hasPulp = (await PulpReading.count({ where: { shipmentId: shipment.id }, transaction })) > 0;
+		const kind = () => (hasPulp ? ('pulp' as const) : null);
+		await keepMove(ctx, w, { id: moveId, shipmentId: shipment.id, kind }, async () => {
+			await writePulp(rows, w);
+			await reassess(w, ctx, shipment.id);
+		});
 		return { id: shipment.id, number };
 	});
 }

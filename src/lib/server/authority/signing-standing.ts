@@ -2,42 +2,20 @@ import type { Transaction } from 'sequelize';
 import { secondSignatureReason, type SigningFacts } from '../../domain/authority/authority';
 import type { DispositionInput } from '../../schemas/disposition';
 import type { DocketView } from '../../schemas/docket';
-import type { CorrectionView, SigningStanding } from '../../schemas/signing';
+import type { SigningStanding } from '../../schemas/signing';
 import type { Context } from '../context';
 import { Determination } from '../db/models/determination';
 import { DispositionReview } from '../db/models/disposition-review';
 import { Product } from '../db/models/product';
 import { ShipmentLine } from '../db/models/shipment-line';
-import { TraceRow } from '../db/models/trace-row';
-import { TrimRow } from '../db/models/trim-row';
 import { User } from '../db/models/user';
 import { evidenceSha256 } from '../dispositions/freeze';
 import { may } from '../policies';
-import { clockMovesOf } from './clock-moves';
+import { correctionsOf } from './corrections';
 import { decisionSha256 } from './decision-text';
-import { parseMoved } from './moved-recommendation';
 import { getSigningRules } from './signing-rules';
 
 type LineFacts = Omit<SigningFacts['lines'][number], 'outcome'> & { lineId: string };
-
-async function findCorrections(shipmentId: string, transaction?: Transaction) {
-	const traces = await TraceRow.findAll({ where: { shipmentId }, attributes: ['id'], transaction });
-	const trims = await TrimRow.findAll({
-		where: { traceId: traces.map(({ id }) => id), undoneAt: null },
-		order: ['madeAt'],
-		transaction
-	});
-	const moving = trims.filter((trim) => trim.movedRecommendation !== null);
-	const users = await User.findAll({ where: { id: moving.map((trim) => trim.madeBy) }, transaction });
-	const byClocks = await clockMovesOf(shipmentId, transaction);
-	const byTrims = moving.map((trim): CorrectionView => ({
-		kind: 'trim',
-		madeById: trim.madeBy,
-		madeBy: users.find(({ id }) => id === trim.madeBy)?.name ?? '',
-		...parseMoved(trim.movedRecommendation ?? '{}')
-	}));
-	return [...byTrims, ...byClocks];
-}
 
 async function lineFactsOf(docket: DocketView, transaction?: Transaction): Promise<LineFacts[]> {
 	const rows = await ShipmentLine.findAll({ where: { shipmentId: docket.id }, transaction });
@@ -68,7 +46,7 @@ export async function signingStanding(
 	const scope = { where: { shipmentId: docket.id }, order: ['signedAt'], transaction };
 	const [user, corrections, lineFacts, rules, reviews, determinations] = await Promise.all([
 		User.findByPk(ctx.actor.id, { transaction }),
-		findCorrections(docket.id, transaction),
+		correctionsOf(docket.id, transaction),
 		lineFactsOf(docket, transaction),
 		getSigningRules(),
 		DispositionReview.findAll(scope),

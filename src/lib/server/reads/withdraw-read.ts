@@ -1,4 +1,6 @@
+import { v7 as uuid } from 'uuid';
 import { reassess } from '../assessments/reassess';
+import { keepMove } from '../authority/keep-move';
 import type { Context } from '../context';
 import { LoggerRead } from '../db/models/logger-read';
 import { LoggerTrip } from '../db/models/logger-trip';
@@ -13,6 +15,7 @@ import { getReadFor, lockUnsigned } from './find-read';
  */
 export async function withdrawRead(ctx: Context, readId: string, reason: string): Promise<void> {
 	const { shipment } = await getReadFor(ctx, readId, 'read.withdraw');
+	const moveId = uuid();
 	await inTransaction(ctx, async (w) => {
 		const { transaction, record } = w;
 		await lockUnsigned(shipment.id, transaction);
@@ -26,6 +29,9 @@ export async function withdrawRead(ctx: Context, readId: string, reason: string)
 		}
 		await read.update({ state: 'withdrawn' }, { transaction });
 		record('read.withdrawn', { scope: 'shipment', id: shipment.id }, { readId, reason });
-		if (traces.length > 0) await reassess(w, ctx, shipment.id);
+		if (traces.length > 0)
+			await keepMove(ctx, w, { id: moveId, shipmentId: shipment.id, kind: () => 'read' }, () =>
+				reassess(w, ctx, shipment.id)
+			);
 	});
 }

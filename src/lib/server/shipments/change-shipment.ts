@@ -2,6 +2,7 @@ import { v7 as uuid } from 'uuid';
 import type { ShipmentChange } from '../../schemas/shipment-form';
 import { setRejectClock } from '../arrivals/reject-clock';
 import { reassess } from '../assessments/reassess';
+import { keepMove } from '../authority/keep-move';
 import type { Context } from '../context';
 import { Handover } from '../db/models/handover';
 import { LoggerTrip } from '../db/models/logger-trip';
@@ -81,7 +82,7 @@ export async function changeShipment(
 	await refuseStrangeRows(seen.id, input);
 	const prepared = await preparePapers(await getOwnSite(ctx, seen.siteId), input);
 	const rows = docketRows(prepared, seen.id);
-	const clockId = uuid();
+	const [clockId, moveId] = [uuid(), uuid()];
 
 	return inTransaction(ctx, async (w) => {
 		const { transaction } = w;
@@ -98,7 +99,11 @@ export async function changeShipment(
 			{ scope: 'shipment', id: shipment.id },
 			{ ...changes, reason: input.reason }
 		);
-		if (shipment.arrivedAt) await reassess(w, ctx, shipment.id);
+		const kind = () => ('handovers' in changes.after ? ('handover' as const) : ('papers' as const));
+		if (shipment.arrivedAt)
+			await keepMove(ctx, w, { id: moveId, shipmentId: shipment.id, kind }, () =>
+				reassess(w, ctx, shipment.id)
+			);
 		return { id: shipment.id, number };
 	});
 }

@@ -42,6 +42,7 @@ import { defineDispositionLine } from './disposition-line';
 import { defineDispositionReview } from './disposition-review';
 import { defineDetermination } from './determination';
 import { defineCertificate } from './certificate';
+import { defineRecommendationMove } from './recommendation-move';
 import { defineReport } from './report';
 import { defineRetentionHold } from './retention-hold';
 import { defineNotice } from './notice';
@@ -108,6 +109,7 @@ export function defineModels(sequelize: Sequelize): void {
 	defineDispositionReview(sequelize);
 	defineDetermination(sequelize);
 	defineCertificate(sequelize);
+	defineRecommendationMove(sequelize);
 	defineReport(sequelize);
 	defineRetentionHold(sequelize);
 	defineNotice(sequelize);
