@@ -78,7 +78,8 @@ export interface Question {
 	readonly rowsBetween: number;
 	/**
 	 * Why the file cannot tell: `all-one-day`, `all-days-up-to-12`, `no-unit`, `no-zone`, `several-temperatures`,
-	 * `no-times`, `relative-times`, `two-calendars`, `clock-never-set`, `several-parts`, `clock-restarts`.
+	 * `unknown-zone`, `several-zones`, `daylight`, `no-times`, `relative-times`, `two-calendars`, `two-languages`,
+	 * `clock-never-set`, `several-parts`, `clock-restarts`.
 	 */
 	readonly why: string;
 }

@@ -56,6 +56,10 @@ const whys: Readonly<Record<string, string>> = {
 	'all-days-up-to-12': 'No day is over 12 and both readings run on, so the file cannot tell.',
 	'no-unit': 'The file names no unit, so the figures alone would have to tell.',
 	'no-zone': 'The file gives local times without saying where.',
+	'unknown-zone': 'The file names a time zone that is not known.',
+	'several-zones': 'The file names more than one time zone.',
+	daylight: 'What the file says of summer time leaves an hour open.',
+	'two-languages': 'The month’s name is another month’s in another language.',
 	'several-temperatures': 'The file has several temperatures and does not say which rode with the goods.',
 	'several-parts': 'The file holds several recordings, one after the other.',
 	'clock-restarts': 'The times fall back and run on from there, so the file cannot tell.',
@@ -90,8 +94,17 @@ const startWords: Readonly<Record<string, string>> = {
 	arrival: 'So that it ends at the arrival',
 	upload: 'So that it ends at the upload',
 	'as-written': 'As the file says',
-	'days-of-1904': 'Days counted from 1904'
+	'days-of-1904': 'Days counted from 1904',
+	croatian: 'Months by their Croatian names',
+	'polish-czech': 'Months by their Polish or Czech names',
+	'declared-end': 'So that it ends when the file says',
+	'declared-day': 'At the start of the day the file names'
 };
+
+function intervalWords(seconds: number): string {
+	if (seconds % 3600 === 0) return `${seconds / 3600} h`;
+	return seconds % 60 === 0 ? `${seconds / 60} min` : `${seconds} s`;
+}
 
 /** What one choice is called: the day in words, the unit, the column, the interval. */
 export function choiceLabel({ code, subject }: Question, { label, answer }: Choice): string {
@@ -101,7 +114,7 @@ export function choiceLabel({ code, subject }: Question, { label, answer }: Choi
 	}
 	if (code === 'unit') return unitWords[label] ?? label;
 	if (code === 'part') return partLabel(label, answer.part ?? '');
-	if (code === 'interval') return `Every ${label} min`;
+	if (code === 'interval') return `Every ${intervalWords(answer.intervalSeconds ?? Number(label) * 60)}`;
 	if (code !== 'start') return label;
 	return startWords[label] ?? label;
 }

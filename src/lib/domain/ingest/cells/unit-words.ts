@@ -28,6 +28,11 @@ const wholeWords: Readonly<Record<string, TemperatureUnit>> = {
 	degreesfahrenheit: 'fahrenheit',
 	celcius: 'celsius',
 	celsjusza: 'celsius',
+	centigrade: 'celsius',
+	degcelsius: 'celsius',
+	degfahrenheit: 'fahrenheit',
+	gradicelsius: 'celsius',
+	stc: 'celsius',
 	'℃': 'celsius',
 	'℉': 'fahrenheit'
 };
@@ -36,15 +41,16 @@ const wholeWords: Readonly<Record<string, TemperatureUnit>> = {
 export function wholeUnitOf(text: string): TemperatureUnit | null {
 	const bare = text
 		.toLowerCase()
-		.replace(/[\s°º˚\ufffd.()[\]"'â]/g, '')
+		.replace(/[\s°º˚\ufffd.()[\]"'â_-]/g, '')
 		.replace(/^[ø¡](?=[cf]$)/, '');
 	return Object.hasOwn(wholeWords, bare) ? (wholeWords[bare] ?? null) : null;
 }
 
 /** In DOS code pages the degree sign is the ø of Windows, on old Macs the ¡; `Â` before it is UTF-8 read twice. */
 const degreeSign = /(?:°|º|˚|\ufffd|(?<!\p{L})[ø¡]|\bdeg(?:rees?|\.)?|\bgrad)\s*([CFK])(?![a-z])/iu;
-const spelled = /celsius|celcius|celsjusz|fahrenheit|kelvin|℃|℉/i;
+const spelled = /celsius|celcius|celsjusz|centigrad|fahrenheit|kelvin|℃|℉/i;
 const bracketed = /[([{/]\s*\??([CFK])\s*[)\]}]/;
+const bracketedWord = /[([{]\s*([a-z°. ]{2,12})\s*[)\]}]/i;
 const trailing = /(?:^|[\s_,/.:-])\??([CFK])$|[a-z]([CFK])$|_([cfk])$/;
 
 /** Temperature unit named inside a longer text such as a column head (`Temp. [°C]`, `temp_f`); null when none. */
@@ -56,7 +62,9 @@ export function unitWithin(text: string): TemperatureUnit | null {
 	}
 	const hit = degreeSign.exec(text) ?? bracketed.exec(text) ?? trailing.exec(text.trim());
 	const letter = hit?.[1] ?? hit?.[2] ?? hit?.[3];
-	return letter === undefined ? null : (byLetter[letter.toLowerCase()] ?? null);
+	if (letter !== undefined) return byLetter[letter.toLowerCase()] ?? null;
+	const inside = bracketedWord.exec(text)?.[1];
+	return inside === undefined ? null : wholeUnitOf(inside);
 }
 
 const otherUnits =

@@ -9,12 +9,19 @@ export type Decoded = DecodedText | { readonly code: RefusalCode; readonly found
 /** Share of control characters above which bytes are no text: random bytes have over 10 %. */
 const controlFraction = 0.01;
 
+/** Begins each value of a JSON text sequence. Source: RFC 7464 §2.2. */
+const recordSeparator = 0x1e;
+
 function isMostlyText(text: string): boolean {
 	let controls = 0;
 	const end = Math.min(text.length, 65_536);
 	for (let i = 0; i < end; i++) {
 		const code = text.charCodeAt(i);
-		if ((code < 32 && (code < 9 || code > 13)) || code === 0xfffd || (code >= 0x7f && code < 0xa0))
+		if (
+			(code < 32 && (code < 9 || code > 13) && code !== recordSeparator) ||
+			code === 0xfffd ||
+			(code >= 0x7f && code < 0xa0)
+		)
 			controls++;
 	}
 	return controls <= Math.max(2, end * controlFraction);

@@ -17,6 +17,9 @@ const tellingWords: readonly { encoding: string; words: RegExp }[] = [
 		encoding: 'windows-1250',
 		words: /wilgotność|początek|średnia|teplota|vlhkost|čas|hőmérséklet|urządzeni|numer seryjny.*[ąęłśż]/i
 	},
+	{ encoding: 'iso-8859-2', words: /wilgotność|początek|średnia|vlhkosť|začátek|začiatok/i },
+	{ encoding: 'windows-1257', words: /drėgm|temperatūra|mitrums|sērijas|pradžia|niiskus.*[õüä]/i },
+	{ encoding: 'windows-1258', words: /nhiệt|độ|thời gian/i },
 	{ encoding: 'windows-1254', words: /sıcaklık|başlangıç|sıcaklığı/i },
 	{ encoding: 'koi8-r', words: /температура|влажность|дата и время/i },
 	{ encoding: 'windows-1253', words: /θερμοκρασία|υγρασία|ημερομηνία/i },

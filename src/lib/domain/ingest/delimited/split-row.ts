@@ -1,5 +1,5 @@
 /** `space` is one or more spaces, `spaces` two or more (a cell may then hold a single one). */
-export const delimiters = ['\t', ';', '|', ',', '^', 'spaces', 'space'] as const;
+export const delimiters = ['\t', ';', '|', ',', '^', '~', 'spaces', 'space'] as const;
 export type Delimiter = (typeof delimiters)[number];
 
 const quote = 34;

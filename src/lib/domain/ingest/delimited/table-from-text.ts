@@ -80,10 +80,13 @@ function wideRow({ count }: Spans, split: (row: number) => readonly string[]): n
 	return sampleIndexes(count, fewestSampled).find((row) => split(row).length > maxColumns) ?? -1;
 }
 
-/** Some programs quote with apostrophes: for splitting they are read as quotes. */
+/** Some programs quote with apostrophes, or whole rows: for splitting both are read as others write it. */
 function withPlainQuotes(text: string, sample: readonly string[]): string {
-	const quoted = sample.filter((line) => /^'[^']*'\s*[,;|\t]/.test(line)).length;
-	return quoted > sample.length * 0.8 ? text.replaceAll("'", '"') : text;
+	const most = (pattern: RegExp): boolean =>
+		sample.filter((line) => pattern.test(line)).length > sample.length * 0.8;
+	if (most(/^'[^']*'\s*[,;|\t]/)) return text.replaceAll("'", '"');
+	// Rows that were quoted as a whole, as one cell each, are read without those quotes.
+	return most(/^"[^"]*[,;|\t][^"]*"\s*$/) ? text.replaceAll('"', ' ') : text;
 }
 
 /** Delimited text to a table: lines, delimiter, body, heads, and what stands around them. */

@@ -1,10 +1,12 @@
 import { cellKindOf, epochUnitOf } from '../cells/cell-kind';
+import { unitWithin } from '../cells/unit-words';
+import { meaningOf } from '../layout/words';
 import { isArray, isObject, textOfScalar, type JsonArray, type JsonNode, type JsonObject } from './json-node';
 
 /** One place in a JSON file that holds readings, with the shape they are kept in. */
 export interface RowSource {
 	readonly path: readonly string[];
-	readonly kind: 'objects' | 'pairs' | 'columns' | 'keyed' | 'values';
+	readonly kind: 'objects' | 'pairs' | 'columns' | 'keyed' | 'values' | 'untimed';
 	readonly node: JsonArray | JsonObject;
 	readonly rows: number;
 }
@@ -48,6 +50,18 @@ function isListOfReadings(node: JsonNode): boolean {
 	return timed.length >= 2;
 }
 
+/** A figure under a key that speaks of temperature, with a count or a length of time beside it or nothing. */
+function isUntimedReading(node: JsonNode): boolean {
+	return (
+		isObject(node) &&
+		node.keys.some((key, i) => {
+			const text = textOfScalar(node.values[i]);
+			const isWarm = meaningOf(key).quantity === 'temperature' || unitWithin(key) !== null;
+			return isWarm && text !== null && cellKindOf(text) === 'number';
+		})
+	);
+}
+
 function listKind(array: JsonArray): RowSource['kind'] | null {
 	const sample = spread(array.items, 20).filter((item) => item !== null);
 	if (sample.length === 0) return null;
@@ -57,7 +71,8 @@ function listKind(array: JsonArray): RowSource['kind'] | null {
 			// A row names its moment itself; a list of moments inside makes it the frame of a recording.
 			return kindsIn(node, 0).moments > 0 && isObject(node) && !node.values.some(isListOfReadings);
 		};
-		return share(isReading) > 0.5 ? 'objects' : null;
+		if (share(isReading) > 0.5) return 'objects';
+		return array.items.length > 2 && share(isUntimedReading) > 0.5 ? 'untimed' : null;
 	}
 	if (
 		share(
@@ -103,7 +118,7 @@ export function findRowSources(root: JsonNode): RowSource[] {
 		}
 	};
 	walk(root, []);
-	// A bare list of numbers is readings only where nothing better is.
-	const better = found.filter((source) => source.kind !== 'values');
+	// A bare list of numbers, or of objects without a moment, is readings only where nothing better is.
+	const better = found.filter(({ kind }) => kind !== 'values' && kind !== 'untimed');
 	return (better.length > 0 ? better : found).sort((a, b) => b.rows - a.rows);
 }

@@ -2,7 +2,7 @@ import type { Quantity } from '../../trace/trace';
 import type { TemperatureUnit } from '../../units';
 import { emptyStamp, noTime, scanStamp } from '../times/stamp';
 import { cellKindOf, epochUnitOf, type CellKind, type EpochUnit } from '../cells/cell-kind';
-import { unitWithin, wholeUnitOf } from '../cells/unit-words';
+import { isUnitCell, unitWithin, wholeUnitOf } from '../cells/unit-words';
 import { sampleIndexes } from '../delimited/delimiter';
 import type { Table } from './table';
 import { meaningOf, type HeaderMeaning } from './words';
@@ -150,13 +150,23 @@ export function profileColumns(table: Table): Column[] {
 	});
 }
 
+/** The unit of another quantity that stands behind every figure: `81.5 %`; empty where none does. */
+function unitBeside(texts: readonly string[]): string {
+	const signs = new Set(
+		texts.filter((text) => text !== '').map((text) => /^[-+\d.,\s]*\d\s*(\D+)$/.exec(text)?.[1] ?? '')
+	);
+	const [sign = ''] = signs;
+	return signs.size === 1 && isUnitCell(sign) && wholeUnitOf(sign) === null ? sign : '';
+}
+
 /** Quantity of a value column: what its head says, else temperature where its unit is one, else not known. */
 export function quantityOf(column: Column): Quantity | null {
 	if (column.meaning.quantity !== null) return column.meaning.quantity;
 	if (column.unit !== null) return 'temperature';
 	if (column.meaning.isTime) return null;
 	// A unit of something else (%RH, lx, V) explains the column as well as its head would.
-	return column.unitText === '' ? null : (meaningOf(column.unitText).quantity ?? 'other');
+	const unitText = column.unitText === '' ? unitBeside(column.texts) : column.unitText;
+	return unitText === '' ? null : (meaningOf(unitText).quantity ?? 'other');
 }
 
 /** The temperature unit that a column of its own repeats in every row; null without one. */

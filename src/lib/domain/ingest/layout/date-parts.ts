@@ -5,9 +5,12 @@ export interface DateParts {
 	readonly year: number;
 	readonly month: number;
 	readonly day: number;
-	readonly hour: number;
+	/** Null where a clock stands in one cell. */
+	readonly hour: number | null;
 	readonly minute: number | null;
 	readonly second: number | null;
+	/** A clock with colons in place of hour and minute. */
+	readonly clock: number | null;
 	/** All of them, the year first. */
 	readonly columns: readonly number[];
 }
@@ -30,7 +33,7 @@ const bounds = {
 	second: [0, 60]
 } as const;
 
-/** Finds year, month, day and hour in columns of their own; null unless all four are there. */
+/** Finds year, month, day and hour in columns of their own, or a clock for the last; null unless all are there. */
 export function partsOf(columns: readonly Column[]): DateParts | null {
 	const find = (part: keyof typeof heads): number | null => {
 		const [low, high] = bounds[part];
@@ -40,7 +43,8 @@ export function partsOf(columns: readonly Column[]): DateParts | null {
 		return column?.index ?? null;
 	};
 	const [year, month, day, hour] = [find('year'), find('month'), find('day'), find('hour')];
-	if (year === null || month === null || day === null || hour === null) return null;
+	const clock = hour === null ? columns.find((c) => c.share.time > 0.5)?.index : undefined;
+	if (year === null || month === null || day === null || (hour === null && clock === undefined)) return null;
 	const [minute, second] = [find('minute'), find('second')];
 	return {
 		year,
@@ -49,6 +53,7 @@ export function partsOf(columns: readonly Column[]): DateParts | null {
 		hour,
 		minute,
 		second,
-		columns: [year, month, day, hour, minute, second].filter((column) => column !== null)
+		clock: clock ?? null,
+		columns: [year, month, day, hour, minute, second, clock ?? null].filter((column) => column !== null)
 	};
 }

@@ -2,10 +2,19 @@ import type { Entry } from './table';
 
 const pair = /^\s*[#*/;"']*\s*([^:：=;\t|]{1,60}?)\s*(?::(?!\d\d\b)|：|=|;|\t|\|)\s*(.*?)\s*[;,|"\t]*$/;
 
+/** `Interval (s),600` above a table with another delimiter. */
+const commaPair = /^\s*([^,]{1,60}?)\s*,\s*([^,]*?\d[^,]*?)\s*$/;
+
 /** Reads one line outside the readings as key and value; null when it is neither. */
 export function entryOf(line: string, cells: readonly string[], lineNumber: number): Entry | null {
 	const filled = cells.map((cell) => cell.trim()).filter((cell) => cell !== '');
-	if (filled.length >= 2 && !(filled[0] ?? '').slice(0, -1).includes(':')) {
+	if (
+		filled.length >= 2 &&
+		!(filled[0] ?? '')
+			.replace(/h{1,2}:m{2}(?::s{2})?/gi, '')
+			.slice(0, -1)
+			.includes(':')
+	) {
 		const key = (filled[0] ?? '').replace(/[:=]\s*$/, '').replace(/^[#*/'"\s]+/, '');
 		const value = filled
 			.slice(1)
@@ -13,7 +22,7 @@ export function entryOf(line: string, cells: readonly string[], lineNumber: numb
 			.replace(/^[:=]\s*/, '');
 		if (/\p{L}/u.test(key)) return { key, value, line: lineNumber };
 	}
-	const match = pair.exec(line);
+	const match = pair.exec(line) ?? commaPair.exec(line);
 	if (match === null || !/\p{L}/u.test(match[1] ?? '')) return null;
 	return {
 		key: (match[1] ?? '').replace(/^["']|["']$/g, ''),

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { entryOf } from './entries';
-import { intervalOf, statedIn } from './preamble';
+import { intervalOf } from './interval-text';
+import { statedIn } from './preamble';
 import type { Entry } from './table';
 
 const entries = (...pairs: [string, string][]): Entry[] =>

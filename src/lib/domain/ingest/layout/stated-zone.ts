@@ -1,5 +1,7 @@
+import { emptyStamp, scanStamp } from '../times/stamp';
 import { fixedOffsetOf, ianaWithin, offsetText, zoneNamedBy } from '../times/zone';
 import { zoneMeanings } from '../times/zone-words';
+import { isKeyOf } from './key-words';
 import type { Entry } from './table';
 
 /** A zone named outside the readings: settled, or by letters whose meaning depends on the dates or the place. */
@@ -8,10 +10,28 @@ export interface StatedZone {
 	readonly word: string | null;
 }
 
+/** What all lines around the readings say of it. */
+export interface ZoneStatement extends StatedZone {
+	/** Each zone that is named, where several are. */
+	readonly named: readonly string[];
+	/** A text that names a zone nobody knows. */
+	readonly unknown: string | null;
+	/** The text that was taken. */
+	readonly text: string | null;
+}
+
 const none: StatedZone = { zone: null, word: null };
 
-const zoneKey =
-	/\b(time ?zone|zone|tz|zeitzone|fuseau( horaire)?|zona horaria|fuso( horario| orario)?|tijdzone|strefa czasowa|saat dilimi|tidszon[ae]?|tidssone|aikavyohyke|idozona|casove pasmo|utc offset|gmt offset|utc|gmt|time offset|dst offset)\b|时区|時區|タイムゾーン|часовой пояс/;
+/** Keys that speak of a clock's zone and of nothing else: a bare "zone" may be a cold store's. */
+const isOwnKey = (key: string): boolean =>
+	isKeyOf('zone', key) && !/^\W*(zone\W*\w{0,2}|utc|gmt)\W*$/.test(key);
+
+/** What stands where a zone should and says no more than nothing would. */
+const sayingNothing =
+	/^\W*$|^\W*(local|lokal\w*|device|logger|system|default|standard|auto\w*|unknown|none|n\/?a|not set|undefined|null|ortszeit|geraet|gerat|locale?|heure locale|hora local|ora locale|lokale tijd|yerel|本地\p{L}*|現地\p{L}*|当地\p{L}*|местное|время устройства)\b/u;
+
+/** A text that is a zone and nothing else, whatever its key is called: `UTC+02:00`, `Europe/Berlin`. */
+const plainZone = /^\(?\s*(?:UTC|GMT)\s?[+\-−–]\s?\d{1,2}(?::?\d{2})?\s*\)?$/i;
 
 /** Words that open a sentence about times: "All times in", "Zeiten in", "Heures en". */
 const sentence =
@@ -52,22 +72,61 @@ export function zoneOfText(text: string, key = ''): StatedZone {
 	return inside === undefined ? none : { zone: null, word: lettersOf(inside) };
 }
 
-/** What the lines around the readings say of the zone. Keys are folded. */
-export function zoneStatedIn(entries: readonly Entry[], freeText: string): StatedZone {
-	for (const { key, value } of entries) {
-		if (!zoneKey.test(key) || value === '') continue;
-		const stated = zoneOfText(value, key);
-		if (stated.zone !== null || stated.word !== null) return stated;
+const stamp = emptyStamp();
+const isDated = (value: string): boolean => scanStamp(value, stamp) && stamp.shape !== 'none';
+
+/** Zones in lines that are no key and value, or whose key says nothing of a zone. */
+function zoneInText(entries: readonly Entry[], freeText: string): string | null {
+	for (const { value } of entries) {
+		const zone = plainZone.test(value.trim()) || ianaWithin(value.trim()) === value.trim() ? value : null;
+		if (zone !== null) return zone.trim();
 	}
-	const isOwnKey = (line: string): boolean =>
-		/[:=;](?!\d)/.test(line) && zoneKey.test(line.toLowerCase().split(/[:=;](?!\d)/)[0] ?? '');
+	const isTaken = (line: string): boolean =>
+		/[:=;](?!\d)/.test(line) && isKeyOf('zone', line.toLowerCase().split(/[:=;](?!\d)/)[0] ?? '');
 	for (const line of freeText.split('\n')) {
-		if (isOwnKey(line)) continue;
+		if (isTaken(line)) continue;
 		const match = sentence.exec(line);
 		const text = match?.[1] ?? match?.[2] ?? bracketed.exec(line)?.[0];
-		if (text !== undefined) return { zone: zoneNamedBy(text), word: null };
+		if (text !== undefined) return text;
+		// The zone of a moment that stands in the line is that moment's.
+		const within = /(?:UTC|GMT)\s?[+\-−–]\s?\d{1,2}(?::?\d{2})?/.exec(line)?.[0] ?? ianaWithin(line);
+		if (within !== null && !/\d:\d\d/.test(line.replace(within, ''))) return within;
 	}
-	return none;
+	return null;
+}
+
+/** Three digits behind a sign are hours and minutes, or minutes: -300 is three hours or five. */
+function readingsOfDigits(value: string): readonly string[] {
+	const digits = /^\s*([+\-−–])(\d{3})\s*$/.exec(value);
+	if (digits === null) return [];
+	const [number, sign] = [Number(digits[2]), digits[1] === '+' ? 1 : -1];
+	const clock = Math.floor(number / 100) * 60 + (number % 100);
+	const isOffset = (minutes: number): boolean => minutes % 15 === 0 && minutes <= 14 * 60;
+	return [...new Set([number % 100 < 60 ? clock : NaN, number])]
+		.filter(isOffset)
+		.map((m) => offsetText(sign * m));
+}
+
+/** What the lines around the readings say of the zone. Keys are folded. */
+export function zoneStatedIn(entries: readonly Entry[], freeText: string): ZoneStatement {
+	const nothing: ZoneStatement = { ...none, named: [], unknown: null, text: null };
+	let first: ZoneStatement | null = null;
+	let unknown: string | null = null;
+	const named = new Set<string>();
+	for (const { key, value } of entries) {
+		if (!isKeyOf('zone', key) || value === '' || isDated(value)) continue;
+		const digits = readingsOfDigits(value);
+		const stated = digits.length > 0 ? { zone: digits[0] ?? null, word: null } : zoneOfText(value, key);
+		const isKnown = stated.zone !== null || stated.word !== null;
+		if (isKnown) first ??= { ...nothing, ...stated, text: value };
+		else if (isOwnKey(key) && !sayingNothing.test(value.trim().toLowerCase())) unknown ??= value.trim();
+		for (const zone of digits.length > 0 ? digits : stated.zone === null ? [] : [stated.zone])
+			named.add(zone);
+	}
+	if (first !== null) return { ...first, named: named.size > 1 ? [...named] : [] };
+	const text = zoneInText(entries, freeText);
+	if (text !== null) return { ...nothing, zone: zoneNamedBy(text), text };
+	return { ...nothing, unknown };
 }
 
 /** The zone a column head names: `Time (UTC+2)`, `Zeit (MESZ)`, `Time EST`, `time_utc`. */
@@ -82,7 +141,7 @@ export function zoneOfHead(head: string): StatedZone {
 		return { zone: offsetText(fixedOffsetOf(bare) ?? 0), word: null };
 	}
 	const inside = /[([]\s*([A-Za-z]{1,5}|[+\-−]\d{1,2}(?::?\d{2})?)\s*[)\]]/.exec(head)?.[1];
-	const last = /\s([A-Z]{3,5})$/.exec(head.trim())?.[1];
+	const last = /\s([A-Z]{3,5}|Z)$/.exec(head.trim())?.[1];
 	for (const text of [inside, last]) {
 		if (text === undefined || /^(s|m|h|d|min|a|p|am|pm)$/i.test(text)) continue;
 		const found = zoneOfText(text);

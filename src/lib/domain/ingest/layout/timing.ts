@@ -32,6 +32,8 @@ export type Timing =
 	| { readonly kind: 'epoch'; readonly column: number; readonly unit: EpochUnit }
 	| { readonly kind: 'serial-day'; readonly column: number; readonly time: number | null }
 	| { readonly kind: 'elapsed'; readonly column: number; readonly unitMs: number | null }
+	/** Running numbers whose head names no unit. */
+	| { readonly kind: 'counted'; readonly column: number }
 	/** Day of the year, or of the trip, and a clock: both count from the first row. */
 	| { readonly kind: 'day-and-clock'; readonly day: number; readonly time: number; readonly form: ClockForm }
 	| { readonly kind: 'none'; readonly index: number | null };
@@ -187,8 +189,13 @@ export function findTiming(all: readonly Column[]): Timing {
 	if (separate !== null) return separate;
 	const parts = partsOf(columns);
 	if (parts !== null) return { kind: 'parts', parts };
-	if (elapsed !== undefined)
-		return { kind: 'elapsed', column: elapsed.index, unitMs: elapsedUnitMs(elapsed) };
+	if (elapsed !== undefined) {
+		const unitMs = elapsedUnitMs(elapsed);
+		const isBare = unitMs === null && elapsed.share.number > mostly;
+		return isBare
+			? { kind: 'counted', column: elapsed.index }
+			: { kind: 'elapsed', column: elapsed.index, unitMs };
+	}
 	const date = preferred(columns.filter((c) => c.share.date > mostly));
 	if (date !== undefined) return { kind: 'date', column: date.index };
 	const time = preferred(
@@ -206,7 +213,14 @@ function counted(columns: readonly Column[]): Timing {
 		columns.find((c) => unitHead.test(c.name) && c.unit === null && isCounted(c) && c.low >= 0);
 	if (running !== undefined)
 		return { kind: 'elapsed', column: running.index, unitMs: elapsedUnitMs(running) };
-	const index = columns.find((c) => c.meaning.isIndex && c.share.number > mostly && c.low >= 0);
+	const bare = columns.find((c) => c.meaning.isTime && isCounted(c) && c.low >= 0 && c.unit === null);
+	if (bare !== undefined) return { kind: 'counted', column: bare.index };
+	const isPlace = (c: Column): boolean => c.share.number > mostly && c.low >= 0;
+	const index =
+		columns.find((c) => c.meaning.isIndex && isPlace(c)) ??
+		columns.find(
+			(c) => c.isCounter && isPlace(c) && c.meaning.quantity === null && c.unit === null && c.low <= 1
+		);
 	return { kind: 'none', index: index?.index ?? null };
 }
 

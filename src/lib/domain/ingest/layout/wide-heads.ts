@@ -1,4 +1,4 @@
-import { monthOfName } from '../times/month-names';
+import { monthOfName, monthsMeant } from '../times/month-names';
 
 /** Heads that are themselves times: hours of a day or months of a year, one column each. */
 export interface WideHeads {
@@ -45,9 +45,10 @@ function hoursIn(header: readonly string[]): WideHeads | null {
 }
 
 function monthsIn(header: readonly string[]): WideHeads | null {
-	const monthOf = (head: string): number => {
+	const isMonth = (head: string, month: number): boolean => {
 		const bare = head.trim();
-		return /^\d{1,2}$/.test(bare) ? Number(bare) : /^\p{L}+\.?$/u.test(bare) ? monthOfName(bare) : 0;
+		const named = /^\d{1,2}$/.test(bare) ? Number(bare) : /^\p{L}+\.?$/u.test(bare) ? monthOfName(bare) : 0;
+		return named === month || monthsMeant(named)?.includes(month) === true;
 	};
 	const isNumber = (head: string | undefined): boolean => /^\s*\d+\s*$/.test(head ?? '');
 	for (let from = 1; from + 12 <= header.length; from++) {
@@ -55,7 +56,7 @@ function monthsIn(header: readonly string[]): WideHeads | null {
 		const isPart = isNumber(header[from]) && (isNumber(header[from - 1]) || isNumber(header[from + 12]));
 		if (
 			!isPart &&
-			Array.from({ length: 12 }, (_, m) => m).every((m) => monthOf(header[from + m] ?? '') === m + 1)
+			Array.from({ length: 12 }, (_, m) => m).every((m) => isMonth(header[from + m] ?? '', m + 1))
 		)
 			return {
 				kind: 'months',

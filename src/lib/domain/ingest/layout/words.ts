@@ -1,23 +1,21 @@
 import type { Quantity } from '../../trace/trace';
-import {
-	temperature,
-	humidity,
-	dewPoint,
-	light,
-	shock,
-	other,
-	limit,
-	index,
-	time,
-	elapsed,
-	otherClock,
-	lowest,
-	highest,
-	average,
-	type Lexeme
-} from './lexicon';
+import * as known from './lexicon';
 import { bound, derived } from './lexicon-besides';
+import { further, joinedLexeme } from './lexicon-languages';
 import { foldWord } from '../times/month-names';
+
+type Lexeme = known.Lexeme;
+const { shock, other, limit, otherClock } = known;
+const temperature = joinedLexeme(known.temperature, further.temperature);
+const humidity = joinedLexeme(known.humidity, further.humidity);
+const dewPoint = joinedLexeme(known.dewPoint, further.dewPoint);
+const light = joinedLexeme(known.light, further.light);
+const index = joinedLexeme(known.index, further.index);
+const time = joinedLexeme(known.time, further.time);
+const elapsed = joinedLexeme(known.elapsed, further.elapsed);
+const lowest = joinedLexeme(known.lowest, further.lowest);
+const highest = joinedLexeme(known.highest, further.highest);
+const average = joinedLexeme(known.average, further.average);
 
 /** Header text as plain words: folded, camel case and punctuation apart, CJK kept. */
 export function wordsOf(text: string): string[] {

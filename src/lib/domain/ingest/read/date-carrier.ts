@@ -4,6 +4,8 @@ import { noOffset, noTime, type Stamp } from '../times/stamp';
 /** Remembers the last written date for rows that leave it blank, and counts the midnights passed since. */
 export interface DateCarrier {
 	keep(stamp: Stamp): void;
+	/** Forgets it: a row in between had a date that could not be read. */
+	lose(): void;
 	/** Takes note of the clock of the row before. */
 	see(msOfDay: number): void;
 	/** Gives a row without a date the last one; false where none has been written yet. */
@@ -23,6 +25,9 @@ export function dateCarrier(): DateCarrier {
 			last = { shape, a, b, c };
 			lastMs = msOfDay;
 			days = 0;
+		},
+		lose() {
+			last = null;
 		},
 		see(msOfDay) {
 			if (msOfDay !== noTime) lastMs = msOfDay - Math.floor(msOfDay / msPerDay) * msPerDay;

@@ -54,14 +54,14 @@ function column({ column: chosen, picked }: Readable, isAnswered: boolean): Deci
 }
 
 function running({ timing, stated, declared }: Readable, answers: Answered): Decision[] {
-	if (timing.kind !== 'elapsed' && timing.kind !== 'none' && timing.kind !== 'time-of-day') return [];
+	if (!['elapsed', 'counted', 'none', 'time-of-day', 'day-and-clock'].includes(timing.kind)) return [];
 	const made: Decision[] = [];
 	if (declared.startMs !== null) {
 		const because = answers.startMs === undefined ? 'preamble' : 'answer';
 		made.push({ field: 'start', value: new Date(declared.startMs).toISOString(), because, detail: null });
 	}
 	const seconds = answers.intervalSeconds ?? (stated.intervalMinutes ?? 0) * 60;
-	if (timing.kind === 'none' && seconds > 0) {
+	if ((timing.kind === 'none' || timing.kind === 'counted') && seconds > 0) {
 		const because = answers.intervalSeconds === undefined ? 'preamble' : 'answer';
 		made.push({ field: 'intervalSeconds', value: String(seconds), because, detail: null });
 	}

@@ -64,7 +64,11 @@ function judgeSerial(axis: TimeAxis, stated: Stated, context: ReadContext): Axis
 export function judgeDates(axis: TimeAxis, timing: Timing, stated: Stated, context: ReadContext): AxisOrOpen {
 	const { firstMs, lastMs } = endsOf(axis.ms);
 	if (Number.isNaN(firstMs)) return axis;
-	const isCounted = timing.kind === 'elapsed' || timing.kind === 'none' || timing.kind === 'day-and-clock';
+	const isCounted =
+		timing.kind === 'elapsed' ||
+		timing.kind === 'counted' ||
+		timing.kind === 'none' ||
+		timing.kind === 'day-and-clock';
 	if (lastMs < earliestMs || firstMs > context.uploadedMs + furthestAheadMs)
 		return { refusal: 'implausible-dates', found: dayOf(firstMs) };
 	if (isCounted || timing.kind === 'time-of-day') return axis;

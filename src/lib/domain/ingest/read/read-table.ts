@@ -26,7 +26,7 @@ function planOf(table: Table, columns: readonly Column[], stated: Stated, contex
 	const timing = findTiming(columns);
 	const head = zoneOfTiming(columns, timing);
 	const isNamed = head.zone !== null || head.word !== null;
-	const told = isNamed ? { ...stated, zone: head.zone, zoneWord: head.word } : stated;
+	const told = isNamed ? { ...stated, zone: head.zone, zoneWord: head.word, zonesNamed: [] } : stated;
 	const picked = pickTemperature(columns, timing, context.answers, stated.unit);
 	return { timing, picked, stated: told };
 }
@@ -38,7 +38,7 @@ function refusalOf(table: Table, { timing, picked, stated }: Plan, context: Read
 	}
 	const isUntimed =
 		timing.kind === 'none' &&
-		stated.intervalMinutes === null &&
+		stated.intervalsNamed.length === 0 &&
 		context.answers.intervalSeconds === undefined;
 	const isStartless = stated.startText === null && context.answers.startMs === undefined;
 	return isUntimed && isStartless ? refused('no-time', table.lineOf(0), table.textOf(0).slice(0, 80)) : null;

@@ -89,12 +89,16 @@ function readDateAndTime(
 ): boolean {
 	// The stamp still holds the row before, also where that one was read in place.
 	carrier.see(stamp.msOfDay);
-	if (!readClock(timing, cells)) return false;
 	const date = (cells[timing.date] ?? '').trim();
+	const isReadable = date === '' || (scanStamp(date, stamp) && stamp.shape !== 'none');
+	if (!readClock(timing, cells) || !isReadable) {
+		// What this row's date was nobody can tell, nor that of the rows that leave theirs blank below it.
+		if (/\d/.test(date)) carrier.lose();
+		return false;
+	}
 	if (date === '') {
 		if (!carrier.carryTo(stamp, separateTime.msOfDay)) return false;
 	} else {
-		if (!scanStamp(date, stamp) || stamp.shape === 'none') return false;
 		stamp.msOfDay = separateTime.msOfDay;
 		carrier.keep(stamp);
 	}
@@ -105,10 +109,19 @@ function readDateAndTime(
 	return true;
 }
 
+/** Milliseconds since midnight of a clock that stands alone; NaN where it is none. */
+function clockMs(cell: string | undefined): number {
+	const isClock = scanStamp((cell ?? '').trim(), separateTime) && separateTime.shape === 'none';
+	return isClock && separateTime.msOfDay !== noTime ? separateTime.msOfDay : NaN;
+}
+
 function readParts({ parts }: TimingOf<'parts'>, stamp: Stamp, cells: readonly string[]): boolean {
 	const at = (column: number | null): number => (column === null ? 0 : numberOf(cells[column]));
 	const [year, month, day, hour] = [at(parts.year), at(parts.month), at(parts.day), at(parts.hour)];
-	const ms = Math.round(((hour * 60 + at(parts.minute)) * 60 + at(parts.second)) * 1000);
+	const ms =
+		parts.clock === null
+			? Math.round(((hour * 60 + at(parts.minute)) * 60 + at(parts.second)) * 1000)
+			: clockMs(cells[parts.clock]);
 	if (![year, month, day].every(Number.isInteger) || Number.isNaN(ms)) return false;
 	stamp.shape = 'year-first';
 	stamp.a = year < 100 ? (year < 80 ? 2000 : 1900) + year : year;
@@ -179,6 +192,8 @@ function readOf(
 			return (cells) => setMs(serialMs(timing, cells));
 		case 'elapsed':
 			return (cells) => setMs(readElapsed(cells[timing.column], timing.unitMs));
+		case 'counted':
+			return (cells) => setMs(numberOf(cells[timing.column]));
 		case 'day-and-clock':
 			return (cells) =>
 				setMs(numberOf(cells[timing.day]) * msPerDay + clockOfDigits(cells[timing.time] ?? '', timing.form));

@@ -2,19 +2,19 @@ import type { ReadContext } from '../ingestion';
 import type { Stated } from '../layout/preamble';
 import type { Timing } from '../layout/timing';
 import { msPerDay } from '../times/calendar';
+import type { DateOrder } from '../times/date-order';
 import { utcOfLocal } from '../times/local-times';
 import { emptyStamp, noOffset, noTime, scanStamp } from '../times/stamp';
 import { offsetAtOf, offsetText } from '../times/zone';
 import type { Gathered } from './gathered';
 import { isDescending, momentMs, type Instants } from './instants';
 import { openStart } from './open-start';
-import type { AxisOrOpen } from './open-times';
-import { decideOrder, openDaysIn } from './order';
+import { endsOf, type AxisOrOpen, type TimeOption } from './open-times';
+import { decideOrder, openDaysIn, type DecidedOrder } from './order';
 import { countedMs } from './row-index';
-import { distinctZones, zonesFor, type UsedZone } from './zone-choice';
+import { intervalBetween, stepsOf, type Steps } from './row-interval';
+import { distinctZones, whyZone, zonesFor, type UsedZone } from './zone-choice';
 
-/** Intervals to offer when the file names none: the usual settings of the trade (5 to 15 minutes). */
-const usualIntervals = [5, 10, 15] as const;
 const halfDay = msPerDay / 2;
 const stamp = emptyStamp();
 const noChange = { change: null, changeRows: [] } as const;
@@ -56,14 +56,23 @@ function fromFirst(ms: Float64Array): Float64Array {
 
 interface Runner {
 	readonly isClock: boolean;
+	/** Null where the rows carry the length of their steps themselves. */
+	readonly steps: Steps | null;
 	place(startMs: number, intervalMs: number, zone: string): Instants;
 }
 
 function runnerOf(gathered: Gathered, timing: Timing, stated: Stated): Runner {
 	const isClock = timing.kind === 'time-of-day' && !isRunning(gathered, stated.startText);
 	const own = gathered.times.ms.subarray(0, gathered.count);
+	const steps =
+		timing.kind === 'none'
+			? { count: gathered.count - 1, size: 1, isCount: false }
+			: timing.kind === 'counted'
+				? stepsOf(own)
+				: null;
 	return {
 		isClock,
+		steps,
 		place(startMs, intervalMs, zone) {
 			if (isClock) return clocksFrom(gathered, startMs + offsetAtOf(zone)(startMs) * 60_000, zone);
 			const since =
@@ -71,7 +80,9 @@ function runnerOf(gathered: Gathered, timing: Timing, stated: Stated): Runner {
 					? countedMs(own, intervalMs)
 					: timing.kind === 'day-and-clock'
 						? fromFirst(own)
-						: own;
+						: timing.kind === 'counted'
+							? own.map((count) => Math.round((count * intervalMs) / (steps?.size ?? 1)))
+							: own;
 			return { ms: Float64Array.from(since, (at) => startMs + at), ...noChange };
 		}
 	};
@@ -98,38 +109,36 @@ export function runningAxis(
 ): AxisOrOpen {
 	const { answers } = context;
 	const runner = runnerOf(gathered, timing, stated);
-	const intervalSeconds =
-		answers.intervalSeconds ?? (stated.intervalMinutes === null ? null : stated.intervalMinutes * 60);
-	const intervalMs = Math.round((intervalSeconds ?? 0) * 1000);
 	const startText = stated.startText ?? (runner.isClock ? stated.dateText : null);
-	const decided = decideOrder(openDaysIn(startText), stated, context);
+	const days = [...openDaysIn(startText), ...openDaysIn(stated.stopText)];
+	const decided = decideOrder(days, stated, context);
 	const zones = startZones(gathered, stated, startText, context);
-	const [likeliest] = zones;
-	const zone = likeliest?.zone ?? 'UTC';
-	if (answers.startMs === undefined && decided.possible.length > 1) {
-		const msOf = (order: (typeof decided.possible)[number]): Float64Array =>
-			runner.place(momentMs(startText, order, zone) ?? 0, intervalMs, zone).ms;
-		return {
-			code: 'date-order',
-			why: decided.why,
-			options: decided.possible.map((order) => ({
-				answer: { dateOrder: order },
-				label: order,
-				ms: msOf(order)
-			}))
-		};
-	}
+	const zone = zones[0]?.zone ?? 'UTC';
 	const startIn = (name: string): number | null =>
 		answers.startMs ?? momentMs(startText, decided.order, name);
-	if (startIn(zone) === null) {
-		const isBack = timing.kind === 'elapsed' && (gathered.times.ms[gathered.count - 1] ?? 1) <= 0;
-		const rowsFrom = (ms: number): Float64Array => runner.place(ms, intervalMs, zone).ms;
-		return isBack
-			? countedBack(context, rowsFrom)
-			: openStart('no-times', context, rowsFrom, runner.isClock ? msPerDay : 1);
+	const [startMs, stopMs] = [startIn(zone), momentMs(stated.stopText, decided.order, zone)];
+	const spanMs = startMs === null || stopMs === null ? null : stopMs - startMs;
+	const interval = runner.steps && intervalBetween(runner.steps, stated, spanMs, context);
+	const intervalMs = interval !== null && 'seconds' in interval ? Math.round(interval.seconds * 1000) : 0;
+	if (answers.startMs === undefined && startText !== null && decided.possible.length > 1) {
+		const msOf = (order: (typeof decided.possible)[number]): Float64Array =>
+			runner.place(momentMs(startText, order, zone) ?? 0, intervalMs, zone).ms;
+		return openOrder(decided, msOf);
 	}
-	if (timing.kind === 'none' && intervalSeconds === null)
-		return openInterval(runner, startIn(zone) ?? 0, zone);
+	const isOpen = interval !== null && 'offered' in interval;
+	if (isOpen && (startMs !== null || runner.steps?.isCount === true))
+		return openInterval(runner, startMs, interval.offered, zone);
+	// A day alone leaves open when on it the readings began, unless they say so themselves.
+	const isDayOnly = answers.startMs === undefined && !runner.isClock && !hasClock(startText);
+	if (startMs === null || isDayOnly) {
+		const isBack =
+			(timing.kind === 'elapsed' || timing.kind === 'counted') &&
+			(gathered.times.ms[gathered.count - 1] ?? 1) <= 0;
+		const rowsFrom = (ms: number): Float64Array => runner.place(ms, intervalMs, zone).ms;
+		if (isBack) return countedBack(context, rowsFrom);
+		const others = runner.isClock ? [] : startsStated(startMs, stopMs, rowsFrom);
+		return openStart('no-times', context, rowsFrom, runner.isClock ? msPerDay : 1, others);
+	}
 	const places = distinctZones(
 		zones,
 		(name) => runner.place(startIn(name) ?? 0, intervalMs, name),
@@ -139,7 +148,7 @@ export function runningAxis(
 	if (places.length > 1 || only === undefined)
 		return {
 			code: 'zone',
-			why: 'no-zone',
+			why: whyZone(stated),
 			options: places.map(({ zone: used, placed }) => ({
 				answer: { zone: used.zone },
 				label: used.zone,
@@ -152,8 +161,45 @@ export function runningAxis(
 		zone: isAnswered ? { zone: 'UTC', by: 'answer' } : only.zone,
 		order: decided.order,
 		orderBy: decided.by,
-		isLocal: !isAnswered
+		isLocal: !isAnswered,
+		...(interval !== null &&
+			'seconds' in interval &&
+			interval.because === 'declared' && {
+				decisions: [
+					{ field: 'intervalSeconds', value: String(interval.seconds), because: 'declared', detail: null }
+				]
+			})
 	};
+}
+
+function openOrder({ why, possible }: DecidedOrder, msOf: (order: DateOrder) => Float64Array): AxisOrOpen {
+	return {
+		code: 'date-order',
+		why,
+		options: possible.map((order) => ({ answer: { dateOrder: order }, label: order, ms: msOf(order) }))
+	};
+}
+
+function hasClock(text: string | null): boolean {
+	return text !== null && scanStamp(text, stamp) && stamp.msOfDay !== noTime;
+}
+
+/** Starts that the file suggests without settling them: the day it names, and the one that makes it end when it says. */
+function startsStated(
+	dayMs: number | null,
+	stopMs: number | null,
+	rowsFrom: (startMs: number) => Float64Array
+): TimeOption[] {
+	const options: TimeOption[] = [];
+	const offer = (label: string, startMs: number): void => {
+		if (Number.isFinite(startMs)) options.push({ answer: { startMs }, label, ms: rowsFrom(startMs) });
+	};
+	if (stopMs !== null) {
+		const { firstMs, lastMs } = endsOf(rowsFrom(0));
+		offer('declared-end', stopMs - (lastMs - firstMs) - firstMs);
+	}
+	if (dayMs !== null) offer('declared-day', dayMs);
+	return options;
 }
 
 /** Counted back from "now": nobody but the dock knows when that was. */
@@ -168,11 +214,16 @@ function countedBack(context: ReadContext, rowsFrom: (ms: number) => Float64Arra
 	};
 }
 
-function openInterval(runner: Runner, startMs: number, zone: string): AxisOrOpen {
-	const options = usualIntervals.map((minutes) => ({
-		answer: { intervalSeconds: minutes * 60 },
-		label: String(minutes),
-		ms: runner.place(startMs, minutes * 60_000, zone).ms
+function openInterval(
+	runner: Runner,
+	startMs: number | null,
+	offered: readonly number[],
+	zone: string
+): AxisOrOpen {
+	const options = offered.slice(0, 3).map((seconds) => ({
+		answer: { intervalSeconds: seconds },
+		label: String(seconds / 60),
+		ms: startMs === null ? null : runner.place(startMs, seconds * 1000, zone).ms
 	}));
 	return { code: 'interval', why: 'no-times', options };
 }

@@ -9,14 +9,15 @@ import type { AxisOrOpen, OpenTimes } from './open-times';
 import { decideOrder, openDaysOf } from './order';
 import { judgeDates } from './plausible-dates';
 import { runningAxis } from './running-axis';
-import { distinctZones, zonesFor, type Placed } from './zone-choice';
+import { settleMonths } from './twofold-months';
+import { distinctZones, whyZone, zonesFor, type Placed } from './zone-choice';
 
 export type { OpenTimes, TimeAxis } from './open-times';
 
-function openZone(places: readonly Placed<Instants>[]): OpenTimes {
+function openZone(places: readonly Placed<Instants>[], stated: Stated): OpenTimes {
 	return {
 		code: 'zone',
-		why: 'no-zone',
+		why: whyZone(stated),
 		options: places.map(({ zone, placed }) => ({
 			answer: { zone: zone.zone },
 			label: zone.zone,
@@ -26,7 +27,11 @@ function openZone(places: readonly Placed<Instants>[]): OpenTimes {
 }
 
 /** Rows that carry a whole calendar moment. */
-function calendarAxis(gathered: Gathered, stated: Stated, context: ReadContext): AxisOrOpen {
+function calendarAxis(written: Gathered, stated: Stated, context: ReadContext): AxisOrOpen {
+	const likely = zonesFor(written, stated, context, NaN)[0]?.zone ?? context.siteZone;
+	const months = settleMonths(written, stated, context, likely);
+	if ('options' in months) return months;
+	const { gathered, decisions } = months;
 	const days = openDaysOf(gathered);
 	const decided = decideOrder(days, stated, context);
 	const first = localTimes(gathered, decided.possible[0] ?? null, 1)[0] ?? NaN;
@@ -49,14 +54,15 @@ function calendarAxis(gathered: Gathered, stated: Stated, context: ReadContext):
 		context.uploadedMs
 	);
 	const [only] = places;
-	if (only === undefined || places.length > 1) return openZone(places);
+	if (only === undefined || places.length > 1) return openZone(places, stated);
 	const isIso = days.length === 0;
 	return {
 		...only.placed,
 		zone: only.zone,
 		order: isIso ? 'ymd' : decided.order,
 		orderBy: isIso ? (gathered.times.isSettled[0] === 2 ? 'month-name' : 'iso') : decided.by,
-		isLocal: true
+		isLocal: true,
+		...(decisions.length > 0 && { decisions })
 	};
 }
 
@@ -73,7 +79,7 @@ function serialAxis(gathered: Gathered, stated: Stated, context: ReadContext): A
 	const zones = zonesFor(gathered, stated, context, local[0] ?? NaN);
 	const places = distinctZones(zones, (zone) => placeLocal(local, zone), context.uploadedMs);
 	const [only] = places;
-	if (only === undefined || places.length > 1) return openZone(places);
+	if (only === undefined || places.length > 1) return openZone(places, stated);
 	return { ...only.placed, zone: only.zone, order: null, orderBy: null, isLocal: true };
 }
 

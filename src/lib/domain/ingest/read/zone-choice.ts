@@ -3,6 +3,7 @@ import type { Stated } from '../layout/preamble';
 import { emptyStamp, noOffset, scanStamp } from '../times/stamp';
 import { fixedOffsetOf, isZone, offsetAtOf, offsetText } from '../times/zone';
 import { zoneMeanings } from '../times/zone-words';
+import { withDaylight, withoutDaylight, zonesToOffer } from './daylight-choice';
 import type { Gathered } from './gathered';
 
 export interface UsedZone {
@@ -50,6 +51,25 @@ function ofStatedWord(word: string, siteZone: string): UsedZone[] {
 	return [...regions, ...meanings.map(({ minutes }) => file(offsetText(minutes)))];
 }
 
+/** A zone said outright: several where the file names several, or where summer time makes two of it. */
+function ofStatedZone(
+	zone: string,
+	stated: Stated,
+	{ siteZone }: ReadContext,
+	firstLocalMs: number
+): UsedZone[] {
+	const named = stated.zonesNamed.length > 1 ? stated.zonesNamed : [zone];
+	return named
+		.flatMap((name) =>
+			stated.isDaylight === true
+				? withDaylight(name, siteZone, firstLocalMs)
+				: stated.isDaylight === false
+					? withoutDaylight(name)
+					: [name]
+		)
+		.map(file);
+}
+
 const stamp = emptyStamp();
 
 /** The offset that the stated start carries, where the first row shows the same clock. */
@@ -81,13 +101,23 @@ export function zonesFor(
 			fixedOffsetOf(zoneWord) === null && isZone(zoneWord) ? [file(zoneWord)] : ofRowWord(zoneWord, distinct);
 		if (meant.length > 0) return meant;
 	}
-	if (stated.zone !== null) return [file(stated.zone)];
+	if (stated.zone !== null) return ofStatedZone(stated.zone, stated, context, firstLocalMs);
 	if (stated.zoneWord !== null) {
 		const meant = ofStatedWord(stated.zoneWord, context.siteZone);
 		if (meant.length > 0) return meant;
 	}
 	const ofOwnStart = ofStart(stated.startText, firstLocalMs);
-	return ofOwnStart.length > 0 ? ofOwnStart : [{ zone: context.siteZone, by: 'site' }];
+	if (ofOwnStart.length > 0) return ofOwnStart;
+	if (stated.zoneUnknown !== null) return zonesToOffer(context.siteZone).map(file);
+	const sites = stated.isDaylight === false ? withoutDaylight(context.siteZone) : [context.siteZone];
+	return sites.map((zone) => ({ zone, by: 'site' }));
+}
+
+/** Why the zone has to be asked about. */
+export function whyZone({ zone, zoneWord, zonesNamed, zoneUnknown, isDaylight }: Stated): string {
+	if (zonesNamed.length > 1) return 'several-zones';
+	if (isDaylight !== null) return 'daylight';
+	return zone === null && zoneWord === null && zoneUnknown !== null ? 'unknown-zone' : 'no-zone';
 }
 
 /** One zone with the instants it gives. */
