@@ -1,3 +1,4 @@
+import { isoDay, time } from '$lib/format-time';
 import type { DocketView, LineOutcomeView } from '$lib/schemas/docket';
 
 type Line = DocketView['lines'][number];
@@ -30,13 +31,28 @@ export function groupFields(known: Record<string, unknown>): GroupFields {
 	return Object.fromEntries(entries) as GroupFields;
 }
 
-/** What the page begins with for a line: the signed groups, else the recommendation, else nothing chosen. */
-export function beginningGroups(line: Line, suggestedReason: string): GroupFields[] {
+/** An instant as a field for local time holds it, by the site's clock. */
+const wallTime = (at: string, zone: string) => `${isoDay(at, zone)}T${time(at, zone)}`;
+
+interface Beginning {
+	suggestedReason: string;
+	zone: string;
+	/** The open hold of a docket that is not signed. */
+	hold: DocketView['hold'];
+}
+
+/**
+ * What the page begins with for a line: the signed groups, held ones with what they await and until when; else the
+ * recommendation, with the open hold's words ready where it is chosen again; else nothing chosen.
+ */
+export function beginningGroups(line: Line, { suggestedReason, zone, hold }: Beginning): GroupFields[] {
+	const until = (at: string | null | undefined) => (at ? wallTime(at, zone) : '');
 	const signed: readonly LineOutcomeView[] = line.groups ?? (line.outcome ? [line.outcome] : []);
-	if (signed.length > 0) return signed.map((group) => groupFields({ ...group }));
+	if (signed.length > 0) return signed.map((group) => groupFields({ ...group, until: until(group.untilAt) }));
 	const recommended = line.recommendation?.recommended;
 	const outcome = recommended === 'hold' ? '' : (recommended ?? '');
-	return [groupFields({ outcome, reason: suggestedReason })];
+	const held = { awaited: hold?.awaited, until: until(hold?.untilAt) };
+	return [groupFields({ outcome, reason: suggestedReason, ...held })];
 }
 
 /** How many groups of each line an address asks for: `?split=1.3` is line 1 in three; faults count as not asked. */
