@@ -46,6 +46,7 @@ async function benchEngine(readings: number): Promise<void> {
 
 const [program = '', first, path = ''] = process.argv.slice(1);
 if (first === '--peak') console.log(JSON.stringify(measurePeak(path)));
+else if (first === '--stored') for (const line of await storedLines()) console.log(line);
 else {
 	benchReader();
 	await benchMemory(program);

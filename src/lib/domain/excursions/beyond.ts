@@ -36,11 +36,14 @@ export function stretchesBeyond(
 	includesLimit = false
 ): Beyond[] {
 	const sign = side === 'above' ? 1 : -1;
-	const excess = course.levels.map((celsius) => sign * (celsius - limitCelsius));
+	const excess = new Float64Array(course.levels.length);
 	const settledExcess = sign * (settledAtCelsius - limitCelsius);
-	const states = Uint8Array.from(excess, (by) =>
-		by > 0 || (includesLimit && by === 0) ? beyond : by <= settledExcess ? settled : within
-	);
+	const states = new Uint8Array(excess.length);
+	for (let level = 0; level < excess.length; level++) {
+		const by = sign * ((course.levels[level] as number) - limitCelsius);
+		excess[level] = by;
+		states[level] = by > 0 || (includesLimit && by === 0) ? beyond : by <= settledExcess ? settled : within;
+	}
 	if (!states.includes(beyond)) return [];
 	return new BeyondWalk(course, excess, states).all();
 }

@@ -1,7 +1,9 @@
+import { inflateRawSync } from 'node:zlib';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { wanderingTrace } from '../../../../tests/bench/engine';
 import { temperatureUnits } from '../units';
+import { SharedRoom } from './room';
 import { packTrace, TraceFault, unpackTrace, type TraceFaultCode } from './pack';
 import type { Trace } from './trace';
 
@@ -50,6 +52,22 @@ describe('a packed trace', () => {
 		const around = new Uint8Array(packed.length + 20);
 		around.set(packed, 7);
 		expect(unpackTrace(around.subarray(7, 7 + packed.length))).toEqual(small);
+	});
+
+	it('comes back in shared memory and by another inflater, digit for digit', () => {
+		const room = new SharedRoom();
+		const inflate = (packed: Uint8Array, bytes: number) => inflateRawSync(packed, { maxOutputLength: bytes });
+		for (const trace of [wanderingTrace(3000), small, wanderingTrace(50)])
+			expect(unpackTrace(packTrace(trace), { room, inflate })).toEqual(trace);
+		// A longer run of steps than the payload has room for is no trace, whoever inflates it.
+		const harmed = packTrace(small).slice(0, -1);
+		expect(faultOf(() => unpackTrace(harmed, { room, inflate }))).not.toBeNull();
+	});
+
+	it('keeps runs of one step apart by whatever stands between them', () => {
+		const gaps = [0, 60, 120, 180, 7200, 7260, 7320, 7321, 7322, 7323].map((seconds) => seconds * 1000);
+		const trace: Trace = { ...small, times: Float64Array.from(gaps), scaled: new Int32Array(gaps.length) };
+		expect(unpackTrace(packTrace(trace))).toEqual(trace);
 	});
 
 	it('may be empty or begin before 1970', () => {

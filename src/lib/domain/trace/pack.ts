@@ -1,6 +1,7 @@
 import { deflateSync, inflateSync } from 'fflate';
 import { temperatureUnits } from '../units';
 import { crc32 } from './crc32';
+import { ownRoom, type Room } from './room';
 import type { Trace } from './trace';
 import { VarintReader, VarintWriter } from './varint';
 
@@ -75,8 +76,21 @@ function payloadOf({ times, scaled }: Trace): Uint8Array {
 	return writer.bytes;
 }
 
+/** How a blob is unpacked, where not in new memory by the inflater that runs everywhere. */
+export interface Unpacking {
+	/** In a shared one the trace lasts until the next is unpacked. */
+	readonly room: Room;
+	/** Of raw deflate; throws where the bytes are none, or more than so many come out. */
+	readonly inflate: (packed: Uint8Array, bytes: number) => Uint8Array;
+}
+
+const unpackingAnywhere: Unpacking = {
+	room: ownRoom,
+	inflate: (packed, bytes) => inflateSync(packed, { out: new Uint8Array(bytes) })
+};
+
 /** The trace a blob holds, digit for digit; a `TraceFault` where the blob is not one or was harmed. */
-export function unpackTrace(blob: Uint8Array): Trace {
+export function unpackTrace(blob: Uint8Array, { room, inflate } = unpackingAnywhere): Trace {
 	if (blob[0] !== magic[0] || blob[1] !== magic[1]) throw new TraceFault('not-a-trace');
 	if (blob[2] !== magic[2]) throw new TraceFault('version-unknown');
 	const unit = temperatureUnits[blob[3] ?? -1];
@@ -91,15 +105,15 @@ export function unpackTrace(blob: Uint8Array): Trace {
 	// Two varints a reading, each of one to eight bytes.
 	const isPlausible = count <= mostReadings && payloadBytes >= 2 * count && payloadBytes <= 16 * count;
 	if (!isPlausible || payloadBytes > packed.length * deflateLimit) throw new TraceFault('not-a-trace');
-	const payload = inflated(packed, payloadBytes);
+	const payload = inflated(packed, payloadBytes, inflate);
 	const expected = new DataView(blob.buffer, blob.byteOffset).getUint32(head.at);
 	if (crc32(payload) !== expected) throw new TraceFault('checksum-differs');
-	return { unit, decimals, ...columnsOf(payload, count) };
+	return { unit, decimals, ...columnsOf(payload, count, room) };
 }
 
-function inflated(packed: Uint8Array, payloadBytes: number): Uint8Array {
+function inflated(packed: Uint8Array, payloadBytes: number, inflate: Unpacking['inflate']): Uint8Array {
 	try {
-		const payload = inflateSync(packed, { out: new Uint8Array(payloadBytes) });
+		const payload = inflate(packed, payloadBytes);
 		if (payload.length === payloadBytes) return payload;
 	} catch {
 		throw new TraceFault('cut-short');
@@ -107,13 +121,26 @@ function inflated(packed: Uint8Array, payloadBytes: number): Uint8Array {
 	throw new TraceFault('cut-short');
 }
 
-function columnsOf(payload: Uint8Array, count: number): Pick<Trace, 'times' | 'scaled'> {
+function columnsOf(payload: Uint8Array, count: number, room: Room): Pick<Trace, 'times' | 'scaled'> {
 	const reader = new VarintReader(payload);
-	const times = new Float64Array(count);
-	const scaled = new Int32Array(count);
+	const times = room.floats('times', count);
+	const scaled = room.wholes('scaled', count);
+	readTimes(reader, times);
+	readValues(reader, scaled);
+	if (reader.at !== payload.length) throw new TraceFault('not-a-trace');
+	return { times, scaled };
+}
+
+function readTimes(reader: VarintReader, times: Float64Array): void {
 	let time = 0;
 	let step = 0;
-	for (let i = 0; i < count; i++) {
+	for (let i = 0; i < times.length; i++) {
+		// A zero is the step before once more: most traces hold one run of them.
+		for (let still = i < 2 ? 0 : reader.skipZeros(times.length - i); still > 0; still--) {
+			time += step;
+			times[i++] = time;
+		}
+		if (i >= times.length) break;
 		const change = reader.readSigned();
 		if (change === null) throw new TraceFault('cut-short');
 		if (i > 0) step += change;
@@ -121,14 +148,15 @@ function columnsOf(payload: Uint8Array, count: number): Pick<Trace, 'times' | 's
 		time = i === 0 ? change : time + step;
 		times[i] = time;
 	}
+}
+
+function readValues(reader: VarintReader, scaled: Int32Array): void {
 	let value = 0;
-	for (let i = 0; i < count; i++) {
+	for (let i = 0; i < scaled.length; i++) {
 		const change = reader.readSigned();
 		if (change === null) throw new TraceFault('cut-short');
 		value += change;
 		if (value !== (value | 0)) throw new TraceFault('value-out-of-range');
 		scaled[i] = value;
 	}
-	if (reader.at !== payload.length) throw new TraceFault('not-a-trace');
-	return { times, scaled };
 }

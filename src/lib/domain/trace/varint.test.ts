@@ -24,6 +24,17 @@ describe('varint', () => {
 		expect(writer.bytes).toHaveLength(5);
 	});
 
+	it('passes over zeros, as many as stand there and as were asked for', () => {
+		const reader = new VarintReader(Uint8Array.of(0, 0, 0, 2, 0));
+		expect(reader.skipZeros(2)).toBe(2);
+		expect(reader.skipZeros(9)).toBe(1);
+		expect(reader.skipZeros(9)).toBe(0);
+		expect(reader.readSigned()).toBe(1);
+		expect(reader.skipZeros(9)).toBe(1);
+		expect(reader.skipZeros(9)).toBe(0);
+		expect(reader.readSigned()).toBeNull();
+	});
+
 	it('says so when the bytes end early', () => {
 		expect(new VarintReader(Uint8Array.of()).readUnsigned()).toBeNull();
 		expect(new VarintReader(Uint8Array.of(128)).readSigned()).toBeNull();

@@ -55,7 +55,23 @@ export class VarintReader {
 		return null;
 	}
 
+	/** Passes over the zeros that stand next, so many at most, and says how many there were. */
+	skipZeros(most: number): number {
+		const end = Math.min(this.#bytes.length, this.#at + most);
+		const from = this.#at;
+		let at = from;
+		while (at < end && this.#bytes[at] === 0) at++;
+		this.#at = at;
+		return at - from;
+	}
+
 	readSigned(): number | null {
+		const byte = this.#bytes[this.#at];
+		// Nearly all are of one byte: a steady logger writes small steps.
+		if (byte !== undefined && byte < 128) {
+			this.#at++;
+			return byte % 2 === 0 ? byte >> 1 : -((byte + 1) >> 1);
+		}
 		const folded = this.readUnsigned();
 		if (folded === null) return null;
 		return folded % 2 === 0 ? folded / 2 : -(folded + 1) / 2;

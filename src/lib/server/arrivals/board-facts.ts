@@ -12,7 +12,7 @@ import { Product } from '../db/models/product';
 import type { Shipment } from '../db/models/shipment';
 import { ShipmentLine } from '../db/models/shipment-line';
 import { SpecVersion } from '../db/models/spec-version';
-import { parseSpecFigures } from '../specs/find-spec-in-force';
+import { parseSpecFigures } from '../specs/stored-spec';
 import { rejectClockName } from './reject-clock';
 
 function grouped<Row>(rows: readonly Row[], keyOf: (row: Row) => string): Map<string, Row[]> {

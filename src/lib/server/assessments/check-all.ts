@@ -1,8 +1,8 @@
 import { join } from 'node:path';
 import { Worker } from 'node:worker_threads';
-import { QueryTypes, type Sequelize } from 'sequelize';
+import type { Connection } from 'mariadb';
 import { engineVersion } from '../../domain/receiving/engine-version';
-import { connect } from '../db/sequelize';
+import { connectPlainly } from '../db/plain-connection';
 import { BatchChecker } from './check-batch';
 import type { CheckedAssessment } from './check-stored';
 
@@ -26,25 +26,27 @@ export interface CheckReport {
 
 type CheckIds = (ids: readonly string[]) => Promise<CheckedAssessment[]>;
 
-/** Recomputes every stored assessment in batches over so many threads; 0: in this one. */
-export async function checkAllAssessments(databaseUrl: string, threads: number): Promise<CheckReport> {
-	const database = connect(databaseUrl, 1);
-	const hands = Array.from({ length: threads }, () => hand(databaseUrl));
+/** Batches that are on their way at once to each thread: the next is fetched while one is checked. */
+const ahead = 2;
+
+/** Recomputes every stored assessment in batches, in this thread and so many others. */
+export async function checkAllAssessments(databaseUrl: string, others: number): Promise<CheckReport> {
+	const database = await connectPlainly(databaseUrl);
+	const hands = Array.from({ length: others }, () => hand(databaseUrl));
 	const here = new BatchChecker(database);
 	try {
 		const batches = await batchesOf(database);
-		const checks: CheckIds[] = threads === 0 ? [(ids) => here.check(ids)] : hands.map(({ check }) => check);
-		return reportOf((await Promise.all(checks.map((check) => drain(batches, check)))).flat());
+		const checks: CheckIds[] = [...hands.map(({ check }) => check), (ids) => here.check(ids)];
+		const drains = checks.flatMap((check) => Array.from({ length: ahead }, () => drain(batches, check)));
+		return reportOf((await Promise.all(drains)).flat());
 	} finally {
 		await Promise.all(hands.map(({ stop }) => stop()));
-		await database.close();
+		await database.end();
 	}
 }
 
-async function batchesOf(database: Sequelize): Promise<string[][]> {
-	const rows = await database.query<{ id: string }>('SELECT id FROM assessments ORDER BY id', {
-		type: QueryTypes.SELECT
-	});
+async function batchesOf(database: Connection): Promise<string[][]> {
+	const rows = await database.query<{ id: string }[]>('SELECT id FROM assessments ORDER BY id');
 	const batches: string[][] = [];
 	for (let at = 0; at < rows.length; at += batchAssessments) {
 		batches.push(rows.slice(at, at + batchAssessments).map(({ id }) => id));
@@ -59,16 +61,15 @@ async function drain(batches: string[][], check: CheckIds): Promise<CheckedAsses
 	return checked;
 }
 
-/** A thread with a connection of its own that answers batch for batch. */
+/** A thread with a connection of its own that answers batch for batch, in the order asked. */
 function hand(databaseUrl: string): { check: CheckIds; stop: () => Promise<unknown> } {
 	const worker = new Worker(join(process.cwd(), 'build/node/check-worker.js'), { workerData: databaseUrl });
+	const waiting: { resolve: (checked: CheckedAssessment[]) => void; reject: (error: Error) => void }[] = [];
+	worker.on('message', (checked: CheckedAssessment[]) => waiting.shift()?.resolve(checked));
+	worker.on('error', (error) => waiting.splice(0).forEach(({ reject }) => reject(error)));
 	const check: CheckIds = (ids) =>
 		new Promise((resolve, reject) => {
-			worker.once('error', reject);
-			worker.once('message', (checked: CheckedAssessment[]) => {
-				worker.off('error', reject);
-				resolve(checked);
-			});
+			waiting.push({ resolve, reject });
 			worker.postMessage(ids);
 		});
 	return { check, stop: () => worker.terminate() };

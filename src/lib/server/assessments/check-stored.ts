@@ -5,7 +5,7 @@ import type { Room } from '../../domain/trace/room';
 import type { Trace } from '../../domain/trace/trace';
 import { assessInputOf, inputsSha256 } from './assessment-inputs';
 import { figureDifferences, largestRelative, type FigureDifference } from './figure-differences';
-import { figuresText, parseFigures } from './stored-figures';
+import { figuresText, parseInputs } from './stored-figures';
 
 /** An assessment as it lies in the database, with the trace and the spec it names. */
 export interface StoredAssessment {
@@ -35,7 +35,7 @@ export interface CheckedAssessment {
 export function checkStored(stored: StoredAssessment, room: Room): CheckedAssessment {
 	const { id, engineVersion: made, trace } = stored;
 	const checked = { id, engineVersion: made, readings: trace.times.length };
-	const { inputs, trimmedHours } = parseFigures(stored.figures);
+	const { inputs, trimmedHours } = parseInputs(stored.figures);
 	const fault = faultOf(stored, inputs);
 	if (fault !== null) return { ...checked, fault, differences: [], largestRelative: 0 };
 	const again = assess(assessInputOf(inputs, stored.spec, trace), room);
@@ -49,7 +49,7 @@ export function checkStored(stored: StoredAssessment, room: Room): CheckedAssess
 
 function faultOf(
 	stored: StoredAssessment,
-	inputs: ReturnType<typeof parseFigures>['inputs']
+	inputs: ReturnType<typeof parseInputs>['inputs']
 ): CheckFault | null {
 	if (inputsSha256(inputs) !== stored.inputsSha256) return 'inputs-altered';
 	if (inputs.traceSha256 !== stored.traceSha256) return 'trace-replaced';

@@ -18,3 +18,12 @@ export function figuresText(assessment: Assessment, inputs: PinnedInputs, trimme
 export function parseFigures(text: string): StoredFigures {
 	return JSON.parse(text) as StoredFigures;
 }
+
+const restKey = ',"trimmedHours":';
+
+/** What the figures rest on alone, which is written last: a quote within a text is escaped, so the key is the key. */
+export function parseInputs(text: string): Pick<StoredFigures, 'inputs' | 'trimmedHours'> {
+	const at = text.indexOf(restKey);
+	if (at < 0) return parseFigures(text);
+	return JSON.parse(`{${text.slice(at + 1)}`) as Pick<StoredFigures, 'inputs' | 'trimmedHours'>;
+}

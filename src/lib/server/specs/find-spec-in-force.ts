@@ -1,6 +1,7 @@
 import { Op, type Transaction } from 'sequelize';
 import type { Spec } from '../../domain/shelf-life/spec';
 import { SpecVersion } from '../db/models/spec-version';
+import { parseSpecFigures } from './stored-spec';
 
 /** A signed version with its figures parsed. */
 export interface SignedSpec {
@@ -8,11 +9,6 @@ export interface SignedSpec {
 	number: number;
 	figuresSha256: string;
 	figures: Spec;
-}
-
-/** The figures of a version's stored text. They were validated when it was saved, and the engine checks them again. */
-export function parseSpecFigures(text: string): Spec {
-	return JSON.parse(text) as Spec;
 }
 
 function signedSpec(row: SpecVersion): SignedSpec {
