@@ -32,6 +32,9 @@ const server = createServer((request, response) => {
 });
 // An upload of 50 MB over a dock's Wi-Fi takes its time.
 server.requestTimeout = 15 * 60_000;
+// Longer than any client or proxy keeps an idle connection: it must not be cut while their next request is on its way.
+server.keepAliveTimeout = 75_000;
+server.headersTimeout = 80_000;
 const port = Number(process.env.PORT || 3000);
 server.on('error', (error) => {
 	process.stderr.write(`Port ${port} cannot be opened: ${error.message}. Choose another with PORT.\n`);
