@@ -169,15 +169,3 @@ export function questionText(question: Question): { title: string; why: string }
 
 /** What stands on every question beside the choices. */
 export const askQualityText = 'I don’t know, ask QA';
-
-/** What settled the order of day and month, for the summary of how the file was read. */
-export const orderByTexts: Readonly<Record<string, string>> = {
-	iso: 'Year, month and day stand in ISO order',
-	'day-over-12': 'A day over 12 settles day and month',
-	continuity: 'Only so do the readings run on without leaps',
-	declared: 'The file states its own date format, start or end',
-	journey: 'Only so do the readings fall into this journey',
-	upload: 'Otherwise the readings would lie in the future or years back',
-	answer: 'Answered at the dock',
-	'month-name': 'Months are written as words'
-};
