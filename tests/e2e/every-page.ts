@@ -1,5 +1,5 @@
 import type { Page } from '@playwright/test';
-import { expect, test as base, type Person } from './people';
+import { complaintsOf, expect, test as base, type Complaints, type Person } from './people';
 import { signInSupplier } from './supplier-room';
 
 /** Addresses of records of the demo, found in its lists. */
@@ -135,11 +135,40 @@ async function find(admin: Page, qa: Page, supplier: Page): Promise<Found> {
 	};
 }
 
+/** A page that is led from place to place, and what its browser has complained of at the present one. */
+interface Tour {
+	page: Page;
+	complaints: Complaints;
+}
+
 interface Worker {
+	/** One page a person and worker: opening a window takes longer than looking at most pages. */
+	tourOf: (as: Place['as']) => Promise<Tour>;
 	found: Found & { supplierSession: Awaited<ReturnType<ReturnType<Page['context']>['storageState']>> };
 }
 
 export const test = base.extend<object, Worker>({
+	tourOf: [
+		async ({ browser, sessionOf, found }, use, worker) => {
+			const { baseURL, locale } = worker.project.use;
+			const tours = new Map<Place['as'], Promise<Tour>>();
+			const open = async (as: Place['as']): Promise<Tour> => {
+				const storageState =
+					as === null ? undefined : as === 'supplier' ? found.supplierSession : await sessionOf(as);
+				const page = await (await browser.newContext({ baseURL, locale, storageState })).newPage();
+				return { page, complaints: complaintsOf(page) };
+			};
+			await use(async (as) => {
+				const tour = tours.get(as) ?? open(as);
+				tours.set(as, tour);
+				const { complaints } = await tour;
+				complaints.all.length = 0;
+				return tour;
+			});
+			for (const tour of tours.values()) await (await tour).page.context().close();
+		},
+		{ scope: 'worker' }
+	],
 	found: [
 		async ({ browser, sessionOf }, use, worker) => {
 			const { baseURL } = worker.project.use;
