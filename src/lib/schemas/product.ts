@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { neededText, revisionField } from './field';
+import { decimalField, neededText, revisionField, ticked } from './field';
+import { gradesField } from './finding-grades';
 import { choice, listQuery } from './list';
 
 export const productForm = z.object({
@@ -16,6 +17,22 @@ export const productForm = z.object({
 	revision: revisionField
 });
 export type ProductForm = z.output<typeof productForm>;
+
+const longestDays = 3650;
+const daysFault = `Enter whole days, from 0 to ${longestDays}, or leave it empty.`;
+
+/** What is asked of a product's loads beyond life: dates, a logger, and how much each finding counts for. */
+export const productRulesForm = z.object({
+	minimumDatedDays: decimalField(daysFault, { min: 0, max: longestDays }).refine(
+		(days) => days === null || Number.isInteger(days),
+		daysFault
+	),
+	isNotOlderThanLast: ticked,
+	isLoggerRequired: ticked,
+	grades: gradesField,
+	revision: revisionField
+});
+export type ProductRulesForm = z.output<typeof productRulesForm>;
 
 export const varietyForm = z.object({
 	variety: neededText(120, 'Enter the variety or pack, such as a trade name or 12 × 125 g.')

@@ -8,6 +8,7 @@ import { allowedIntervalMinutes } from './gate-reasons';
 import { recommend } from './recommend';
 import { settableGrades, type Grade, type ReasonCode } from './recommendation';
 import { rules } from './rules';
+import { settableFindings } from './settable-findings';
 
 const mkt = { activationEnergyKilojoulesPerMole: null, windowHours: null, limitCelsius: 8 };
 const spec = buildSpec({ upper: buildLimit(4), neededHours: 264, mkt });
@@ -306,5 +307,22 @@ describe('the printed date', () => {
 	it('counts calendar days across the change of clocks', () => {
 		const printedDate = { bestBeforeOn: '2026-03-30', neededDays: 2, lastBestBeforeOn: null };
 		expect(foundBy({ ...calm, arrivedOn: '2026-03-28', printedDate }, 'date-short')).toEqual([]);
+	});
+});
+
+describe('the findings that may be graded', () => {
+	it('are those of the table that are not fixed, each with its grade unless set', () => {
+		const usual = new Map<string, Set<Grade>>();
+		for (const { code, grade, isFixed } of table)
+			if (!isFixed) usual.set(code, (usual.get(code) ?? new Set()).add(grade));
+		// Those that fire only without a trace, or beside another finding, are in no row of the table.
+		for (const code of ['evidence-incomplete', 'pulp-above-limit'] as const)
+			usual.set(code, new Set(['hold']));
+		for (const code of ['logger-missing', 'transit-late'] as const) usual.set(code, new Set(['note']));
+		expect(settableFindings.map(({ code }) => code).toSorted()).toEqual([...usual.keys()].toSorted());
+		for (const { code, usualGrade } of settableFindings) {
+			const grades = [...(usual.get(code) ?? [])];
+			expect([code, usualGrade]).toEqual([code, grades.length === 1 ? grades[0] : null]);
+		}
 	});
 });

@@ -10,14 +10,16 @@ import {
 	testSpec
 } from '../../../../tests/helpers/factories';
 import { useTestDatabase } from '../../../../tests/helpers/test-database';
-import { productForm, productQuery } from '../../schemas/product';
+import { productForm, productQuery, productRulesForm } from '../../schemas/product';
 import type { Context, Role } from '../context';
 import { AuditEntry } from '../db/models/audit-entry';
+import { AuditPayload } from '../db/models/audit-payload';
 import { SpecVersion } from '../db/models/spec-version';
 import { storedFigures } from '../specs/figures';
 import { getProduct } from './get-product';
 import { listFamilies, listProducts } from './list-products';
 import { addVariety, saveProduct, switchProduct } from './save-product';
+import { saveProductRules } from './save-rules';
 
 useTestDatabase();
 
@@ -134,5 +136,71 @@ describe('the list of products', () => {
 			sort: 'name',
 			state: 'in-use'
 		});
+	});
+});
+
+describe('the rules for a product’s loads', () => {
+	const rules = (more: Record<string, unknown> = {}) => productRulesForm.parse(more);
+
+	it('are changed by admins only', async () => {
+		const { product } = await buildProduct();
+		for (const role of ['dock', 'qa', 'claims', 'supplier'] as const)
+			await expect(saveProductRules(await as(role), product.id, rules())).rejects.toEqual(
+				refusal('not-allowed')
+			);
+	});
+
+	it('hold dates, the logger and grades, on the record with both states, and nobody overwrites unseen', async () => {
+		const ctx = await as('admin');
+		const { product } = await buildProduct();
+		const before = (await getProduct(ctx, product.id)).rules;
+		expect(before).toMatchObject({
+			minimumDatedDays: null,
+			isNotOlderThanLast: false,
+			isLoggerRequired: false,
+			grades: {}
+		});
+		const sent = {
+			minimumDatedDays: '14',
+			isNotOlderThanLast: 'on',
+			isLoggerRequired: 'on',
+			grades: { 'interval-too-long': 'hold', 'calibration-overdue': 'inform', 'seal-broken': '' },
+			revision: before.revision
+		};
+		await saveProductRules(ctx, product.id, rules(sent));
+		const after = (await getProduct(ctx, product.id)).rules;
+		const kept = {
+			minimumDatedDays: 14,
+			isNotOlderThanLast: true,
+			isLoggerRequired: true,
+			grades: { 'calibration-overdue': 'inform', 'interval-too-long': 'hold' }
+		};
+		expect(after).toMatchObject(kept);
+		const ofProduct = { type: 'product.saved', actorId: ctx.actor.id };
+		const entry = await AuditEntry.findOne({ where: ofProduct });
+		const payload = await AuditPayload.findByPk(entry?.id ?? '');
+		expect(JSON.parse(payload?.text ?? '{}')).toMatchObject({ before: { grades: {} }, after: kept });
+		await expect(saveProductRules(ctx, product.id, rules(sent))).rejects.toEqual(
+			refusal('changed-meanwhile')
+		);
+		// Choosing nothing again takes every grade back.
+		await saveProductRules(ctx, product.id, rules({ revision: after.revision }));
+		expect((await getProduct(ctx, product.id)).rules).toMatchObject({ grades: {}, minimumDatedDays: null });
+		await expect(saveProductRules(ctx, uuid(), rules())).rejects.toEqual(refusal('not-found'));
+	});
+
+	it.each([
+		[{ minimumDatedDays: '1.5' }, 'minimumDatedDays'],
+		[{ minimumDatedDays: '-1' }, 'minimumDatedDays'],
+		[{ minimumDatedDays: '99999' }, 'minimumDatedDays'],
+		[{ minimumDatedDays: 'soon' }, 'minimumDatedDays'],
+		[{ grades: { 'seal-broken': 'reject' } }, 'grades.seal-broken'],
+		[{ grades: { 'life-short': 'note' } }, 'grades'],
+		[{ grades: { 'stop-reached': 'inform' } }, 'grades'],
+		[{ grades: { nonsense: 'hold' } }, 'grades']
+	])('refuse %j in words', (sent, field) => {
+		const faults = productRulesForm.safeParse(sent).error?.issues ?? [];
+		expect(faults.map((fault) => fault.path.join('.'))).toEqual([field]);
+		for (const fault of faults) expect(fault.message).toMatch(/^[A-Z].+\.$/);
 	});
 });

@@ -4,7 +4,7 @@ import type { StartingSpec } from '$lib/domain/starting-specs/starting-spec';
 import type { TemperatureUnit } from '$lib/domain/units';
 import { specIssues } from '$lib/messages/en/spec-faults';
 import { queryOf } from '$lib/schemas/list';
-import { productForm, varietyForm } from '$lib/schemas/product';
+import { productForm, productRulesForm, varietyForm } from '$lib/schemas/product';
 import { readSpecForm } from '$lib/schemas/spec-form';
 import { startingValues } from '$lib/schemas/spec-form-starting';
 import { specFormValues, type SpecFormValues } from '$lib/schemas/spec-form-values';
@@ -13,7 +13,8 @@ import { componentsAsked } from '$lib/server/accounts/check-signing-components';
 import { may } from '$lib/server/policies';
 import { listFamilies } from '$lib/server/products/list-products';
 import { addVariety, saveProduct, switchProduct } from '$lib/server/products/save-product';
-import { contextOf, issuesOf, orError, orFail, parseForm } from '$lib/server/request';
+import { saveProductRules } from '$lib/server/products/save-rules';
+import { contextOf, issuesOf, nestedOf, orError, orFail, parseForm } from '$lib/server/request';
 import { getCurrentSite, siteCookie } from '$lib/server/sites/current-site';
 import { discardDraft } from '$lib/server/specs/discard-draft';
 import { getSpecSheet } from '$lib/server/specs/get-spec-sheet';
@@ -133,6 +134,22 @@ export const actions = {
 			await saveProduct(ctx, params.product, form.data);
 		} catch (e) {
 			return orFail(e, { act: 'product', ...form.data });
+		}
+
+		redirect(303, sheetOf(url));
+	},
+
+	rules: async ({ locals, request, params, url }) => {
+		const ctx = contextOf(locals);
+
+		const sent = request.clone();
+		const form = await parseForm(request, productRulesForm);
+		if (!form.ok) return fail(422, { act: 'rules', values: form.values, issues: form.issues });
+
+		try {
+			await saveProductRules(ctx, params.product, form.data);
+		} catch (e) {
+			return orFail(e, { act: 'rules', ...nestedOf(await sent.formData()) });
 		}
 
 		redirect(303, sheetOf(url));
