@@ -45,22 +45,37 @@ interface Fit {
 	readonly texts: number;
 }
 
+/** Rows with a moment and no figure that are like those with one: no more words than they have. */
+function silentAmong({
+	timed,
+	silent,
+	texts
+}: {
+	timed: number;
+	silent: readonly number[];
+	texts: number;
+}): number {
+	return timed === 0 ? 0 : silent.filter((own) => own <= texts / timed).length;
+}
+
 function fitOf(lines: readonly string[], delimiter: Delimiter): Fit {
-	const groups = new Map<number, { timed: number; plain: number; texts: number }>();
+	const groups = new Map<number, { timed: number; plain: number; silent: number[]; texts: number }>();
 	for (const line of lines) {
 		const cells = splitRow(line, delimiter);
 		if (cells.length < 2) continue;
 		const shape = shapeOf(cells);
-		const group = groups.get(cells.length) ?? { timed: 0, plain: 0, texts: 0 };
+		const group = groups.get(cells.length) ?? { timed: 0, plain: 0, silent: [], texts: 0 };
 		if (shape.hasMoment && shape.values > 0) group.timed++;
 		else if (shape.values > 0 && shape.texts === 0 && !shape.hasMoment) group.plain++;
+		else if (shape.hasMoment) group.silent.push(shape.texts);
 		else continue;
-		group.texts += shape.texts;
+		if (shape.values > 0) group.texts += shape.texts;
 		groups.set(cells.length, group);
 	}
 	let best: Fit = { delimiter, score: 0, texts: 0 };
 	for (const group of groups.values()) {
-		const score = group.timed + group.plain * 0.4;
+		// A moment without a figure is a row like the others where others of its width have one.
+		const score = group.timed + silentAmong(group) + group.plain * 0.4;
 		if (score > best.score) best = { delimiter, score, texts: group.texts / (group.timed + group.plain) };
 	}
 	return best;

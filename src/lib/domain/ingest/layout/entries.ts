@@ -8,8 +8,10 @@ const commaPair = /^\s*([^,]{1,60}?)\s*,\s*([^,]*?\d[^,]*?)\s*$/;
 /** Reads one line outside the readings as key and value; null when it is neither. */
 export function entryOf(line: string, cells: readonly string[], lineNumber: number): Entry | null {
 	const filled = cells.map((cell) => cell.trim()).filter((cell) => cell !== '');
+	const isWords = /^[^;,|\t]*$/.test(line) && /^\s*\S+(?: \S+)*?:\s/.test(line);
 	if (
 		filled.length >= 2 &&
+		!isWords &&
 		!(filled[0] ?? '')
 			.replace(/h{1,2}:m{2}(?::s{2})?/gi, '')
 			.slice(0, -1)

@@ -52,6 +52,16 @@ function runsOn(times: Float64Array): boolean {
 	return true;
 }
 
+/** Whether rows follow each other at their usual step, more or less; those that were shuffled do not. */
+function isSteady({ times, usualMs }: Run): boolean {
+	let steady = 0;
+	for (let i = 1; i < times.length; i++) {
+		const step = (times[i] ?? 0) - (times[i - 1] ?? 0);
+		if (Math.abs(step - usualMs) <= usualMs / 10) steady++;
+	}
+	return steady * 2 >= times.length - 1;
+}
+
 /** Places in a run of rows whose date slipped: far from the row before, which the row after them continues. */
 function slipsIn({ times, usualMs }: Run): Set<number> {
 	const slips = new Set<number>();
@@ -126,7 +136,7 @@ export function settleClock(axis: TimeAxis, gathered: Gathered, context: ReadCon
 	const jumps = oddityOf('clock-jump', lines, slipped.length > 0 ? String(slipped.length) : null);
 	const base: TimeAxis = { ...axis, ms, setAside: new Set(slipped), oddities: told(axis, [jumps]) };
 	const blocks = blocksOf(clean);
-	const isShuffled = blocks.length - 1 > Math.max(mostRestarts, clean.rows.length / 50);
+	const isShuffled = blocks.length - 1 > Math.max(mostRestarts, clean.rows.length / 50) || !isSteady(clean);
 	if (blocks.length < 2 || isShuffled || isOneRecording(clean, blocks, gathered)) return base;
 	return restarted(base, clean, blocks, context, lineOf);
 }

@@ -103,13 +103,17 @@ const msPerYear = 365 * msPerDay;
 /** A load read years after it travelled is out of the question where the other order says this year. */
 const recentYears = 1;
 const staleYears = 3;
+/** Nor is one of a decade ago where the other order says a few years. */
+const fairlyRecentYears = 5;
+const ancientYears = 10;
 
 function byUpload(spans: readonly Span[], context: ReadContext): readonly Span[] {
 	const past = spans.filter(({ toMs }) => toMs - msPerDay <= context.uploadedMs + msPerDay);
 	const left = past.length > 0 ? past : spans;
 	const ageYears = ({ toMs }: Span): number => (context.uploadedMs - toMs) / msPerYear;
-	const isRecent = left.some((span) => Math.abs(ageYears(span)) < recentYears);
-	return isRecent ? left.filter((span) => ageYears(span) < staleYears) : left;
+	const isWithin = (years: number): boolean => left.some((span) => Math.abs(ageYears(span)) < years);
+	if (isWithin(recentYears)) return left.filter((span) => ageYears(span) < staleYears);
+	return isWithin(fairlyRecentYears) ? left.filter((span) => ageYears(span) < ancientYears) : left;
 }
 
 /** Settles day and month by the evidence in the agreed order; what stays open is for a question. */

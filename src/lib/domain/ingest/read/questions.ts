@@ -124,7 +124,7 @@ function isPlausible(values: GatheredValues, count: number, unit: TemperatureUni
 		all++;
 		if (celsius >= plausibleCelsius.low && celsius <= plausibleCelsius.high) inside++;
 	}
-	return inside > all * 0.9;
+	return inside > all * 0.7;
 }
 
 /** °C or °F (kelvin only where the figures are that high): asked, because a plausible guess is still a guess. */
