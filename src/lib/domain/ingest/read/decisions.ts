@@ -1,4 +1,5 @@
 import type { Decision, ReadContext } from '../ingestion';
+import { noOffset } from '../times/stamp';
 import { nameOf } from './all-channels';
 import type { Readable } from './readable';
 
@@ -22,7 +23,7 @@ function writing({ table, encoding }: Readable, decimalComma: boolean): Decision
 
 function zone({ axis, timing, gathered }: Readable): Decision {
 	const { zone: value, by } = axis.zone;
-	const isOffset = gathered.count > 0 && gathered.times.hasDate[0] === 1 && /^[+-]/.test(value);
+	const isOffset = gathered.count > 0 && gathered.times.offsetMinutes[0] !== noOffset;
 	const because = by !== 'file' ? by : timing.kind === 'epoch' ? 'epoch' : isOffset ? 'offset' : 'zone-named';
 	return { field: 'zone', value, because, detail: null };
 }
