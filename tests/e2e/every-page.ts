@@ -59,6 +59,7 @@ export const places: readonly Place[] = [
 	{ name: 'a claim', as: 'claims', path: ({ claim }) => claim },
 	{ name: 'specs', as: 'admin', path: '/specs' },
 	{ name: 'a spec', as: 'admin', path: ({ product }) => product },
+	{ name: 'a version tried on past loads', as: 'admin', path: ({ product }) => `${product}/try?version=1` },
 	{ name: 'a new product', as: 'admin', path: '/specs/new' },
 	{ name: 'the library of starting specs', as: 'admin', path: '/specs/library' },
 	{ name: 'a starting spec', as: 'admin', path: '/specs/library/broccoli-frozen' },

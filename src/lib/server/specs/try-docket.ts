@@ -19,24 +19,48 @@ interface Stored {
 	figures: StoredFigures;
 }
 
+/** What a batch of dockets is judged again with, loaded once for all of them. */
+export interface TrialBatch {
+	lineIds: ReadonlySet<string>;
+	draft: SignedSpec;
+	now: Date;
+	/** Current assessments and recommendations of every docket of the batch. */
+	rows: readonly AssessmentRow[];
+	recommendations: readonly LineRecommendation[];
+	/** Versions that assessments pinned, by id. */
+	pinned: ReadonlyMap<string, SignedSpec>;
+}
+
+/** Loads what the dockets of a batch have in common, or would each ask for alone. */
+export async function loadTrialBatch(
+	shipmentIds: string[],
+	given: Pick<TrialBatch, 'lineIds' | 'draft' | 'now'>
+): Promise<TrialBatch> {
+	const where = { shipmentId: shipmentIds };
+	const rows = await AssessmentRow.findAll({ where: { ...where, isCurrent: true } });
+	const recommendations = await LineRecommendation.findAll({ where });
+	const pinned = new Map<string, SignedSpec>();
+	for (const id of new Set(rows.map(({ specVersionId }) => specVersionId))) {
+		const spec = await findSpecVersion(id);
+		if (spec) pinned.set(id, spec);
+	}
+	return { ...given, rows, recommendations, pinned };
+}
+
 /** Judges the asked lines of one docket again with a version, from what their stored assessments rest on. */
 export async function tryDocket(
 	shipment: Shipment,
-	lineIds: ReadonlySet<string>,
-	draft: SignedSpec,
-	now: Date
+	batch: TrialBatch
 ): Promise<Pick<Trial, 'tried' | 'untold' | 'differing'>> {
+	const { lineIds, draft, now, rows, recommendations } = batch;
 	const evidence = await loadEvidence(shipment);
-	const where = { shipmentId: shipment.id };
-	const rows = await AssessmentRow.findAll({ where: { ...where, isCurrent: true } });
-	const recommendations = await LineRecommendation.findAll({ where });
 	const result: Pick<Trial, 'tried' | 'untold' | 'differing'> = { tried: 0, untold: 0, differing: [] };
 	for (const line of evidence.lines.filter(({ id }) => lineIds.has(id))) {
 		const stored = rows
 			.filter(({ lineId }) => lineId === line.id)
 			.map((row) => ({ row, figures: parseFigures(row.figures) }));
 		const recommended = recommendations.find(({ lineId }) => lineId === line.id)?.recommended;
-		const old = await specOfLine(line, stored, shipment, now);
+		const old = await specOfLine(line, stored, shipment, batch);
 		const isWhole = stored.every(({ row }) => evidence.traces.some(({ id }) => id === row.traceId));
 		if (!recommended || !old || !isWhole) {
 			result.untold += 1;
@@ -60,7 +84,10 @@ interface Bench {
 /** The line if the version changes what is recommended; null if it does not. */
 async function tryLine(line: ShipmentLine, stored: Stored[], bench: Bench): Promise<TriedLine | null> {
 	const { evidence, old, draft, now, recommended } = bench;
-	const lastOn = await findLastBestBefore(line, evidence.shipment, now);
+	const isDated = evidence.products.some(
+		({ id, isNotOlderThanLast }) => id === line.productId && isNotOlderThanLast
+	);
+	const lastOn = isDated ? await findLastBestBefore(line, evidence.shipment, now) : null;
 	const judge = (spec: SignedSpec) => judged(line, again(line, stored, spec, evidence), spec, bench, lastOn);
 	const judgement = judge(draft);
 	if (judgement.recommended === recommended) return null;
@@ -114,10 +141,7 @@ function judged(
 	{ evidence, now }: Bench,
 	lastOn: string | null
 ): Judgement {
-	const isDated = evidence.products.some(
-		({ id, isNotOlderThanLast }) => id === line.productId && isNotOlderThanLast
-	);
-	const found = lineEvidence(line, spec, assessed, evidence, now, isDated ? lastOn : null);
+	const found = lineEvidence(line, spec, assessed, evidence, now, lastOn);
 	return {
 		recommended: recommend(found).recommended,
 		remainingHours: governingOf(assessed)?.assessment.remainingHours ?? null,
@@ -131,8 +155,8 @@ async function specOfLine(
 	line: ShipmentLine,
 	stored: readonly Stored[],
 	shipment: Shipment,
-	now: Date
+	{ pinned, now }: TrialBatch
 ): Promise<SignedSpec | null> {
-	const pinned = stored[0]?.row.specVersionId;
-	return pinned ? findSpecVersion(pinned) : findSpecInForce(line, shipment.arrivedAt ?? now);
+	const id = stored[0]?.row.specVersionId;
+	return id ? (pinned.get(id) ?? null) : findSpecInForce(line, shipment.arrivedAt ?? now);
 }

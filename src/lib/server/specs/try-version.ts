@@ -8,7 +8,7 @@ import { database } from '../db/sequelize';
 import { authorize } from '../policies';
 import { Refusal } from '../refusals';
 import { figuresFrom } from './figures';
-import { tryDocket } from './try-docket';
+import { loadTrialBatch, tryDocket } from './try-docket';
 
 /** What a line came to: life left where a trace told, and what was recommended. */
 export interface Judgement {
@@ -45,7 +45,7 @@ export interface Trial {
 /** As many lines as one trial looks back at. */
 export const mostTried = 300;
 /** Dockets whose traces are in memory at once. */
-const batchDockets = 20;
+const batchDockets = 15;
 
 /**
  * Judges past loads of a product, or of a variety, again with a version that is not in force yet, by the evidence that
@@ -72,9 +72,11 @@ export async function tryVersion(ctx: Context, productId: string, specVersionId:
 		differing: []
 	};
 	for (let at = 0; at < shipmentIds.length; at += batchDockets) {
-		const shipments = await Shipment.findAll({ where: { id: shipmentIds.slice(at, at + batchDockets) } });
-		for (const shipment of shipments) {
-			const { tried, untold, differing } = await tryDocket(shipment, lineIds, draft, ctx.now);
+		const ids = shipmentIds.slice(at, at + batchDockets);
+		const shipments = await Shipment.findAll({ where: { id: ids } });
+		const batch = await loadTrialBatch(ids, { lineIds, draft, now: ctx.now });
+		const found = await Promise.all(shipments.map((shipment) => tryDocket(shipment, batch)));
+		for (const { tried, untold, differing } of found) {
 			trial.tried += tried;
 			trial.untold += untold;
 			trial.differing.push(...differing);
