@@ -4,7 +4,7 @@ import { resolve } from 'node:path';
 import { parseArgs } from 'node:util';
 import { maxFileBytes } from '../lib/domain/ingest/bounds';
 import { inspectAnswers } from '../lib/schemas/inspect';
-import { inspectExport, refusedAnswer } from '../lib/server/reads/inspect-export';
+import { inspect, refusedAnswer } from '../lib/server/reads/inspect-export';
 
 const usage = `Say which file: npm run inspect -- <file> [--zone Europe/Amsterdam] [--date-order DMY|MDY|YMD]
   [--unit Cel|[degF]|K] [--column <head>] [--start <instant>] [--interval-seconds <n>] [--part first|second|before|joined]`;
@@ -64,13 +64,14 @@ try {
 } catch (error) {
 	endWith(`${path} cannot be read: ${error instanceof Error ? error.message : String(error)}`);
 }
-const answer =
+const { answer, faults } =
 	bytes > maxFileBytes
-		? refusedAnswer({ code: 'too-large', line: null, found: String(bytes) })
-		: inspectExport({
+		? { answer: refusedAnswer({ code: 'too-large', line: null, found: String(bytes) }), faults: {} }
+		: inspect({
 				bytes: readFileSync(path),
 				answers: answers.data,
 				siteZone: null,
 				nowMs: Date.now()
 			});
+if (Object.keys(faults).length > 0) endWith(Object.values(faults).join('\n'));
 process.stdout.write(`${JSON.stringify(answer, null, '\t')}\n`);

@@ -42,7 +42,7 @@ function mixed(n: number): number {
 	return (h ^ (h >>> 13)) >>> 0;
 }
 
-const runs = { numRuns: 150 };
+const runs = { numRuns: 300 };
 
 describe('any trace in any layout', () => {
 	it('is read back the same, or leads to questions whose right answers do', () => {

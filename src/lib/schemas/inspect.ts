@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { parts, type Answers } from '../domain/ingest/ingestion';
-import { fixedOffsetOf } from '../domain/ingest/times/zone';
+import { isZone } from '../domain/ingest/times/zone';
 import type { TemperatureUnit } from '../domain/units';
 
 /** Names of the units in answers and results. Source: UCUM, case-sensitive codes. */
@@ -20,16 +20,6 @@ export const answerFields = [
 	'part'
 ] as const;
 export type AnswerField = (typeof answerFields)[number];
-
-function isZone(text: string): boolean {
-	if (fixedOffsetOf(text) !== null) return true;
-	try {
-		new Intl.DateTimeFormat('en', { timeZone: text });
-		return true;
-	} catch {
-		return false;
-	}
-}
 
 const longestIntervalSeconds = 31 * 86_400;
 

@@ -110,6 +110,8 @@ export interface Oddity {
 		| 'twin-disagrees'
 		/** A reading before the start that the file itself states. */
 		| 'before-start'
+		/** An answer that the file has no use for; its fields are the detail. */
+		| 'answer-unused'
 		/** The clock leaps ahead, or slips for a row or three (their number is the detail; they are set aside). */
 		| 'clock-jump'
 		/** The clock was put back: later rows are left out (`before`) or moved to follow (`joined`). */

@@ -122,6 +122,7 @@ const oddities: Readonly<Record<Oddity['code'], Say>> = {
 		'reading is earlier than the start the file states',
 		'readings are earlier than the start the file states'
 	),
+	'answer-unused': (_count, detail) => `The file has no use for what was answered: ${detail}`,
 	'clock-jump': (count, detail, isOne) =>
 		detail === ''
 			? `The clock leaps ahead ${isOne ? 'once' : `${count} times`}`

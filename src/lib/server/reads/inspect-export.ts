@@ -9,6 +9,7 @@ import {
 	type InspectChannel,
 	type InspectChoice
 } from '../../schemas/inspect';
+import { answerFaults } from './answer-faults';
 import { answerValue, questionFields } from './inspect-answers';
 import { inspectRefusal } from './inspect-refusals';
 
@@ -33,16 +34,29 @@ const nothing: InspectAnswer = {
 	channels: []
 };
 
+/** What was found, and what is wrong with the answers that were given: field → sentence. */
+export interface Inspection {
+	answer: InspectAnswer;
+	faults: Record<string, string>;
+}
+
 /** Reads an export and tells what was found, as other programs are told; nothing is kept. */
-export function inspectExport({ bytes, answers, siteZone, nowMs }: InspectOrder): InspectAnswer {
-	const ingestion = readExport(bytes, {
-		uploadedMs: nowMs,
-		siteZone: siteZone ?? zoneWithoutSite,
-		journeyFromMs: null,
-		journeyToMs: null,
-		answers
-	});
-	return answerOf(ingestion);
+export function inspect({ bytes, answers, siteZone, nowMs }: InspectOrder): Inspection {
+	const read = (given: Answers): Ingestion =>
+		readExport(bytes, {
+			uploadedMs: nowMs,
+			siteZone: siteZone ?? zoneWithoutSite,
+			journeyFromMs: null,
+			journeyToMs: null,
+			answers: given
+		});
+	const ingestion = read(answers);
+	return { answer: answerOf(ingestion), faults: answerFaults(answers, ingestion, read) };
+}
+
+/** The same without a word about the answers. */
+export function inspectExport(order: InspectOrder): InspectAnswer {
+	return inspect(order).answer;
 }
 
 function answerOf(ingestion: Ingestion): InspectAnswer {

@@ -55,10 +55,12 @@ async function inspectSpooled(ctx: Context, { files, fields }: Spooled): Promise
 	if (!file || !answers.success) throw new Refusal('invalid');
 	if (file.isTooLarge) return tooLarge;
 	const [site] = await listOwnSites(ctx);
-	return runInspector({
+	const { answer, faults } = await runInspector({
 		path: file.path,
 		answers: answers.data,
 		siteZone: site?.zone ?? null,
 		nowMs: ctx.now.getTime()
 	});
+	refuseFaults(faults);
+	return answer;
 }

@@ -2,7 +2,7 @@ import { stat } from 'node:fs/promises';
 import { join } from 'node:path';
 import { Worker } from 'node:worker_threads';
 import { Refusal } from '../refusals';
-import type { InspectAnswer } from '../../schemas/inspect';
+import type { Inspection } from './inspect-export';
 import { inspectFile, type InspectFileOrder } from './inspect-file';
 import { turnsOf } from './reading-turns';
 import { answerCompute, type ComputeOutcome } from '../specs/answer-compute';
@@ -42,8 +42,8 @@ export async function runReader(
 export async function runInspector(
 	order: InspectFileOrder,
 	program = builtProgram('inspect-worker.js')
-): Promise<InspectAnswer> {
-	return program === null ? inspectFile(order) : queued<InspectAnswer>(order, program);
+): Promise<Inspection> {
+	return program === null ? inspectFile(order) : queued<Inspection>(order, program);
 }
 
 /** Answers a large question about shelf life, as JSON text, in a thread likewise. */

@@ -1,4 +1,4 @@
-import type { Decision, ReadContext } from '../ingestion';
+import type { Decision, DecisionField, ReadContext } from '../ingestion';
 import { noOffset } from '../times/stamp';
 import { nameOf } from './all-channels';
 import type { Readable } from './readable';
@@ -43,8 +43,8 @@ function unit({ unit: value, column, values, stated, table }: Readable, isAnswer
 	return { field: 'unit', value, because, detail: null };
 }
 
-function column({ column: chosen, picked }: Readable, isAnswered: boolean): Decision {
-	const because = isAnswered
+function column({ column: chosen, picked }: Readable): Decision {
+	const because = picked.isAnswered
 		? 'answer'
 		: chosen.meaning.statistic === 'mean'
 			? 'mean'
@@ -71,13 +71,29 @@ function running({ timing, stated, declared }: Readable, answers: Answered): Dec
 
 type Answered = ReadContext['answers'];
 
+/** Answers that nothing was asked about: the file settles it, or has nothing of the kind. */
+export function unusedAnswers(decisions: readonly Decision[], { answers }: ReadContext): DecisionField[] {
+	const given: readonly (readonly [DecisionField, unknown])[] = [
+		['dateOrder', answers.dateOrder],
+		['zone', answers.zone],
+		['unit', answers.unit],
+		['column', answers.temperatureColumn],
+		['start', answers.startMs],
+		['intervalSeconds', answers.intervalSeconds],
+		['part', answers.part]
+	];
+	const isUsed = (field: DecisionField): boolean =>
+		decisions.some((decision) => decision.field === field && decision.because === 'answer');
+	return given.flatMap(([field, answer]) => (answer === undefined || isUsed(field) ? [] : [field]));
+}
+
 /** Everything that was decided about a file, with what decided it. */
 export function decisionsOf(readable: Readable, decimalComma: boolean, { answers }: ReadContext): Decision[] {
 	const { axis, table } = readable;
 	const made = [...writing(readable, decimalComma), ...(table.decisions ?? [])];
 	if (axis.order !== null && axis.orderBy !== null && !isStandard(table))
 		made.push({ field: 'dateOrder', value: axis.order, because: axis.orderBy, detail: null });
-	made.push(zone(readable), column(readable, answers.temperatureColumn !== undefined));
+	made.push(zone(readable), column(readable));
 	made.push(unit(readable, answers.unit !== undefined), ...running(readable, answers));
 	return [...made, ...(axis.decisions ?? [])];
 }

@@ -116,6 +116,13 @@ function byUpload(spans: readonly Span[], context: ReadContext): readonly Span[]
 	return isWithin(fairlyRecentYears) ? left.filter((span) => ageYears(span) < ancientYears) : left;
 }
 
+/** Whether two orders read every day the same: 05/05 is one day in both. */
+function areSame(days: readonly OpenDay[], one: DateOrder | undefined, other: DateOrder): boolean {
+	return (
+		one !== undefined && days.every(({ a, b, c }) => dayInOrder(a, b, c, one) === dayInOrder(a, b, c, other))
+	);
+}
+
 /** Settles day and month by the evidence in the agreed order; what stays open is for a question. */
 export function decideOrder(days: readonly OpenDay[], stated: Stated, context: ReadContext): DecidedOrder {
 	const why =
@@ -127,9 +134,11 @@ export function decideOrder(days: readonly OpenDay[], stated: Stated, context: R
 		why
 	});
 	if (days.length === 0) return settled(null, null);
-	const answered = context.answers.dateOrder;
-	if (answered !== undefined) return settled(answered, 'answer');
 	const inside = orderFromDays(days);
+	const answered = context.answers.dateOrder;
+	// An order in which the file's days do not exist is no answer to it.
+	const isPossible = inside.by !== 'day-over-12' || (answered && areSame(days, inside.possible[0], answered));
+	if (answered !== undefined && isPossible) return settled(answered, 'answer');
 	const [only] = inside.possible;
 	if (inside.by !== null && only !== undefined) return settled(only, inside.by);
 	const steps: readonly [OrderBy, (left: readonly DateOrder[]) => readonly DateOrder[]][] = [

@@ -7,6 +7,8 @@ import type { TemperatureUnit } from '../../units';
 /** Columns that may be the temperature to assess, and those kept beside it. */
 export interface Picked {
 	readonly candidates: readonly Column[];
+	/** The one candidate is what an answer names. */
+	readonly isAnswered: boolean;
 	/** The same sensor in the other unit: checked against the chosen one; among the others too. */
 	readonly twins: readonly Column[];
 	/** All other measurements, temperatures that are not chosen among them: kept as channels. */
@@ -102,15 +104,16 @@ export function pickTemperature(
 		measured.filter((column) => !chosen.includes(column) && (quantityOf(column) !== null || isOther(column)));
 	const named = measured.filter((column) => quantityOf(column) === 'temperature');
 	const answered = answeredColumn(measured, answers.temperatureColumn);
-	if (answered !== undefined) return { candidates: [answered], twins: [], others: besides([answered]) };
+	if (answered !== undefined)
+		return { candidates: [answered], isAnswered: true, twins: [], others: besides([answered]) };
 	if (named.length > 0) {
 		const { chosen, twins } = splitTwins(withoutExtremes(named));
-		return { candidates: chosen, twins, others: besides(chosen) };
+		return { candidates: chosen, isAnswered: false, twins, others: besides(chosen) };
 	}
 	// A column without any explaining word: a counter is no temperature unless it is all there is.
 	const unnamed = measured.filter((column) => quantityOf(column) === null && !column.meaning.isTime);
 	const steady = unnamed.filter((column) => !column.isCounter);
 	const left = steady.length > 0 || stated === null ? steady : unnamed;
 	const candidates = withoutExtremes(left);
-	return { candidates, twins: [], others: besides(candidates) };
+	return { candidates, isAnswered: false, twins: [], others: besides(candidates) };
 }

@@ -78,5 +78,7 @@ export function judgeDates(axis: TimeAxis, timing: Timing, stated: Stated, conte
 		'options' in judged ? judged : isUnset ? openBeginning('clock-never-set', axis.ms, context, []) : null;
 	const { startMs } = context.answers;
 	if (asked === null || startMs === undefined) return asked ?? judged;
-	return { ...axis, ms: startingAt(axis.ms, startMs) };
+	const value = new Date(startMs).toISOString();
+	const decision = { field: 'start', value, because: 'answer', detail: null } as const;
+	return { ...axis, ms: startingAt(axis.ms, startMs), decisions: [...(axis.decisions ?? []), decision] };
 }

@@ -115,5 +115,11 @@ export function settleMonths(
 	const answered = options.find(({ option }) => option.answer.startMs === startMs);
 	return answered === undefined
 		? { code: 'start', why: 'two-languages', options: options.map(({ option }) => option) }
-		: settled(answered.reading, 'answer');
+		: {
+				gathered: answered.reading.gathered,
+				decisions: [
+					{ field: 'time', value: answered.reading.name, because: 'answer', detail: null },
+					{ field: 'start', value: new Date(startMs ?? 0).toISOString(), because: 'answer', detail: null }
+				]
+			};
 }

@@ -1,11 +1,12 @@
-import type { Declared, Ingestion, Layout, Oddity, ReadContext } from '../ingestion';
+import type { Decision, Declared, Ingestion, Layout, Oddity, ReadContext } from '../ingestion';
 import { layoutFingerprint } from '../layout/fingerprint';
 import type { Stated } from '../layout/preamble';
 import { columnsOf } from '../layout/timing';
 import { channelsOf } from './all-channels';
-import { decisionsOf } from './decisions';
+import { decisionsOf, unusedAnswers } from './decisions';
 import { proposeClock } from './clock-proposal';
 import { exampleRows } from './example-rows';
+import type { Gathered } from './gathered';
 import { momentMs } from './instants';
 import { intervalsOf } from './intervals';
 import { oddityOf, rowOddities, seriesOddities } from './oddities';
@@ -93,6 +94,13 @@ function merged(oddities: readonly Oddity[]): Oddity[] {
 	return [...byCode.values()];
 }
 
+/** Answers without a use are told at the first reading. A part is settled outside the table. */
+function notUsed(decisions: readonly Decision[], { lines }: Gathered, context: ReadContext): Oddity[] {
+	const fields = unusedAnswers(decisions, context).filter((field) => field !== 'part');
+	const told = oddityOf('answer-unused', fields.length > 0 ? [lines[0] ?? 0] : [], fields.join(', '));
+	return told === null ? [] : [told];
+}
+
 /** From settled columns, times and unit to the understanding that is shown and kept. */
 export function understand(readable: Readable, context: ReadContext): Ingestion {
 	const { table, timing, gathered, axis, column, values, unit, declared } = readable;
@@ -111,11 +119,12 @@ export function understand(readable: Readable, context: ReadContext): Ingestion 
 	const [timeColumn] = columnsOf(timing);
 	const subjectOf = (row: number): string =>
 		timeColumn === undefined ? '' : (table.cells(row)[timeColumn] ?? '').trim();
+	const decisions = decisionsOf(readable, layout.decimalComma, context);
 	return {
 		kind: 'ok',
 		understanding: {
 			layout,
-			decisions: decisionsOf(readable, layout.decimalComma, context),
+			decisions,
 			declared,
 			channels: channelsOf(readable, series),
 			temperature: 0,
@@ -132,6 +141,7 @@ export function understand(readable: Readable, context: ReadContext): Ingestion 
 				...seriesOddities(series, intervals, context),
 				...twinOddities(readable),
 				...axisOddities(readable, series),
+				...notUsed(decisions, gathered, context),
 				...(table.oddities ?? []),
 				...(axis.oddities ?? [])
 			]),

@@ -1,6 +1,6 @@
 import { IANAZone } from 'luxon';
 import { spelledZone } from './spelled-zones';
-import { offsetOfWord } from './zone-words';
+import { offsetOfWord, zoneMeanings } from './zone-words';
 
 /** Offset text such as `+02:00` of minutes east of UTC. */
 export function offsetText(minutes: number): string {
@@ -85,6 +85,6 @@ export function offsetAtOf(zone: string): OffsetAt {
 
 /** Whether a text is a fixed offset or an IANA zone that this engine knows. */
 export function isZone(text: string): boolean {
-	// Engines also know bare letters such as IST, each in one of their meanings: those are not a zone by themselves.
-	return fixedOffsetOf(text) !== null || (text.includes('/') && IANAZone.isValidZone(text));
+	// Engines also know letters such as IST, each in one of their meanings: those are not a zone by themselves.
+	return fixedOffsetOf(text) !== null || (zoneMeanings(text).length === 0 && IANAZone.isValidZone(text));
 }
