@@ -1,5 +1,6 @@
 import type { SeriesView } from './schemas/docket';
 import type { LineView } from './schemas/file-lines';
+import type { TraceBasis, TraceLinesView } from './schemas/trace-basis';
 
 /** An answer of our own API that is not the data asked for: its sentence is fit to be shown. */
 export class ApiRefusal extends Error {
@@ -41,4 +42,14 @@ export async function fetchSeries(
 export async function fetchReadingLine(traceId: string, atMs: number): Promise<LineView> {
 	const query = new URLSearchParams({ at: new Date(atMs).toISOString() });
 	return answerOf(await fetch(`/api/v1/traces/${traceId}/line?${query}`));
+}
+
+/** A trace with every reading, and what it was assessed from. */
+export async function fetchTraceBasis(traceId: string): Promise<TraceBasis> {
+	return answerOf(await fetch(`/api/v1/traces/${traceId}/basis`));
+}
+
+/** The line of the export that each reading of a trace was made of. */
+export async function fetchTraceLines(traceId: string): Promise<TraceLinesView> {
+	return answerOf(await fetch(`/api/v1/traces/${traceId}/lines`));
 }

@@ -113,6 +113,18 @@ const readings: { route: string; path: () => string; opensTo: readonly Who[]; ty
 		type: 'text/csv'
 	},
 	{
+		route: 'traces/{trace}/basis',
+		path: () => `/api/v1/traces/${load.traceId}/basis`,
+		opensTo: ['dock', 'qa', 'claims', 'admin'],
+		type: 'application/json'
+	},
+	{
+		route: 'traces/{trace}/lines',
+		path: () => `/api/v1/traces/${load.traceId}/lines`,
+		opensTo: ['dock', 'qa', 'claims', 'admin'],
+		type: 'application/json'
+	},
+	{
 		route: 'photos/{photo}',
 		path: () => `/api/v1/photos/${load.photoId}`,
 		opensTo: ['dock', 'qa', 'claims', 'admin', 'supplier'],

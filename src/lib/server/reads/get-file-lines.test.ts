@@ -3,8 +3,10 @@ import { buildShipment, buildSite, buildUser, contextFor } from '../../../../tes
 import { multipart } from '../../../../tests/helpers/upload';
 import { useTestDatabase } from '../../../../tests/helpers/test-database';
 import type { Context } from '../context';
+import { linesOfRuns } from '../../domain/ingest/line-runs';
 import { TraceRow } from '../db/models/trace-row';
 import { getFileLines, getReadingLine } from './get-file-lines';
+import { getTraceLines } from './get-trace-lines';
 import { keepRead } from './keep-read';
 import { receiveUpload } from './receive-upload';
 
@@ -64,6 +66,28 @@ describe('the original text of a reading', () => {
 		const { lines, clockShiftMs } = await getFileLines(dock, readId, 202);
 		expect(clockShiftMs).toBe(-3_600_000);
 		expect(lines[0]).toMatchObject({ line: 202, atMs: Date.UTC(2026, 2, 30, 5, 20) });
+	});
+
+	it('is numbered for all readings at once, in order of time, for staff of the site alone', async () => {
+		const { dock, outside, stranger, shipment } = await scene();
+		// The third reading from the end stands twice: the repeat on line 7 is dropped.
+		const rowsTwice = [...rows.slice(0, 3), rows[2], ...rows.slice(3)];
+		const readId = await upload(dock, shipment.number, [...header, ...rowsTwice, ''].join('\n'));
+		await keepRead(dock, readId, { ...serial, serial: 'WH-TEXT-3' });
+		const trace = await TraceRow.findOne({ where: { readId } });
+		const id = trace?.id ?? '';
+		const { fileName, runs } = await getTraceLines(dock, id);
+		expect(fileName).toBe('trip.csv');
+		const numbers = [...linesOfRuns(runs)];
+		expect(numbers).toHaveLength(trace?.readings ?? 0);
+		expect(numbers.slice(0, 2)).toEqual([204, 203]);
+		expect(numbers.slice(-2)).toEqual([5, 4]);
+		expect(numbers.filter((line) => line === 6 || line === 7)).toHaveLength(1);
+		await expect(getTraceLines(outside, id)).rejects.toMatchObject({ code: 'not-allowed' });
+		await expect(getTraceLines(stranger, id)).rejects.toMatchObject({ code: 'not-found' });
+
+		await trace?.update({ readings: 7 });
+		expect((await getTraceLines(dock, id)).runs).toEqual([]);
 	});
 
 	it('stands beside what was read of it, a page at a time', async () => {
