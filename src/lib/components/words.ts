@@ -43,7 +43,14 @@ export const words = {
 	limits: { upper: 'upper', lower: 'lower', freezing: 'freezing', ceiling: 'ceiling' },
 	wholeTrip: 'Show the whole trip',
 	chartKeys:
-		'Arrow keys step a reading, with Shift a leg; plus and minus zoom, Escape shows the whole trip. The tables below carry the same facts.',
+		'Arrow keys step a reading, with Shift a leg; Home and End go to the first and the last. Plus and minus zoom, Escape shows the whole trip; so does the wheel with Ctrl, with Shift it moves along, and so do two fingers. The tables below carry the same facts.',
+	itsRow: 'Show its row',
+	shown: 'Shown:',
+	zoom: 'What of the trace is shown',
+	zoomIn: 'Zoom in',
+	zoomOut: 'Zoom out',
+	earlier: 'Earlier',
+	later: 'Later',
 	key: {
 		'too-warm': 'too warm, solid',
 		'too-cold': 'too cold, hatched',

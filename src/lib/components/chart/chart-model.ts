@@ -3,6 +3,7 @@ import type { AssessmentView, SeriesView } from '../../schemas/docket';
 import type { TemperatureUnit } from '../../domain/units';
 import { inUnit } from '../../format';
 import type { Window } from './cursor';
+import { lineStyle, primaryStyle, type LineStyle } from './line-style';
 
 export interface LimitLine {
 	kind: 'upper' | 'lower' | 'freezing' | 'ceiling';
@@ -26,6 +27,7 @@ export interface ChartModel {
 	/** Times, then one column a trace, the governing one first; null breaks a line, undefined is no reading of that trace. */
 	traces: uPlot.AlignedData;
 	labels: string[];
+	styles: LineStyle[];
 	/** Times, life left, low, high. */
 	life: uPlot.AlignedData | null;
 	limits: LimitLine[];
@@ -41,7 +43,12 @@ export interface ChartModel {
 
 const dayHours = 24;
 
-function governingFirst(series: readonly SeriesView[]): SeriesView[] {
+/** A series with its place among the loggers of the load, by which its line is drawn; its place in the list otherwise. */
+export interface DrawnSeries extends SeriesView {
+	styleAt?: number;
+}
+
+function governingFirst(series: readonly DrawnSeries[]): DrawnSeries[] {
 	return [...series].sort((a, b) => Number(b.isGoverning) - Number(a.isGoverning));
 }
 
@@ -52,7 +59,7 @@ export function legLetter(at: number): string {
 }
 
 export function buildModel(
-	series: readonly SeriesView[],
+	series: readonly DrawnSeries[],
 	assessment: AssessmentView | null,
 	unit: TemperatureUnit
 ): ChartModel {
@@ -66,6 +73,7 @@ export function buildModel(
 	return {
 		traces,
 		labels: ordered.map((one) => one.label),
+		styles: ordered.map((one, at) => (at === 0 ? primaryStyle : lineStyle(one.styleAt ?? at))),
 		life: lifeTable(ordered[0]),
 		limits,
 		excursions: excursionsOf(assessment, unit),

@@ -50,7 +50,6 @@ function optionsOf(drawing: Drawing, parts: PanelParts): uPlot.Options {
 function temperaturePanel(drawing: Drawing): uPlot.Options {
 	const { model, palette, layout } = drawing;
 	const scale = temperatureScale(model);
-	const quiet = { stroke: palette.edge, width: 1, points: { show: false } };
 	return optionsOf(drawing, {
 		heightPx: layout.temperaturePx,
 		padding: [layout.topPx, layout.rightPx, layout.axisPx, layout.leftPx],
@@ -68,7 +67,12 @@ function temperaturePanel(drawing: Drawing): uPlot.Options {
 			drawCaps(pen, drawing);
 			drawTimeAxis(pen, drawing);
 		},
-		series: model.labels.map((_, at) => (at === 0 ? { ...quiet, stroke: palette.ink, width: 1.7 } : quiet))
+		series: model.styles.map(({ dash, widthPx, isInk }) => ({
+			stroke: isInk ? palette.ink : palette.edge,
+			width: widthPx,
+			dash: [...dash],
+			points: { show: false }
+		}))
 	});
 }
 

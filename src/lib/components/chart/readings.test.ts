@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { SeriesView } from '../../schemas/docket';
+import { pointsOf } from './points';
 import { readoutAt } from './readings';
 import { spanOf, wholeOf, worstIndex } from './trace-view';
 
@@ -17,11 +18,18 @@ const series: SeriesView = {
 	remainingHighHours: [295.2, null],
 	totalReadings: 2
 };
-const reader = { series, assessment: null, zone: 'Europe/Berlin', unit: 'celsius', locale: 'en' } as const;
+const points = pointsOf(series);
+const reader = {
+	label: 'L3',
+	assessment: null,
+	zone: 'Europe/Berlin',
+	unit: 'celsius',
+	locale: 'en'
+} as const;
 
 describe('the line above the chart', () => {
 	it('gives instant with its zone, reading and life with its range', () => {
-		expect(readoutAt({ ...reader, index: 0 })).toEqual([
+		expect(readoutAt({ ...reader, point: points.at(0) })).toEqual([
 			{ label: 'At the line', value: 'Thu 2 Apr 09:20 CEST' },
 			{ label: 'L3', value: '10.4 °C' },
 			{ label: 'Life left then', value: '12.1 d', aside: '11.7–12.3' }
@@ -29,11 +37,11 @@ describe('the line above the chart', () => {
 	});
 
 	it('follows the reader’s unit', () => {
-		expect(readoutAt({ ...reader, unit: 'fahrenheit', index: 0 })[1]?.value).toBe('50.7 °F');
+		expect(readoutAt({ ...reader, unit: 'fahrenheit', point: points.at(0) })[1]?.value).toBe('50.7 °F');
 	});
 
 	it('says that there is no reading in a gap', () => {
-		expect(readoutAt({ ...reader, index: 1 }).map((one) => one.value)).toEqual([
+		expect(readoutAt({ ...reader, point: points.at(1) }).map((one) => one.value)).toEqual([
 			'Thu 2 Apr 09:30 CEST',
 			'no reading'
 		]);
@@ -42,7 +50,7 @@ describe('the line above the chart', () => {
 
 describe('where the crosshair begins', () => {
 	it('is the last reading where nothing went wrong', () => {
-		expect(worstIndex(series, null)).toBe(1);
+		expect(worstIndex(series.times, null)).toBe(1);
 		expect(wholeOf([series], null)).toEqual({ fromMs: first, toMs: first + 600_000 });
 	});
 

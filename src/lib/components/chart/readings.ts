@@ -1,9 +1,10 @@
-import type { AssessmentView, SeriesView } from '../../schemas/docket';
+import type { AssessmentView } from '../../schemas/docket';
 import type { TemperatureUnit } from '../../domain/units';
 import { lifeDays, range, temperature, temperatureSign, temperatureSpan } from '../../format';
 import { day, dayTime, shortDay, time, zoneName } from '../../format-time';
 import { words } from '../words';
 import { legLetter } from './chart-model';
+import type { Point } from './points';
 
 export interface Readout {
 	label: string;
@@ -13,18 +14,18 @@ export interface Readout {
 }
 
 export interface ReadoutInput {
-	series: SeriesView;
+	/** Name of the trace. */
+	label: string;
+	point: Point;
 	assessment: AssessmentView | null;
-	index: number;
 	zone: string;
 	unit: TemperatureUnit;
 	locale: string;
 }
 
 /** What stands in the line above the chart for the reading at the crosshair. */
-export function readoutAt({ series, assessment, index, zone, unit, locale }: ReadoutInput): Readout[] {
-	const ms = series.times[index] ?? 0;
-	const celsius = series.celsius[index] ?? null;
+export function readoutAt({ label, point, assessment, zone, unit, locale }: ReadoutInput): Readout[] {
+	const { ms, celsius } = point;
 	const accuracy = assessment ? ` ±${temperatureSpan(assessment.accuracyCelsius, unit, locale)}` : '';
 	const figures =
 		celsius === null
@@ -32,9 +33,9 @@ export function readoutAt({ series, assessment, index, zone, unit, locale }: Rea
 			: `${temperature(celsius, unit, locale)}${accuracy} ${temperatureSign(unit)}`;
 	return [
 		{ label: words.atTheLine, value: `${dayTime(ms, zone, locale)} ${zoneName(ms, zone)}` },
-		{ label: series.label, value: figures },
+		{ label, value: figures },
 		...legAt(assessment, ms),
-		...lifeAt(series, index, locale)
+		...lifeAt(point, locale)
 	];
 }
 
@@ -47,21 +48,19 @@ function legAt(assessment: AssessmentView | null, ms: number): Readout[] {
 	return [{ label: words.leg, value: leg ? `${legLetter(found)} ${leg.holder}` : words.outsideLegs }];
 }
 
-function lifeAt(series: SeriesView, index: number, locale: string): Readout[] {
-	const value = series.remainingHours?.[index];
-	if (typeof value !== 'number') return [];
-	const low = series.remainingLowHours?.[index];
-	const high = series.remainingHighHours?.[index];
+function lifeAt({ leftHours, leftLowHours: low, leftHighHours: high }: Point, locale: string): Readout[] {
+	if (leftHours === null) return [];
 	const aside =
-		typeof low === 'number' && typeof high === 'number'
-			? range(lifeDays(low, locale), lifeDays(high, locale))
-			: undefined;
-	return [{ label: words.lifeLeftThen, value: `${lifeDays(value, locale)} d`, aside }];
+		low !== null && high !== null ? range(lifeDays(low, locale), lifeDays(high, locale)) : undefined;
+	return [{ label: words.lifeLeftThen, value: `${lifeDays(leftHours, locale)} d`, aside }];
+}
+
+export function windowText(assessment: AssessmentView, zone: string, locale: string): string {
+	return spanText(assessment.windowFromAt, assessment.windowToAt, zone, locale);
 }
 
 /** `30 Mar 08:10 to 3 Apr 07:10`; where it lies within one day the day stands once. */
-export function windowText(assessment: AssessmentView, zone: string, locale: string): string {
-	const { windowFromAt: from, windowToAt: to } = assessment;
+export function spanText(from: number | string, to: number | string, zone: string, locale: string): string {
 	const isOneDay = day(from, zone, locale) === day(to, zone, locale);
 	const end = isOneDay ? time(to, zone) : `${shortDay(to, zone, locale)} ${time(to, zone)}`;
 	return `${shortDay(from, zone, locale)} ${time(from, zone)} ${words.to} ${end}`;

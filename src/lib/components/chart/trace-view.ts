@@ -15,7 +15,7 @@ export function spanOf(known: Window | undefined, next: Window): Window {
 }
 
 /** Where the crosshair stands at first: the worst of the costliest excursion, otherwise the last reading. */
-export function worstIndex(series: SeriesView, assessment: AssessmentView | null): number {
+export function worstIndex(times: ArrayLike<number>, assessment: AssessmentView | null): number {
 	const costliest = [...(assessment?.excursions ?? [])].sort((a, b) => b.costHours - a.costHours)[0];
-	return costliest ? nearestIndex(series.times, costliest.extremeAtMs) : Math.max(0, series.times.length - 1);
+	return costliest ? nearestIndex(times, costliest.extremeAtMs) : Math.max(0, times.length - 1);
 }
