@@ -61,6 +61,8 @@ export function withPen(chart: uPlot, draw: (pen: Pen) => void): void {
 	const top = chart.bbox.top / ratio;
 	chart.ctx.save();
 	chart.ctx.scale(ratio, ratio);
+	// The dashes of the last trace that was drawn would go on.
+	chart.ctx.setLineDash([]);
 	draw({
 		ctx: chart.ctx,
 		left,

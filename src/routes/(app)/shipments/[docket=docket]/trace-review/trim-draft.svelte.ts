@@ -11,21 +11,25 @@ export class TrimDraft {
 	isExact = $state(false);
 	isOpen = $state(false);
 	readonly #zone: string;
+	readonly #fields: { fromText: string; toText: string };
 
 	constructor(zone: string, fields: { fromText: string; toText: string }) {
 		this.#zone = zone;
+		this.#fields = fields;
 		this.fromText = fields.fromText;
 		this.toText = fields.toText;
 	}
 
-	/** From the chart; null puts the ends back. */
+	/** From the chart; null puts the ends back, and the fields to what they were. */
 	move(stretch: Stretch | null): void {
 		this.stretch = stretch;
 		this.isExact = stretch !== null;
-		if (!stretch) return;
-		this.isOpen = true;
-		this.fromText = localText(stretch.fromMs, this.#zone);
-		this.toText = localText(stretch.toMs, this.#zone);
+		const { fromText, toText } = stretch
+			? { fromText: localText(stretch.fromMs, this.#zone), toText: localText(stretch.toMs, this.#zone) }
+			: this.#fields;
+		this.fromText = fromText;
+		this.toText = toText;
+		this.isOpen ||= stretch !== null;
 	}
 
 	/** From a field: the chart follows as soon as both ends are times, one after the other. */
