@@ -5,6 +5,7 @@ import { lifeScale, pointHeights, temperatureScale } from './heights';
 
 const model: ChartModel = {
 	traces: [[0], [4]],
+	styles: [],
 	labels: ['L1'],
 	life: [[0], [9], [8], [10]],
 	limits: [],

@@ -69,7 +69,7 @@ function whole(
 function assessed(trace: ReturnType<typeof whole>) {
 	const [basis] = trace.assessed;
 	const assessment = basis && assessWhole(trace, basis);
-	if (!basis || !assessment || typeof assessment === 'string') throw new Error(assessment);
+	if (!basis || !assessment || typeof assessment === 'string') throw new Error('not assessed');
 	return { assessment, basis };
 }
 
