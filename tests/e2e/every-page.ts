@@ -68,6 +68,7 @@ export const places: readonly Place[] = [
 	{ name: 'a new partner', as: 'admin', path: '/partners/new' },
 	{ name: 'the record', as: 'qa', path: '/record' },
 	{ name: 'own settings', as: 'dock', path: '/settings' },
+	{ name: 'API tokens', as: 'qa', path: '/settings/tokens' },
 	{ name: 'sites', as: 'admin', path: '/settings/sites' },
 	{ name: 'a site', as: 'admin', path: ({ site }) => site },
 	{ name: 'a new site', as: 'admin', path: '/settings/sites/new' },

@@ -1,6 +1,7 @@
 import { randomBytes } from 'node:crypto';
 import { Op } from 'sequelize';
 import { v7 as uuid } from 'uuid';
+import type { ApiTokenView } from '../../schemas/api-token';
 import type { Actor, Context } from '../context';
 import { ApiToken } from '../db/models/api-token';
 import { User } from '../db/models/user';
@@ -25,7 +26,12 @@ export function newApiSecret(): string {
  * Makes a token for the user of an address; only its hash is kept.
  * @throws Refusal `not-found`, `switched-off`, `not-allowed` for suppliers, who come by mailed links
  */
-export async function makeApiToken(ctx: Context, email: string, secret: string): Promise<{ id: string }> {
+export async function makeApiToken(
+	ctx: Context,
+	email: string,
+	secret: string,
+	name = ''
+): Promise<{ id: string }> {
 	const id = uuid();
 	await inTransaction(ctx, async ({ transaction, record }) => {
 		const user = await User.findOne({ where: { email: email.trim().toLowerCase() }, transaction });
@@ -34,10 +40,10 @@ export async function makeApiToken(ctx: Context, email: string, secret: string):
 		if (rolesOf(user).includes('supplier'))
 			throw new Refusal('not-allowed', 'Suppliers have no tokens: they come by mailed links.');
 		await ApiToken.create(
-			{ id, userId: user.id, tokenSha256: sha256Hex(secret), createdAt: ctx.now },
+			{ id, userId: user.id, tokenSha256: sha256Hex(secret), createdAt: ctx.now, name },
 			{ transaction }
 		);
-		record('account.token-made', { scope: 'account', id: user.id }, { userId: user.id, tokenId: id });
+		record('account.token-made', { scope: 'account', id: user.id }, { userId: user.id, tokenId: id, name });
 	});
 	return { id };
 }
@@ -56,13 +62,6 @@ export async function findTokenActor(secret: string, { now }: RequestScope): Pro
 	return actorOfUser(user);
 }
 
-/** One of somebody's own tokens, as their settings show it. */
-export interface ApiTokenView {
-	id: string;
-	createdAt: string;
-	lastUsedAt: string | null;
-}
-
 /** The actor's own tokens that still work, the newest first. */
 export async function listApiTokens({ actor }: Context): Promise<{ items: ApiTokenView[]; total: number }> {
 	const tokens =
@@ -72,8 +71,9 @@ export async function listApiTokens({ actor }: Context): Promise<{ items: ApiTok
 					order: [['createdAt', 'DESC']]
 				})
 			: [];
-	const items = tokens.map(({ id, createdAt, lastUsedAt }) => ({
+	const items = tokens.map(({ id, name, createdAt, lastUsedAt }) => ({
 		id,
+		name,
 		createdAt: createdAt.toISOString(),
 		lastUsedAt: lastUsedAt?.toISOString() ?? null
 	}));

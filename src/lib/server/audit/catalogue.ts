@@ -9,7 +9,7 @@ export interface EventData {
 	'account.password-set': { userId: string };
 	'account.locked': { userId: string; failedPasswords: number };
 	'account.unlocked': { userId: string };
-	'account.token-made': { userId: string; tokenId: string };
+	'account.token-made': { userId: string; tokenId: string; name?: string };
 	'account.token-revoked': { userId: string; tokenId: string };
 	'account.second-factor': { userId: string; act: 'begun' | 'set' | 'removed' | 'reset' };
 	'session.opened': { by: 'password' | 'link'; userId: string };

@@ -12,6 +12,8 @@ export class ApiToken extends Model<InferAttributes<ApiToken>, InferCreationAttr
 	declare id: string;
 	declare userId: string;
 	declare tokenSha256: string;
+	/** What it is for, in its owner's words. */
+	declare name: CreationOptional<string>;
 	declare createdAt: Date;
 	declare lastUsedAt: CreationOptional<Date | null>;
 	declare revokedAt: CreationOptional<Date | null>;
@@ -23,6 +25,7 @@ export function defineApiToken(sequelize: Sequelize): void {
 			id: { type: DataTypes.UUID, primaryKey: true, allowNull: false },
 			userId: { type: DataTypes.UUID, allowNull: false },
 			tokenSha256: { type: DataTypes.CHAR(64), allowNull: false, field: 'token_sha256' },
+			name: { type: DataTypes.STRING(80), allowNull: false, defaultValue: '' },
 			createdAt: { type: DataTypes.DATE(3), allowNull: false },
 			lastUsedAt: { type: DataTypes.DATE(3), allowNull: true },
 			revokedAt: { type: DataTypes.DATE(3), allowNull: true }

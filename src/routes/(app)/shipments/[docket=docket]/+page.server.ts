@@ -32,7 +32,7 @@ import type { Actions, PageServerLoad } from './$types';
 
 const nothing = {
 	...{ sign: false, log: false, hold: false, lift: false, upload: false, trim: false, claim: false },
-	...{ accept: false, photo: false }
+	...{ accept: false, photo: false, copy: false }
 };
 
 async function permissionsOf(ctx: Context, docket: DocketView): Promise<typeof nothing> {
@@ -45,6 +45,7 @@ async function permissionsOf(ctx: Context, docket: DocketView): Promise<typeof n
 		trim: may(ctx.actor, 'trim.make'),
 		claim: may(ctx.actor, 'claim.work'),
 		photo: may(ctx.actor, 'photo.add'),
+		copy: may(ctx.actor, 'copy.take'),
 		accept: await mayAcceptAtDock(ctx, docket)
 	};
 }
