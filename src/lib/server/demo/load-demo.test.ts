@@ -93,16 +93,16 @@ describe('the demo', () => {
 	});
 
 	it('lets its people sign in at both sites, and nobody with a password who has none to choose', async () => {
-		for (const name of ['dock', 'qa', 'claims', 'admin']) {
+		for (const name of ['dock', 'qa', 'qa2', 'claims', 'admin']) {
 			const email = `${name}@wharfinger.example`;
 			const user = await User.findOne({ where: { email }, rejectOnEmpty: true });
 			expect(await isPassword(demoPassword, user.passwordHash)).toBe(true);
 			expect((await as(email)).actor).toMatchObject({
-				roles: [name],
+				roles: [name === 'qa2' ? 'qa' : name],
 				siteIds: [expect.any(String), expect.any(String)]
 			});
 		}
-		const rest = (await User.findAll()).filter(({ email }) => !/^(dock|qa|claims|admin)@/.test(email));
+		const rest = (await User.findAll()).filter(({ email }) => !/^(dock|qa2?|claims|admin)@/.test(email));
 		expect(rest.map(({ passwordHash }) => passwordHash)).toEqual([null, null]);
 	});
 
@@ -136,7 +136,7 @@ describe('the demo', () => {
 		const verdicts = (await Disposition.findAll()).map(({ verdict }) => verdict);
 		expect(of(verdicts)).toEqual(['accepted', 'conditions', 'part', 'rejected']);
 		const outcomes = (await DispositionLine.findAll()).map(({ outcome }) => outcome);
-		expect(of(outcomes)).toEqual(['accept', 'conditions', 'reject']);
+		expect(of(outcomes)).toEqual(['accept', 'conditions', 'hold', 'reject']);
 		const recommended = (await LineRecommendation.findAll()).map((row) => row.recommended);
 		expect(of(recommended)).toEqual(['accept', 'hold', 'reject']);
 		const statuses = (await Claim.findAll()).map(({ status }) => status);
@@ -207,6 +207,23 @@ describe('the demo', () => {
 		expect(kinds.notice).toBeLessThanOrEqual(12);
 		expect(kinds.notice).toBeGreaterThan(0);
 		expect(Object.keys(kinds).sort()).toEqual(['notice', 'report']);
+	});
+
+	it('has photographs, a split line that is held in part, and somebody qualified who is not the usual signer', async () => {
+		const hero = await getDocket(await as('qa@wharfinger.example'), 'PS-26-1184');
+		expect(hero.photos.map(({ kind }) => kind)).toEqual(['seal', 'set-point', 'damage']);
+		const split = await DispositionLine.findAll({ where: { outcome: 'hold' }, rejectOnEmpty: true });
+		const disposition = await Disposition.findByPk(split[0]?.dispositionId, { rejectOnEmpty: true });
+		const shipment = await Shipment.findByPk(disposition.shipmentId, { rejectOnEmpty: true });
+		const docket = await getDocket(await as('qa@wharfinger.example'), shipment.number);
+		expect(docket.stage).toBe('done');
+		expect(docket.lines[0]?.groups?.map(({ pallets, cases }) => [pallets, cases])).toEqual([
+			[5, 200],
+			[2, 80]
+		]);
+		expect(docket.hold).toMatchObject({ awaited: 'A second probing of the crowns' });
+		const qualified = await User.findAll({ where: { isQualifiedPerson: true } });
+		expect(qualified.map(({ email }) => email)).toEqual(['qa2@wharfinger.example']);
 	});
 
 	it('holds no export twice', async () => {

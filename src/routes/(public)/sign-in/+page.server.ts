@@ -10,6 +10,7 @@ import type { Actions, PageServerLoad } from './$types';
 const demoPeople = [
 	{ email: 'dock@wharfinger.example', does: 'logs arrivals' },
 	{ email: 'qa@wharfinger.example', does: 'decides and signs' },
+	{ email: 'qa2@wharfinger.example', does: 'signs second' },
 	{ email: 'claims@wharfinger.example', does: 'follows claims' },
 	{ email: 'admin@wharfinger.example', does: 'keeps the rest' }
 ];

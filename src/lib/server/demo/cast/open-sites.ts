@@ -24,12 +24,12 @@ async function addPerson(
 	{ passwordHash, siteIds, partnerId, at }: Entry
 ): Promise<string> {
 	const id = uuid();
-	const { email, name, title, roles } = person;
+	const { email, name, title, roles, isQualifiedPerson = false } = person;
 	const hasPassword = !person.isInvited && !roles.includes('supplier');
 	await inTransaction(systemContext(at, 'demo-people'), async ({ transaction, record }) => {
 		await User.create(
 			{
-				...{ id, email, name, title, roles, partnerId },
+				...{ id, email, name, title, roles, partnerId, isQualifiedPerson },
 				passwordHash: hasPassword ? passwordHash : null,
 				createdAt: at,
 				invitedAt: at

@@ -11,6 +11,8 @@ export interface DemoPerson {
 	partner?: string;
 	/** Invited, and has not chosen a password yet. */
 	isInvited?: boolean;
+	/** May write the determination without which goods over a stop are not taken. */
+	isQualifiedPerson?: boolean;
 }
 
 const staff = (key: string, name: string, title: string): DemoPerson => ({
@@ -29,6 +31,8 @@ export const admin = staff('admin', 'Hanneke Pryce', 'Quality manager');
 export const people: readonly DemoPerson[] = [
 	staff('dock', 'D. Marsh', 'dock'),
 	staff('qa', 'Ruth Calloway', 'QA'),
+	/** The second person, where a decision needs two. */
+	{ ...staff('qa2', 'Jonas Adeyemi', 'QA, qualified person'), roles: ['qa'], isQualifiedPerson: true },
 	staff('claims', 'Ivo Sander', 'claims'),
 	{
 		key: 'dock2',

@@ -1,10 +1,26 @@
+import type { Whereabouts } from '../../../domain/receiving/line-groups';
 import type { Outcome } from '../../../domain/receiving/recommendation';
+import type { PhotoKind } from '../../../schemas/photo';
 import type { Incident, LayoutName, Ride } from '../journeys/journey';
 import type { Goods } from './lane';
 import type { LaneName } from './lanes';
+import type { PictureName } from '../play/pictures';
 
 /** A moment: so many minutes from the anchor, or a time of the site's clock so many days from its day. */
 export type When = { minutes: number } | { day: number; clock: string };
+
+/** Some pallets of a line that are decided by themselves. */
+export interface PlannedGroup {
+	name: string;
+	pallets: number;
+	outcome: Outcome;
+	/** The condition, why it is refused or held. */
+	words?: string;
+	/** Of a held group: what is awaited, and for so many hours after the decision. */
+	awaited?: { what: string; hours: number };
+	whereabouts?: Whereabouts;
+	place?: string;
+}
 
 /** What becomes of a decision afterwards. */
 export interface Aftermath {
@@ -51,6 +67,7 @@ export interface LoadPlan {
 	reads?: number;
 	/** Another export was uploaded, and asks something. */
 	question?: Extract<LayoutName, 'two-probes' | 'no-unit'>;
+	photos?: readonly { shows: PictureName; kind: PhotoKind; afterMinutes: number; caption: string }[];
 	notes?: readonly { by: 'dock' | 'qa'; afterMinutes: number; text: string }[];
 	hold?: { afterMinutes: number; reason: string };
 	/** QA leaves the first minutes out of every trace. */
@@ -63,6 +80,8 @@ export interface LoadPlan {
 		reasons?: string;
 		condition?: string;
 		notify?: boolean;
+		/** The first line is decided by groups, each of so many pallets; the last takes the cases that are left. */
+		groups?: readonly PlannedGroup[];
 	};
 	aftermath?: Aftermath;
 }

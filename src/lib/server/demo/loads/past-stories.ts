@@ -54,14 +54,25 @@ export const pastStories: readonly LoadPlan[] = [
 		key: 'two disagree',
 		lane: 'tessil',
 		due: at(-21, '07:30'),
+		goods: [goods(['Strawberries', 'Strawberries, 10 × 400 g'], [320, 80], 18.5, 8)],
+		photos: [{ shows: 'film', kind: 'damage', afterMinutes: 14, caption: 'Pallet 4, film open at the top' }],
 		rides: [
 			{ line: 1, position: 'Pallet 1, nose' },
 			{ line: 1, position: 'Pallet 4, door end', offsetCelsius: 2.4 }
 		],
 		decided: {
 			afterMinutes: 88,
-			condition: 'Grade before shelving.',
-			reasons: 'The two differ by more than their accuracies; the warmer one has been sent for calibration.'
+			reasons: 'The two differ by more than their accuracies; the warmer one has been sent for calibration.',
+			groups: [
+				{ name: 'Pallets 1 to 3', pallets: 3, outcome: 'conditions', words: 'Grade before shelving.' },
+				{
+					name: 'Pallet 4, door end',
+					pallets: 1,
+					outcome: 'reject',
+					words: 'Film open, fruit dried at the top',
+					whereabouts: 'returned'
+				}
+			]
 		}
 	},
 	{

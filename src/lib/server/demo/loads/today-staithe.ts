@@ -34,6 +34,11 @@ const atQa: LoadPlan = {
 	pulpCelsius: [0.8, 1.0, 1.4],
 	doorNote: 'Cold at the door, but the tail pallets are wet under the film.',
 	hold: { afterMinutes: 39, reason: 'Tail pallets wet, driver stood at the hub' },
+	photos: [
+		{ shows: 'seal', kind: 'seal', afterMinutes: 5, caption: 'Seal 0093187 before it was cut' },
+		{ shows: 'display', kind: 'set-point', afterMinutes: 7, caption: 'Display of the unit at the door' },
+		{ shows: 'film', kind: 'damage', afterMinutes: 33, caption: 'Tail pallets, wet under the film' }
+	],
 	intoStore: { minutes: 78, plannedMinutes: 45, place: 'chill room', dockCelsius: 2 },
 	readAfterMinutes: 86,
 	trimFirstMinutes: 30,
@@ -149,9 +154,32 @@ const done: readonly LoadPlan[] = [
 	{
 		key: key('broccoli'),
 		lane: 'broccoli',
+		goods: [goods(['Broccoli, crowns', 'Broccoli crowns, 8 kg on ice'], [280, 40], 13.2, 14)],
 		due: { minutes: -295 },
 		lateHours: [0, 0.07],
-		decided: { afterMinutes: 51 }
+		decided: {
+			afterMinutes: 51,
+			reasons:
+				'Cold throughout. Ice had slid off two pallets at the door end; they are probed again at noon.',
+			groups: [
+				{
+					name: 'Pallets 1 to 5',
+					pallets: 5,
+					outcome: 'accept',
+					whereabouts: 'store',
+					place: 'chill room 2'
+				},
+				{
+					name: 'Pallets 6 and 7, door end',
+					pallets: 2,
+					outcome: 'hold',
+					words: 'Ice slid off the upper layers',
+					awaited: { what: 'A second probing of the crowns', hours: 20 },
+					whereabouts: 'quarantine',
+					place: 'bay Q'
+				}
+			]
+		}
 	},
 	{
 		key: key('cod'),

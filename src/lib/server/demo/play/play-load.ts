@@ -4,6 +4,7 @@ import { ShipmentLine } from '../../db/models/shipment-line';
 import { TraceRow } from '../../db/models/trace-row';
 import { putHold } from '../../holds/put-hold';
 import { addNote } from '../../notes/add-note';
+import { addPhoto } from '../../photos/add-photo';
 import { cancelShipment } from '../../shipments/cancel-shipment';
 import { createShipment } from '../../shipments/create-shipment';
 import { makeTrim } from '../../traces/trims';
@@ -11,6 +12,7 @@ import { aftermathSteps, type Opened } from './aftermath';
 import { arrivalOf } from './at-the-door';
 import { decide } from './decide';
 import { papersOf } from './papers';
+import { pictures } from './pictures';
 import type { Staged } from './staged';
 import { writeStore } from './write-store';
 import { exportOfRide, keep, upload } from './upload';
@@ -84,6 +86,20 @@ async function trimStarts({ world, docket }: Play, minutes: number, atMs: number
 		});
 }
 
+function photoSteps({ world, staged, docket, after }: Play): Step[] {
+	return (staged.plan.photos ?? []).map(({ shows, kind, afterMinutes, caption }) => {
+		const atMs = after(afterMinutes);
+		const act = async () =>
+			void (await addPhoto(
+				contextOf(world, 'dock', atMs),
+				docket().number,
+				{ id: null, kind, caption },
+				pictures[shows]
+			));
+		return { atMs, act };
+	});
+}
+
 function wordsSteps({ world, staged, docket, after }: Play): Step[] {
 	const { hold, notes = [] } = staged.plan;
 	const steps = notes.map(({ by, afterMinutes, text }) => {
@@ -149,6 +165,7 @@ export function playLoad(world: World, staged: Staged, serials: readonly string[
 		arrivalStep(play),
 		...storeSteps(play),
 		...readSteps(play),
+		...photoSteps(play),
 		...wordsSteps(play),
 		...decisionSteps(play)
 	];
