@@ -130,6 +130,38 @@ describe('a sealed report kept for the archive', () => {
 		expect(dict(objects.catalog['/AcroForm'])['/NeedAppearances'] ?? false).toBe(false);
 	});
 
+	it('is see-through only as the output intent allows, with plain blending and no soft mask (6.2.10)', () => {
+		for (const one of objects.all) {
+			expect(one['/SMask'] ?? '/None').toBe('/None');
+			expect(one['/BM'] ?? '/Normal').toBe('/Normal');
+			for (const opacity of ['/ca', '/CA']) {
+				expect(one[opacity] ?? 1).toBeGreaterThan(0);
+				expect(one[opacity] ?? 1).toBeLessThanOrEqual(1);
+			}
+		}
+	});
+
+	it('packs its streams with nothing but Flate and JPEG (6.1.7.2)', () => {
+		const signature = objects.all.filter((one) => one['/Type'] === '/Sig');
+		const filters = objects.all
+			.filter((one) => !signature.includes(one))
+			.flatMap((one) => [one['/Filter'] ?? []].flat());
+		expect(filters.length).toBeGreaterThan(10);
+		for (const filter of filters) expect(['/FlateDecode', '/DCTDecode']).toContain(filter);
+	});
+
+	it('tags words as paragraphs and charts as figures with words in their place; no cell of a table (6.7.3)', () => {
+		const elements = objects.all.filter((one) => one['/S'] !== undefined && one['/P'] !== undefined);
+		expect([...new Set(elements.map((one) => one['/S']))].sort()).toEqual(['/Document', '/Figure', '/P']);
+		expect(elements.length).toBeGreaterThan(500);
+		for (const one of elements.filter((element) => element['/S'] === '/Figure'))
+			expect(String(one['/Alt']).length).toBeGreaterThan(20);
+		const root = dict(objects.catalog['/StructTreeRoot']);
+		const [whole] = list(root['/K']).map(dict);
+		expect(list(whole?.['/K'])).toHaveLength(elements.length - 1);
+		expect(root['/ParentTree']).toBeDefined();
+	});
+
 	it('is of one piece, with an identity in its trailer (6.1.3)', () => {
 		const text = Buffer.from(pdf).toString('latin1');
 		expect(text.slice(0, 8)).toBe('%PDF-1.7');

@@ -20,6 +20,7 @@ import { embeddedFiles } from './embedded-files';
 import type { ReportInput } from './report-input';
 import { restsOn } from './rests-on';
 import { signedBefore } from './signed-before';
+import { tagContent } from './tag-content';
 import { cutLine, runningFoot, runningHead } from './running';
 
 const ownFonts = new Set(Object.values(fontFiles).flatMap((files) => [files.normal, files.bold]));
@@ -28,6 +29,7 @@ const ownFonts = new Set(Object.values(fontFiles).flatMap((files) => [files.norm
 pdfmake.setUrlAccessPolicy(() => false);
 pdfmake.setLocalAccessPolicy((path) => ownFonts.has(path));
 pdfmake.setFonts({ ...fontFiles });
+tagContent();
 
 /** The receiving report as PDF bytes; the same input gives the same bytes. */
 export async function reportPdf(input: ReportInput): Promise<Uint8Array> {
