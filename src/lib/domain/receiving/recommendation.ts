@@ -36,6 +36,15 @@ export type Reason =
 	  }
 	| { readonly code: 'life-not-known'; readonly grade: Grade }
 	| {
+			readonly code: 'customer-life-short';
+			readonly grade: Grade;
+			readonly lowHours: number;
+			/** What the customer's need is worth at the reference temperature. */
+			readonly neededHours: number;
+			readonly customerHours: number;
+			readonly customerCelsius: number;
+	  }
+	| {
 			readonly code: 'stop-reached';
 			readonly grade: Grade;
 			readonly stop: StopKind;

@@ -80,6 +80,13 @@ const table: readonly Row[] = [
 	{ code: 'life-low-short', grade: 'hold', isFixed: true, trace: life(263, 280, 290) },
 	{ code: 'life-short', grade: 'hold', isFixed: true, trace: life(240, 260, 270) },
 	{ code: 'life-short', grade: 'reject', isFixed: true, trace: life(240, 250, 263) },
+	{
+		code: 'customer-life-short',
+		grade: 'hold',
+		// 288 h at 0 °C of a low of 287; a need at 10 °C would be worth three times as much at a Q10 of 3.
+		trace: life(287, 300, 310),
+		door: { spec: { ...spec, neededAtCustomer: { hours: 288, celsius: 0 } } }
+	},
 	{ code: 'stop-reached', grade: 'reject', isFixed: true, trace: { stops: [stop] } },
 	{
 		code: 'stop-in-doubt',
@@ -226,6 +233,7 @@ const allCodes: ReasonCode[] = [
 	'life-low-short',
 	'life-short',
 	'life-not-known',
+	'customer-life-short',
 	'stop-reached',
 	'stop-in-doubt',
 	'excursion',
@@ -324,5 +332,35 @@ describe('the findings that may be graded', () => {
 			const grades = [...(usual.get(code) ?? [])];
 			expect([code, usualGrade]).toEqual([code, grades.length === 1 ? grades[0] : null]);
 		}
+	});
+});
+
+describe('life at the customer', () => {
+	const needing = (hours: number, celsius: number) => ({
+		spec: { ...spec, neededAtCustomer: { hours, celsius } }
+	});
+
+	it.each([
+		// Q10 of 3, by its definition: a day at 10 °C is worth three at the reference, one at 20 °C nine.
+		[300, 300, 0, []],
+		[299, 300, 0, ['customer-life-short']],
+		[300, 100, 10, []],
+		[299, 100, 10, ['customer-life-short']],
+		[300, 34, 20, ['customer-life-short']],
+		[-5, 1, 0, ['life-short', 'customer-life-short']]
+	] as const)('a low of %d h against %d h at %d °C: %j', (low, hours, celsius, expected) => {
+		const assessment = { ...quiet, ...life(low, 320, 330) };
+		const found = rules.flatMap(({ find }) =>
+			find({ ...calm, ...needing(hours, celsius), neededHours: 264, assessment })
+		);
+		const codes = found.map(({ code }) => code).filter((code) => /short/.test(code));
+		expect(codes.filter((code) => code !== 'life-low-short')).toEqual(
+			expected.filter((code) => code !== 'life-short')
+		);
+	});
+
+	it('is asked of nobody who does not ask, nor of a line without a trace', () => {
+		expect(foundBy(calm, 'customer-life-short')).toEqual([]);
+		expect(foundBy({ ...calm, ...needing(10_000, 0), assessment: null }, 'customer-life-short')).toEqual([]);
 	});
 });

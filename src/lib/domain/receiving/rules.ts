@@ -18,6 +18,7 @@ import {
 import type { Evidence } from './evidence';
 import type { Reason } from './recommendation';
 import {
+	customerLifeReasons,
 	earlyStopReasons,
 	excursionReasons,
 	lifeReasons,
@@ -48,6 +49,7 @@ const settable = (name: string, find: Rule['find']): Rule => ({ name, isSettable
  * | low meets the need | inform |
  * | value meets it, low does not; or high alone does | hold |
  * | not even the high meets it | reject |
+ * | low falls short of what the customer needs, before any onward trip | hold |
  * | no trace | note: never a hold by itself |
  * | stop reached / in doubt | reject / hold |
  * | excursion minor / major / critical | inform / note / hold; in doubt never more than note |
@@ -67,6 +69,7 @@ const settable = (name: string, find: Rule['find']): Rule => ({ name, isSettable
 export const rules: readonly Rule[] = [
 	fixed('life', lifeReasons),
 	fixed('stops', (evidence) => (evidence.assessment?.stops ?? []).map((hit) => stopReason(hit, evidence))),
+	settable('life at the customer', customerLifeReasons),
 	settable('excursions', ({ assessment }) => (assessment === null ? [] : excursionReasons(assessment))),
 	settable('evidence incomplete', incompleteReasons),
 	settable('printed date', dateReasons),

@@ -6,8 +6,9 @@ export interface SettableFinding {
 	readonly usualGrade: Extract<Grade, SettableGrade> | null;
 }
 
-/** Every finding of the settable rules, in the order of the rules. Life and stops are not among them. */
+/** Every finding of the settable rules, in the order of the rules. Life needed at the dock and stops are not among them. */
 export const settableFindings = [
+	{ code: 'customer-life-short', usualGrade: 'hold' },
 	{ code: 'excursion', usualGrade: null },
 	{ code: 'evidence-incomplete', usualGrade: 'hold' },
 	{ code: 'date-passed', usualGrade: 'hold' },

@@ -1,3 +1,4 @@
+import { needWorthHours } from '../shelf-life/need';
 import { rateCurve } from '../shelf-life/rate-curve';
 import { msPerHour } from '../units';
 import type { Assessment, Excursion, LegUse, StopHit } from './assessment';
@@ -10,6 +11,22 @@ const unobservedNoteFraction = 0.25;
 const stoppedEarlyNoteHours = 4;
 
 const excursionGrades = { minor: 'inform', major: 'note', critical: 'hold' } as const;
+
+/**
+ * Life left against what the customer must have when the onward trip is over: what is not there now will not be there
+ * then, however short and cold the trip. What the trip itself takes is the forecast's to say.
+ */
+export function customerLifeReasons({ assessment, spec }: Evidence): Reason[] {
+	const need = spec.neededAtCustomer;
+	if (assessment === null || need === undefined) return [];
+	const neededHours = needWorthHours(spec, need);
+	const lowHours = assessment.remainingHours.low;
+	if (lowHours >= neededHours) return [];
+	const { hours: customerHours, celsius: customerCelsius } = need;
+	return [
+		{ code: 'customer-life-short', grade: 'hold', lowHours, neededHours, customerHours, customerCelsius }
+	];
+}
 
 /** Life left against the life needed. */
 export function lifeReasons({ assessment, neededHours }: Evidence): Reason[] {

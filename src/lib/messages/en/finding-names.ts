@@ -2,6 +2,7 @@ import type { SettableCode } from '../../domain/receiving/settable-findings';
 
 /** What a finding is about, as the heading of its grade. */
 export const findingNames: Readonly<Record<SettableCode, string>> = {
+	'customer-life-short': 'Less life left than the customer needs',
 	excursion: 'Excursion beyond a limit',
 	'evidence-incomplete': 'At the door, neither trace nor pulp reading',
 	'date-passed': 'Printed date has passed',

@@ -211,6 +211,17 @@ const cases: readonly (readonly [Reason, string])[] = [
 		'7 d to the printed date, Fri 10 Apr 2026; the customer asks for 9 d.'
 	],
 	[
+		{
+			code: 'customer-life-short',
+			grade: 'hold',
+			lowHours: 230,
+			neededHours: 240,
+			customerHours: 120,
+			customerCelsius: 5
+		},
+		'The customer needs 5.0 d at 5.0 °C, worth 240.0 h at 0.0 °C; the low, 9.6 d, is less before any onward trip.'
+	],
+	[
 		{ code: 'date-missing', grade: 'note' },
 		'No printed date is written down; the customer has a rule for it.'
 	],
@@ -231,7 +242,7 @@ describe('a reason in English', () => {
 	});
 
 	it('has a sentence for every code', () => {
-		expect(new Set(cases.map(([reason]) => reason.code)).size).toBe(29);
+		expect(new Set(cases.map(([reason]) => reason.code)).size).toBe(30);
 	});
 
 	it('speaks in the reader’s unit, a span scaled and not shifted', () => {

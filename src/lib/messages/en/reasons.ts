@@ -55,6 +55,8 @@ const sentences: Sentences = {
 		reason.highHours < reason.neededHours
 			? `${days(reason.valueHours)} left, ${days(reason.highHours)} on the high; the order needs ${days(reason.neededHours)}.`
 			: `${days(reason.valueHours)} left; the order needs ${days(reason.neededHours)}, which only the high, ${days(reason.highHours)}, meets.`,
+	'customer-life-short': (reason, { days, degrees, life }) =>
+		`The customer needs ${days(reason.customerHours)} at ${degrees(reason.customerCelsius)}, worth ${life(reason.neededHours)}; the low, ${days(reason.lowHours)}, is less before any onward trip.`,
 	'life-not-known': () => 'No trace for this line: life left is not known.',
 	'stop-reached': stopReached,
 	'stop-in-doubt': (reason, { degrees, degreesPlusMinus }) => {

@@ -101,3 +101,8 @@ export function lifeNotKnown(docket: DocketView, line: DocketView['lines'][numbe
 	if (line.fullLifeHours === 0) return 'no spec was in force';
 	return docket.loggers.some((logger) => logger.traceId !== null) ? 'no reading in custody' : 'no read yet';
 }
+
+/** What the range of a line's life is made of, by the assessment that governs it. */
+export function rangePartsOf({ assessments }: DocketView, lineId: string): AssessmentView['rangeParts'] {
+	return assessments.find((one) => one.lineId === lineId && one.isGoverning)?.rangeParts;
+}
