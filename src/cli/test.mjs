@@ -5,17 +5,11 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
 import { databasePrograms, ensurePrograms, testPrograms } from './setup/debian.mjs';
-import { freePort, startDatabase } from './setup/mariadb.mjs';
+import { fastAndForgetful, freePort, startDatabase } from './setup/mariadb.mjs';
 import { prepareProject, projectFolder } from './setup/project.mjs';
 import { run } from './setup/run.mjs';
 import { SetupFault, endWith, say, step } from './setup/say.mjs';
 
-const forgetful = [
-	'--innodb-flush-log-at-trx-commit=0',
-	'--skip-innodb-doublewrite',
-	'--innodb-buffer-pool-size=256M',
-	'--max-connections=200'
-];
 const folder = mkdtempSync(join(tmpdir(), 'wharfinger-tests-'));
 /** @type {(() => Promise<void> | void)[]} */
 const ends = [() => rmSync(folder, { recursive: true, force: true })];
@@ -143,7 +137,7 @@ async function main() {
 	await ensurePrograms({ ...databasePrograms, ...testPrograms });
 	await prepareProject();
 	const database = await step('Starting a database for the tests', () =>
-		startDatabase(join(folder, 'database'), forgetful)
+		startDatabase(join(folder, 'database'), fastAndForgetful)
 	);
 	ends.push(() => database.stop());
 	const env = {

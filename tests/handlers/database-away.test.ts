@@ -2,11 +2,10 @@ import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, expect, it, vi } from 'vitest';
-import { startDatabase } from '../../src/cli/setup/mariadb.mjs';
+import { fastAndForgetful, startDatabase } from '../../src/cli/setup/mariadb.mjs';
 import { migrate } from '../../src/lib/server/db/migrate';
 import { closeDatabase, openDatabase } from '../../src/lib/server/db/sequelize';
 import { buildSite, buildUser } from '../helpers/factories';
-import { fastAndForgetful } from '../helpers/database-server';
 import { startProduct, type Product, type Visitor } from '../helpers/product';
 import { signInAs } from './sign-in-as';
 

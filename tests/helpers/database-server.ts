@@ -2,7 +2,7 @@ import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { TestProject } from 'vitest/node';
-import { startDatabase } from '../../src/cli/setup/mariadb.mjs';
+import { fastAndForgetful, startDatabase } from '../../src/cli/setup/mariadb.mjs';
 
 declare module 'vitest' {
 	interface ProvidedContext {
@@ -10,14 +10,6 @@ declare module 'vitest' {
 		appUrl: string;
 	}
 }
-
-/** A test's database dies with it: no need to wait for the disk. */
-export const fastAndForgetful = [
-	'--innodb-flush-log-at-trx-commit=0',
-	'--skip-innodb-doublewrite',
-	'--innodb-buffer-pool-size=256M',
-	'--max-connections=200'
-];
 
 /** One private server for all projects of a run: that of `npm test`, else one of its own. */
 export default async function setup(project: TestProject) {

@@ -13,6 +13,17 @@ import { SetupFault } from './say.mjs';
 const pollMs = 50;
 const readyWithinMs = 60_000;
 
+/** For a test's database, which dies with its test: nothing waits for the disk. */
+export const fastAndForgetful = [
+	'--innodb-flush-log-at-trx-commit=0',
+	'--skip-innodb-doublewrite',
+	'--innodb-flush-method=nosync',
+	'--debug-no-sync',
+	'--sync-frm=0',
+	'--innodb-buffer-pool-size=256M',
+	'--max-connections=200'
+];
+
 /** @typedef {{ port: number, ownerPassword: string, appPassword: string }} Access */
 
 /** @returns {Promise<number>} a port nobody listens on */
