@@ -7,7 +7,7 @@ import { z } from 'zod';
 export const retentionRules = [
 	{
 		rule: 'uploads',
-		what: 'Uploaded exports and photographs',
+		what: 'Uploaded exports, photographs, files of notes and answers, papers of claims',
 		after: 'the decision',
 		months: 24,
 		source: 'PACA, 7 CFR 46.14: 2 years; traceability rule, 21 CFR 1.1455(c): 24 months; from memory'
@@ -21,7 +21,7 @@ export const retentionRules = [
 	},
 	{
 		rule: 'people',
-		what: 'Names, e-mail addresses and notes about people in the audit trail',
+		what: 'What dockets and the trail say of people: notes, drivers and their signatures, answers, mails',
 		after: 'the decision, or the entry where it is about no docket',
 		months: 60,
 		source:

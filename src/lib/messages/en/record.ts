@@ -59,6 +59,7 @@ const sentences: Record<string, (data: Record<string, unknown>) => string> = {
 	'retention.held': () => 'Kept beyond its period, by hand',
 	'retention.released': () => 'No longer kept beyond its period',
 	'retention.blanked': () => 'Personal contents taken out by retention',
+	'retention.emptied': () => 'What rows said of people taken out by retention',
 	'retention.deleted': ({ what }) => `Taken out by retention, ${what}`
 };
 

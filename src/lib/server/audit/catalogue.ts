@@ -147,6 +147,7 @@ export interface EventData {
 	'retention.held': { reason: string };
 	'retention.released': { holdId: string; reason: string };
 	'retention.blanked': { entries: string; kinds: string[]; rule: string; periodMonths: number };
+	'retention.emptied': { rows: Record<string, number>; rule: string; periodMonths: number };
 	'retention.deleted': {
 		what: string;
 		fileSha256: string;

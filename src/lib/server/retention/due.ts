@@ -37,7 +37,15 @@ interface Until {
 const uploads = `
 	SELECT r.file_id, r.shipment_id, r.file_name AS what, r.uploaded_at,
 		IF(r.state IN ('refused', 'withdrawn'), 'refused-uploads', 'uploads') AS rule FROM logger_reads r
-	UNION ALL SELECT p.file_id, p.shipment_id, CONCAT('photograph, ', p.kind), p.taken_at, 'uploads' FROM photos p`;
+	UNION ALL SELECT p.file_id, p.shipment_id, CONCAT('photograph, ', p.kind), p.taken_at, 'uploads' FROM photos p
+	UNION ALL SELECT nf.file_id, n.shipment_id, 'file of a note', n.written_at, 'uploads'
+		FROM note_files nf JOIN notes n ON n.id = nf.note_id
+	UNION ALL SELECT a.driver_signature_id, a.shipment_id, 'signature of the driver', a.logged_at, 'people'
+		FROM arrivals a WHERE a.driver_signature_id IS NOT NULL
+	UNION ALL SELECT na.file_id, n.shipment_id, 'file of an answer', na.answered_at, 'uploads'
+		FROM notice_answers na JOIN notices n ON n.id = na.notice_id WHERE na.file_id IS NOT NULL
+	UNION ALL SELECT cf.file_id, c.shipment_id, 'paper of a claim', cf.attached_at, 'uploads'
+		FROM claim_files cf JOIN claims c ON c.id = cf.claim_id`;
 
 /** Uploads whose period ends before an instant, soonest first, held ones too. */
 export async function dueFiles(
@@ -46,7 +54,9 @@ export async function dueFiles(
 ): Promise<DueFile[]> {
 	const rows = await database().query<Omit<DueFile, 'isHeld'> & { isHeld: number }>(
 		`SELECT * FROM (SELECT f.id AS fileId, f.sha256, f.bytes, s.id AS shipmentId, s.number AS docket, u.what, u.rule,
-			IF(u.rule = 'uploads', ${beganAt} + INTERVAL :uploads MONTH, u.uploaded_at + INTERVAL :refused MONTH) AS dueAt,
+			CASE u.rule WHEN 'uploads' THEN ${beganAt} + INTERVAL :uploads MONTH
+				WHEN 'people' THEN ${beganAt} + INTERVAL :people MONTH
+				ELSE u.uploaded_at + INTERVAL :refused MONTH END AS dueAt,
 			${isHeld} AS isHeld
 		FROM (${uploads}) u JOIN files f ON f.id = u.file_id AND f.deleted_at IS NULL JOIN shipments s ON s.id = u.shipment_id
 		${fileId ? 'WHERE f.id = :fileId' : ''}) due WHERE dueAt < :before ORDER BY dueAt, docket, what`,
@@ -113,4 +123,24 @@ export async function dueEntries(
 			transaction
 		}
 	);
+}
+
+export interface DueDocket {
+	shipmentId: string;
+	docket: string;
+	dueAt: Date;
+	isHeld: boolean;
+}
+
+/** Dockets whose period for people ends before an instant, soonest first, held ones too. */
+export async function dueDockets(
+	{ periods, now, before }: Until,
+	transaction?: Transaction
+): Promise<DueDocket[]> {
+	const rows = await database().query<Omit<DueDocket, 'isHeld'> & { isHeld: number }>(
+		`SELECT * FROM (SELECT s.id AS shipmentId, s.number AS docket, ${beganAt} + INTERVAL :people MONTH AS dueAt,
+			${isHeld} AS isHeld FROM shipments s) due WHERE dueAt < :before ORDER BY dueAt, docket`,
+		{ replacements: { ...periods, now, before }, type: QueryTypes.SELECT, transaction }
+	);
+	return rows.map((row) => ({ ...row, dueAt: new Date(row.dueAt), isHeld: Boolean(Number(row.isHeld)) }));
 }

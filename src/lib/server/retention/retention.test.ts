@@ -1,3 +1,5 @@
+import { mkdir, readdir, utimes, writeFile } from 'node:fs/promises';
+import { join } from 'node:path';
 import { v7 as uuid } from 'uuid';
 import { beforeEach, describe, expect, it } from 'vitest';
 import {
@@ -11,15 +13,26 @@ import { useTestDatabase } from '../../../../tests/helpers/test-database';
 import { periodsOf, retentionForm, retentionRules } from '../../schemas/retention';
 import { verifyAllChains } from '../audit/verify';
 import { systemContext, type Context } from '../context';
+import { Arrival } from '../db/models/arrival';
 import { AuditEntry } from '../db/models/audit-entry';
 import { AuditPayload } from '../db/models/audit-payload';
+import { Calibration } from '../db/models/calibration';
 import { Claim } from '../db/models/claim';
 import { ClaimFile } from '../db/models/claim-file';
+import { Disposition } from '../db/models/disposition';
+import { Job } from '../db/models/job';
+import { Logger } from '../db/models/logger';
 import { LoggerRead } from '../db/models/logger-read';
+import { Note } from '../db/models/note';
+import { NoteFile } from '../db/models/note-file';
+import { Notice } from '../db/models/notice';
+import { NoticeAnswer } from '../db/models/notice-answer';
 import type { Shipment } from '../db/models/shipment';
 import type { Site } from '../db/models/site';
 import { StoredFile } from '../db/models/stored-file';
 import type { User } from '../db/models/user';
+import { env } from '../env';
+import { sha256Hex } from '../storage/sha256';
 import { inTransaction } from '../db/transaction';
 import { openRawFile } from '../reads/open-raw-file';
 import { fileStore, keepBytes } from '../storage/store';
@@ -94,6 +107,53 @@ async function oldDocket(changes: Partial<Shipment> = {}) {
 	return { shipment, file, read };
 }
 
+/** An old docket whose rows speak of a driver and of somebody who answered. */
+async function talkedOf() {
+	const old = await oldDocket();
+	const { shipment } = old;
+	const signature = await keepBytes(Buffer.from(`signature ${uuid()}`), 'image/png', decidedAt);
+	await Arrival.create({
+		...{ id: uuid(), shipmentId: shipment.id, arrivedAt: decidedAt, isSealIntact: true },
+		...{ sealFound: null, setPointCelsius: null, returnAirCelsius: null },
+		...{
+			driverName: 'Marek Ostrowid',
+			driverSignatureId: signature.id,
+			reservation: 'Signed by M. Ostrowid'
+		},
+		...{ loggedBy: dock.id, loggedAt: decidedAt }
+	});
+	const note = { id: uuid(), shipmentId: shipment.id, writtenBy: dock.id, writtenAt: decidedAt };
+	await Note.create({ ...note, text: 'The driver was ill.' });
+	const disposition = await Disposition.create({
+		...{ id: uuid(), shipmentId: shipment.id, version: 1, verdict: 'rejected', amendmentReason: null },
+		...{
+			meaning: 'approval',
+			signedBy: dock.id,
+			signedName: dock.name,
+			signedTitle: 'QA',
+			signedAt: decidedAt
+		},
+		...{ zone: 'UTC', frozen: '{}', frozenSha256: sha256Hex('{}'), reasons: '' }
+	});
+	const notice = await Notice.create({
+		...{ id: uuid(), number: uuid().slice(-12), shipmentId: shipment.id, dispositionId: disposition.id },
+		...{ partnerId: shipment.supplierId, contactId: null, state: 'sent', subject: 'x', createdAt: decidedAt },
+		...{ answerByAt: null, sentAt: decidedAt, messageId: null, firstOpenedAt: null }
+	});
+	await NoticeAnswer.create({
+		...{
+			id: uuid(),
+			noticeId: notice.id,
+			kind: 'dispute',
+			disputed: [],
+			whatIsWrong: 'Our logger reads cold.'
+		},
+		...{ who: 'Lucía Ferrán', answeredBy: 'lucia@example.test', answeredAt: decidedAt },
+		...{ doneByOn: null, fileId: null }
+	});
+	return { ...old, signature };
+}
+
 async function claimOn(shipment: Shipment, closedAt: Date | null): Promise<Claim> {
 	return Claim.create({
 		id: uuid(),
@@ -150,7 +210,71 @@ describe('retention', () => {
 	it('does nothing a second time', async () => {
 		await oldDocket();
 		await runRetention(afterPeople);
-		expect(await runRetention(afterPeople)).toEqual({ files: 0, entries: 0 });
+		const nothing = { files: 0, entries: 0, rows: 0, mails: 0, jobs: 0 };
+		expect(await runRetention(afterPeople)).toEqual(nothing);
+	});
+
+	it('empties notes, the driver’s name and signature and who answered, says so, and the chain verifies', async () => {
+		const { shipment, signature } = await talkedOf();
+		await runRetention(afterUploads);
+		expect((await Note.findOne({ where: { shipmentId: shipment.id } }))?.text).toBe('The driver was ill.');
+		expect(await isKept(signature.sha256)).toBe(true);
+		await runRetention(afterPeople);
+		expect((await Note.findOne({ where: { shipmentId: shipment.id } }))?.text).toBe('');
+		expect(await Arrival.findOne({ where: { shipmentId: shipment.id } })).toMatchObject({
+			driverName: null,
+			reservation: '',
+			isSealIntact: true
+		});
+		expect(await NoticeAnswer.findOne({ order: [['id', 'DESC']] })).toMatchObject({
+			who: '',
+			answeredBy: '',
+			kind: 'dispute',
+			whatIsWrong: 'Our logger reads cold.'
+		});
+		expect(await isKept(signature.sha256)).toBe(false);
+		const texts = await textsOf(shipment.id);
+		expect(texts.find((text) => text?.includes('"rows"'))).toContain('{"notes":1,"arrivals":1,"answers":1}');
+		expect((await verifyAllChains()).faults).toEqual([]);
+	});
+
+	it('takes files of notes and papers of ended claims with the other uploads', async () => {
+		const { shipment, file } = await oldDocket();
+		const letter = await keepBytes(Buffer.from(`letter ${uuid()}`), 'application/pdf', decidedAt);
+		const noteId = uuid();
+		const note = { id: noteId, shipmentId: shipment.id, text: 'x', writtenBy: dock.id, writtenAt: decidedAt };
+		await Note.create(note);
+		await NoteFile.create({ id: uuid(), noteId, fileId: letter.id, ordinal: 1, fileName: 'letter.pdf' });
+		const claim = await claimOn(shipment, null);
+		const paper = await keepBytes(Buffer.from(`invoice ${uuid()}`), 'application/pdf', decidedAt);
+		await ClaimFile.create({
+			...{ id: uuid(), claimId: claim.id, fileId: paper.id, fileName: 'i.pdf', what: 'invoice' },
+			...{ attachedBy: dock.id, attachedAt: decidedAt }
+		});
+		await runRetention(afterUploads);
+		for (const { sha256 } of [file, letter, paper]) expect(await isKept(sha256)).toBe(true);
+		await claim.update({ closedAt: decidedAt, status: 'settled' });
+		await runRetention(afterUploads);
+		for (const { sha256 } of [file, letter, paper]) expect(await isKept(sha256)).toBe(false);
+	});
+
+	it('takes mails of the stand-in and the orders of done work, and leaves what is younger or open', async () => {
+		const folder = env().mailFolder;
+		await mkdir(folder, { recursive: true });
+		for (const [name, at] of [
+			['old.eml', '2026-03-01T00:00:00Z'],
+			['young.eml', '2026-05-01T00:00:00Z']
+		] as const) {
+			await writeFile(join(folder, name), 'To: somebody@example.test');
+			await utimes(join(folder, name), new Date(at), new Date(at));
+		}
+		const job = { kind: 'mail', payload: '{}', dedupeKey: null, runAt: decidedAt, createdAt: decidedAt };
+		const open = await Job.create({ ...job, id: uuid() });
+		const done = await Job.create({ ...job, id: uuid(), doneAt: decidedAt });
+		const { mails, jobs } = await runRetention(afterPeople);
+		expect([mails, jobs]).toEqual([1, 1]);
+		expect(await readdir(folder)).toEqual(['young.eml']);
+		expect([await Job.findByPk(open.id), await Job.findByPk(done.id)]).toEqual([expect.anything(), null]);
 	});
 
 	it('leaves an open docket alone, however old', async () => {
@@ -233,17 +357,15 @@ describe('one file of several dockets', () => {
 		expect(await isKept(file.sha256)).toBe(true);
 	});
 
-	it('stays where something else names it too', async () => {
-		const { shipment, file } = await oldDocket();
-		const claim = await claimOn(shipment, decidedAt);
-		await ClaimFile.create({
-			id: uuid(),
-			claimId: claim.id,
-			fileId: file.id,
-			fileName: 'copy.csv',
-			what: 'copy',
-			attachedBy: dock.id,
-			attachedAt: decidedAt
+	it('stays where something that never goes names it too, such as a certificate of calibration', async () => {
+		const { file } = await oldDocket();
+		const logger = await Logger.create({
+			...{ id: uuid(), serial: uuid().slice(-8), kind: 'reusable', ownerId: null, accuracyCelsius: 0.5 },
+			...{ startDelayMinutes: 0, calibrationDueOn: null, note: '', createdAt: decidedAt, switchedOffAt: null }
+		});
+		await Calibration.create({
+			...{ id: uuid(), loggerId: logger.id, calibratedOn: '2026-01-01', dueOn: '2027-01-01' },
+			...{ certificateNumber: 'C-1', laboratory: 'Bench', errorCelsius: null, fileId: file.id }
 		});
 		await runRetention(afterPeople);
 		expect(await isKept(file.sha256)).toBe(true);

@@ -6,8 +6,10 @@ import { StoredFile } from '../db/models/stored-file';
 import { inTransaction, type Writing } from '../db/transaction';
 import { fileStore } from '../storage/store';
 import type { RetentionPeriods } from '../../schemas/retention';
-import { dueChains, dueEntries, dueFiles, type DueChain, type DueFile } from './due';
+import { dueChains, dueDockets, dueEntries, dueFiles, type DueChain, type DueFile } from './due';
+import { removeOldMail } from './old-mail';
 import { getPeriods } from './periods';
+import { countPersonal, emptyPersonal } from './personal-rows';
 import { countReferences } from './references';
 
 /** Locks the docket, so that a claim opened or a hold put at the same moment is seen or waits. */
@@ -74,8 +76,35 @@ async function blankChain(ctx: Context, due: DueChain, periods: RetentionPeriods
 	});
 }
 
-/** Takes away what has outlived its period and is not held: bytes of uploads, and what entries say of people. */
-export async function runRetention(ctx: Context): Promise<{ files: number; entries: number }> {
+/** Empties what a docket's own rows say of people; its trail says how many rows of each kind. */
+async function emptyDocket(ctx: Context, shipmentId: string, periods: RetentionPeriods): Promise<number> {
+	return inTransaction(ctx, async (w) => {
+		await lockShipment(shipmentId, w);
+		const due = await dueDockets({ periods, now: ctx.now, before: ctx.now }, w.transaction);
+		if (!due.some((one) => one.shipmentId === shipmentId && !one.isHeld)) return 0;
+		const rows = await countPersonal(shipmentId, w.transaction);
+		if (Object.keys(rows).length === 0) return 0;
+		await emptyPersonal(shipmentId, w.transaction);
+		const chain = { scope: 'shipment', id: shipmentId } as const;
+		w.record('retention.emptied', chain, { rows, rule: 'people', periodMonths: periods.people });
+		return Object.values(rows).reduce((sum, total) => sum + total, 0);
+	});
+}
+
+export interface Retained {
+	files: number;
+	entries: number;
+	/** Rows of dockets that were emptied of what they said of people. */
+	rows: number;
+	mails: number;
+	jobs: number;
+}
+
+/**
+ * Takes away what has outlived its period and is not held: bytes of files, what entries and rows say of people, mails
+ * and the orders that sent them. Signed records stay as they were signed.
+ */
+export async function runRetention(ctx: Context): Promise<Retained> {
 	const periods = await getPeriods();
 	const until = { periods, now: ctx.now, before: ctx.now };
 	let files = 0;
@@ -84,5 +113,9 @@ export async function runRetention(ctx: Context): Promise<{ files: number; entri
 	let entries = 0;
 	for (const chain of await dueChains(until))
 		if (!chain.isHeld) entries += await blankChain(ctx, chain, periods);
-	return { files, entries };
+	let rows = 0;
+	for (const { shipmentId, isHeld } of await dueDockets(until))
+		if (!isHeld && Object.keys(await countPersonal(shipmentId)).length > 0)
+			rows += await emptyDocket(ctx, shipmentId, periods);
+	return { files, entries, rows, ...(await removeOldMail(ctx.now, periods)) };
 }
