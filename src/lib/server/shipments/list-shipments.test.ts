@@ -72,3 +72,17 @@ describe('the list of dockets', () => {
 		await only({ from: 'nonsense', stage: 'nonsense', sort: 'supplier', q: 'no such thing' });
 	});
 });
+
+describe('a search in the list of dockets', () => {
+	it('finds a docket by its number, its supplier, its carrier and its lots, and takes a wildcard for a sign', async () => {
+		const { expected, numbers } = await setUp();
+		const { shipment, lines, supplier } = expected;
+		const all = (await numbers({})).length;
+		expect(await numbers({ q: shipment.number })).toEqual([shipment.number]);
+		expect(await numbers({ q: supplier.name })).toContain(shipment.number);
+		expect(await numbers({ q: lines[0]?.lot ?? 'no lot' })).toContain(shipment.number);
+		expect((await numbers({ q: supplier.name })).length).toBeLessThanOrEqual(all);
+		expect(await numbers({ q: '%' })).toEqual([]);
+		expect(await numbers({ q: 'nobody of that name' })).toEqual([]);
+	});
+});

@@ -47,6 +47,25 @@ function orderOf({ sort, dir }: ShipmentListQuery): Order {
 	];
 }
 
+/** A docket by its own words, by its supplier's or carrier's name, or by a lot. */
+async function matching(q: string): Promise<WhereOptions<Shipment>> {
+	const attributes = ['id'];
+	const partners = await Partner.findAll({ where: searchIn<Partner>(['name'], q), attributes });
+	const lines = await ShipmentLine.findAll({
+		where: searchIn<ShipmentLine>(['lot'], q),
+		attributes: ['shipmentId']
+	});
+	const partnerIds = partners.map(({ id }) => id);
+	return {
+		[Op.or]: [
+			searchIn<Shipment>(['number', 'title', 'vehicle', 'seal', 'purchaseOrder', 'billOfLading'], q),
+			{ supplierId: partnerIds },
+			{ carrierId: partnerIds },
+			{ id: lines.map(({ shipmentId }) => shipmentId) }
+		]
+	};
+}
+
 async function whereOf(query: ShipmentListQuery, site: Site): Promise<WhereOptions<Shipment>> {
 	const lines =
 		query.product === null
@@ -57,10 +76,7 @@ async function whereOf(query: ShipmentListQuery, site: Site): Promise<WhereOptio
 		[Op.and]: [
 			inStage(query.stage),
 			dueWithin(query, site),
-			searchIn<Shipment>(
-				['number', 'title', 'vehicle', 'seal', 'purchaseOrder', 'billOfLading'],
-				query.q
-			) as WhereOptions<Shipment>,
+			query.q === '' ? {} : await matching(query.q),
 			query.supplier ? { supplierId: query.supplier } : {},
 			query.carrier ? { carrierId: query.carrier } : {},
 			lines ? { id: { [Op.in]: lines.map((line) => line.shipmentId) } } : {}
