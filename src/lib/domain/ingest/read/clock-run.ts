@@ -43,11 +43,17 @@ function usualStep(times: Float64Array): number {
 	return usual;
 }
 
-/** True where time runs on without a step back or a leap: nearly all files. */
-function runsOn(times: Float64Array): boolean {
-	for (let i = 1; i < times.length; i++) {
-		const step = (times[i] ?? 0) - (times[i - 1] ?? 0);
-		if (step < 0 || step > msPerDay) return false;
+/** True where time runs on without a step against its way or a leap: nearly all files. Rows without a time are none. */
+function runsOn(ms: Float64Array, count: number): boolean {
+	let last = NaN;
+	let way = 0;
+	for (let i = 0; i < count; i++) {
+		const at = ms[i] ?? NaN;
+		if (at !== at) continue;
+		const step = at - last;
+		last = at;
+		if (step > 0 ? way < 0 || step > msPerDay : step < 0 && (way > 0 || step < -msPerDay)) return false;
+		if (way === 0 && step !== 0 && step === step) way = step;
 	}
 	return true;
 }
@@ -123,8 +129,8 @@ function told(axis: TimeAxis, more: readonly (Oddity | null)[]): readonly Oddity
  * where the clock fell back and ran on the dock is asked whether to keep what stood before or to join both.
  */
 export function settleClock(axis: TimeAxis, gathered: Gathered, context: ReadContext): AxisOrOpen {
+	if (runsOn(axis.ms, gathered.count)) return axis;
 	const whole = runOf(axis, gathered);
-	if (runsOn(whole.times)) return axis;
 	const run: Run = { ...whole, usualMs: usualStep(whole.times) };
 	const slips = slipsIn(run);
 	const slipped = [...slips].map((k) => run.rows[k] ?? 0);

@@ -57,9 +57,8 @@ function axisOddities({ axis, gathered, declared, stated }: Readable, series: Se
 	)
 		early.push(series.lines[i] ?? 0);
 	const badDays: number[] = [];
-	axis.ms.forEach((ms, i) => {
-		if (i < gathered.count && Number.isNaN(ms) && axis.setAside?.has(i) !== true) badDays.push(line(i));
-	});
+	for (let i = 0; i < gathered.count; i++)
+		if (Number.isNaN(axis.ms[i]) && axis.setAside?.has(i) !== true) badDays.push(line(i));
 	return [
 		oddityOf('bad-time', badDays),
 		oddityOf('zone-assumed', isAssumed ? first : [], axis.zone.zone),

@@ -16,12 +16,13 @@ const file = (zone: string): UsedZone => ({ zone, by: 'file' });
 /** Offsets that rows of the file carry themselves. */
 function offsetsIn({ times, count }: Gathered): { all: boolean; distinct: ReadonlySet<number> } {
 	const distinct = new Set<number>();
-	let withOffset = 0;
+	let [withOffset, last] = [0, noOffset];
 	for (let i = 0; i < count; i++) {
 		const offset = times.offsetMinutes[i] ?? noOffset;
 		if (offset === noOffset) continue;
 		withOffset++;
-		distinct.add(offset);
+		if (offset !== last) distinct.add(offset);
+		last = offset;
 	}
 	return { all: count > 0 && withOffset === count, distinct };
 }
