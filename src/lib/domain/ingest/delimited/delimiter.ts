@@ -81,6 +81,20 @@ function fitOf(lines: readonly string[], delimiter: Delimiter): Fit {
 	return best;
 }
 
+const commaFigure = /^\s*[-+\u2212]?\d{1,3},\d{1,4}\s*$/;
+
+/** Lines of one figure each, whose comma is the decimal sign: no head above them has a comma of its own. */
+function isDecimalComma(lines: readonly string[]): boolean {
+	const first = lines.findIndex((line) => commaFigure.test(line));
+	const head = lines.slice(0, Math.max(0, first)).at(-1) ?? '';
+	const figures = lines.filter((line) => commaFigure.test(line)).length;
+	const others = lines.filter((line) => /^[-+\d.,\s]+$/.test(line) && !commaFigure.test(line)).length;
+	const wholes = lines.filter((line) => commaFigure.test(line)).map((line) => parseInt(line, 10));
+	// 1,45 2,47 3,46: a count and a figure.
+	const isCount = wholes.every((n, i) => i === 0 || n === (wholes[i - 1] ?? 0) + 1);
+	return first >= 0 && !head.includes(',') && figures > 2 && others === 0 && !isCount;
+}
+
 /**
  * The delimiter under which most lines fall into a moment and values. Null where lines hold one cell each.
  * A delimiter that leaves words unexplained loses against one that explains them at equal score.
@@ -90,6 +104,6 @@ export function findDelimiter(lines: readonly string[]): Delimiter | null {
 	const best = fits.reduce((a, b) =>
 		b.score > a.score * 1.02 || (b.score >= a.score * 0.98 && b.texts < a.texts - 0.5) ? b : a
 	);
-	if (best.score === 0) return null;
+	if (best.score === 0 || (best.delimiter === ',' && isDecimalComma(lines))) return null;
 	return best.delimiter;
 }

@@ -41,7 +41,14 @@ function largestStep({ local }: Reading): number {
 /** A month against a few days passes easily. */
 const stepRatio = 5;
 
-function byContinuity(readings: readonly Reading[]): readonly Reading[] {
+/** There is no 31st of November. */
+function withFewestGaps(readings: readonly Reading[]): readonly Reading[] {
+	const lost = readings.map(({ local }) => local.reduce((rows, at) => rows + (Number.isNaN(at) ? 1 : 0), 0));
+	return readings.filter((_, i) => lost[i] === Math.min(...lost));
+}
+
+function byContinuity(all: readonly Reading[]): readonly Reading[] {
+	const readings = withFewestGaps(all);
 	const steps = readings.map(largestStep);
 	const least = Math.min(...steps);
 	return readings.filter((_, i) => (steps[i] ?? 0) <= Math.max(least * stepRatio, least + 2 * msPerDay));
