@@ -189,7 +189,7 @@ describe('other corrections', () => {
 		const pulp = (degrees: number) => [
 			{
 				...{ at: 0, degrees, lineId: lines[0]?.id ?? null, position: 'nose', caseLabel: null },
-				...{ unit: 'celsius' as const, instrument: null }
+				...{ unit: 'celsius' as const, instrument: null, isMeant: null }
 			}
 		];
 		const moves = async () => (await corrections()).filter(({ kind }) => kind === 'pulp');

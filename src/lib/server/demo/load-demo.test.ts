@@ -212,8 +212,8 @@ describe('the demo', () => {
 	it('has photographs, a split line that is held in part, and somebody qualified who is not the usual signer', async () => {
 		const hero = await getDocket(await as('qa@wharfinger.example'), 'PS-26-1184');
 		expect(hero.photos.map(({ kind }) => kind)).toEqual(['seal', 'set-point', 'damage']);
-		const split = await DispositionLine.findAll({ where: { outcome: 'hold' }, rejectOnEmpty: true });
-		const disposition = await Disposition.findByPk(split[0]?.dispositionId, { rejectOnEmpty: true });
+		const split = await DispositionLine.findOne({ where: { outcome: 'hold' }, rejectOnEmpty: true });
+		const disposition = await Disposition.findByPk(split.dispositionId, { rejectOnEmpty: true });
 		const shipment = await Shipment.findByPk(disposition.shipmentId, { rejectOnEmpty: true });
 		const docket = await getDocket(await as('qa@wharfinger.example'), shipment.number);
 		expect(docket.stage).toBe('done');

@@ -70,7 +70,7 @@ describe('a note with files', () => {
 			'note.file-attached',
 			'note.file-attached'
 		]);
-		const payload = await AuditPayload.findByPk(entries[1]?.id, { rejectOnEmpty: true });
+		const payload = await AuditPayload.findByPk(entries[1]?.id ?? '', { rejectOnEmpty: true });
 		expect(JSON.parse(payload.text ?? '')).toMatchObject({
 			fileSha256: sha256Hex(Buffer.from(csv.content)),
 			fileBytes: Buffer.from(csv.content).byteLength,
