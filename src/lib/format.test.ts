@@ -11,6 +11,7 @@ import {
 	inUnit,
 	lifeDays,
 	lifeHours,
+	lifeMonths,
 	minorUnitDigits,
 	money,
 	percent,
@@ -44,6 +45,18 @@ describe('figures', () => {
 		expect(percent(0.768, 1, 'en')).toBe('76.8');
 		expect(signed(2, 1, 'en')).toBe('+2.0');
 		expect(signed(-2, 1, 'en')).toBe('−2.0');
+	});
+
+	it.each([
+		[24 * 89, null],
+		// Twelfths of 365.25 days.
+		[24 * 182.625, '6 months'],
+		[24 * 456.5625, '15 months'],
+		[24 * 730.5, '24 months'],
+		[24 * 135, '4.5 months'],
+		[24 * 100, '3.5 months']
+	])('gives a long life in months beside its days: %d h are %s', (hours, months) => {
+		expect(lifeMonths(hours, 'en')).toBe(months);
 	});
 
 	it('gives life in days or hours with one decimal', () => {

@@ -83,6 +83,18 @@ export function lifeDays(hours: number, locale: string): string {
 	return decimal(hours / 24, 1, locale);
 }
 
+/** A twelfth of a year of 365.25 days. */
+const daysAMonth = 30.4375;
+const daysTellEnough = 90;
+
+/** "6 months", "4.5 months": how a long life is printed by its source; null of one that days tell well enough. */
+export function lifeMonths(hours: number, locale: string): string | null {
+	const days = hours / 24;
+	if (days < daysTellEnough) return null;
+	const months = Math.round((days / daysAMonth) * 2) / 2;
+	return `${decimal(months, Number.isInteger(months) ? 0 : 1, locale)} months`;
+}
+
 /** Life or over-use in hours at the reference temperature, one decimal. */
 export function lifeHours(hours: number, locale: string): string {
 	return decimal(hours, 1, locale);

@@ -30,14 +30,14 @@ afterEach(async () => {
 });
 
 function show(props: Partial<Props> = {}): void {
-	const given = {
+	const given: Props = {
 		bases: [basis],
 		lineId: 'a',
 		zone: 'UTC',
 		unit: 'celsius',
 		number: 8,
 		includes: null
-	} as const;
+	};
 	shown = mount(ForecastSection, { target: document.body, props: { ...given, ...props } });
 	flushSync();
 }
