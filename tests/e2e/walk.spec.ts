@@ -9,6 +9,7 @@ import { story } from './load-story';
 import { logArrival } from './log-arrival';
 import { linkInMail, openMail } from './mailbox';
 import { complaintsOf, expect, phone, signIn, test } from './people';
+import { reviewTrace } from './review-trace';
 import { downloaded, rejectAndSign } from './sign-docket';
 import { uploadAgain, uploadAndKeep } from './upload-export';
 
@@ -92,6 +93,7 @@ test('QA signs the refusal; a wrong password signs nothing', async ({ pageOf }) 
 		page.locator('#legs').getByRole('row', { name: new RegExp(story.supplier.name) })
 	).toBeVisible();
 
+	await reviewTrace(page, 100);
 	await rejectAndSign(page, docket);
 	const signature = page.locator('#signature');
 	await expect(signature).toContainText('Ruth Calloway');
