@@ -47,7 +47,8 @@ describe('what a trace was assessed from', () => {
 		const series = await getSeries(made.qa, made.row.id, seriesQuery.parse({}));
 		const left = again.fullLifeHours - again.openingHours.value - (again.series.usedHours[560] ?? 0);
 		expect(left).toBe(series.remainingHours?.[560]);
-		expect(again.remainingHours.low).toBe(series.remainingLowHours?.[560]);
+		// The total is added up by passage, the series by time: the last of sixteen digits may differ.
+		expect(again.remainingHours.low).toBeCloseTo(series.remainingLowHours?.[560] ?? NaN, 9);
 	});
 
 	it('tells before a trim is sent to the digit what it will make of the figure', async () => {
