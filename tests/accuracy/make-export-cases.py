@@ -123,6 +123,13 @@ for line in ["Clock: UTC+02:00", "Logger clock set to Europe/Berlin", "Uhrzeit i
     add(f"a zone said as {line}", [line, ""] + local(summer, 2), summer)
 add("the zone of an export's own moment", ["Exported: 30.04.2026 10:11 UTC+5", ""] + local(summer, 2), summer, site="Europe/Berlin", says=["zone-assumed"])
 
+add("the bracketed zone of an export's own moment", ["Printed 2026-04-30 10:00 (UTC+3) by office", ""] + local(summer, 2), summer, site="Europe/Berlin", says=["zone-assumed"])
+add("a zone in the row of units", ["Channel 1", "Time;Value", "UTC;°C"] + local(summer, 0)[1:], summer, site="Europe/Berlin", lacks=["zone-assumed"])
+for name in ["UTC±0", "UTC0", "GMT+0", "UTC +00:00"]:
+    add(f"a zone called {name}", [f"Time zone: {name}", ""] + local(summer, 0), summer, site="Europe/Berlin", lacks=["zone-assumed"])
+april = trace(8, D(2026, 4, 3, 6, tzinfo=UTC))
+add("days up to 12 beside a written end", ["Time;Temp °C"] + [f"{at:%d/%m/%Y %H:%M};{c(v)}" for at, v in april] + ["", "Finished;3 April 2026 07:10"], april)
+
 # Counts without a unit, and rows without times.
 t = trace(n=20)
 start, end = "Start: 14/03/2026 09:20:00", f"End: {t[-1][0]:%d/%m/%Y %H:%M:%S}"

@@ -13,7 +13,7 @@ const patterns: Readonly<Record<KeyMeaning, RegExp>> = {
 	trip: /\b(trip|shipment|consignment|reise|sendung|fahrt|bezeichnung|trajet|voyage|expedition|viaje|viagem|viaggio|spedizione|envio|rit|reis|zending|przesylka|podroz|description|title|lot name|order)\b/,
 	start:
 		/\b(start\w*|begin\w*|debut|inicio|inizio|aanvang\w*|poczatek|rozpoczecie|rozpoczecia|baslangic|activat(ed|ion)|aktivier\w*|activation|first (reading|record|log|logged|sample|measurement)|logged from|erste messung|premiere? (mesure|lecture)|from|von)\b/,
-	stop: /\b(stop\w*|end(ed|e|zeit|time|datum)?|fin|ende|fine|final|einde|koniec|zakonczenie|bitis|last (reading|record|log|logged|sample|measurement)|letzte messung|to|bis)\b/,
+	stop: /\b(stop\w*|finish(ed)?|complet(ed|ion)|terminat(ed|ion)|termine|abgeschlossen|end(ed|e|zeit|time|datum)?|fin|ende|fine|final|einde|koniec|zakonczenie|bitis|last (reading|record|log|logged|sample|measurement)|letzte messung|to|bis)\b/,
 	interval:
 		/\b(\w*interval\w*|intervalo|intervallo|interwal\w*|cadence|messtakt|takt|cycle|zyklus|sampling|sample (rate|period|every)|log(ging)? (rate|period|cycle|every)|rate|period(o|e|icidad)?|aufzeichnungsrate|messrate|czestotliwosc|aralik|araligi|every)\b/,
 	unit: /\b(unit|units|einheit|unite|unidad|unidade|unita|eenheid|jednostka|birim|scale|temperatureinheit|temperatureenheid|uom)\b/,

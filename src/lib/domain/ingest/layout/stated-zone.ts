@@ -36,7 +36,6 @@ const plainZone = /^\(?\s*(?:UTC|GMT)\s?[+\-−–]\s?\d{1,2}(?::?\d{2})?\s*\)?$
 /** Words that open a sentence about times: "All times in", "Zeiten in", "Heures en". */
 const sentence =
 	/\b(?:times?|timestamps?|zeiten|uhrzeiten|zeitangaben|heures|horas|orari|tijden|godziny)\b[^\n\d]{0,40}?(?:\b((?:UTC|GMT)(?:\s?[+\-−]\s?\d{1,2}(?::?\d{2})?)?)(?![\w/])|\b([A-Z][a-z]+\/[A-Z]\w+(?:\/\w+)?))/i;
-const bracketed = /\((?:UTC|GMT)\s?[+\-−]\s?\d{1,2}(?::?\d{2})?\)/;
 
 /** Letters that name no zone with certainty: one that has a season's sibling, or several meanings. */
 function lettersOf(text: string): string | null {
@@ -86,7 +85,7 @@ function zoneInText(entries: readonly Entry[], freeText: string): string | null 
 	for (const line of freeText.split('\n')) {
 		if (isTaken(line)) continue;
 		const match = sentence.exec(line);
-		const text = match?.[1] ?? match?.[2] ?? bracketed.exec(line)?.[0];
+		const text = match?.[1] ?? match?.[2];
 		if (text !== undefined) return text;
 		// The zone of a moment that stands in the line is that moment's.
 		const within = /(?:UTC|GMT)\s?[+\-−–]\s?\d{1,2}(?::?\d{2})?/.exec(line)?.[0] ?? ianaWithin(line);

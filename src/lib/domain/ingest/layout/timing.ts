@@ -247,8 +247,11 @@ export function columnsOf(timing: Timing): readonly number[] {
 /** The zone that the heads of the time's own columns name. */
 export function zoneOfTiming(columns: readonly Column[], timing: Timing): StatedZone {
 	for (const index of columnsOf(timing)) {
-		const head = zoneOfHead(columns.find((column) => column.index === index)?.name ?? '');
-		if (head.zone !== null || head.word !== null) return head;
+		const column = columns.find((one) => one.index === index);
+		for (const text of [column?.name ?? '', column?.unitText ?? '']) {
+			const head = zoneOfHead(text);
+			if (head.zone !== null || head.word !== null) return head;
+		}
 	}
 	return { zone: null, word: null };
 }

@@ -17,6 +17,7 @@ export function fixedOffsetOf(text: string): number | null {
 	const bare = text.trim();
 	const word = offsetOfWord(bare.replace(/^\((.*)\)$/, '$1'));
 	if (word !== null) return word;
+	if (/^(?:utc|gmt)\s*±?\s*0{1,2}(?::?00)?$/i.test(bare)) return 0;
 	const match = offsetPattern.exec(bare);
 	if (match === null) return null;
 	const minutes = Number(match[2]) * 60 + Number(match[3] ?? 0);
