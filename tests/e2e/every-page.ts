@@ -17,6 +17,7 @@ export interface Found {
 	product: string;
 	site: string;
 	logger: string;
+	lane: string;
 	user: string;
 	mail: string;
 	claim: string;
@@ -76,6 +77,9 @@ export const places: readonly Place[] = [
 	{ name: 'remembered layouts', as: 'qa', path: '/settings/layouts' },
 	{ name: 'a logger', as: 'admin', path: ({ logger }) => logger },
 	{ name: 'a new logger', as: 'admin', path: '/settings/loggers/new' },
+	{ name: 'lanes', as: 'admin', path: '/settings/lanes' },
+	{ name: 'a lane', as: 'admin', path: ({ lane }) => lane },
+	{ name: 'a new lane', as: 'admin', path: '/settings/lanes/new' },
 	{ name: 'the certificate', as: 'admin', path: '/settings/certificate' },
 	{ name: 'retention', as: 'admin', path: '/settings/retention' },
 	{ name: 'rules of signing', as: 'admin', path: '/settings/signing' },
@@ -130,6 +134,7 @@ async function find(admin: Page, qa: Page, supplier: Page): Promise<Found> {
 		product: await firstOf(admin, '/specs', single('/specs')),
 		site: await firstOf(admin, '/settings/sites', single('/settings/sites')),
 		logger: await firstOf(admin, '/settings/loggers', single('/settings/loggers')),
+		lane: await firstOf(admin, '/settings/lanes', single('/settings/lanes')),
 		user: await firstOf(admin, '/settings/users', single('/settings/users')),
 		mail: await firstOf(admin, '/mailbox', single('/mailbox')),
 		claim: await firstOf(qa, '/claims', single('/claims')),

@@ -13,6 +13,7 @@ export const auditSubjects = [
 	'product',
 	'spec',
 	'logger',
+	'lane',
 	'shipment',
 	'arrival',
 	'pulp',

@@ -6,7 +6,8 @@ describe('an audit entry in words', () => {
 	it('says what happened, also to a docket and to what it does not know', () => {
 		expect(auditText('account.switched-off', '{}')).toBe('Account switched off');
 		expect(auditText('hold.put', '{"reason":"x"}')).toBe('Put on hold');
-		expect(auditText('lane.saved', null)).toBe('lane saved');
+		expect(auditText('lane.saved', '{}')).toBe('Lane saved');
+		expect(auditText('crane.saved', null)).toBe('crane saved');
 	});
 
 	it('names every subject its filter offers', () => {

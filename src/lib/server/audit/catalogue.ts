@@ -48,6 +48,7 @@ export interface EventData {
 		before: Record<string, unknown> | null;
 		after: Record<string, unknown>;
 	};
+	'lane.saved': { laneId: string; before: Record<string, unknown> | null; after: Record<string, unknown> };
 	'shipment.created': { number: string; by: 'hand' | 'import' | 'seed' };
 	'shipment.changed': {
 		before: Record<string, unknown>;

@@ -3,6 +3,7 @@ import { msPerMinute } from '../../domain/units';
 import { NumberSeries } from '../db/models/number-series';
 import { Setting } from '../db/models/setting';
 import { enterLoggers, loggers } from './cast/loggers';
+import { enterLanes } from './cast/enter-lanes';
 import { enterPartners } from './cast/enter-partners';
 import { enterProducts } from './cast/enter-products';
 import { openSites } from './cast/open-sites';
@@ -46,6 +47,7 @@ async function enterCast(anchor: Date): Promise<World> {
 	const partnerIds = await enterPartners(ctx);
 	await staff.addOutsiders(partnerIds);
 	await enterLoggers(ctx, anchor);
+	await enterLanes(ctx, staff.siteIds, partnerIds);
 	return { ...half, partnerIds, productIds: await enterProducts(ctx) };
 }
 
