@@ -211,6 +211,8 @@ export interface DocketView {
 	dock: string | null;
 	supplier: PartyView;
 	carrier: PartyView | null;
+	/** The name of its lane, where it is on one. */
+	lane?: string;
 	mode: 'road' | 'sea' | 'air' | 'rail';
 	vehicle: string | null;
 	seal: string | null;

@@ -121,6 +121,7 @@ export const shipmentInput = z.object({
 	title: optionalText(200),
 	supplierId: z.uuid({ error: 'Choose the supplier.' }),
 	carrierId: optionalId,
+	laneId: optionalId,
 	purchaseOrder: optionalText(60),
 	billOfLading: optionalText(60),
 	mode: z.enum(modes, { error: 'Road, sea, air or rail.' }).default('road'),

@@ -57,6 +57,7 @@ export async function docketView(
 		dock: shipment.dock,
 		supplier,
 		carrier: partyView(rows, shipment.carrierId),
+		lane: rows.lane?.name,
 		mode: shipment.mode,
 		vehicle: shipment.vehicle,
 		seal: shipment.seal,

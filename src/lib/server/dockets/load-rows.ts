@@ -8,6 +8,7 @@ import { Disposition } from '../db/models/disposition';
 import { DispositionLine } from '../db/models/disposition-line';
 import { Handover } from '../db/models/handover';
 import { Hold } from '../db/models/hold';
+import { Lane } from '../db/models/lane';
 import { LineRecommendation } from '../db/models/line-recommendation';
 import { Logger } from '../db/models/logger';
 import { LoggerRead } from '../db/models/logger-read';
@@ -137,6 +138,7 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 			}),
 			User.findAll({ ...byId('id', userIds), attributes: ['id', 'name'] })
 		]);
+	const lane = shipment.laneId ? await Lane.findByPk(shipment.laneId, { transaction }) : null;
 	const calibrations = await Calibration.findAll({
 		where: { loggerId: loggers.map((row) => row.id) },
 		transaction,
@@ -145,6 +147,7 @@ export async function loadDocketRows(shipment: Shipment, transaction?: Transacti
 	return {
 		shipment,
 		site,
+		lane,
 		partners,
 		lines,
 		products,

@@ -80,7 +80,7 @@ export async function changeShipment(
 	authorizeShipment(ctx, 'shipment.change', seen);
 	refuseClosed(seen);
 	await refuseStrangeRows(seen.id, input);
-	const prepared = await preparePapers(await getOwnSite(ctx, seen.siteId), input);
+	const prepared = await preparePapers(await getOwnSite(ctx, seen.siteId), input, seen.laneId);
 	const rows = docketRows(prepared, seen.id);
 	const [clockId, moveId] = [uuid(), uuid()];
 

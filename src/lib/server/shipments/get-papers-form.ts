@@ -10,6 +10,7 @@ import { Product } from '../db/models/product';
 import { Shipment } from '../db/models/shipment';
 import { ShipmentLine } from '../db/models/shipment-line';
 import type { Site } from '../db/models/site';
+import { listLaneChoices } from '../lanes/list-lanes';
 import { authorize, authorizeShipment } from '../policies';
 import { refuseClosed } from './lock-docket';
 import { getOwnSite } from './own-site';
@@ -18,8 +19,8 @@ import { typedTime } from './site-time';
 /** What the form of the papers offers to choose from. */
 export type PapersChoices = Awaited<ReturnType<typeof getPapersChoices>>;
 
-/** Suppliers, carriers and products in use, and what the site brings. */
-export async function getPapersChoices(ctx: Context, siteId: string) {
+/** Suppliers, carriers, lanes and products in use, and what the site brings. */
+export async function getPapersChoices(ctx: Context, siteId: string, ownLaneId: string | null = null) {
 	authorize(ctx, 'shipment.create');
 	const site = await getOwnSite(ctx, siteId);
 	const [partners, products] = await Promise.all([
@@ -30,6 +31,7 @@ export async function getPapersChoices(ctx: Context, siteId: string) {
 	return {
 		suppliers: named(partners.filter((partner) => partner.isSupplier)),
 		carriers: named(partners.filter((partner) => partner.isCarrier)),
+		lanes: await listLaneChoices(ctx, site.id, ownLaneId),
 		partners: named(partners),
 		products: named(products),
 		docks: docksOf(site),
@@ -88,7 +90,7 @@ export async function getPapersForm(ctx: Context, number: string) {
 	const site = await getOwnSite(ctx, shipment.siteId);
 	return {
 		...{ number, title: shipment.title, hasArrived: shipment.arrivedAt !== null },
-		choices: await getPapersChoices(ctx, site.id),
+		choices: await getPapersChoices(ctx, site.id, shipment.laneId),
 		// Plain text and numbers: dates and the like have been turned into what fields hold.
 		values: JSON.parse(JSON.stringify(await valuesOf(shipment, site))) as Record<string, unknown>
 	};

@@ -6,6 +6,7 @@ import { Logger } from '../db/models/logger';
 import { Partner } from '../db/models/partner';
 import { Product } from '../db/models/product';
 import type { Site } from '../db/models/site';
+import { laneFault } from './lane-fault';
 import { refuseFaults } from './invalid-fields';
 import { siteTime } from './site-time';
 
@@ -147,14 +148,19 @@ function checkSerials(rows: readonly LoggerInput[], issues: Issues): void {
 	}
 }
 
-/** Checks the papers against the records and turns local times into instants. @throws InvalidFields */
-export async function preparePapers(site: Site, input: ShipmentInput) {
+/**
+ * Checks the papers against the records and turns local times into instants. The lane a docket is on already stays
+ * its own, also when it has been switched off since. @throws InvalidFields
+ */
+export async function preparePapers(site: Site, input: ShipmentInput, ownLaneId: string | null = null) {
 	const known = await findKnown(input);
 	const issues: Issues = {};
 	const instantOf = instants(site.zone, issues);
 	if (!known.partners.get(input.supplierId)?.isSupplier) issues.supplierId = 'There is no such supplier.';
 	if (input.carrierId !== null && !known.partners.get(input.carrierId)?.isCarrier)
 		issues.carrierId = 'There is no such carrier.';
+	const faultOfLane = await laneFault(site, input, ownLaneId);
+	if (faultOfLane) issues.laneId = faultOfLane;
 
 	const dueAt = instantOf(input.due, 'due');
 	const lines = input.lines.map((row) => prepareLine(row, site, known, instantOf, issues));
@@ -180,11 +186,11 @@ export async function preparePapers(site: Site, input: ShipmentInput) {
 	refuseFaults(issues);
 
 	const first = lines[0]?.description ?? '';
-	const { purchaseOrder, billOfLading, mode, vehicle, seal, dock, supplierId, carrierId } = input;
+	const { purchaseOrder, billOfLading, mode, vehicle, seal, dock, supplierId, carrierId, laneId } = input;
 	return {
 		papers: {
 			title: input.title ?? (lines.length > 1 ? `${first}, ${lines.length} lots` : first),
-			...{ supplierId, carrierId, purchaseOrder, billOfLading, mode, vehicle, seal, dock, dueAt },
+			...{ supplierId, carrierId, laneId, purchaseOrder, billOfLading, mode, vehicle, seal, dock, dueAt },
 			termsOfSale: input.termsOfSale,
 			rejectWithinHours: input.rejectWithinHours,
 			rejectBasis: input.rejectBasis
