@@ -140,8 +140,11 @@ describe('a copy of a docket', () => {
 	});
 
 	it('holds the files of notes byte for byte, named in its records and in the trail by hash', () => {
-		expect(textOf('notes/1-letter_1_.pdf')).toBe(letter);
-		expect(JSON.parse(textOf('records.json')).note_files).toMatchObject([{ file_name: 'letter (1).pdf' }]);
+		const kept = Object.keys(files).filter((name) => /^notes\/\d+-letter_1_\.pdf$/.test(name));
+		expect(kept.map(textOf)).toEqual([letter]);
+		expect(JSON.parse(textOf('records.json')).note_files).toContainEqual(
+			expect.objectContaining({ file_name: 'letter (1).pdf' })
+		);
 		expect(textOf('audit/entries.jsonl')).toContain(sha256Hex(letter));
 	});
 
@@ -163,8 +166,8 @@ describe('a copy of a docket', () => {
 	});
 
 	it('defuses formulas in its CSV, and spoils no figure', () => {
-		const [note] = parse(textOf('records/notes.csv'), { columns: true });
-		expect(note).toMatchObject({ text: `'=HYPERLINK("http://a.example")` });
+		const notes = parse(textOf('records/notes.csv'), { columns: true });
+		expect(notes).toContainEqual(expect.objectContaining({ text: `'=HYPERLINK("http://a.example")` }));
 		const csv = recordsCsv([{ a: -1.5, b: '-12.50', c: '-x', d: null, e: '+1', f: 'a,"b"' }]);
 		expect(csv).toBe(`a,b,c,d,e,f\r\n-1.5,-12.50,'-x,,'+1,"a,""b"""\r\n`);
 	});
