@@ -64,6 +64,7 @@ export interface ReadRowView {
 export interface LoggerChoice {
 	serial: string;
 	lineId: string | null;
+	compartment: string | null;
 	position: string | null;
 	placement: Placement;
 	accuracyCelsius: number | null;
@@ -77,6 +78,8 @@ export interface ReadView extends ReadRowView {
 	/** Other dockets in sight that hold the same bytes. */
 	alsoOn: string[];
 	lines: { id: string; ordinal: number; product: string; lot: string }[];
+	/** Names of the chambers the docket speaks of. */
+	compartments: string[];
 	expected: LoggerChoice[];
 	/** What is filled in for the reader to confirm. */
 	proposed: LoggerChoice;
@@ -119,6 +122,11 @@ export const keepForm = z.object({
 			.default('')
 			.transform((id) => id || null)
 	),
+	/** Not sent: where the papers have it. Empty: in none, so it speaks for lines that are in none. */
+	compartment: z
+		.union([z.string().trim().max(40, 'Keep it to 40 characters.'), z.null()])
+		.transform((name) => name || null)
+		.optional(),
 	position: fromJson(optionalText(120)).transform((text) => text || null),
 	placement: z.enum(placements, 'Choose where the sensor rode.'),
 	accuracyCelsius: fromJson(decimalField(notAnAccuracy, { min: 0.01, max: 5 }))

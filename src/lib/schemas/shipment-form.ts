@@ -65,6 +65,8 @@ const line = z
 		),
 		bestBeforeOn: optionalDay,
 		neededDays: optionalNumber(0, 3650, 'days'),
+		/** Equal names are one chamber of the load; none is the load's own. */
+		compartment: optionalText(40),
 		openingKind: z
 			.enum(openingKinds, { error: 'Declared, worked out, or not declared.' })
 			.default('undeclared'),
@@ -110,6 +112,8 @@ const expectedLogger = z.object({
 	serial: text(60, 'The serial as it stands on the logger.'),
 	/** The line it rides with, counted from 1 as on the papers. */
 	line: optionalCount(200),
+	/** The chamber whose lines it speaks for, where it rides with no line. */
+	compartment: optionalText(40),
 	position: optionalText(120),
 	placement: z.enum(placements, { error: 'Where does it ride?' }).default('air')
 });

@@ -85,7 +85,12 @@ export interface EventData {
 	'layout.applied': { layoutId: string; readId: string };
 	'layout.forgotten': { layoutId: string; reason: string };
 	'read.withdrawn': { readId: string; reason: string };
-	'logger.assigned': { traceId: string; serial: string; lineId: string | null };
+	'logger.assigned': {
+		traceId: string;
+		serial: string;
+		lineId: string | null;
+		compartmentId?: string | null;
+	};
 	'trim.made': { traceId: string; fromAt: string; toAt: string; reason: string };
 	'trim.undone': { trimId: string };
 	'clock.corrected': { readId: string; shiftMs: number; reason: string };

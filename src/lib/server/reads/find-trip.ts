@@ -4,10 +4,12 @@ import { organisationChain } from '../catalogue/organisation-chain';
 import type { Context } from '../context';
 import { Logger } from '../db/models/logger';
 import { LoggerTrip } from '../db/models/logger-trip';
+import type { Shipment } from '../db/models/shipment';
 import { ShipmentLine } from '../db/models/shipment-line';
 import { TraceRow } from '../db/models/trace-row';
 import type { Writing } from '../db/transaction';
 import { Refusal } from '../refusals';
+import { compartmentIdOf } from '../shipments/compartments';
 
 /** The register's entry of a serial; one that is not on it is put there with the accuracy given. */
 async function loggerOf(ctx: Context, form: KeepForm, w: Writing): Promise<Logger> {
@@ -42,17 +44,19 @@ function loggerEntry({ id, serial, accuracyCelsius }: Logger) {
 /** The logger's trip on this docket, found: the expected one, or a new one. @throws Refusal `invalid`, `in-use` */
 export async function tripFound(
 	ctx: Context,
-	shipmentId: string,
+	shipment: Shipment,
 	form: KeepForm,
 	w: Writing
 ): Promise<LoggerTrip> {
 	const { transaction } = w;
+	const shipmentId = shipment.id;
 	await checkLine(shipmentId, form.lineId, w);
 	const logger = await loggerOf(ctx, form, w);
 	const where = { shipmentId, serial: form.serial };
 	const facts = {
 		loggerId: logger.id,
 		lineId: form.lineId,
+		...(await compartmentOf(shipment, form, w)),
 		position: form.position,
 		placement: form.placement,
 		status: 'found' as const
@@ -67,6 +71,17 @@ export async function tripFound(
 	if (hasTrace > 0)
 		throw new Refusal('in-use', 'Another read of this logger has been kept. QA can withdraw that one first.');
 	return expected.update(facts, { transaction });
+}
+
+/** A logger with a line is where its line is, so only one without is put somewhere. */
+async function compartmentOf(
+	shipment: Shipment,
+	{ compartment, lineId }: KeepForm,
+	{ transaction }: Writing
+) {
+	if (compartment === undefined) return {};
+	const name = lineId === null ? compartment : null;
+	return { compartmentId: await compartmentIdOf(shipment, name, transaction) };
 }
 
 async function checkLine(shipmentId: string, lineId: string | null, { transaction }: Writing): Promise<void> {

@@ -1,5 +1,6 @@
 import type { LoggerChoice, ReadView } from '../../schemas/read';
 import type { Context } from '../context';
+import type { Compartment } from '../db/models/compartment';
 import { Logger } from '../db/models/logger';
 import { LoggerTrip } from '../db/models/logger-trip';
 import { Partner } from '../db/models/partner';
@@ -9,6 +10,7 @@ import { ShipmentLine } from '../db/models/shipment-line';
 import { Site } from '../db/models/site';
 import { TraceRow } from '../db/models/trace-row';
 import { layoutViews } from '../layouts/views';
+import { listCompartments } from '../shipments/compartments';
 import { clockCorrectionsOf } from '../traces/clock-views';
 import { getReadFor, isSigned } from './find-read';
 import { parseUnderstanding } from './stored-understanding';
@@ -24,7 +26,8 @@ export async function getRead(ctx: Context, readId: string): Promise<ReadView> {
 		attributes: ['id', 'tripId'],
 		order: ['ordinal']
 	});
-	const expected = await expectedLoggers(shipment.id);
+	const chambers = await listCompartments(shipment);
+	const expected = await expectedLoggers(shipment.id, chambers);
 	const tripId = traces.find((trace) => trace.tripId)?.tripId;
 	const layout = read.layoutId ? await RememberedLayout.findByPk(read.layoutId) : null;
 	const [remembered = null] = await layoutViews(layout ? [layout] : []);
@@ -38,6 +41,7 @@ export async function getRead(ctx: Context, readId: string): Promise<ReadView> {
 		ingestion: parseUnderstanding(read.understanding),
 		alsoOn: await alsoOnDockets(ctx, read),
 		lines: await linesOf(shipment.id),
+		compartments: chambers.map(({ name }) => name),
 		expected: expected.map(({ choice }) => choice),
 		proposed: await proposedLogger(row.serial, tripId ?? null, expected),
 		traceIds: traces.map(({ id }) => id),
@@ -51,12 +55,13 @@ interface Expected {
 	choice: LoggerChoice;
 }
 
-async function expectedLoggers(shipmentId: string): Promise<Expected[]> {
+async function expectedLoggers(shipmentId: string, chambers: readonly Compartment[]): Promise<Expected[]> {
 	const trips = await LoggerTrip.findAll({ where: { shipmentId }, order: ['ordinal'] });
 	const found: Expected[] = [];
-	for (const { id, status, serial, lineId, position, placement } of trips) {
+	for (const { id, status, serial, lineId, compartmentId, position, placement } of trips) {
 		const accuracyCelsius = await accuracyOf(serial);
-		const choice = { serial, lineId, position, placement, accuracyCelsius };
+		const compartment = chambers.find((chamber) => chamber.id === compartmentId)?.name ?? null;
+		const choice = { serial, lineId, compartment, position, placement, accuracyCelsius };
 		found.push({ tripId: id, isOpen: status !== 'found', choice });
 	}
 	return found;
@@ -79,7 +84,8 @@ async function proposedLogger(
 	const found = own ?? named ?? only;
 	if (found) return found.choice;
 	const accuracyCelsius = serial === null ? null : await accuracyOf(serial);
-	return { serial: serial ?? '', lineId: null, position: null, placement: 'between-cases', accuracyCelsius };
+	const nowhere = { lineId: null, compartment: null, position: null };
+	return { serial: serial ?? '', ...nowhere, placement: 'between-cases', accuracyCelsius };
 }
 
 async function linesOf(shipmentId: string): Promise<ReadView['lines']> {

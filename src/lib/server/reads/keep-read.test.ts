@@ -4,10 +4,11 @@ import { buildShipment, buildSite, buildUser, contextFor } from '../../../../tes
 import { exportText, multipart } from '../../../../tests/helpers/upload';
 import { useTestDatabase } from '../../../../tests/helpers/test-database';
 import { unpackTrace } from '../../domain/trace/pack';
-import type { KeepForm } from '../../schemas/read';
+import { keepForm as sentForm, type KeepForm } from '../../schemas/read';
 import type { Context } from '../context';
 import { AssessmentRow } from '../db/models/assessment-row';
 import { AuditEntry } from '../db/models/audit-entry';
+import { Compartment } from '../db/models/compartment';
 import { Logger } from '../db/models/logger';
 import { LoggerRead } from '../db/models/logger-read';
 import { LoggerTrip } from '../db/models/logger-trip';
@@ -113,6 +114,45 @@ describe('keeping a read', () => {
 		await keepRead(dock, readId, keepForm({ serial: 'WH-EXP' }));
 		expect((await expected.reload()).status).toBe('found');
 		expect(await LoggerTrip.count({ where: { shipmentId: shipment.id } })).toBe(1);
+	});
+
+	it('leaves a logger in the compartment of the papers, unless the dock found it in another', async () => {
+		const { dock, shipment, lines } = await scene();
+		const rear = uuid();
+		const airs = { setPointCelsius: null, supplyAirCelsius: null, returnAirCelsius: null };
+		await Compartment.create({ id: rear, visitId: null, shipmentId: shipment.id, name: 'rear', ...airs });
+		await lines[0]?.update({ compartmentId: rear });
+		const place = { shipmentId: shipment.id, loggerId: null, lineId: null, compartmentId: rear };
+		for (const [at, serial] of ['WH-RR', 'WH-FF', 'WH-NN', 'WH-LL'].entries())
+			await LoggerTrip.create({
+				...{ id: uuid(), serial, ...place, ordinal: at + 1 },
+				...{ palletId: null, position: null, placement: 'air', status: 'expected' }
+			});
+		const keep = async (serial: string, celsius: number, more: Partial<KeepForm> = {}) => {
+			const readId = await upload(dock, shipment.number, exportText({ celsius }));
+			expect(await getRead(dock, readId)).toMatchObject({ compartments: expect.arrayContaining(['rear']) });
+			await keepRead(dock, readId, keepForm({ serial, ...more }));
+			return (await LoggerTrip.findOne({ where: { shipmentId: shipment.id, serial } }))?.compartmentId;
+		};
+		expect(await keep('WH-RR', 3)).toBe(rear);
+		expect(await keep('WH-FF', 4, { compartment: 'front' })).not.toBe(rear);
+		expect(await keep('WH-NN', 5, { compartment: null })).toBeNull();
+		// With a line, it is where its line is.
+		const lineId = lines[0]?.id ?? null;
+		expect(await keep('WH-LL', 6, { compartment: 'front', lineId })).toBeNull();
+		// Its own logger before those of its compartment, and never those of the front.
+		const rows = await AssessmentRow.findAll({ where: { shipmentId: shipment.id, isCurrent: true } });
+		expect(rows).toHaveLength(1);
+	});
+
+	it.each([
+		[{}, undefined],
+		[{ compartment: '' }, null],
+		[{ compartment: null }, null],
+		[{ compartment: ' rear ' }, 'rear']
+	])('takes the compartment of a form as it was sent: %o', (sent, expected) => {
+		const parsed = sentForm.parse({ serial: 'WH-1', placement: 'air', ...sent });
+		expect(parsed.compartment).toBe(expected);
 	});
 
 	it('keeps once however often it is asked, also at the same time', async () => {

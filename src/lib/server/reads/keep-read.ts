@@ -39,14 +39,15 @@ export async function keepRead(ctx: Context, readId: string, form: KeepForm): Pr
 		const fresh = await LoggerRead.findByPk(readId, { transaction });
 		if (fresh?.keptAt) return;
 		if (fresh?.understanding !== read.understanding) throw new Refusal('changed-meanwhile');
-		const trip = await tripFound(ctx, shipment.id, form, w);
+		const trip = await tripFound(ctx, shipment, form, w);
 		const kept = { readId, shipmentId: shipment.id, tripId: trip.id };
 		await writeTraces(kept, traces, ids, transaction);
 		await fresh.update({ keptAt: ctx.now }, { transaction });
 		const chain = { scope: 'shipment', id: shipment.id } as const;
 		record('read.kept', chain, { readId, traceIds: ids, readings: understood.readings });
 		const assessed = ids[traces.findIndex(({ isChosen }) => isChosen)] ?? '';
-		record('logger.assigned', chain, { traceId: assessed, serial: form.serial, lineId: form.lineId });
+		const { serial, lineId, compartmentId } = trip;
+		record('logger.assigned', chain, { traceId: assessed, serial, lineId, compartmentId });
 		await reassess(w, ctx, shipment.id);
 	});
 }

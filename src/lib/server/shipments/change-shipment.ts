@@ -13,6 +13,7 @@ import { inTransaction, type Writing } from '../db/transaction';
 import { authorizeShipment } from '../policies';
 import { Refusal } from '../refusals';
 import type { DocketName } from './create-shipment';
+import { inCompartments } from './compartments';
 import { docketRows, type DocketRows } from './docket-rows';
 import { lockDocket, refuseClosed } from './lock-docket';
 import { getOwnSite } from './own-site';
@@ -40,8 +41,8 @@ async function refuseStrangeRows(shipmentId: string, input: ShipmentChange): Pro
 }
 
 /** Lines go last and come first: loggers and pallets hang on them. */
-async function writeRows(shipmentId: string, rows: DocketRows, { transaction }: Writing): Promise<void> {
-	const where = { shipmentId };
+async function writeRows(shipment: Shipment, rows: DocketRows, { transaction }: Writing): Promise<void> {
+	const where = { shipmentId: shipment.id };
 	await removeRows(LoggerTrip, where, rows.trips, transaction);
 	for (const line of await ShipmentLine.findAll({ where, transaction })) {
 		const pallets = await Pallet.findAll({ where: { lineId: line.id }, order: ['ordinal'], transaction });
@@ -53,7 +54,12 @@ async function writeRows(shipmentId: string, rows: DocketRows, { transaction }: 
 	await removeRows(ShipmentLine, where, rows.lines, transaction);
 	await removeRows(Handover, where, rows.handovers, transaction);
 
-	await replaceRows(ShipmentLine, where, rows.lines, transaction);
+	await replaceRows(
+		ShipmentLine,
+		where,
+		await inCompartments(shipment, rows.lines, transaction),
+		transaction
+	);
 	for (const line of rows.lines) {
 		const wanted = rows.pallets.filter((pallet) => pallet.lineId === line.id);
 		await replaceRows(Pallet, { lineId: line.id }, wanted, transaction);
@@ -64,7 +70,7 @@ async function writeRows(shipmentId: string, rows: DocketRows, { transaction }: 
 		...trip,
 		status: found.find((known) => known.id === trip.id)?.status ?? trip.status
 	}));
-	await replaceRows(LoggerTrip, where, trips, transaction);
+	await replaceRows(LoggerTrip, where, await inCompartments(shipment, trips, transaction), transaction);
 }
 
 /**
@@ -91,7 +97,7 @@ export async function changeShipment(
 		if (shipment.version !== input.version) throw changedMeanwhile();
 		const before = await papersSnapshot(shipment.id, transaction);
 		await shipment.update({ ...prepared.papers, version: shipment.version + 1 }, { transaction });
-		await writeRows(shipment.id, rows, w);
+		await writeRows(shipment, rows, w);
 		await setRejectClock(shipment, clockId, transaction);
 		const changes = differences(before, await papersSnapshot(shipment.id, transaction));
 		w.record(

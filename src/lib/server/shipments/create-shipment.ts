@@ -9,6 +9,7 @@ import { ShipmentLine } from '../db/models/shipment-line';
 import { inTransaction } from '../db/transaction';
 import { authorize } from '../policies';
 import { Refusal } from '../refusals';
+import { inCompartments } from './compartments';
 import { docketRows, type DocketRows } from './docket-rows';
 import { nextNumber } from '../sites/next-number';
 import { getOwnSite } from './own-site';
@@ -21,11 +22,12 @@ export interface DocketName {
 	number: string;
 }
 
-async function insertRows(rows: DocketRows, transaction: Transaction): Promise<void> {
-	await ShipmentLine.bulkCreate(rows.lines, { transaction });
+async function insertRows(shipmentId: string, rows: DocketRows, transaction: Transaction): Promise<void> {
+	const docket = { id: shipmentId, visitId: null };
+	await ShipmentLine.bulkCreate(await inCompartments(docket, rows.lines, transaction), { transaction });
 	await Pallet.bulkCreate(rows.pallets, { transaction });
 	await Handover.bulkCreate(rows.handovers, { transaction });
-	await LoggerTrip.bulkCreate(rows.trips, { transaction });
+	await LoggerTrip.bulkCreate(await inCompartments(docket, rows.trips, transaction), { transaction });
 }
 
 /** Opens a docket from its papers, under the next number of the site. The same id again answers the docket it made. */
@@ -53,7 +55,7 @@ export async function createShipment(
 			{ ...prepared.papers, id, siteId: site.id, number, createdBy, createdAt: ctx.now },
 			{ transaction }
 		);
-		await insertRows(rows, transaction);
+		await insertRows(id, rows, transaction);
 		record('shipment.created', { scope: 'shipment', id }, { number, by });
 		return { id, number };
 	});

@@ -12,6 +12,7 @@ import { ShipmentLine } from '../db/models/shipment-line';
 import type { Site } from '../db/models/site';
 import { listLaneChoices } from '../lanes/list-lanes';
 import { authorize, authorizeShipment } from '../policies';
+import { listCompartments } from './compartments';
 import { refuseClosed } from './lock-docket';
 import { getOwnSite } from './own-site';
 import { typedTime } from './site-time';
@@ -66,10 +67,16 @@ async function valuesOf(shipment: Shipment, site: Site) {
 	});
 	const handovers = await Handover.findAll(of);
 	const trips = await LoggerTrip.findAll(of);
+	const chambers = new Map((await listCompartments(shipment)).map(({ id, name }) => [id, name]));
+	const compartmentOf = (row: { compartmentId: string | null }) =>
+		chambers.get(row.compartmentId ?? '') ?? null;
 	return {
 		...shipment.get(),
 		due: typedTime(shipment.dueAt, site.zone),
-		lines: lines.map((line) => lineValues(line, pallets, site.zone)),
+		lines: lines.map((line) => ({
+			...lineValues(line, pallets, site.zone),
+			compartment: compartmentOf(line)
+		})),
 		handovers: handovers.map((row) => ({
 			...row.get(),
 			planned: typedTime(row.plannedAt, site.zone),
@@ -77,6 +84,7 @@ async function valuesOf(shipment: Shipment, site: Site) {
 		})),
 		loggers: trips.map((trip) => ({
 			...trip.get(),
+			compartment: compartmentOf(trip),
 			line: lines.findIndex((line) => line.id === trip.lineId) + 1 || null
 		}))
 	};

@@ -3,6 +3,7 @@ import { Handover } from '../db/models/handover';
 import { LoggerTrip } from '../db/models/logger-trip';
 import { Shipment } from '../db/models/shipment';
 import { ShipmentLine } from '../db/models/shipment-line';
+import { listCompartments } from './compartments';
 
 /** A docket's papers as the audit trail compares them. */
 export async function papersSnapshot(
@@ -18,7 +19,8 @@ export async function papersSnapshot(
 		...papers,
 		lines: plain(await ShipmentLine.findAll(of)),
 		handovers: plain(await Handover.findAll(of)),
-		loggers: plain(await LoggerTrip.findAll(of))
+		loggers: plain(await LoggerTrip.findAll(of)),
+		compartments: shipment ? plain(await listCompartments(shipment, transaction)) : []
 	};
 }
 

@@ -75,6 +75,7 @@ function prepareLine(row: LineInput, site: Site, known: Known, instantOf: Instan
 		currency,
 		bestBeforeOn: row.bestBeforeOn,
 		neededHours: row.neededDays === null ? null : row.neededDays * hoursPerDay,
+		compartment: row.compartment,
 		openingKind: row.openingKind,
 		openingHours: row.openingKind === 'declared' ? row.openingHours : null,
 		openingPlusMinusHours: row.openingKind === 'undeclared' ? null : row.openingPlusMinusHours,
@@ -125,15 +126,24 @@ function checkOrder(
 	}
 }
 
-function prepareLogger(row: LoggerInput, lines: readonly { at: number }[], known: Known, issues: Issues) {
+interface LinePlace {
+	at: number;
+	compartment: string | null;
+}
+
+function prepareLogger(row: LoggerInput, lines: readonly LinePlace[], known: Known, issues: Issues) {
 	const lineAt = row.line === null ? null : row.line - 1;
-	if (lineAt !== null && !lines.some((line) => line.at === lineAt))
-		issues[`loggers.${row.at}.line`] = `There is no line ${row.line}.`;
+	const line = lines.find(({ at }) => at === lineAt);
+	if (lineAt !== null && !line) issues[`loggers.${row.at}.line`] = `There is no line ${row.line}.`;
+	if (line && row.compartment && line.compartment?.toLowerCase() !== row.compartment.toLowerCase())
+		issues[`loggers.${row.at}.compartment`] =
+			`Line ${row.line} rides ${line.compartment ? `in ${line.compartment}` : 'in no compartment'}.`;
 	return {
 		id: row.id,
 		serial: row.serial,
 		loggerId: known.loggers.get(row.serial.toLowerCase())?.id ?? null,
 		lineAt,
+		compartment: row.compartment,
 		position: row.position,
 		placement: row.placement
 	};

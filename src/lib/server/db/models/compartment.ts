@@ -1,6 +1,7 @@
 import {
 	DataTypes,
 	Model,
+	type CreationOptional,
 	type InferAttributes,
 	type InferCreationAttributes,
 	type Sequelize
@@ -9,7 +10,10 @@ import {
 /** A chamber of a trailer with its own set-point. */
 export class Compartment extends Model<InferAttributes<Compartment>, InferCreationAttributes<Compartment>> {
 	declare id: string;
-	declare visitId: string;
+	/** Null: named on papers, and no truck is known. */
+	declare visitId: string | null;
+	/** The docket whose papers name it. */
+	declare shipmentId: CreationOptional<string | null>;
 	declare name: string;
 	declare setPointCelsius: number | null;
 	declare supplyAirCelsius: number | null;
@@ -20,7 +24,8 @@ export function defineCompartment(sequelize: Sequelize): void {
 	Compartment.init(
 		{
 			id: { type: DataTypes.UUID, primaryKey: true, allowNull: false },
-			visitId: { type: DataTypes.UUID, allowNull: false },
+			visitId: { type: DataTypes.UUID, allowNull: true },
+			shipmentId: { type: DataTypes.UUID, allowNull: true },
 			name: { type: DataTypes.STRING(40), allowNull: false },
 			setPointCelsius: { type: DataTypes.DOUBLE, allowNull: true },
 			supplyAirCelsius: { type: DataTypes.DOUBLE, allowNull: true },
