@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { Range } from '../domain/receiving/assessment';
+import type { RangePart } from '../domain/receiving/range-parts';
 import type { Outcome } from '../domain/receiving/recommendation';
 import type { TemperatureUnit } from '../domain/units';
 import type { AssessmentView, LineOutcomeView, SeriesView, Verdict } from './docket';
@@ -20,6 +21,8 @@ export interface SupplierLineView {
 	groups?: LineOutcomeView[];
 	/** What was signed, in words. */
 	details?: string;
+	/** What low to high is made of; records of older engines lack it. */
+	rangeParts?: RangePart[];
 }
 
 /** An excursion as readings: no other holder is named, only whether it fell while the supplier held the goods. */

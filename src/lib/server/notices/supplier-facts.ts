@@ -1,6 +1,6 @@
 import { groupDetails } from '../../messages/en/line-groups';
 import type { FrozenDocket, AssessmentView, LineOutcomeView } from '../../schemas/docket';
-import type { SupplierDocketView, SupplierExcursionView } from '../../schemas/supplier';
+import type { SupplierDocketView, SupplierExcursionView, SupplierLineView } from '../../schemas/supplier';
 
 type Docket = FrozenDocket['docket'];
 
@@ -52,6 +52,11 @@ function toldGroup(group: LineOutcomeView): LineOutcomeView {
 	return group.outcome === 'reject' ? group : { ...group, whereabouts: null, place: null };
 }
 
+function rangePartsOf({ assessments }: Docket, lineId: string): Pick<SupplierLineView, 'rangeParts'> {
+	const governing = assessments.find((one) => one.isGoverning && one.lineId === lineId);
+	return governing?.rangeParts ? { rangeParts: governing.rangeParts } : {};
+}
+
 /** What a supplier may know of a signed docket, from the frozen record alone. */
 export function supplierFacts(frozen: FrozenDocket): Omit<SupplierDocketView, 'report' | 'notice'> {
 	const { docket, signature } = frozen;
@@ -82,7 +87,8 @@ export function supplierFacts(frozen: FrozenDocket): Omit<SupplierDocketView, 'r
 			condition: line.outcome?.condition ?? null,
 			reason: line.outcome?.reason ?? null,
 			...(line.groups ? { groups: line.groups.map(toldGroup) } : {}),
-			...(line.outcome ? { details: groupDetails(toldGroup(line.outcome), docket.site.zone) } : {})
+			...(line.outcome ? { details: groupDetails(toldGroup(line.outcome), docket.site.zone) } : {}),
+			...rangePartsOf(docket, line.id)
 		})),
 		logger: logger ? { label: logger.label, placement: logger.placement } : null,
 		excursions: excursionViews(docket, assessment),
