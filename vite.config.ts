@@ -45,6 +45,8 @@ const tests: UserConfig['test'] = {
 			extends: true,
 			test: {
 				name: 'unit',
+				// Pure code keeps nothing between files: it is loaded once a worker, not once a file.
+				isolate: false,
 				include: [
 					'src/lib/domain/**/*.test.ts',
 					'src/lib/*.test.ts',
