@@ -177,6 +177,21 @@ describe('other loads', () => {
 		expect(text).toContain('03:44:18 EDT');
 	});
 
+	it('breaks no figure of a long excursion', async () => {
+		const { assessments } = reportInput().frozen.docket;
+		const hot = assessments.map((one) => ({
+			...one,
+			excursions: one.excursions.map((excursion) => ({
+				...excursion,
+				degreeMinutes: 346_971,
+				extremeCelsius: -26.1,
+				costHours: 159.2
+			}))
+		}));
+		const printed = textOf(await reportPdf(withDocket({ assessments: hot })));
+		for (const figure of ['346,971', '−26.1', '159.2']) expect(printed).toContain(figure);
+	});
+
 	it('stands on letter paper', async () => {
 		const pdf = await reportPdf(reportInput({ pageSize: 'letter' }));
 		expect(said(pdf, 'pdfinfo', (file) => [file])).toMatch(/612 x 792/u);
