@@ -59,14 +59,14 @@ function excursionLedger(
 		columns: [
 			{ head: '', width: nameWidth },
 			{ head: 'Too', width: 34 },
-			{ head: 'From', width: 69 },
-			{ head: 'To', width: 27 },
+			{ head: 'From', width: 71 },
+			{ head: 'To', width: 26 },
 			{ head: 'Lasted\nh:min', width: 28, align: 'right' },
 			{ head: `Extreme\n${sign}`, width: 29, align: 'right' },
 			{ head: `Mean\n${sign}`, width: 23, align: 'right' },
 			{ head: 'Degree-\nmin', width: 36, align: 'right' },
 			{ head: 'Life\nh', width: 24, align: 'right' },
-			{ head: 'Leg', width: 18 },
+			{ head: 'Leg', width: 17 },
 			{ head: 'Severity', width: '*' }
 		],
 		rows
